@@ -1,0 +1,135 @@
+package org.wispwright.render.lanes;
+
+import java.util.concurrent.atomic.AtomicInteger;
+import java.util.concurrent.locks.LockSupport;
+import java.util.function.IntConsumer;
+
+/**
+ * A fixed set of threads for loops over numbered pieces.
+ * <p>Which lane takes which piece is left to chance; what a piece computes is not, so a body that writes only what its
+ * number owns gives the same bits for 1, 2 or 16 lanes. Sums go into one slot per piece and are added up in piece order.
+ * <p>The calling thread is one of the lanes. A waiting lane spins for a few microseconds before it sleeps, because the
+ * loops of a solver step follow each other closely. One caller at a time; a body must not call {@code forEach} of its own lanes.
+ */
+public final class Lanes implements AutoCloseable {
+    private static final int SPINS_BEFORE_SLEEP = 2_000;
+
+    private final Thread[] helpers;
+    private final AtomicInteger next = new AtomicInteger();
+    private final AtomicInteger busy = new AtomicInteger();
+    private volatile IntConsumer body;
+    private volatile int pieces;
+    private volatile int round;
+    private volatile Throwable failure;
+    private volatile boolean closed;
+
+    /**
+     * Starts {@code threads - 1} helper threads; they are daemons.
+     *
+     * @param threads 1 or more; 1 runs everything on the caller
+     * @throws IllegalArgumentException if threads is below 1 or above 1024
+     */
+    public Lanes(int threads) {
+        if (threads < 1 || threads > 1024) {
+            throw new IllegalArgumentException("lanes: got " + threads + " threads, needs 1 to 1024");
+        }
+        helpers = new Thread[threads - 1];
+        for (int t = 0; t < helpers.length; t++) {
+            helpers[t] = new Thread(this::help, "lane-" + (t + 1));
+            helpers[t].setDaemon(true);
+            helpers[t].start();
+        }
+    }
+
+    /** Number of lanes, the caller included. */
+    public int count() {
+        return helpers.length + 1;
+    }
+
+    /**
+     * Runs {@code body} once for every number in {@code 0..pieces-1} and returns when all are done.
+     * If a body throws, pieces not yet taken are dropped and the first failure is thrown here.
+     */
+    public void forEach(int pieces, IntConsumer body) {
+        if (closed) {
+            throw new IllegalStateException("lanes: already closed");
+        }
+        if (helpers.length == 0 || pieces <= 1) {
+            for (int n = 0; n < pieces; n++) {
+                body.accept(n);
+            }
+            return;
+        }
+        this.body = body;
+        this.pieces = pieces;
+        failure = null;
+        next.set(0);
+        busy.set(helpers.length);
+        round++;
+        for (Thread helper : helpers) {
+            LockSupport.unpark(helper);
+        }
+        takePieces(body, pieces);
+        while (busy.get() != 0) {
+            Thread.onSpinWait();
+        }
+        this.body = null;
+        Throwable failed = failure;
+        if (failed != null) {
+            rethrow(failed);
+        }
+    }
+
+    /** Ends the helper threads. */
+    @Override
+    public void close() {
+        closed = true;
+        for (Thread helper : helpers) {
+            LockSupport.unpark(helper);
+        }
+    }
+
+    private void takePieces(IntConsumer work, int count) {
+        try {
+            for (int n = next.getAndIncrement(); n < count; n = next.getAndIncrement()) {
+                work.accept(n);
+            }
+        } catch (Throwable thrown) {
+            next.set(count);
+            synchronized (this) {
+                if (failure == null) {
+                    failure = thrown;
+                }
+            }
+        }
+    }
+
+    private void help() {
+        int seen = 0;
+        while (true) {
+            for (int spin = 0; round == seen && !closed; spin++) {
+                if (spin < SPINS_BEFORE_SLEEP) {
+                    Thread.onSpinWait();
+                } else {
+                    LockSupport.park(this);
+                }
+            }
+            if (closed) {
+                return;
+            }
+            seen++;
+            takePieces(body, pieces);
+            busy.decrementAndGet();
+        }
+    }
+
+    private static void rethrow(Throwable thrown) {
+        if (thrown instanceof RuntimeException unchecked) {
+            throw unchecked;
+        }
+        if (thrown instanceof Error error) {
+            throw error;
+        }
+        throw new IllegalStateException(thrown);
+    }
+}
