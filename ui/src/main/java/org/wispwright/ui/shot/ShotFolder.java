@@ -16,6 +16,9 @@ import java.util.stream.Stream;
 public final class ShotFolder {
     private static final Pattern DRIVE = Pattern.compile("^[A-Za-z]:.*");
 
+    private static final String LEAVES = "a path that leaves the shot folder";
+    private static final String COPY_IN = "copy the file into the folder and name it relative to the folder";
+
     private final Path root;
     private final Path real;
 
@@ -87,21 +90,35 @@ public final class ShotFolder {
      * @throws ShotException if it is absolute or leads out of the folder
      */
     public Path inside(String relative) {
-        Path path;
-        try {
-            path = Path.of(relative);
-        } catch (InvalidPathException bad) {
-            throw new ShotException(Finding.of("shot", "", "a file name with characters that a file name cannot have", "a plain name", "rename the file"), bad);
-        }
-        boolean climbs = false;
-        for (String part : relative.split("[/\\\\]", -1)) {
-            climbs |= part.equals("..");
-        }
-        if (relative.isBlank() || path.isAbsolute() || relative.startsWith("\\") || relative.startsWith("/") || DRIVE.matcher(relative).matches() || climbs) {
-            throw new ShotException(Finding.of(relative.isBlank() ? "(empty path)" : relative, "", "a path that leaves the shot folder", "a path inside it",
-                    "copy the file into the folder and name it relative to the folder"));
+        if (leaves(relative)) {
+            throw new ShotException(Finding.of(relative.isBlank() ? "(empty path)" : relative, "", LEAVES, "a path inside it", COPY_IN));
         }
         return root.resolve(relative);
+    }
+
+    /** The path that a JSON value names, checked as in {@link #inside}, with a complaint that says which value it is. */
+    static String named(JsonPlace place) {
+        String relative = place.text(1000);
+        if (leaves(relative)) {
+            throw place.fault("'" + relative + "', " + LEAVES, "a path inside it", COPY_IN);
+        }
+        return relative;
+    }
+
+    private static boolean leaves(String relative) {
+        if (relative.isBlank() || relative.indexOf('\0') >= 0 || relative.startsWith("/") || relative.startsWith("\\") || DRIVE.matcher(relative).matches()) {
+            return true;
+        }
+        for (String part : relative.split("[/\\\\]", -1)) {
+            if (part.equals("..")) {
+                return true;
+            }
+        }
+        try {
+            return Path.of(relative).isAbsolute();
+        } catch (InvalidPathException notAPath) {
+            return true;
+        }
     }
 
     /**
