@@ -27,7 +27,7 @@ public abstract class PullbackContract {
         return 1;
     }
 
-    /** Share of the output's size that rounding may hide in the Taylor test; remainders below it are noise. */
+    /** Rounding of one output number, relative to it: the Taylor test takes the errors as independent; below that is noise. */
     protected double noise() {
         return 2e-7;
     }
@@ -58,7 +58,7 @@ public abstract class PullbackContract {
         double slope = dot(op.direction(), inBar);
         double[] base = new double[op.outputs()];
         op.forward().run(op.point(), base);
-        double floor = noise() * norm(base) * norm(y);
+        double floor = noise() * normOfProducts(base, y);
         double previous = Double.NaN;
         int halvings = 0;
         StringBuilder seen = new StringBuilder();
@@ -121,7 +121,7 @@ public abstract class PullbackContract {
     }
 
     private double[] derivativeAlong(Operator op) {
-        double e = op.linear() ? 1 : largestStep() / 16;
+        double e = op.linear() ? 1 : largestStep() / 4;
         double[] plus = forwardAt(op, e);
         double[] minus = forwardAt(op, -e);
         if (op.linear()) {
@@ -170,6 +170,14 @@ public abstract class PullbackContract {
             sum += a[n] * b[n];
         }
         return sum;
+    }
+
+    private static double normOfProducts(double[] a, double[] b) {
+        double sum = 0;
+        for (int n = 0; n < a.length; n++) {
+            sum += a[n] * b[n] * a[n] * b[n];
+        }
+        return Math.sqrt(sum);
     }
 
     private static double norm(double[] a) {
