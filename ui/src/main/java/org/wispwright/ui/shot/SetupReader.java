@@ -34,15 +34,18 @@ final class SetupReader {
     static final int FORMAT = 1;
     private static final double FAR = 1e6;
     private static final int MOST_CELLS_A_SIDE = 8192;
+    private static final int MOST_SUBSTEPS = 64;
     private static final int MOST_SOURCES = 256;
     private static final int MOST_VIEWS = 64;
 
     private final ShotFolder folder;
     private final Findings findings;
+    private final long memoryBytes;
 
-    SetupReader(ShotFolder folder, Findings findings) {
+    SetupReader(ShotFolder folder, Findings findings, long memoryBytes) {
         this.folder = folder;
         this.findings = findings;
+        this.memoryBytes = memoryBytes;
     }
 
     /** The shot without notes; empty if a finding was made. Parts that could be read are still checked. */
@@ -55,8 +58,8 @@ final class SetupReader {
         JsonPlace top = file.get();
         findings.check(() -> top.only("wispwright", "name", "grid", "frames", "flow", "sources", "look", "background", "views"));
         Optional<String> name = findings.attempt(() -> top.need("name").text(200));
-        Optional<GridShape> grid = findings.attempt(() -> grid(top.need("grid")));
         Optional<FrameRange> frames = findings.attempt(() -> frames(top.need("frames")));
+        Optional<GridShape> grid = findings.attempt(() -> grid(top.need("grid"), steps(top, frames)));
         List<Source> sources = sources(top, frames);
         Optional<FlowSetup> flow = findings.attempt(() -> flow(top.ask("flow"), top, grid, frames, sources)).flatMap(f -> f);
         Optional<Look> look = findings.attempt(() -> look(top.need("look")));
@@ -68,11 +71,18 @@ final class SetupReader {
         return Optional.of(new Shot(name.orElseThrow(), flow.orElseThrow(), look.orElseThrow(), background.orElseThrow(), views, List.of()));
     }
 
-    private static GridShape grid(JsonPlace place) {
+    /** Solver steps of the shot as far as they can be read; the flow section complains about substeps itself. */
+    private static long steps(JsonPlace top, Optional<FrameRange> frames) {
+        int substeps = new Findings().attempt(() -> top.need("flow").need("substeps").whole(1, MOST_SUBSTEPS)).orElse(1);
+        return frames.map(f -> (long) f.count() * substeps).orElse(1L);
+    }
+
+    private GridShape grid(JsonPlace place, long steps) {
         place.only("cells", "cellMetres", "originMetres");
         int[] cells = place.need("cells").items(3, 3).stream().mapToInt(c -> c.whole(1, MOST_CELLS_A_SIDE)).toArray();
         double cellMetres = place.need("cellMetres").positive(FAR);
         Vec3 origin = place.ask("originMetres").map(SetupReader::vec3).orElse(new Vec3(0, 0, 0));
+        MemoryNeed.require(place.need("cells"), cells, cellMetres, steps, memoryBytes);
         return place.make(() -> new GridShape(cells[0], cells[1], cells[2], cellMetres, origin.x(), origin.y(), origin.z()));
     }
 
@@ -86,7 +96,7 @@ final class SetupReader {
 
     private Optional<FlowSetup> flow(Optional<JsonPlace> given, JsonPlace top, Optional<GridShape> grid, Optional<FrameRange> frames, List<Source> sources) {
         given.ifPresent(p -> p.only("substeps", "interpolation", "sides", "buoyancy", "dissipation"));
-        int substeps = given.flatMap(p -> p.ask("substeps")).map(p -> p.whole(1, 64)).orElse(1);
+        int substeps = given.flatMap(p -> p.ask("substeps")).map(p -> p.whole(1, MOST_SUBSTEPS)).orElse(1);
         Interpolation interpolation = given.flatMap(p -> p.ask("interpolation")).map(p -> p.choice(Interpolation.class)).orElse(Interpolation.CUBIC);
         Sides sides = given.flatMap(p -> p.ask("sides")).map(SetupReader::sides).orElse(Sides.CLOSED);
         double buoyancy = given.flatMap(p -> p.ask("buoyancy")).map(p -> p.number(-1000, 1000)).orElse(0.0);
