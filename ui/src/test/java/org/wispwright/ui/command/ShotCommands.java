@@ -1,0 +1,15 @@
+package org.wispwright.ui.command;
+
+import java.nio.file.Path;
+import java.util.List;
+
+/** Every command that takes a shot, with what it needs beside it. */
+final class ShotCommands {
+    private ShotCommands() {
+    }
+
+    static List<List<String>> on(Path shot, Path out) {
+        return List.of(
+                List.of("check", shot.toString()));
+    }
+}
