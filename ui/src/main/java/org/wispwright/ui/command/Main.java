@@ -12,13 +12,17 @@ import org.wispwright.ui.work.Cancel;
 import picocli.CommandLine;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.IVersionProvider;
+import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
+import picocli.CommandLine.ParameterException;
+import picocli.CommandLine.Spec;
+import picocli.CommandLine.UnmatchedArgumentException;
 import picocli.CommandLine.ParameterException;
 
 /** The program: finds the command, runs it, and turns whatever happens into an exit code and at most one sentence. */
 @Command(name = "wispwright", versionProvider = Main.Version.class, sortOptions = false,
         description = "Changes a smoke simulation so that it satisfies review notes drawn on its frames.",
-        subcommands = {CheckCommand.class},
+        subcommands = {SimulateCommand.class, PictureCommand.class, CheckCommand.class},
         synopsisSubcommandLabel = "COMMAND",
         footer = {"",
             "Exit codes: 0 done, 1 an error of ours, 2 wrong usage, 3 bad input, 130 stopped by Ctrl-C.",
@@ -34,6 +38,9 @@ public final class Main implements Runnable {
 
     @Option(names = {"-h", "--help"}, usageHelp = true, description = "Show this help and end.")
     private boolean help;
+
+    @Spec
+    private CommandSpec spec;
 
     private final Cancel cancel;
 
@@ -76,12 +83,14 @@ public final class Main implements Runnable {
         CommandLine line = new CommandLine(new Main(cancel));
         line.setOut(out);
         line.setErr(err);
-        line.setUsageHelpWidth(100);
+        line.setUsageHelpWidth(120);
         line.setExpandAtFiles(false);
         line.setParameterExceptionHandler(Main::wrongUsage);
         line.setExecutionExceptionHandler((thrown, command, parsed) -> ended(thrown, command));
         try {
             return line.execute(args);
+        } catch (OutOfMemoryError full) {
+            return ended(full, line);
         } finally {
             out.flush();
             err.flush();
@@ -91,7 +100,7 @@ public final class Main implements Runnable {
     /** Without a command: says what there is. */
     @Override
     public void run() {
-        throw new ParameterException(new CommandLine(this), "no command given");
+        throw new ParameterException(spec.commandLine(), "no command given");
     }
 
     Cancel cancel() {
@@ -102,13 +111,16 @@ public final class Main implements Runnable {
         CommandLine command = wrong.getCommandLine();
         PrintWriter err = command.getErr();
         String sentence = wrong.getMessage().strip();
-        err.println("wispwright: " + sentence + (sentence.endsWith(".") ? "" : ".") + " See " + command.getCommandSpec().qualifiedName() + " --help.");
+        if (wrong instanceof UnmatchedArgumentException unmatched && !unmatched.getSuggestions().isEmpty()) {
+            sentence += "; did you mean '" + unmatched.getSuggestions().get(0) + "'?";
+        }
+        err.println("wispwright: " + sentence + (sentence.endsWith("?") || sentence.endsWith(".") ? "" : ".") + " See " + command.getCommandSpec().qualifiedName() + " --help.");
         return ExitCodes.USAGE;
     }
 
     private static int ended(Throwable thrown, CommandLine command) {
-        boolean verbose = command.getParseResult().hasMatchedOption("--verbose");
-        boolean json = command.getParseResult().hasMatchedOption("--json");
+        boolean verbose = has(command, "--verbose");
+        boolean json = has(command, "--json");
         int code = ExitCodes.OURS;
         String sentence;
         Finding finding = null;
@@ -139,6 +151,16 @@ public final class Main implements Runnable {
             command.getOut().println(Manner.text(object));
         }
         return code;
+    }
+
+    /** True if the option was given to this command or to one under it. */
+    private static boolean has(CommandLine command, String option) {
+        for (CommandLine.ParseResult at = command.getParseResult(); at != null; at = at.subcommand()) {
+            if (at.hasMatchedOption(option)) {
+                return true;
+            }
+        }
+        return false;
     }
 
     /** The build's version for picocli. */

@@ -1,6 +1,7 @@
 package org.wispwright.ui.shot;
 
 import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Iterator;
@@ -216,6 +217,12 @@ public final class JsonPlace {
                     "find out which program wrote it and correct the value");
         }
         return value;
+    }
+
+    /** The object itself, for parts whose names are free. */
+    ObjectNode object() {
+        requireObject();
+        return (ObjectNode) node;
     }
 
     private void requireObject() {

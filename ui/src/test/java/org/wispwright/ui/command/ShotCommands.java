@@ -10,6 +10,8 @@ final class ShotCommands {
 
     static List<List<String>> on(Path shot, Path out) {
         return List.of(
-                List.of("check", shot.toString()));
+                List.of("check", shot.toString()),
+                List.of("simulate", shot.toString()),
+                List.of("picture", shot.toString(), "--take", "0", "--frame", "1004", "--view", "front", "--out", out + ".png"));
     }
 }
