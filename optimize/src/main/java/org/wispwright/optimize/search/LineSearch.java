@@ -72,6 +72,11 @@ public final class LineSearch {
             return new Rule(1e-4, 0.9, 1e-6, 0, 1e20, 20, 8);
         }
 
+        /** The same with another limit: a search whose evaluations are dear, or noisy in the last digits, should give up sooner. */
+        public Rule withMostEvaluations(int most) {
+            return new Rule(mu, eta, narrowest, shortest, longest, most, mostBackOffs);
+        }
+
         /** First condition (Armijo): {@code value <= value0 + mu step slope0}. */
         public boolean decreases(double value0, double slope0, double step, double value) {
             return value <= value0 + mu * step * slope0;
