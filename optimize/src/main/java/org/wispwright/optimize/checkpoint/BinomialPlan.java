@@ -70,7 +70,8 @@ public final class BinomialPlan {
      */
     public static int split(int l, int s) {
         if (l < 2 || s < 2) {
-            throw new IllegalArgumentException("checkpoints: got " + l + " steps and " + s + " snapshots to split, needs at least 2 of each");
+            throw new IllegalArgumentException("checkpoints: got " + l + " steps and " + s + " snapshots to split, needs at least 2"
+                    + " of each");
         }
         int r = repeats(l, s);
         long most = Math.min(longest(s, r - 1), l - longest(s - 1, r - 1));

@@ -14,8 +14,8 @@ public record Budget(long bytes, long bytesPerState) {
             throw new IllegalArgumentException("checkpoints: got a state of " + bytesPerState + " bytes, needs at least 1");
         }
         if (bytes < bytesPerState) {
-            throw new IllegalArgumentException("checkpoints: got " + Math.max(0, bytes) + " bytes for snapshots, needs at least " + bytesPerState
-                    + " (one state, the start's); give more memory or a coarser grid");
+            throw new IllegalArgumentException("checkpoints: got " + Math.max(0, bytes) + " bytes for snapshots, needs at least "
+                    + bytesPerState + " (one state, the start's); give more memory or a coarser grid");
         }
     }
 

@@ -13,8 +13,8 @@ import java.util.function.IntConsumer;
  * <p>The gradient has the same bits for any number of snapshots, because pulls come in the same order from tapes with the same bits.
  * <p>How: the steps not yet pulled form parts, each starting at a kept state and having a number of snapshots of its own (its start
  * among them). The last part is swept: while it has more than one step and more than one snapshot, its first
- * m = {@code split} steps are run plainly, and the rest becomes a part with one snapshot fewer; then the last step is taped. After its pull the last part
- * is one step shorter.
+ * m = {@code split} steps are run plainly, and the rest becomes a part with one snapshot fewer; then the last step is taped.
+ * After its pull the last part is one step shorter.
  * <p>Source: Griewank and Walther (2000), ACM TOMS 26(1), 19-45. Differences from it: recursion unrolled into a stack of
  * parts. Checked by {@code ReversalTest}. One thread calls; the chain may use many.
  */

@@ -25,9 +25,9 @@ public interface ReversibleChain {
     void tape(int step);
 
     /**
-     * Uses the tape of {@code step}: takes the adjoint of state {@code step + 1} (for the last step that starts at zero), adds what the loss
-     * owes to that state itself, and pulls it back to the adjoint of state {@code step}, adding to the gradient on the way. The
-     * current state is still that of {@code step + 1}, as the tape left it.
+     * Uses the tape of {@code step}: takes the adjoint of state {@code step + 1} (for the last step that starts at zero), adds
+     * what the loss owes to that state itself, and pulls it back to the adjoint of state {@code step}, adding to the gradient
+     * on the way. The current state is still that of {@code step + 1}, as the tape left it.
      */
     void pull(int step);
 }

@@ -12,9 +12,9 @@ package org.wispwright.optimize.search;
  *   line   = b + (a - b) g_b / (g_b - g_a)
  * </pre>
  * Case 1, f_b above f_a: the cubic if nearer to a than the parabola, else half way between the two. Case 2, slopes of opposite sign: the
- * one of cubic and line further from b. Case 3, same sign and flatter: the nearer to b of the two (kept within 0.66 of the way to the other
- * end) if the interval is closed, else the further. Case 4, same sign and not flatter: the cubic with the other end if
- * closed, else the limit.
+ * one of cubic and line further from b. Case 3, same sign and flatter: the nearer to b of the two (kept within 0.66 of the way
+ * to the other end) if the interval is closed, else the further. Case 4, same sign and not flatter: the cubic with the other
+ * end if closed, else the limit.
  * <p>Source: Moré and Thuente (1994), ACM TOMS 20(3), section 4. Differences from it: none.
  */
 final class Bracket {

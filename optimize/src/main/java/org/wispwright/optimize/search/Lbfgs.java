@@ -10,8 +10,9 @@ import org.wispwright.optimize.search.LineSearch.Found;
  * record, or change what is made small.
  * <p>An iteration: direction by {@link CurvaturePairs}, step by {@link LineSearch} (first trial 1; without pairs the first
  * trial moves the unknowns by a stated length along the steepest descent), then the pair
- * {@code s = x' - x, y = g' - g} is kept if s.y is above 0. If the search finds no step, the pairs are dropped and steepest descent is tried once;
- * if that fails too the iteration says why. A search that gives up with enough decrease in hand counts as a move.
+ * {@code s = x' - x, y = g' - g} is kept if s.y is above 0. If the search finds no step, the pairs are dropped and steepest
+ * descent is tried once; if that fails too the iteration says why. A search that gives up with enough decrease in hand counts
+ * as a move.
  * <p>What is made small is {@code objective(x) + quadratic |x|^2 / 2}; the weight starts at 0 and is changed by
  * {@link #addQuadratic}. This class adds that term itself: the objective must not contain it.
  * <p>Source: Liu and Nocedal (1989), Mathematical Programming 45, 503-528. Differences from it: the line search is that of Moré and
@@ -308,8 +309,8 @@ public final class Lbfgs {
     }
 
     /**
-     * Lengthens the unknowns by zeros at the end and goes on with an objective of that many. The pairs are padded with zeros and kept: see
-     * {@link CurvaturePairs#extend} for why. One evaluation, since the new unknowns' gradient is not known.
+     * Lengthens the unknowns by zeros at the end and goes on with an objective of that many. The pairs are padded with zeros
+     * and kept: see {@link CurvaturePairs#extend} for why. One evaluation, since the new unknowns' gradient is not known.
      *
      * @param newLength at least the present length
      * @param wider     at unknowns (x, 0) it should have the value the old one had at x, or the pairs mislead the search
@@ -324,8 +325,8 @@ public final class Lbfgs {
     }
 
     /**
-     * Goes on with another objective of as many unknowns: one evaluation, pairs kept. Meant for one whose curvature is much the same (moved
-     * targets); call {@link #forget} too where it is not.
+     * Goes on with another objective of as many unknowns: one evaluation, pairs kept. Meant for one whose curvature is much the
+     * same (moved targets); call {@link #forget} too where it is not.
      *
      * @throws IllegalArgumentException if value or gradient is not finite there; then nothing changed
      */

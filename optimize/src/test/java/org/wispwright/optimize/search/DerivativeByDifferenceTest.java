@@ -5,7 +5,10 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import org.junit.jupiter.api.Test;
 
-/** Two ways of checking a derivative, and how far each can be trusted. Nothing of the program runs here: these are proofs about the method. */
+/**
+ * Two ways of checking a derivative, and how far each can be trusted. Nothing of the program runs here: these are proofs about the
+ * method.
+ */
 class DerivativeByDifferenceTest {
 
     /**
@@ -25,18 +28,25 @@ class DerivativeByDifferenceTest {
     }
 
     /**
-     * O73: central differences of x^4.5 at 1.5 for contrast. Above h = 1e-4 the error is that of truncation, f''' h^2 / 6; below 1e-6
-     * it is rounding, whose size is given but not its digits: within a factor of 3 either way, or smaller.
+     * O73: central differences of x^4.5 at 1.5 for contrast. Down to h = 1e-4 the error is truncation's, f''' h^2 / 6; below 1e-6 it is
+     * rounding's, eps f / h. The least lies near h = eps^(1/3) = 6e-6.
      */
     @Test
     void o73_centralDifferencesMakeAV() {
         assertEquals(1.2e-3, error(1e-2), .05e-3);
         assertEquals(1.2e-7, error(1e-4), .05e-7);
-        System.out.println(error(1e-6) + " " + error(1e-8) + " " + error(1e-12));
+        assertEquals(1.5e-9, error(1e-6), .1e-9);
+        assertEquals(1.1e-7, error(1e-8), .1e-7);
+        assertEquals(1.6e-3, error(1e-12), .1e-3);
+        int best = -1;
+        for (int decade = -13; decade < -1; decade++) {
+            best = error(Math.pow(10, decade)) < error(Math.pow(10, best)) ? decade : best;
+        }
+        assertTrue(best == -5 || best == -6, "the least is at 1e" + best);
     }
 
     private static double error(double h) {
-        return Math.abs((Math.pow(1.5 + h, 4.5) - Math.pow(1.5 - h, 4.5)) / (2 * h) - 18.6008127342597587);
+        return Math.abs((StrictMath.pow(1.5 + h, 4.5) - StrictMath.pow(1.5 - h, 4.5)) / (2 * h) - 18.6008127342597587);
     }
 
     /** As much of complex arithmetic as O72 takes. */

@@ -20,10 +20,10 @@ class LbfgsTest {
     private static final double SIX_DIGITS = 1e-6;
 
     /**
-     * O61: Moré, Garbow and Hillstrom (1981), ACM TOMS 7(1), 17-41. f at the start to 1e-12; f* to 1e-6, or 1e-12 in all where it is 0 (1e-8
-     * for nos. 13 and 22), within three times the evaluations of a good run. Gradients by {@link Dual}. Where the row names a local
-     * minimum in which descent ends, the column has that one: nos. 2, 18 (to its six printed digits), 26 and 35 with n = 10. No. 6
-     * has no good run to compare with (-1): 150 evaluations.
+     * O61: Moré, Garbow and Hillstrom (1981), ACM TOMS 7(1), 17-41. f at the start to 1e-12; f* to 1e-6, or 1e-12 in all where
+     * it is 0 (1e-8 for nos. 13 and 22), within three times the evaluations of a good run. Gradients by {@link Dual}. Where the
+     * row names a local minimum in which descent ends, the column has that one: nos. 2, 18 (to its six printed digits), 26 and
+     * 35 with n = 10. No. 6 has no good run to compare with (-1): 150 evaluations.
      */
     @ParameterizedTest(name = "O61 no. {0}, n = {1}")
     @CsvSource({
@@ -67,7 +67,8 @@ class LbfgsTest {
         "15, '.19280694 .19128232 .1230565 .13606233'", "16, '-11.59443986 13.20363004 -.40343941 .23677879'"})
     void o61_minimisers(int number, String at) {
         double[] wanted = Arrays.stream(at.split(" ")).mapToDouble(Double::parseDouble).toArray();
-        Lbfgs lbfgs = new Lbfgs(MoreGarbowHillstrom.objective(number), MoreGarbowHillstrom.start(number, wanted.length), Settings.standard());
+        double[] start = MoreGarbowHillstrom.start(number, wanted.length);
+        Lbfgs lbfgs = new Lbfgs(MoreGarbowHillstrom.objective(number), start, Settings.standard());
         for (int n = 0; n < 200 && lbfgs.step().outcome() == Outcome.MOVED; n++) {
             assertTrue(Double.isFinite(lbfgs.value()));
         }
@@ -177,8 +178,9 @@ class LbfgsTest {
     }
 
     /**
-     * New unknowns at the end. Padded pairs leave the old unknowns' direction as it was and give the new ones gamma times their gradient; on
-     * a coupled quadratic of two bands they reach the minimum in fewer evaluations than starting again with no pairs.
+     * New unknowns at the end. Padded pairs leave the old unknowns' direction as it was and give the new ones gamma times their
+     * gradient; on a coupled quadratic of two bands they reach the minimum in fewer evaluations than starting again with no
+     * pairs.
      */
     @Test
     void extendedUnknownsKeepWhatWasLearnt() {

@@ -67,7 +67,10 @@ class LineSearchTest {
         assertEquals(minimum, slice.evaluate(minimiser), 1e-12);
     }
 
-    /** O63: Nocedal and Wright (2006), Numerical Optimization, 3.1, on phi = (a-1)^2/2 - 1/2: the ends are accepted, just outside is not. */
+    /**
+     * O63: Nocedal and Wright (2006), Numerical Optimization, 3.1, on phi = (a-1)^2/2 - 1/2: the ends are accepted, just outside
+     * is not.
+     */
     @Test
     void o63_whichStepsTheConditionsAccept() {
         assertAccepted(new Rule(1e-4, .9, 0, 0, 10, 20, 0), .1, 1.9);
@@ -77,7 +80,10 @@ class LineSearchTest {
         assertFalse(rule.decreases(0, -1, 1.9998 + 1e-12, parabola(1.9998 + 1e-12)));
     }
 
-    /** Backing off, derived by hand: phi = -a while a &lt;= 0.03, NaN beyond. From 1 the trials are 1, 0.1, 0.01; then never past 0.09. */
+    /**
+     * Backing off, derived by hand: phi = -a while a &lt;= 0.03, NaN beyond. From 1 the trials are 1, 0.1, 0.01; then never past
+     * 0.09.
+     */
     @Test
     void aValueThatIsNotFiniteIsNeverAccepted() {
         for (double bad : new double[] {Double.NaN, Double.POSITIVE_INFINITY, Double.NEGATIVE_INFINITY}) {
@@ -88,7 +94,8 @@ class LineSearchTest {
             assertTrue(found.badStep() > .03, found.toString());
             assertEquals(bad, found.badValue());
         }
-        MoreThuenteSlices.Counted slopeOnly = new MoreThuenteSlices.Counted(a -> (a - .2) * (a - .2), a -> a > .5 ? Double.NaN : 2 * (a - .2));
+        MoreThuenteSlices.Counted slopeOnly = new MoreThuenteSlices.Counted(a -> (a - .2) * (a - .2),
+                a -> a > .5 ? Double.NaN : 2 * (a - .2));
         Found found = new LineSearch(Rule.forQuasiNewton()).search(slopeOnly, .04, -.4, 1);
         assertEquals(End.WOLFE, found.end(), found.toString());
         MoreThuenteSlices.Counted nothing = new MoreThuenteSlices.Counted(a -> Double.NaN, a -> Double.NaN);
