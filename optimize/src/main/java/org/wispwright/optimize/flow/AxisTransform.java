@@ -1,5 +1,7 @@
 package org.wispwright.optimize.flow;
 
+import org.wispwright.optimize.product.RowProduct;
+
 /**
  * The eigenvectors of the 1-D pressure operator along one axis, as an orthonormal transform: cells to modes and back.
  *
@@ -14,39 +16,52 @@ package org.wispwright.optimize.flow;
  * each with eigenvalue {@code -4 sin^2(theta / 2)} and scaled to unit length, so the inverse is the transpose.
  * Sources: Strang (1999), SIAM Review 41(1), 135-147; LeVeque (2007), Finite Difference Methods, ch. 2.
  *
- * <p>Both directions are products with an n x n matrix, which for the sizes of a proxy box (up to about 64) is as quick
- * as a fast transform and takes any n and any pair of sides; {@code docs/benchmarks.md} has where the two cross.
+ * <p>Both directions are matrix products, which for the sizes of a proxy box are as quick as a fast transform and take any
+ * n and any pair of sides; {@code docs/benchmarks.md} has where the two cross. With two equal sides the modes are by turns
+ * even and odd about the middle, so {@code e[i] = x[i] + x[n-1-i]} and {@code o[i] = x[i] - x[n-1-i]} go through half-size
+ * matrices each: half the work. (n odd: the middle value is even, {@code e = x}.)
  */
 final class AxisTransform {
-    /** Inputs that one pass over an output row takes at a time. */
-    private static final int TOGETHER = 8;
-
     private final int n;
+    /** Even and odd parts; without symmetry "even" is everything. */
+    private final int evens;
+    private final int odds;
+    private final boolean folded;
     private final double[] eigenvalues;
-    /** Mode m, cell i at {@code m * n + i}. */
-    private final float[] modesByCells;
-    /** Cell i, mode m at {@code i * n + m}. */
-    private final float[] cellsByModes;
+    /** Even modes by cells, then odd modes by cells; {@code cells} columns each of the half's size. */
+    private final float[] evenByCells;
+    private final float[] cellsByEven;
+    private final float[] oddByCells;
+    private final float[] cellsByOdd;
 
     AxisTransform(int n, Side low, Side high) {
         this.n = n;
+        folded = low == high && n > 1;
+        evens = folded ? (n + 1) / 2 : n;
+        odds = n - evens;
         eigenvalues = new double[n];
-        modesByCells = new float[n * n];
-        cellsByModes = new float[n * n];
+        evenByCells = new float[evens * evens];
+        cellsByEven = new float[evens * evens];
+        oddByCells = new float[odds * odds];
+        cellsByOdd = new float[odds * odds];
         double[] mode = new double[n];
         for (int m = 0; m < n; m++) {
             double theta = angle(n, low, high, m);
             double half = Math.sin(theta / 2);
-            eigenvalues[m] = 4 * half * half;
             double squares = 0;
             for (int i = 0; i < n; i++) {
                 mode[i] = valueAt(n, low, high, theta, i);
                 squares += mode[i] * mode[i];
             }
-            for (int i = 0; i < n; i++) {
+            // Position of mode m among the transformed values: evens first, then odds.
+            boolean even = !folded || m % 2 == 0;
+            int row = folded ? m / 2 : m;
+            eigenvalues[even ? row : evens + row] = 4 * half * half;
+            int size = even ? evens : odds;
+            for (int i = 0; i < size; i++) {
                 float value = (float) (mode[i] / Math.sqrt(squares));
-                modesByCells[m * n + i] = value;
-                cellsByModes[i * n + m] = value;
+                (even ? evenByCells : oddByCells)[row * size + i] = value;
+                (even ? cellsByEven : cellsByOdd)[i * size + row] = value;
             }
         }
     }
@@ -68,67 +83,105 @@ final class AxisTransform {
         return high == Side.OPEN ? Math.sin(theta * (i + 1)) : Math.cos(theta * (n - 1 - i + 0.5));
     }
 
-    /** Eigenvalue of minus the operator for mode m: {@code 4 sin^2(theta/2)}, cells as the unit of length. */
+    /** Eigenvalue of minus the operator for the mode at position m of the transformed values, cells as the unit of length. */
     double eigenvalue(int m) {
         return eigenvalues[m];
     }
 
-    /** Transforms {@code rows} rows of n neighbouring values; {@code out} must not be {@code in}. */
-    void alongRows(float[] in, float[] out, int start, int rows, boolean inverse) {
-        float[] matrix = inverse ? modesByCells : cellsByModes;
+    /** Cells to modes, in place, for {@code rows} rows of n neighbouring values from {@code start}; scratch: the same range. */
+    void rowsToModes(float[] values, float[] scratch, int start, int rows) {
+        if (folded) {
+            for (int r = 0; r < rows; r++) {
+                foldRow(values, scratch, start + r * n);
+            }
+        } else {
+            System.arraycopy(values, start, scratch, start, rows * n);
+        }
+        RowProduct.multiply(scratch, start, n, rows, evens, cellsByEven, 0, evens, values, start, n, evens);
+        RowProduct.multiply(scratch, start + evens, n, rows, odds, cellsByOdd, 0, odds, values, start + evens, n, odds);
+    }
+
+    /** Modes to cells, in place; the inverse of {@link #rowsToModes}. */
+    void rowsToCells(float[] values, float[] scratch, int start, int rows) {
+        RowProduct.multiply(values, start, n, rows, evens, evenByCells, 0, evens, scratch, start, n, evens);
+        RowProduct.multiply(values, start + evens, n, rows, odds, oddByCells, 0, odds, scratch, start + evens, n, odds);
+        if (!folded) {
+            System.arraycopy(scratch, start, values, start, rows * n);
+            return;
+        }
         for (int r = 0; r < rows; r++) {
-            int o = start + r * n;
-            java.util.Arrays.fill(out, o, o + n, 0f);
-            int i = 0;
-            for (; i + TOGETHER <= n; i += TOGETHER) {
-                addEight(out, o, n, matrix, i * n, n, in[o + i], in[o + i + 1], in[o + i + 2], in[o + i + 3],
-                        in[o + i + 4], in[o + i + 5], in[o + i + 6], in[o + i + 7]);
-            }
-            for (; i < n; i++) {
-                addOne(out, o, n, matrix, i * n, in[o + i]);
-            }
+            unfoldRow(scratch, values, start + r * n);
         }
     }
 
     /**
-     * Transforms along the slow axis: value i of column c lies at {@code i * stride + c}; columns
-     * {@code start..start+count-1} are done. {@code out} must not be {@code in}.
+     * Cells to modes, in place, along the slow axis: value i of column c lies at {@code i * stride + c}; columns
+     * {@code start..start+count-1}; scratch: the same places.
      */
-    void acrossRows(float[] in, float[] out, int stride, int start, int count, boolean inverse) {
-        float[] matrix = inverse ? cellsByModes : modesByCells;
-        for (int r = 0; r < n; r++) {
-            int o = r * stride + start;
-            java.util.Arrays.fill(out, o, o + count, 0f);
-            int i = 0;
-            for (; i + TOGETHER <= n; i += TOGETHER) {
-                int w = r * n + i;
-                addEight(out, o, count, in, i * stride + start, stride, matrix[w], matrix[w + 1], matrix[w + 2], matrix[w + 3],
-                        matrix[w + 4], matrix[w + 5], matrix[w + 6], matrix[w + 7]);
+    void columnsToModes(float[] values, float[] scratch, int stride, int start, int count) {
+        int last = n - 1;
+        for (int i = 0; i < evens; i++) {
+            int low = i * stride + start;
+            int high = (folded ? last - i : i) * stride + start;
+            if (low == high) {
+                System.arraycopy(values, low, scratch, low, count);
+            } else {
+                int odd = (evens + i) * stride + start;
+                for (int c = 0; c < count; c++) {
+                    scratch[low + c] = values[low + c] + values[high + c];
+                }
+                for (int c = 0; c < count; c++) {
+                    scratch[odd + c] = values[low + c] - values[high + c];
+                }
             }
-            for (; i < n; i++) {
-                addOne(out, o, count, in, i * stride + start, matrix[r * n + i]);
+        }
+        int middle = evens * stride + start;
+        RowProduct.multiply(evenByCells, 0, evens, evens, evens, scratch, start, stride, values, start, stride, count);
+        RowProduct.multiply(oddByCells, 0, odds, odds, odds, scratch, middle, stride, values, middle, stride, count);
+    }
+
+    /** Modes to cells, in place, along the slow axis; the inverse of {@link #columnsToModes}. */
+    void columnsToCells(float[] values, float[] scratch, int stride, int start, int count) {
+        int middle = evens * stride + start;
+        RowProduct.multiply(cellsByEven, 0, evens, evens, evens, values, start, stride, scratch, start, stride, count);
+        RowProduct.multiply(cellsByOdd, 0, odds, odds, odds, values, middle, stride, scratch, middle, stride, count);
+        int last = n - 1;
+        for (int i = 0; i < evens; i++) {
+            int low = i * stride + start;
+            int high = (folded ? last - i : i) * stride + start;
+            if (low == high) {
+                System.arraycopy(scratch, low, values, low, count);
+            } else {
+                int odd = (evens + i) * stride + start;
+                for (int c = 0; c < count; c++) {
+                    values[low + c] = scratch[low + c] + scratch[odd + c];
+                }
+                for (int c = 0; c < count; c++) {
+                    values[high + c] = scratch[low + c] - scratch[odd + c];
+                }
             }
         }
     }
 
-    private static void addEight(float[] out, int o, int count, float[] in, int p, int step, float a0, float a1, float a2, float a3,
-                                 float a4, float a5, float a6, float a7) {
-        int p1 = p + step;
-        int p2 = p1 + step;
-        int p3 = p2 + step;
-        int p4 = p3 + step;
-        int p5 = p4 + step;
-        int p6 = p5 + step;
-        int p7 = p6 + step;
-        for (int l = 0; l < count; l++) {
-            out[o + l] += ((a0 * in[p + l] + a1 * in[p1 + l]) + (a2 * in[p2 + l] + a3 * in[p3 + l]))
-                    + ((a4 * in[p4 + l] + a5 * in[p5 + l]) + (a6 * in[p6 + l] + a7 * in[p7 + l]));
+    private void foldRow(float[] from, float[] to, int at) {
+        int end = at + n - 1;
+        for (int i = 0; i < odds; i++) {
+            to[at + i] = from[at + i] + from[end - i];
+            to[at + evens + i] = from[at + i] - from[end - i];
+        }
+        if (evens > odds) {
+            to[at + odds] = from[at + odds];
         }
     }
 
-    private static void addOne(float[] out, int o, int count, float[] in, int p, float a) {
-        for (int l = 0; l < count; l++) {
-            out[o + l] += a * in[p + l];
+    private void unfoldRow(float[] from, float[] to, int at) {
+        int end = at + n - 1;
+        for (int i = 0; i < odds; i++) {
+            to[at + i] = from[at + i] + from[at + evens + i];
+            to[end - i] = from[at + i] - from[at + evens + i];
+        }
+        if (evens > odds) {
+            to[at + odds] = from[at + odds];
         }
     }
 }

@@ -85,16 +85,16 @@ public final class Projection {
         }
         int plane = shape.nx() * shape.ny();
         int nz = shape.nz();
-        int columnPieces = (plane + COLUMNS - 1) / COLUMNS;
+        int pieces = (plane + COLUMNS - 1) / COLUMNS;
         lanes.forEach(nz, k -> {
             closeWalls(u, k);
             DivergenceKernel.slab(shape, u.x(), u.y(), u.z(), a, k);
-            alongX.alongRows(a, b, k * plane, shape.ny(), false);
+            alongX.rowsToModes(a, b, k * plane, shape.ny());
         });
-        lanes.forEach(columnPieces, c -> alongZ.acrossRows(b, a, plane, c * COLUMNS, Math.min(COLUMNS, plane - c * COLUMNS), false));
+        lanes.forEach(pieces, c -> alongZ.columnsToModes(a, b, plane, c * COLUMNS, Math.min(COLUMNS, plane - c * COLUMNS)));
         lanes.forEach(nz, this::solveAlongY);
-        lanes.forEach(columnPieces, c -> alongZ.acrossRows(a, b, plane, c * COLUMNS, Math.min(COLUMNS, plane - c * COLUMNS), true));
-        lanes.forEach(nz, k -> alongX.alongRows(b, a, k * plane, shape.ny(), true));
+        lanes.forEach(pieces, c -> alongZ.columnsToCells(a, b, plane, c * COLUMNS, Math.min(COLUMNS, plane - c * COLUMNS)));
+        lanes.forEach(nz, k -> alongX.rowsToCells(a, b, k * plane, shape.ny()));
         lanes.forEach(nz, k -> subtractGradient(u, k));
     }
 

@@ -8,37 +8,46 @@ import org.wispwright.render.volume.ScalarGrid;
 
 /**
  * How much of a directional light reaches each cell's centre, by one sweep of the box along the axis that the light's
- * direction follows most, and the pullback by density. Cost: one pass over the cells and one exponential a cell.
- * <p>Forward. Slices are taken from the light's side on. d = density, {@code q = extinction h / (2 |w_a|)} the depth of half
- * the path from slice to slice through density 1, w the unit direction to the light, a the sweep's axis, S the bilinear
- * shift by {@code (w_b, w_c)/|w_a|} cells within a slice, in which there is no smoke outside the box:
+ * direction follows most, and the pullback by density. Cost: two passes over the cells and one exponential a cell.
+ * <p>Forward. Slices s = 0, 1, ... are taken from the light's side on. d = density, w = the unit direction to the light, a the
+ * sweep's axis, {@code q = extinction h / (2 |w_a|)} the depth of half the path between slices through density 1. The line to the
+ * light that passes cell x of slice s is called by the place {@code u = x + s o}, {@code o = (w_b, w_c) / |w_a|} cells, at which
+ * it would pass slice 0; E(u) is the depth gathered along it so far, at whole u. There is no smoke outside the box:
  * <pre>
- *   tau_0 = q d_0       tau_s = S(tau_(s-1) + q d_(s-1)) + q d_s       lit = exp(-tau)
+ *   tau_s(x) = E(x + s o) + q d_s(x)          (E between whole places bilinear)
+ *   E(u) += 2 q d_s(u - s o)                  (d between cells bilinear)
+ *   lit = exp(-tau)
  * </pre>
- * This is the trapezoid rule along the light's path, so it is exact for a density that is even along the sweep, and of
- * second order otherwise. It interpolates depths, not transmittances: depths are linear in density and smoother.
- * <p>Pullback, slices from the far side on: {@code g_s = -lit_s litBar_s + e_s}, {@code e_s = S' g_(s+1)} (0 for the last),
- * {@code dBar_s += q (g_s + e_s)}. S' is the shift by the opposite offset, because the offset is the same everywhere.
- * <p>Source of the model: Max (1995), IEEE TVCG 1(2), 99-108, light attenuated on its way in; the recurrence is ours.
- * <p>Not for two threads at once: the slices' buffers are reused.
+ * This is the trapezoid rule along the light's path, first half step included: exact for a density that is even along the
+ * sweep, of second order otherwise. Two interpolations in all, and not one a slice, keep shadows as sharp far away as near by.
+ * <p>Pullback, slices from the far side on, with {@code g_s = -lit_s litBar_s}: the same two steps, transposed, in the other order:
+ * <pre>
+ *   dBar_s(x) += 2 q EBar(x + s o) + q g_s(x)          EBar(u) += g_s(u - s o)
+ * </pre>
+ * Both interpolations have the same weights in every cell of a slice, and each is the other's transpose.
+ * <p>Source of the model: Max (1995), IEEE TVCG 1(2), 99-108, light attenuated on its way in; the slanted sweep is ours.
+ * <p>Not for two threads at once: the buffers are reused.
  */
 public final class LightSweep {
-    /** Cells around a slice: a shift by up to one cell each way, and its right neighbour, read zeros outside. */
-    private static final int RIM = 2;
-
     private final GridShape shape;
-    private final double sharePerExtinction;
+    private final double halfPath;
     private final int slices;
     private final int strideA;
     private final int countB;
     private final int strideB;
     private final int countC;
     private final int strideC;
-    private final double shiftB;
-    private final double shiftC;
+    private final double slantB;
+    private final double slantC;
     private final boolean lightAtHighEnd;
+    /** Place of u = 0 in a row of {@link #lines}, and of row 0. */
+    private final int zeroB;
+    private final int zeroC;
+    private final int lineRow;
+    /** E or EBar at whole u. */
+    private final double[] lines;
+    /** One slice of values with a rim of one zero. */
     private final double[] rimmed;
-    private final double[] slice;
 
     /**
      * @param shape the box
@@ -64,12 +73,16 @@ public final class LightSweep {
         strideB = strides[b];
         countC = counts[c];
         strideC = strides[c];
-        shiftB = w[b] / Math.abs(w[a]);
-        shiftC = w[c] / Math.abs(w[a]);
+        slantB = w[b] / Math.abs(w[a]);
+        slantC = w[c] / Math.abs(w[a]);
         lightAtHighEnd = w[a] > 0;
-        sharePerExtinction = 0.5 * shape.cellMetres() / Math.abs(w[a]);
-        rimmed = new double[Math.multiplyExact(countB + 2 * RIM, countC + 2 * RIM)];
-        slice = new double[countB * countC];
+        halfPath = 0.5 * shape.cellMetres() / Math.abs(w[a]);
+        double last = slices - 1;
+        zeroB = (int) Math.max(0, -Math.floor(last * slantB));
+        zeroC = (int) Math.max(0, -Math.floor(last * slantC));
+        lineRow = countB + 2 + (int) Math.ceil(last * Math.abs(slantB));
+        lines = new double[Math.multiplyExact(lineRow, countC + 2 + (int) Math.ceil(last * Math.abs(slantC)))];
+        rimmed = new double[Math.multiplyExact(countB + 2, countC + 2)];
     }
 
     /**
@@ -85,23 +98,19 @@ public final class LightSweep {
         requireShape("lit", lit);
         float[] d = density.values();
         float[] depth = lit.values();
-        double q = extinction * sharePerExtinction;
+        double q = extinction * halfPath;
+        Arrays.fill(lines, 0);
+        Arrays.fill(depth, 0);
         for (int s = 0; s < slices; s++) {
-            if (s == 0) {
-                Arrays.fill(slice, 0);
-            } else {
-                shift(shiftB, shiftC);
-            }
             int at = offset(s);
             for (int c = 0; c < countC; c++) {
+                int row = (countB + 2) * (c + 1) + 1;
                 for (int b = 0; b < countB; b++) {
-                    int cell = at + b * strideB + c * strideC;
-                    double half = q * d[cell];
-                    double tau = slice[b + countB * c] + half;
-                    depth[cell] = (float) tau;
-                    rimmed[b + RIM + (countB + 2 * RIM) * (c + RIM)] = tau + half;
+                    rimmed[row + b] = q * d[at + b * strideB + c * strideC];
                 }
             }
+            readLines(s, 1, 1, depth, at);
+            addToLines(s, 2);
         }
         int layer = shape.nx() * shape.ny();
         lanes.forEach(shape.nz(), k -> exponentials(depth, k * layer, (k + 1) * layer));
@@ -122,24 +131,19 @@ public final class LightSweep {
         requireShape("densityBar", densityBar);
         float[] l = lit.values();
         float[] lBar = litBar.values();
-        float[] dBar = densityBar.values();
-        double q = extinction * sharePerExtinction;
+        double q = extinction * halfPath;
+        Arrays.fill(lines, 0);
         for (int s = slices - 1; s >= 0; s--) {
-            if (s == slices - 1) {
-                Arrays.fill(slice, 0);
-            } else {
-                shift(-shiftB, -shiftC);
-            }
             int at = offset(s);
             for (int c = 0; c < countC; c++) {
+                int row = (countB + 2) * (c + 1) + 1;
                 for (int b = 0; b < countB; b++) {
                     int cell = at + b * strideB + c * strideC;
-                    double e = slice[b + countB * c];
-                    double g = e - (double) l[cell] * lBar[cell];
-                    dBar[cell] += (float) (q * (g + e));
-                    rimmed[b + RIM + (countB + 2 * RIM) * (c + RIM)] = g;
+                    rimmed[row + b] = -(double) l[cell] * lBar[cell];
                 }
             }
+            readLines(s, 2 * q, q, densityBar.values(), at);
+            addToLines(s, 1);
         }
     }
 
@@ -147,23 +151,45 @@ public final class LightSweep {
         return strideA * (lightAtHighEnd ? slices - 1 - s : s);
     }
 
-    /** Overwrites slice(b,c) with the rimmed buffer at (b + byB, c + byC), bilinear; both shifts in -1..1. */
-    private void shift(double byB, double byC) {
-        int wholeB = (int) Math.floor(byB);
-        int wholeC = (int) Math.floor(byC);
-        double fb = byB - wholeB;
-        double fc = byC - wholeC;
-        double w00 = (1 - fb) * (1 - fc);
-        double w10 = fb * (1 - fc);
-        double w01 = (1 - fb) * fc;
-        double w11 = fb * fc;
-        int row = countB + 2 * RIM;
+    /** {@code to(x) += share lines(x + s o) + own rimmed(x)} for one slice. */
+    private void readLines(int s, double share, double own, float[] to, int at) {
+        int wholeB = (int) Math.floor(s * slantB);
+        int wholeC = (int) Math.floor(s * slantC);
+        double fb = s * slantB - wholeB;
+        double fc = s * slantC - wholeC;
+        double w00 = share * (1 - fb) * (1 - fc);
+        double w10 = share * fb * (1 - fc);
+        double w01 = share * (1 - fb) * fc;
+        double w11 = share * fb * fc;
         for (int c = 0; c < countC; c++) {
-            int from = RIM + wholeB + row * (c + RIM + wholeC);
-            int to = countB * c;
+            int line = wholeB + zeroB + lineRow * (c + wholeC + zeroC);
+            int row = (countB + 2) * (c + 1) + 1;
+            int cell = at + c * strideC;
             for (int b = 0; b < countB; b++) {
-                int n = from + b;
-                slice[to + b] = w00 * rimmed[n] + w10 * rimmed[n + 1] + w01 * rimmed[n + row] + w11 * rimmed[n + row + 1];
+                double sum = w00 * lines[line + b] + w10 * lines[line + b + 1] + w01 * lines[line + b + lineRow]
+                        + w11 * lines[line + b + lineRow + 1];
+                to[cell + b * strideB] += (float) (sum + own * rimmed[row + b]);
+            }
+        }
+    }
+
+    /** {@code lines(u) += share rimmed(u - s o)} at the whole places that the slice reaches: the transpose of reading. */
+    private void addToLines(int s, double share) {
+        int wholeB = (int) Math.floor(s * slantB);
+        int wholeC = (int) Math.floor(s * slantC);
+        double fb = s * slantB - wholeB;
+        double fc = s * slantC - wholeC;
+        double w00 = share * (1 - fb) * (1 - fc);
+        double w10 = share * fb * (1 - fc);
+        double w01 = share * (1 - fb) * fc;
+        double w11 = share * fb * fc;
+        int rimRow = countB + 2;
+        for (int c = 0; c <= countC; c++) {
+            int line = wholeB + zeroB + lineRow * (c + wholeC + zeroC);
+            int row = rimRow * (c + 1) + 1;
+            for (int b = 0; b <= countB; b++) {
+                int n = row + b;
+                lines[line + b] += w00 * rimmed[n] + w10 * rimmed[n - 1] + w01 * rimmed[n - rimRow] + w11 * rimmed[n - rimRow - 1];
             }
         }
     }
