@@ -219,10 +219,21 @@ public final class JsonPlace {
         return value;
     }
 
-    /** The object itself, for parts whose names are free. */
+    /** The object itself, for parts whose names are free; all numbers in it are finite. */
     ObjectNode object() {
         requireObject();
+        requireFinite();
         return (ObjectNode) node;
+    }
+
+    private void requireFinite() {
+        if (node.isNumber()) {
+            finite("a finite number");
+        } else if (node.isObject()) {
+            keys().forEach(key -> at(key).requireFinite());
+        } else if (node.isArray()) {
+            items(0, Integer.MAX_VALUE).forEach(JsonPlace::requireFinite);
+        }
     }
 
     private void requireObject() {

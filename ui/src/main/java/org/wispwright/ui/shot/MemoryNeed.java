@@ -20,6 +20,9 @@ public final class MemoryNeed {
     /** Bytes a cell of everything that is there once: 48 float fields. */
     static final long STEP = 192;
 
+    /** Bytes a pixel of a picture that is drawn: 16 for its values, 60 for its rays, and its file. */
+    static final long PIXEL = 80;
+
     private MemoryNeed() {
     }
 
@@ -31,6 +34,11 @@ public final class MemoryNeed {
     /** Least bytes for a solve. */
     public static long bytes(GridShape grid, FrameRange frames, int substeps) {
         return bytes(grid.cells(), (long) frames.count() * substeps);
+    }
+
+    /** Least bytes to hold one picture of so many pixels, draw it and write it: 80 bytes a pixel. */
+    static long ofPicture(long pixels) {
+        return BASE / 4 + PIXEL * Math.min(pixels, 1L << 40);
     }
 
     /**

@@ -7,7 +7,6 @@ import java.util.Map;
 import java.util.Optional;
 import org.wispwright.optimize.flow.FrameRange;
 import org.wispwright.optimize.flow.Source;
-import org.wispwright.render.picture.Picture;
 import org.wispwright.render.view.Raster;
 import org.wispwright.render.view.View;
 import org.wispwright.render.volume.GridShape;
@@ -21,6 +20,7 @@ public final class ShotCheck {
     private static final int MOST_ROWS_TRIED = 1080;
 
     private final ShotFolder folder;
+    private final long memoryBytes;
     private final Findings findings = new Findings();
 
     /**
@@ -36,8 +36,9 @@ public final class ShotCheck {
         }
     }
 
-    private ShotCheck(ShotFolder folder) {
+    private ShotCheck(ShotFolder folder, long memoryBytes) {
         this.folder = folder;
+        this.memoryBytes = memoryBytes;
     }
 
     /**
@@ -48,7 +49,7 @@ public final class ShotCheck {
      */
     public static Result of(Path folder, long memoryBytes) {
         try {
-            return new ShotCheck(ShotFolder.open(folder)).run(memoryBytes);
+            return new ShotCheck(ShotFolder.open(folder), memoryBytes).run();
         } catch (ShotException noFolder) {
             return new Result(Optional.empty(), List.of(noFolder.finding()));
         }
@@ -67,7 +68,7 @@ public final class ShotCheck {
         throw new ShotException(result.findings().get(0));
     }
 
-    private Result run(long memoryBytes) {
+    private Result run() {
         Optional<Shot> setup = new SetupReader(folder, findings, memoryBytes).read();
         List<Note> notes = new NoteReader(folder, findings).read();
         setup.ifPresent(shot -> {
@@ -109,6 +110,8 @@ public final class ShotCheck {
         for (int n = 0; n < shot.views().size(); n++) {
             ShotView view = shot.views().get(n);
             String pointer = "/views/" + n;
+            Raster raster = view.view().raster();
+            findings.check(() -> requirePixels((long) raster.width() * raster.height(), pointer + "/raster", "a raster of " + raster.inWords(), "make it smaller"));
             int rows = Math.min(view.view().raster().height(), MOST_ROWS_TRIED);
             View tried = rows == view.view().raster().height() ? view.view() : view.view().withRasterHeight(rows);
             if (!tried.sees(box)) {
@@ -122,14 +125,24 @@ public final class ShotCheck {
     }
 
     private void checkRendered(View view, String file, String pointer) {
-        Picture picture = RenderedFrame.read(folder, file, pointer);
+        RenderedFrame.StatedSize size = RenderedFrame.statedSize(folder, file, pointer);
         Raster raster = view.raster();
-        double across = (double) picture.height() * raster.width() / raster.height();
-        double down = (double) picture.width() * raster.height() / raster.width();
-        if (Math.abs(picture.width() - across) > 0.5 && Math.abs(picture.height() - down) > 0.5) {
-            throw new ShotException(Finding.of("shot.json", pointer, "picture '" + file + "' of " + picture.width() + "x" + picture.height() + " pixels",
+        double across = (double) size.height() * raster.width() / raster.height();
+        double down = (double) size.width() * raster.height() / raster.width();
+        if (Math.abs(size.width() - across) > 0.5 && Math.abs(size.height() - down) > 0.5) {
+            throw new ShotException(Finding.of("shot.json", pointer, "picture '" + file + "' of " + size.width() + "x" + size.height() + " pixels",
                     "the aspect of view '" + view.name() + "', " + raster.width() + "x" + raster.height(),
                     "render it again with this aspect, or correct the view's raster and lens"));
+        }
+        requirePixels(size.width() * size.height(), pointer, "picture '" + file + "' of " + size.width() + "x" + size.height() + " pixels", "render it smaller");
+        RenderedFrame.read(folder, file, pointer);
+    }
+
+    private void requirePixels(long pixels, String pointer, String what, String toDo) {
+        long need = MemoryNeed.ofPicture(pixels);
+        if (need > memoryBytes) {
+            throw new ShotException(Finding.of("shot.json", pointer, what + ", which takes " + MemoryNeed.inWords(need),
+                    "one that fits into " + MemoryNeed.inWords(memoryBytes), toDo + ", or give more memory (java -Xmx4g and --memory 4G)"));
         }
     }
 

@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
+import java.nio.ByteBuffer;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
@@ -224,6 +225,27 @@ class FaultsTest {
     void gridBeyondAllArrays() {
         shot.swap("shot.json", "[8, 16, 8]", "[8000, 8000, 8000]");
         refused(List.of("--memory", "1G"), "shot.json at /grid/cells", "make it ", "or give more memory");
+    }
+
+    @Test
+    void rasterBeyondTheMemoryGiven() {
+        shot.swap("shot.json", "\"raster\": [48, 64],\n      \"rendered\"", "\"raster\": [12000, 16000],\n      \"rendered\"");
+        refused(List.of("--memory", "1G"), "shot.json at /views/0/raster", "12000x16000", "1.0 GiB");
+    }
+
+    /** A PNG of 100 bytes that states 12000 x 16000 pixels: refused before any memory is taken for them. */
+    @Test
+    void pngThatStatesASizeBeyondTheMemoryGiven() throws IOException {
+        byte[] whole = Files.readAllBytes(shot.folder().resolve("frames/front.1004.png"));
+        ByteBuffer.wrap(whole).putInt(16, 12000).putInt(20, 16000);
+        shot.write("frames/front.1004.png", Arrays.copyOf(whole, 100));
+        refused(List.of("--memory", "1G"), "shot.json at /views/0/rendered/1004", "12000x16000", "1.0 GiB");
+    }
+
+    @Test
+    void fileTooLargeToBeAShot() {
+        shot.write("shot.json", new byte[(16 << 20) + 1]);
+        refused("shot.json", "16777217 bytes", "at most 16777216");
     }
 
     @Test
