@@ -69,6 +69,6 @@ final class ShownPicture {
     }
 
     private static int coded(double linear) {
-        return (int) Math.round(255 * Srgb.coded(Math.min(1, Math.max(0, linear))));
+        return Srgb.encodeTo(255, linear);
     }
 }

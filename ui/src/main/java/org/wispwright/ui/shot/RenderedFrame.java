@@ -5,6 +5,7 @@ import java.io.EOFException;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.regex.Pattern;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.picture.PngFile;
 
@@ -28,11 +29,11 @@ public final class RenderedFrame {
     static StatedSize statedSize(ShotFolder folder, String file, String pointer) {
         try (DataInputStream in = new DataInputStream(Files.newInputStream(named(folder, file, pointer)))) {
             if (in.readLong() != PNG_SIGNATURE || in.readInt() != 13 || in.readInt() != IHDR) {
-                throw new IOException("it does not begin like a PNG");
+                throw new IOException("is not a PNG file; save the picture as PNG");
             }
             return new StatedSize(in.readInt() & 0xFFFFFFFFL, in.readInt() & 0xFFFFFFFFL);
         } catch (EOFException shorter) {
-            throw unreadable(file, pointer, new IOException("it ends within its first 24 bytes", shorter));
+            throw unreadable(file, pointer, new IOException("is cut short, it ends within its first 24 bytes", shorter));
         } catch (IOException broken) {
             throw unreadable(file, pointer, broken);
         }
@@ -49,7 +50,7 @@ public final class RenderedFrame {
     public static Picture read(ShotFolder folder, String file, String pointer) {
         try {
             return PngFile.read(named(folder, file, pointer));
-        } catch (IOException | IllegalArgumentException broken) {
+        } catch (IOException broken) {
             throw unreadable(file, pointer, broken);
         }
     }
@@ -63,12 +64,8 @@ public final class RenderedFrame {
     }
 
     private static ShotException unreadable(String file, String pointer, Exception broken) {
-        return new ShotException(Finding.of("shot.json", pointer, "picture '" + file + "', which cannot be read (" + reason(broken) + ")",
-                "a whole PNG picture", "copy or render it again"), broken);
-    }
-
-    private static String reason(Exception broken) {
-        String words = broken.getMessage() == null ? broken.getClass().getSimpleName() : broken.getMessage();
-        return words.replaceAll("\\s+", " ").replaceAll("\\.$", "");
+        String reason = String.valueOf(broken.getMessage()).replaceAll("(?s)^picture file .*" + Pattern.quote(Path.of(file).getFileName().toString()) + ": ", "")
+                .replaceAll("\\s+", " ").replaceAll("\\.$", "");
+        return new ShotException(new Finding("shot.json", pointer, "picture '" + file + "' " + reason + (reason.contains(";") ? "." : "; copy or render it again.")), broken);
     }
 }

@@ -17,6 +17,7 @@ import java.util.Comparator;
 import java.util.List;
 import java.util.stream.Stream;
 import org.wispwright.optimize.flow.SmokeState;
+import org.wispwright.render.files.WholeFile;
 
 /**
  * A take that is being made, in {@code takes/.making-...}. {@link #finish} gives it its name by one atomic rename; closing it
@@ -139,8 +140,8 @@ public final class TakeDraft implements AutoCloseable {
             return false;
         }
         try {
-            Files.write(making.resolve("take.json"), record.json(number));
-            force(making);
+            byte[] json = record.json(number);
+            WholeFile.write(making.resolve("take.json"), out -> out.write(json));
             lockChannel.close();
             Files.deleteIfExists(making.resolve(LOCK));
             try {
@@ -157,17 +158,6 @@ public final class TakeDraft implements AutoCloseable {
                 return false;
             }
             throw cannotWrite(takes, refused);
-        }
-    }
-
-    /** Asks the disk to have every file before the name appears. */
-    private static void force(Path folder) throws IOException {
-        try (Stream<Path> files = Files.list(folder)) {
-            for (Path file : files.toList()) {
-                try (FileChannel channel = FileChannel.open(file, StandardOpenOption.WRITE)) {
-                    channel.force(true);
-                }
-            }
         }
     }
 

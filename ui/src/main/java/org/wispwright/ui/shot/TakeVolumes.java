@@ -2,7 +2,9 @@ package org.wispwright.ui.shot;
 
 import java.io.IOException;
 import java.nio.file.Path;
+import java.util.Arrays;
 import java.util.Locale;
+import java.util.regex.Pattern;
 import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.render.volume.GridShape;
 import org.wispwright.render.volume.MacVelocity;
@@ -22,14 +24,14 @@ final class TakeVolumes {
     static void write(Path take, int frame, SmokeState state) throws IOException {
         GridShape g = state.density().shape();
         MacVelocity u = state.velocity();
-        NpyFile.write(take.resolve(file("density", frame)), new int[] {g.nz(), g.ny(), g.nx()}, state.density().values());
+        NpyFile.write(take.resolve(file("density", frame)), state.density());
         NpyFile.write(take.resolve(file("velocity-x", frame)), new int[] {g.nz(), g.ny(), g.nx() + 1}, u.x());
         NpyFile.write(take.resolve(file("velocity-y", frame)), new int[] {g.nz(), g.ny() + 1, g.nx()}, u.y());
         NpyFile.write(take.resolve(file("velocity-z", frame)), new int[] {g.nz() + 1, g.ny(), g.nx()}, u.z());
     }
 
     static void writeForce(Path take, double[] coefficients) throws IOException {
-        NpyFile.write(take.resolve(FORCE), coefficients);
+        ForceFile.write(take.resolve(FORCE), coefficients);
     }
 
     static ScalarGrid density(ShotFolder folder, String take, int frame, GridShape g) {
@@ -46,31 +48,28 @@ final class TakeVolumes {
     static double[] force(ShotFolder folder, String take) {
         String file = take + "/" + FORCE;
         try {
-            return NpyFile.readDoubles(folder.file(file));
-        } catch (IOException | IllegalArgumentException broken) {
+            return ForceFile.read(folder.file(file));
+        } catch (IOException broken) {
             throw damaged(file, broken);
         }
     }
 
     private static float[] values(ShotFolder folder, String file, int... shape) {
-        float[] values;
         try {
-            values = NpyFile.read(folder.file(file), shape);
-        } catch (IOException | IllegalArgumentException broken) {
+            NpyFile.Contents contents = NpyFile.read(folder.file(file));
+            if (!Arrays.equals(shape, contents.shape())) {
+                throw new IOException("has shape " + Arrays.toString(contents.shape()) + ", the shot's grid needs " + Arrays.toString(shape));
+            }
+            return contents.values();
+        } catch (IOException broken) {
             throw damaged(file, broken);
         }
-        for (int n = 0; n < values.length; n++) {
-            if (!Float.isFinite(values[n])) {
-                throw new ShotException(Finding.of(file, "", values[n] + " at value " + n, "finite numbers", "the take is damaged, so move it away and make it again"));
-            }
-        }
-        return values;
     }
 
     private static ShotException damaged(String file, Exception broken) {
-        String reason = String.valueOf(broken.getMessage()).replaceAll("\\s+", " ").replaceAll("\\.$", "");
-        return new ShotException(Finding.of(file, "", "a file that is not as it was written (" + reason + ")", "a whole NPY file of the shot's grid",
-                "move the take away and make it again"), broken);
+        String reason = String.valueOf(broken.getMessage()).replaceAll("(?s)^volume file .*" + Pattern.quote(Path.of(file).getFileName().toString()) + ": ", "")
+                .replaceAll("\\s+", " ").replaceAll("; [^;]*$", "").replaceAll("\\.$", "");
+        return new ShotException(new Finding(file, "", "the file " + reason + "; move the take away and make it again."), broken);
     }
 
     static String file(String field, int frame) {

@@ -3,7 +3,7 @@ package org.wispwright.ui.work;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.nio.file.StandardCopyOption;
+import org.wispwright.render.files.WholeFile;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.picture.PngFile;
 import org.wispwright.ui.shot.Finding;
@@ -20,32 +20,27 @@ public final class PictureFile {
      * @throws ShotException if the place cannot be written to
      */
     public static void write(Picture picture, Path out) {
-        whole(out, making -> PngFile.write(making, picture));
-    }
-
-    /** Something that writes a file. */
-    interface Writing {
-        /** Writes. */
-        void to(Path file) throws IOException;
-    }
-
-    /** Writes a file beside its place and renames it when it is whole. */
-    static void whole(Path out, Writing writing) {
-        Path folder = out.toAbsolutePath().getParent();
-        Path making = folder.resolve("." + out.getFileName() + ".making");
         try {
             if (Files.isDirectory(out)) {
                 throw new IOException("it is a folder");
             }
-            try {
-                writing.to(making);
-                Files.move(making, out, StandardCopyOption.ATOMIC_MOVE, StandardCopyOption.REPLACE_EXISTING);
-            } finally {
-                Files.deleteIfExists(making);
-            }
+            PngFile.write(picture, out, PngFile.Depth.EIGHT);
         } catch (IOException refused) {
-            throw new ShotException(new Finding(out.toString(), "", "it cannot be written (" + refused.getClass().getSimpleName().replace("Exception", "") + ": "
-                    + refused.getMessage() + "); give a file in a folder that exists and can be written to."), refused);
+            throw cannotWrite(out, refused);
         }
+    }
+
+    /** Writes any file, under its name only once it is whole. @throws ShotException if the place cannot be written to */
+    public static void write(Path out, WholeFile.Content content) {
+        try {
+            WholeFile.write(out, content);
+        } catch (IOException refused) {
+            throw cannotWrite(out, refused);
+        }
+    }
+
+    static ShotException cannotWrite(Path out, IOException refused) {
+        return new ShotException(new Finding(out.toString(), "", "it cannot be written (" + refused.getClass().getSimpleName().replace("Exception", "") + ": "
+                + refused.getMessage() + "); give a place in a folder that exists and can be written to."), refused);
     }
 }

@@ -2,6 +2,7 @@ package org.wispwright.ui.work;
 
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.march.RayMarcher;
+import org.wispwright.render.picture.Compositing;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.picture.Rgb;
 import org.wispwright.render.view.View;
@@ -26,15 +27,8 @@ public final class PictureWork {
 
     /** A new picture that lies over an opaque background. */
     public static Picture over(Picture picture, Rgb background) {
-        Picture out = picture.copy();
-        float[] rgba = out.rgba();
-        for (int n = 0; n < rgba.length; n += 4) {
-            double through = 1 - rgba[n + 3];
-            rgba[n] += (float) (through * background.r());
-            rgba[n + 1] += (float) (through * background.g());
-            rgba[n + 2] += (float) (through * background.b());
-            rgba[n + 3] = 1;
-        }
+        Picture out = new Picture(picture.width(), picture.height());
+        Compositing.overEven(picture, background, out);
         return out;
     }
 }
