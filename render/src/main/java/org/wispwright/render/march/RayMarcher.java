@@ -17,8 +17,8 @@ import org.wispwright.render.volume.ScalarGrid;
  * <p>Pullback: {@code alphaBar = aBar + sum_c albedo_c ambient_c cBar_c}, {@code shineBar = sum_c albedo_c radiance_c cBar_c},
  * then the kernels' transposes, and for the light's way through the smoke {@link LightSweep#pullback}. The error of the
  * picture falls with the square of the step.
- * <p>Same bits for any number of lanes. Keeps its buffers between calls: one call at a time. Memory: 60 bytes a pixel, and
- * 4 (light: 16, with a pullback 24) bytes a cell.
+ * <p>Same bits for any number of lanes. Keeps its buffers between calls: one call at a time. Memory: 64 bytes a pixel,
+ * 8 bytes a cell (24 with a light), and 2 MiB for the batches.
  */
 public final class RayMarcher {
     /** Pieces that the rays of a loop are dealt to; each has its own scratch. */
