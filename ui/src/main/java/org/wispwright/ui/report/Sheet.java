@@ -22,10 +22,11 @@ import org.wispwright.render.picture.Rgb;
  *
  * @param title what the sheet is about, such as the shot's name
  * @param subtitle which takes it compares
+ * @param before what the pictures before are called, such as "original"
  * @param background linear light behind the smoke
  * @param rows one for each note, at least one
  */
-public record Sheet(String title, String subtitle, Rgb background, List<SheetRow> rows) {
+public record Sheet(String title, String subtitle, String before, Rgb background, List<SheetRow> rows) {
     private static final int MARGIN = 48;
     private static final int GAP = 20;
     private static final int HEAD = 104;
@@ -65,6 +66,11 @@ public record Sheet(String title, String subtitle, Rgb background, List<SheetRow
             gain *= 2;
         }
         return gain;
+    }
+
+    /** The two pictures' difference at its own raster, with the sheet's gain: black where they agree. */
+    public BufferedImage difference(Picture got, Picture wanted) {
+        return ShownPicture.difference(got, wanted, background, gain());
     }
 
     /** Paints the sheet, 8-bit sRGB. Needs no display. */
@@ -120,7 +126,7 @@ public record Sheet(String title, String subtitle, Rgb background, List<SheetRow
         if (columns == 5) {
             cells.add(foreign ? cell(row.rendered().get(), "rendered frame, with the note", true) : new Cell(null, "no rendered frame", false));
         }
-        cells.add(cell(row.original(), foreign ? "original" : "original, with the note", !foreign));
+        cells.add(cell(row.original(), foreign ? before : before + ", with the note", !foreign));
         cells.add(cell(row.wanted(), "wanted", false));
         cells.add(cell(row.got(), "got", false));
         BufferedImage apart = ShownPicture.difference(row.got(), row.wanted(), background, gain);

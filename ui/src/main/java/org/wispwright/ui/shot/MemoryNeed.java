@@ -54,6 +54,10 @@ public final class MemoryNeed {
         double ratio = most / ((double) cells[0] * cells[1] * cells[2]);
         double scale = ratio <= 0 ? 0 : plane ? Math.sqrt(ratio) : Math.cbrt(ratio);
         int[] fit = {(int) (cells[0] * scale), (int) (cells[1] * scale), plane ? 1 : (int) (cells[2] * scale)};
+        for (int axis = 0; axis < 3; axis++) {
+            // Whole fours: round numbers for people, and quicker transforms.
+            fit[axis] = fit[axis] >= 16 ? fit[axis] / 4 * 4 : fit[axis];
+        }
         return fit[0] < 4 || fit[1] < 4 || fit[2] < 1 ? Optional.empty() : Optional.of(fit);
     }
 
@@ -66,9 +70,14 @@ public final class MemoryNeed {
         String smaller = fitting(cells, steps, memoryBytes)
                 .map(f -> "make it " + f[0] + " x " + f[1] + " x " + f[2] + " cells of " + String.format(Locale.ROOT, "%.3g", cellMetres * cells[0] / f[0]) + " m, ")
                 .orElse("");
-        long whole = (need >> 30) + 1;
         throw place.fault("a grid of " + cells[0] + " x " + cells[1] + " x " + cells[2] + " cells, whose solve takes " + inWords(need),
-                "one that fits into " + inWords(memoryBytes), smaller + (smaller.isEmpty() ? "" : "or ") + "give more memory (java -Xmx" + whole + "g and --memory " + whole + "G)");
+                "one that fits into " + inWords(memoryBytes), smaller + (smaller.isEmpty() ? "" : "or ") + giveMore(need));
+    }
+
+    /** The way out by more memory, in whole GiB. */
+    static String giveMore(long need) {
+        long whole = (need >> 30) + 1;
+        return "give more memory (java -Xmx" + whole + "g and --memory " + whole + "G)";
     }
 
     /** Bytes for people: "2.0 GiB". */

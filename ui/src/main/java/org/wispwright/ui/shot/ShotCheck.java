@@ -142,7 +142,7 @@ public final class ShotCheck {
         long need = MemoryNeed.ofPicture(pixels);
         if (need > memoryBytes) {
             throw new ShotException(Finding.of("shot.json", pointer, what + ", which takes " + MemoryNeed.inWords(need),
-                    "one that fits into " + MemoryNeed.inWords(memoryBytes), toDo + ", or give more memory (java -Xmx4g and --memory 4G)"));
+                    "one that fits into " + MemoryNeed.inWords(memoryBytes), toDo + ", or " + MemoryNeed.giveMore(need)));
         }
     }
 

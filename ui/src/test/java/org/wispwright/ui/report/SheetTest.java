@@ -37,7 +37,7 @@ class SheetTest {
         Picture leaning = PaintedSmoke.column(width, height, -0.12, 0, 0.8);
         Picture holed = PaintedSmoke.column(width, height, 0.02, 0.95, 0.8);
         Optional<Picture> rendered = foreign ? Optional.of(PaintedSmoke.column(2 * width, 2 * height, 0.02, 0, 1.3)) : Optional.empty();
-        return new Sheet("Kiln yard", "take 001 against the original, frames 1001 to 1048", SKY, List.of(
+        return new Sheet("Kiln yard", "take 001 against the original, frames 1001 to 1048", "original", SKY, List.of(
                 new SheetRow("lean-head", "Lean the head to frame left by a good part of its width, keep the base as it is.", "frame 1036, view front",
                         rendered, LEAN, List.of(BASE), original, leaning, PaintedSmoke.column(width, height, -0.105, 0, 0.8), 0.9742),
                 new SheetRow("open-gap", "Open a gap here and let a wisp come out on the other side.", "frame 1044, view front",
@@ -74,7 +74,7 @@ class SheetTest {
     void whereGotIsWantedTheDifferenceIsBlack() {
         Picture column = PaintedSmoke.column(36, 48, 0, 0, 1);
         SheetRow met = new SheetRow("a", "words", "frame 1", Optional.empty(), LEAN, List.of(), PaintedSmoke.column(36, 48, 0.1, 0, 1), column, column, 1);
-        BufferedImage image = new Sheet("t", "s", SKY, List.of(met)).paint();
+        BufferedImage image = new Sheet("t", "s", "original", SKY, List.of(met)).paint();
         assertEquals(0xFF000000, image.getRGB(48 + 3 * 320 + 150, 104 + 70 + 200));
     }
 
@@ -85,7 +85,7 @@ class SheetTest {
         Picture lit = new Picture(4, 4);
         lit.rgba()[0] = 0.2f;
         SheetRow row = new SheetRow("a", "words", "frame 1", Optional.empty(), new Retouch(List.of()), List.of(), dark, lit, dark, 0);
-        assertEquals(4, new Sheet("t", "s", Rgb.BLACK, List.of(row)).gain());
+        assertEquals(4, new Sheet("t", "s", "original", Rgb.BLACK, List.of(row)).gain());
     }
 
     @Test
