@@ -35,6 +35,9 @@ import org.wispwright.warp.retouch.Region;
 public final class CompareWork {
     private static final ObjectMapper JSON = JsonMapper.builder().enable(SerializationFeature.INDENT_OUTPUT).build();
 
+    /** A wish whose loss for the original is below this cannot be told from none. */
+    private static final double LEAST_WISH = 1e-9;
+
     private CompareWork() {
     }
 
@@ -43,7 +46,7 @@ public final class CompareWork {
      *
      * @param before the take to compare against; 0 is usual
      * @param after the take to judge
-     * @throws ShotException if a take is missing, damaged or of another set-up, or the shot has no note
+     * @throws ShotException if a take is missing, damaged or of another set-up, the shot has no note, or a note changes nothing
      * @throws Cancel.Cancelled if cancelled
      */
     public static Comparison compare(ShotFolder folder, Shot shot, int before, int after, Lanes lanes, Progress progress, Cancel cancel) {
@@ -75,9 +78,13 @@ public final class CompareWork {
         float[] weights = wish.weights(original.width(), original.height());
         PyramidLoss loss = new PyramidLoss(wanted, weights);
         double start = loss.value(original);
-        double startFinest = squaredDistance(original, wanted, weights);
-        double met = start > 0 ? 1 - loss.value(got) / start : 1;
-        double finest = startFinest > 0 ? squaredDistance(got, wanted, weights) / startFinest : 0;
+        double startFinest = loss.finest(original);
+        if (!(start > LEAST_WISH && startFinest > 0)) {
+            throw new ShotException(new Finding("notes/" + note.id() + ".json", "/retouch", "it changes nothing that can be seen on frame " + note.frame()
+                    + "; check where its strokes and handles lie."));
+        }
+        double met = 1 - loss.value(got) / start;
+        double finest = loss.finest(got) / startFinest;
         double change = 0;
         for (Hold hold : note.holds()) {
             if (hold.holds(note.frame())) {
@@ -150,18 +157,6 @@ public final class CompareWork {
         } catch (JsonProcessingException impossible) {
             throw new IllegalStateException(impossible);
         }
-    }
-
-    /** Sum over pixels and RGBA of weight times squared distance. */
-    static double squaredDistance(Picture a, Picture b, float[] weights) {
-        double sum = 0;
-        for (int n = 0; n < weights.length; n++) {
-            for (int c = 4 * n; c < 4 * n + 4; c++) {
-                double d = (double) a.rgba()[c] - b.rgba()[c];
-                sum += weights[n] * d * d;
-            }
-        }
-        return sum;
     }
 
     /** Weighted mean over pixels and RGBA of the absolute change. */

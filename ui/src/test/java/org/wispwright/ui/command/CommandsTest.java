@@ -12,6 +12,7 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.SortedMap;
+import java.util.stream.Stream;
 import javax.imageio.ImageIO;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -95,6 +96,37 @@ class CommandsTest {
         assertEquals("/grid/cells/1", refused.get("findings").get(0).get("pointer").textValue());
     }
 
+    /** A take that is the original's copy has met nothing: 1 - 1 = 0, and all of the wish is still apart. */
+    @Test
+    void compareMeasuresEveryNoteAndDrawsTheSheet() throws IOException {
+        SmallShot shot = SmallShot.in(place.resolve("yard"));
+        assertEquals(0, Run.of("simulate", shot.folder().toString()).code());
+        copy(shot.folder().resolve("takes/000"), shot.folder().resolve("takes/001"));
+        Path out = place.resolve("review");
+        Run run = Run.of("compare", shot.folder().toString(), "--takes", "0,1", "--out", out.toString(), "--json");
+        assertEquals(0, run.code(), run.err());
+        JsonNode notes = new ObjectMapper().readTree(run.out()).get("notes");
+        assertEquals(2, notes.size());
+        for (JsonNode note : notes) {
+            assertEquals(0.0, note.get("met").doubleValue(), note.toString());
+            assertEquals(1.0, note.get("finestErrorRatio").doubleValue(), note.toString());
+            assertEquals(0.0, note.get("holdChange").doubleValue(), note.toString());
+        }
+        assertEquals(48, ImageIO.read(out.resolve("lean.difference.png").toFile()).getWidth());
+        assertTrue(ImageIO.read(out.resolve("sheet.png").toFile()).getWidth() > 1000);
+        assertEquals(10, SmallShot.listing(out).size() - 1, SmallShot.listing(out).keySet().toString());
+    }
+
+    @Test
+    void compareIntoAFileIsRefused() throws IOException {
+        SmallShot shot = SmallShot.in(place.resolve("yard"));
+        assertEquals(0, Run.of("simulate", shot.folder().toString()).code());
+        Path out = Files.writeString(place.resolve("review"), "taken");
+        Run run = Run.of("compare", shot.folder().toString(), "--takes", "0,0", "--out", out.toString());
+        assertEquals(3, run.code(), run.err());
+        assertEquals("taken", Files.readString(out));
+    }
+
     @Test
     void aTakeThatIsNotThereIsRefused() {
         SmallShot shot = SmallShot.in(place.resolve("yard"));
@@ -118,7 +150,7 @@ class CommandsTest {
 
     @ParameterizedTest
     @ValueSource(strings = {"", "paint", "check", "check a b", "check . --memory lots", "check . --memory -2G", "check . --memory 0", "check . --colour red",
-        "simulate . --threads 0", "simulate . --threads many", "picture . --take 0", "picture . --take x --frame 1 --view v --out a.png",
+        "simulate . --threads 0", "simulate . --threads many", "compare . --takes 0 --out x", "compare . --takes a,b --out x", "picture . --take 0", "picture . --take x --frame 1 --view v --out a.png",
         "picture . --take 0 --frame 1 --view v --out a.gif", "picture . --take 0 --frame 1 --view v --out a.png --height 0"})
     void wrongUsageIsTwo(String line) {
         Run run = Run.of(line.isEmpty() ? new String[0] : line.split(" "));
@@ -128,11 +160,20 @@ class CommandsTest {
     }
 
     @ParameterizedTest
-    @ValueSource(strings = {"", "check", "simulate", "picture"})
+    @ValueSource(strings = {"", "check", "simulate", "picture", "compare"})
     void helpShowsAnExample(String command) {
         Run run = command.isEmpty() ? Run.of("--help") : Run.of(command, "--help");
         assertEquals(0, run.code());
         assertTrue(run.out().contains("java -jar wispwright.jar"), run.out());
+    }
+
+    private static void copy(Path from, Path to) throws IOException {
+        Files.createDirectory(to);
+        try (Stream<Path> files = Files.list(from)) {
+            for (Path file : files.toList()) {
+                Files.copy(file, to.resolve(file.getFileName()));
+            }
+        }
     }
 
     @Test

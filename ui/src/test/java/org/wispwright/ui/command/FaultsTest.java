@@ -295,7 +295,7 @@ class FaultsTest {
 
     @Test
     void handlesOnOneLine() {
-        shot.swap("notes/lean.json", "{\"pin\": [0.45, 0.9]}", "{\"pin\": [0.335, 0.75]}");
+        shot.swap("notes/lean.json", "{\"pin\": [0.45, 0.98]}", "{\"pin\": [0.335, 0.89]}");
         refused("notes/lean.json at /retouch/0/meshWarp", "one line");
     }
 

@@ -12,6 +12,7 @@ final class ShotCommands {
         return List.of(
                 List.of("check", shot.toString()),
                 List.of("simulate", shot.toString()),
-                List.of("picture", shot.toString(), "--take", "0", "--frame", "1004", "--view", "front", "--out", out + ".png"));
+                List.of("picture", shot.toString(), "--take", "0", "--frame", "1004", "--view", "front", "--out", out + ".png"),
+                List.of("compare", shot.toString(), "--takes", "0,1", "--out", out.toString()));
     }
 }

@@ -53,7 +53,7 @@ public final class SmallShot {
             {
               "wispwright": 1, "words": "Lean the head to the left.", "frame": 1004, "view": "front", "weight": 1,
               "retouch": [
-                {"meshWarp": {"handles": [{"from": [0.37, 0.6], "to": [0.31, 0.6]}, {"pin": [0.3, 0.9]}, {"pin": [0.45, 0.9]}]}}
+                {"meshWarp": {"handles": [{"from": [0.37, 0.8], "to": [0.31, 0.8]}, {"pin": [0.3, 0.98]}, {"pin": [0.45, 0.98]}]}}
               ],
               "holds": [{"region": {"rectangle": {"left": 0.2, "top": 0.8, "right": 0.6, "bottom": 1}, "feather": 0.05}}]
             }
@@ -62,7 +62,7 @@ public final class SmallShot {
             {
               "wispwright": 1, "words": "Open a gap.", "frame": 1006, "view": "side",
               "retouch": [
-                {"stroke": {"brush": "remove", "radius": 0.1, "strength": 0.9, "softEdge": 0.5, "line": [[0.33, 0.7], [0.42, 0.7]]}},
+                {"stroke": {"brush": "remove", "radius": 0.1, "strength": 0.9, "softEdge": 0.5, "line": [[0.33, 0.82], [0.42, 0.82]]}},
                 {"stroke": {"brush": "add", "radius": 0.05, "line": [[0.5, 0.6]]}}
               ],
               "holds": [{"region": {"ellipse": {"centre": [0.37, 0.9], "radii": [0.1, 0.05]}}, "frames": [1003, 1006]}]
