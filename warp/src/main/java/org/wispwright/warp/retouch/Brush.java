@@ -1,0 +1,14 @@
+package org.wispwright.warp.retouch;
+
+/**
+ * What a stroke does to a pixel with coverage m in 0..1. All act on premultiplied RGBA and on opacity a, so that adding and
+ * removing stay physical: a never leaves 0..1. Composition as in Porter and Duff (1984), SIGGRAPH 84, 253-259.
+ */
+public enum Brush {
+    /** {@code rgba' = rgba + m (1 - a) (c, 1)}: smoke of colour c laid behind what is there; c is the colour of the smoke near it. */
+    ADD,
+    /** {@code rgba' = (1 - m) rgba}: smoke thinned, colour kept. */
+    REMOVE,
+    /** {@code rgba' = rgba + m (blurred - rgba)}: blurred with a Gaussian whose width follows the stroke's radius. */
+    SOFTEN
+}
