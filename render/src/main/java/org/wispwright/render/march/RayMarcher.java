@@ -17,8 +17,8 @@ import org.wispwright.render.volume.ScalarGrid;
  * <p>Pullback: {@code alphaBar = aBar + sum_c albedo_c ambient_c cBar_c}, {@code shineBar = sum_c albedo_c radiance_c cBar_c},
  * then the kernels' transposes, and for the light's way through the smoke {@link LightSweep#pullback}. The error of the
  * picture falls with the square of the step.
- * <p>Same bits for any number of lanes. Keeps its buffers between calls: one call at a time. Memory: 60 bytes a pixel, and
- * 4 (light: 16, with a pullback 24) bytes a cell.
+ * <p>Same bits for any number of lanes. Keeps its buffers between calls: one call at a time. Memory: 64 bytes a pixel,
+ * 8 bytes a cell (24 with a light), and 2 MiB for the batches.
  */
 public final class RayMarcher {
     /** Pieces that the rays of a loop are dealt to; each has its own scratch. */
@@ -92,7 +92,8 @@ public final class RayMarcher {
      * @param view the camera; a ray that misses the box gives a clear pixel
      * @param stepMetres the longest distance between two samples, finite and above 0; half a cell to one cell is usual
      * @param lanes used by every call
-     * @throws IllegalArgumentException if the step is not such a length, or so short that a ray needs more than 65536 samples
+     * @throws IllegalArgumentException if the step is not such a length, or so short that a ray needs more than 65536 samples,
+     *     or the view has more than 2^25 pixels
      */
     public RayMarcher(GridShape shape, View view, double stepMetres, Lanes lanes) {
         if (!(stepMetres > 0) || Double.isInfinite(stepMetres)) {

@@ -1,0 +1,2 @@
+/** Room: proofs for cameras against pinhole geometry. */
+package org.wispwright.render.view;
