@@ -18,6 +18,8 @@ final class CubicKernel {
         int lastX = mx - 1;
         int lastY = lattice.my() - 1;
         int lastZ = lattice.mz() - 1;
+        int lowZ = lastZ == 0 ? 0 : -1;                                        // a plane: weight 1 on the one value there is
+        int highZ = lastZ == 0 ? 0 : 2;
         for (int n = 0; n < count; n++) {
             int c = cell + n;
             int b = before + n;
@@ -43,7 +45,7 @@ final class CubicKernel {
             float sum = 0;
             float low = Float.POSITIVE_INFINITY;
             float high = Float.NEGATIVE_INFINITY;
-            for (int c3 = -1; c3 <= 2; c3++) {
+            for (int c3 = lowZ; c3 <= highZ; c3++) {
                 int kk = bk + c3;
                 int plane = slab * (kk < 0 ? 0 : kk > lastZ ? lastZ : kk);
                 float wz = weight(c3, fz);
@@ -72,6 +74,8 @@ final class CubicKernel {
         int lastX = mx - 1;
         int lastY = lattice.my() - 1;
         int lastZ = lattice.mz() - 1;
+        int lowZ = lastZ == 0 ? 0 : -1;                                        // a plane: weight 1 on the one value there is
+        int highZ = lastZ == 0 ? 0 : 2;
         for (int n = 0; n < count; n++) {
             int c = cell + n;
             int b = before + n;
@@ -100,7 +104,7 @@ final class CubicKernel {
             float byZ = 0;
             int lowAt = -1;
             int highAt = -1;
-            for (int c3 = -1; c3 <= 2; c3++) {
+            for (int c3 = lowZ; c3 <= highZ; c3++) {
                 int kk = bk + c3;
                 int plane = slab * (kk < 0 ? 0 : kk > lastZ ? lastZ : kk);
                 float wz = weight(c3, fz);
@@ -137,7 +141,7 @@ final class CubicKernel {
             d(dBar.x, c, b, halfX * byX);
             d(dBar.y, c, b, halfY * byY);
             d(dBar.z, c, b, halfZ * byZ);
-            for (int c3 = -1; c3 <= 2; c3++) {
+            for (int c3 = lowZ; c3 <= highZ; c3++) {
                 int kk = bk + c3;
                 int plane = slab * (kk < 0 ? 0 : kk > lastZ ? lastZ : kk);
                 float gz = g * weight(c3, fz);

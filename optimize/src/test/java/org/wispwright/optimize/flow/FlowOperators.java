@@ -30,6 +30,13 @@ final class FlowOperators {
         return packed;
     }
 
+    static float[] all(MacVelocity u) {
+        float[] values = java.util.Arrays.copyOf(u.x(), u.x().length + u.y().length + u.z().length);
+        System.arraycopy(u.y(), 0, values, u.x().length, u.y().length);
+        System.arraycopy(u.z(), 0, values, u.x().length + u.y().length, u.z().length);
+        return values;
+    }
+
     static void unpack(double[] packed, float[]... parts) {
         int at = 0;
         for (float[] part : parts) {

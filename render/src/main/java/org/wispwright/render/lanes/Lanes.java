@@ -70,8 +70,12 @@ public final class Lanes implements AutoCloseable {
             LockSupport.unpark(helper);
         }
         takePieces(body, pieces);
-        while (busy.get() != 0) {
-            Thread.onSpinWait();
+        for (int spin = 0; busy.get() != 0; spin++) {
+            if (spin < SPINS_BEFORE_SLEEP) {
+                Thread.onSpinWait();
+            } else {
+                Thread.yield();
+            }
         }
         this.body = null;
         Throwable failed = failure;

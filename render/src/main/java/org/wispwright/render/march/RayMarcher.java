@@ -92,7 +92,8 @@ public final class RayMarcher {
      * @param view the camera; a ray that misses the box gives a clear pixel
      * @param stepMetres the longest distance between two samples, finite and above 0; half a cell to one cell is usual
      * @param lanes used by every call
-     * @throws IllegalArgumentException if the step is not such a length, or so short that a ray needs more than 65536 samples
+     * @throws IllegalArgumentException if the step is not such a length, or so short that a ray needs more than 65536 samples,
+     *     or the view has more than 2^25 pixels
      */
     public RayMarcher(GridShape shape, View view, double stepMetres, Lanes lanes) {
         if (!(stepMetres > 0) || Double.isInfinite(stepMetres)) {

@@ -15,6 +15,9 @@ final class RayTable {
     /** The most samples one ray may have. */
     static final int MOST_SAMPLES = 65_536;
 
+    /** The most pixels whose rays are held: 2 GiB. */
+    static final int MOST_RAYS = 1 << 25;
+
     final int rays;
     final double[] start;
     final double[] advance;
@@ -28,6 +31,10 @@ final class RayTable {
         int width = view.raster().width();
         int height = view.raster().height();
         rays = width * height;
+        if (rays > MOST_RAYS) {
+            throw new IllegalArgumentException("ray march: view '" + view.name() + "' has " + view.raster().inWords() + ", needs at most "
+                    + MOST_RAYS + " in all; take a smaller raster");
+        }
         start = new double[3 * rays];
         advance = new double[3 * rays];
         count = new int[rays];

@@ -1,0 +1,149 @@
+package org.wispwright.optimize.solve;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.function.BooleanSupplier;
+import org.wispwright.optimize.checkpoint.ReversibleChain;
+import org.wispwright.optimize.flow.SmokeSolver;
+import org.wispwright.optimize.flow.SmokeState;
+import org.wispwright.optimize.force.ForceBasis;
+import org.wispwright.render.volume.GridShape;
+import org.wispwright.render.volume.MacVelocity;
+import org.wispwright.render.volume.ScalarGrid;
+
+/**
+ * The smoke's substeps as a chain that can be reversed. State n is the smoke after n substeps; state 0 is the first frame.
+ *
+ * <p>A substep's pullback needs the state before it and the velocity after it, and the latter is part of the state that the
+ * pull before this one started from. So a tape costs nothing once the reversal is under way: only the last substep, and those
+ * between snapshots, are ever run. Memory: three states, the adjoint, two forces, and a state for each slot used.
+ */
+final class SmokeChain implements ReversibleChain {
+    private final SmokeSolver solver;
+    private final ForceBasis basis;
+    private final BooleanSupplier cancelled;
+    private final Owed owed;
+    private final int substeps;
+    private final int firstFrame;
+    private final List<SmokeState> slots = new ArrayList<>();
+    private final SmokeState bar;
+    private final MacVelocity force;
+    private final MacVelocity forceBar;
+    private SmokeState current;
+    private SmokeState before;
+    private SmokeState spare;
+    /** Which state {@link #before} is once its step was pulled; -1 if none. */
+    private int known = -1;
+    private int forceStep = -1;
+    private int barStep = -1;
+    private double[] x;
+    private double[] xBar;
+
+    /** What the loss owes to a state itself. */
+    @FunctionalInterface
+    interface Owed {
+        /** Adds the derivative of the loss by the density of state n. */
+        void addTo(int n, ScalarGrid density, ScalarGrid densityBar);
+    }
+
+    SmokeChain(SmokeSolver solver, ForceBasis basis, BooleanSupplier cancelled, Owed owed) {
+        this.solver = solver;
+        this.basis = basis;
+        this.cancelled = cancelled;
+        this.owed = owed;
+        substeps = solver.setup().substeps();
+        firstFrame = solver.setup().frames().first();
+        GridShape shape = solver.setup().grid();
+        bar = new SmokeState(shape);
+        force = new MacVelocity(shape);
+        forceBar = new MacVelocity(shape);
+        current = new SmokeState(shape);
+        before = new SmokeState(shape);
+        spare = new SmokeState(shape);
+    }
+
+    /** Readies a sweep: unknowns to read, their gradient to add to, state 0 current, the adjoint 0. */
+    void begin(double[] unknowns, double[] gradient) {
+        x = unknowns;
+        xBar = gradient;
+        known = -1;
+        forceStep = -1;
+        barStep = -1;
+        current.clear();
+        bar.clear();
+    }
+
+    /** The current state, to read. */
+    SmokeState current() {
+        return current;
+    }
+
+    @Override
+    public void save(int slot) {
+        if (slot == slots.size()) {
+            slots.add(new SmokeState(solver.setup().grid()));
+        }
+        slots.get(slot).set(current);
+    }
+
+    @Override
+    public void restore(int slot) {
+        current.set(slots.get(slot));
+    }
+
+    @Override
+    public void advance(int step) {
+        run(step);
+        SmokeState swap = current;
+        current = spare;
+        spare = swap;
+    }
+
+    @Override
+    public void tape(int step) {
+        if (known == step + 1) {
+            SmokeState after = before;
+            before = current;
+            current = after;
+        } else {
+            run(step);
+            SmokeState free = before;
+            before = current;
+            current = spare;
+            spare = free;
+        }
+        known = -1;
+    }
+
+    @Override
+    public void pull(int step) {
+        checkCancelled();
+        owed.addTo(step + 1, current.density(), bar.density());
+        int at = step / substeps;
+        if (at != barStep) {
+            forceBar.fill(0);
+            barStep = at;
+        }
+        solver.pullback(before, current.velocity(), bar, forceBar);
+        if (step % substeps == 0) {
+            basis.pullback(forceBar, at, xBar);
+        }
+        known = step;
+    }
+
+    private void run(int step) {
+        checkCancelled();
+        int at = step / substeps;
+        if (at != forceStep) {
+            basis.force(x, at, force);
+            forceStep = at;
+        }
+        solver.step(current, force, firstFrame + at + 1, spare);
+    }
+
+    private void checkCancelled() {
+        if (cancelled.getAsBoolean()) {
+            throw new SolveCancelled();
+        }
+    }
+}

@@ -1,0 +1,262 @@
+package org.wispwright.optimize.solve;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.function.BooleanSupplier;
+import org.wispwright.optimize.checkpoint.Budget;
+import org.wispwright.optimize.flow.FlowSetup;
+import org.wispwright.optimize.flow.SmokeSolver;
+import org.wispwright.optimize.flow.SmokeState;
+import org.wispwright.optimize.force.Band;
+import org.wispwright.optimize.force.BandPlan;
+import org.wispwright.optimize.force.ForceBasis;
+import org.wispwright.optimize.search.Lbfgs;
+import org.wispwright.optimize.search.LineSearch;
+import org.wispwright.render.lanes.Lanes;
+import org.wispwright.render.view.Pinhole;
+import org.wispwright.render.view.Orthographic;
+import org.wispwright.render.view.View;
+import org.wispwright.render.volume.GridShape;
+
+/**
+ * The search for the smallest smooth extra force with which the smoke arrives at the wanted pictures.
+ *
+ * <p>L-BFGS on notes + holds + stay term + {@code energyWeight |x|^2 / 2}. Bands open from low to high; one ends when the loss fell
+ * by less than 5 % over 5 iterations, the next starts from the same force. The energy weight is the program's: it starts
+ * at 0 and is set every few iterations so that the energy is 2 % of the starting loss, with the stored pairs and the gradient
+ * moved along exactly. At the solution that is a stationary point of {@code loss + 0.02 start ln |x|^2}: doubling the force has one price,
+ * whatever its size.
+ *
+ * <p>The pictures of a solve are small: a pixel covers about a cell, a sample a cell. Same bits for any number of lanes and any budget of
+ * memory. One solve at a time for one set of lanes.
+ */
+public final class Solve {
+    /** A band ends when the loss fell by less than this share ... */
+    static final double LEAST_FALL = 0.05;
+    /** ... over so many iterations. */
+    static final int OVER_ITERATIONS = 5;
+    /** The force energy's part of the objective, as a share of the starting loss. */
+    static final double ENERGY_SHARE = 0.02;
+    /** Iterations between two settings of the energy weight. */
+    static final int ENERGY_EVERY = 5;
+    /** Pairs that L-BFGS keeps (Liu and Nocedal 1989 find 3 to 7 enough). */
+    static final int PAIRS = 8;
+    /** A line search that needs more gradients than this is lost in rounding. */
+    static final int MOST_EVALUATIONS = 8;
+    /** The coarsest rung has at least so many cells each way. */
+    static final int LEAST_RUNG = 12;
+    /** Iterations that a band usually takes; only for the estimate of the time left. */
+    static final int USUAL_ITERATIONS = 14;
+
+    private final SolveProblem problem;
+    private final boolean stay;
+    private final Lanes lanes;
+    private final BooleanSupplier cancelled;
+
+    /**
+     * @param stay      true for the stay term; false only to measure what it does
+     * @param lanes     used by the whole solve; stays the caller's
+     * @param cancelled asked at every substep
+     */
+    public Solve(SolveProblem problem, boolean stay, Lanes lanes, BooleanSupplier cancelled) {
+        this.problem = problem;
+        this.stay = stay;
+        this.lanes = lanes;
+        this.cancelled = cancelled;
+    }
+
+    /** The bands of a shot, the same for all its rungs. */
+    public static List<Band> bands(FlowSetup flow) {
+        return BandPlan.of(flow.grid(), flow.frames().count() - 1);
+    }
+
+    /** The force basis of a shot on its own grid: what the unknowns of a take mean. */
+    public static ForceBasis basis(FlowSetup flow, Lanes lanes) {
+        return new ForceBasis(flow.grid(), flow.frames().count() - 1, bands(flow), lanes);
+    }
+
+    /** The grids that a solve climbs: half the cells each way if that leaves whole cells enough, then the shot's own. */
+    public static List<GridShape> rungs(GridShape grid) {
+        boolean even = grid.nx() % 2 == 0 && grid.ny() % 2 == 0 && grid.nz() % 2 == 0;
+        boolean enough = Math.min(grid.nx(), Math.min(grid.ny(), grid.nz())) >= 2 * LEAST_RUNG;
+        if (!even || !enough) {
+            return List.of(grid);
+        }
+        return List.of(new GridShape(grid.nx() / 2, grid.ny() / 2, grid.nz() / 2, 2 * grid.cellMetres(),
+                grid.originX(), grid.originY(), grid.originZ()), grid);
+    }
+
+    /** The view as a solve draws it: a pixel at the aim covers about a cell, never more rows than the view's own. */
+    public static View proxy(View view, double cellMetres) {
+        double distance = view.position().minus(view.aim()).length();
+        double heightMetres = view.lens() instanceof Pinhole pinhole ? distance * pinhole.gateHeightMm() / pinhole.focalMm()
+                : ((Orthographic) view.lens()).heightMetres();
+        int rows = (int) Math.max(8, Math.min(view.raster().height(), Math.round(heightMetres / cellMetres)));
+        return rows >= view.raster().height() ? view : view.withRasterHeight(rows);
+    }
+
+    /**
+     * Runs to its end.
+     *
+     * @param memoryBytes for the states kept in a sweep
+     * @param until       ends it early
+     * @throws SolveCancelled           if cancelled
+     * @throws IllegalArgumentException if a note wants nothing, or not one state fits in the memory
+     */
+    public SolveResult run(long memoryBytes, StopRule until, Progress.Listener listener) {
+        List<GridShape> rungs = rungs(problem.flow().grid());
+        Search search = new Search(until, listener, rungs.size());
+        for (GridShape grid : rungs) {
+            if (search.ended.isEmpty()) {
+                search.climb(grid, memoryBytes);
+            }
+        }
+        return search.result();
+    }
+
+    /** What a running solve carries from iteration to iteration. */
+    private final class Search {
+        private final long began = System.nanoTime();
+        private final StopRule until;
+        private final Progress.Listener listener;
+        private final int rungs;
+        private final List<Double> losses = new ArrayList<>();
+        private final List<SolveResult.BandRun> runs = new ArrayList<>();
+        private List<Double> met = List.of();
+        private Lbfgs lbfgs;
+        private TermPlan plan;
+        private SolveLoss loss;
+        private String ended = "";
+        private int rung;
+        private int snapshots;
+        private int iterations;
+        private int gradients;
+
+        Search(StopRule until, Progress.Listener listener, int rungs) {
+            this.until = until;
+            this.listener = listener;
+            this.rungs = rungs;
+        }
+
+        /** One rung: from the force of the rung below, or from none, until its last band ends. */
+        void climb(GridShape grid, long memoryBytes) {
+            rung++;
+            SolveProblem here = problem.on(grid);
+            FlowSetup flow = here.flow();
+            SmokeSolver solver = new SmokeSolver(flow, lanes);
+            List<View> views = here.views().stream().map(view -> proxy(view, grid.cellMetres())).toList();
+            FrameTerms terms = new FrameTerms(grid, views, here.look(), grid.cellMetres(), lanes);
+            plan = new TermPlan(here, solver, terms, stay, cancelled);
+            int lastFrame = here.lastFrame(stay);
+            int steps = (lastFrame - flow.frames().first()) * flow.substeps();
+            snapshots = new Budget(memoryBytes, SmokeState.bytes(grid)).snapshots(steps);
+            List<Band> bands = bands(problem.flow());
+            ForceBasis basis = new ForceBasis(grid, flow.frames().count() - 1, bands, lanes);
+            loss = new SolveLoss(solver, basis, terms, lastFrame, snapshots, cancelled);
+            int open = lbfgs == null ? 1 : bands.size();
+            double weight = lbfgs == null ? 0 : lbfgs.quadratic();
+            double[] start = lbfgs == null ? new double[basis.unknowns(1)] : java.util.Arrays.copyOf(lbfgs.x(), basis.unknowns(open));
+            lbfgs = new Lbfgs(loss, start, settings());
+            lbfgs.addQuadratic(weight);
+            losses.add(share());
+            for (; open <= bands.size() && ended.isEmpty(); open++) {
+                if (lbfgs.x().length < basis.unknowns(open)) {
+                    lbfgs.extend(basis.unknowns(open), loss);
+                    weighEnergy(lbfgs, plan.start());
+                }
+                runBand(grid, bands, open);
+            }
+            gradients += lbfgs.evaluations();
+            iterations += lbfgs.iterations();
+        }
+
+        private void runBand(GridShape grid, List<Band> bands, int open) {
+            int iterationsBefore = lbfgs.iterations();
+            int gradientsBefore = lbfgs.evaluations();
+            double secondsBefore = seconds();
+            boolean more = true;
+            while (more && ended.isEmpty()) {
+                Lbfgs.Iteration iteration = lbfgs.step();
+                if (iteration.outcome() != Lbfgs.Outcome.MOVED) {
+                    ended = rung == rungs && open == bands.size() ? iteration.sentence() : "";
+                    break;
+                }
+                losses.add(share());
+                met = plan.met(loss.losses());
+                int done = lbfgs.iterations() - iterationsBefore;
+                tell(bands.size(), open, done, seconds() - secondsBefore);
+                ended = endedBy(until, losses, iterations + lbfgs.iterations(), seconds());
+                more = !hasEnded(losses, done);
+                if ((open > 1 || rung > 1) && done % ENERGY_EVERY == 0) {
+                    weighEnergy(lbfgs, plan.start());
+                }
+            }
+            runs.add(new SolveResult.BandRun(grid, bands.get(open - 1), lbfgs.x().length, lbfgs.iterations() - iterationsBefore,
+                    lbfgs.evaluations() - gradientsBefore, last(losses), seconds() - secondsBefore));
+        }
+
+        private void tell(int bands, int open, int done, double bandSeconds) {
+            double perIteration = bandSeconds / done;
+            double left = perIteration * (Math.max(1, USUAL_ITERATIONS - done) + USUAL_ITERATIONS * (bands - open));
+            // A finer rung has eight times the cells.
+            for (int finer = rung + 1, times = 8; finer <= rungs; finer++, times *= 8) {
+                left += perIteration * times * USUAL_ITERATIONS;
+            }
+            listener.iteration(new Progress(rung, rungs, open, bands, iterations + lbfgs.iterations(), gradients + lbfgs.evaluations(),
+                    last(losses), met, seconds(), left));
+        }
+
+        private Lbfgs.Settings settings() {
+            // A force that moves still smoke by four cells over the range is a fair first guess of what a note asks.
+            FlowSetup flow = problem.flow();
+            double range = (flow.frames().count() - 1) * flow.frames().secondsPerFrame();
+            double trial = 8 * flow.grid().cellMetres() / (range * range);
+            return new Lbfgs.Settings(PAIRS, LineSearch.Rule.forQuasiNewton().withMostEvaluations(MOST_EVALUATIONS), trial);
+        }
+
+        private double share() {
+            return (lbfgs.value() - lbfgs.quadraticValue()) / plan.start();
+        }
+
+        private double seconds() {
+            return (System.nanoTime() - began) / 1e9;
+        }
+
+        SolveResult result() {
+            return new SolveResult(lbfgs.x().clone(), List.copyOf(runs), List.copyOf(losses), met, gradients, seconds(), lbfgs.quadratic(),
+                    lbfgs.quadraticValue() / plan.start(), snapshots, ended.isEmpty() ? "the last band's loss has stopped falling" : ended);
+        }
+    }
+
+    private static void weighEnergy(Lbfgs search, double start) {
+        double squares = 0;
+        for (double v : search.x()) {
+            squares += v * v;
+        }
+        if (squares > 0) {
+            search.addQuadratic(2 * ENERGY_SHARE * start / squares - search.quadratic());
+        }
+    }
+
+    private static boolean hasEnded(List<Double> losses, int iterationsOfBand) {
+        if (iterationsOfBand < OVER_ITERATIONS) {
+            return false;
+        }
+        double before = losses.get(losses.size() - 1 - OVER_ITERATIONS);
+        return !(last(losses) < before * (1 - LEAST_FALL));
+    }
+
+    private static String endedBy(StopRule until, List<Double> losses, int iterations, double seconds) {
+        if (last(losses) <= until.loss()) {
+            return "the loss reached " + until.loss() + ", as asked";
+        }
+        if (iterations >= until.iterations()) {
+            return until.iterations() + " iterations were done, as asked";
+        }
+        return seconds >= until.seconds() ? "the " + until.seconds() + " seconds asked for had passed" : "";
+    }
+
+    private static double last(List<Double> values) {
+        return values.get(values.size() - 1);
+    }
+}

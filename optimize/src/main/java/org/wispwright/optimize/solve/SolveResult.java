@@ -1,0 +1,36 @@
+package org.wispwright.optimize.solve;
+
+import java.util.List;
+import org.wispwright.optimize.force.Band;
+import org.wispwright.render.volume.GridShape;
+
+/**
+ * What a solve found.
+ *
+ * @param unknowns     the force: the numbers for {@code ForceBasis} with these bands
+ * @param bands        each rung's and band's part of the search
+ * @param losses       total loss after each iteration, as a share of the original's on that rung; each rung adds its own start first
+ * @param met          of each note at the solve's raster, in the problem's order
+ * @param gradients    gradients computed
+ * @param seconds      wall time
+ * @param energyWeight weight of the force energy at the end, {@code weight |x|^2 / 2} beside notes that weigh 1
+ * @param energyShare  the energy's part of the objective at the end, as a share of the starting loss
+ * @param snapshots    states that were kept in a sweep of the last rung
+ * @param ended        why it ended, for a person
+ */
+public record SolveResult(double[] unknowns, List<BandRun> bands, List<Double> losses, List<Double> met, int gradients, double seconds,
+                          double energyWeight, double energyShare, int snapshots, String ended) {
+
+    /**
+     * One band's part of the search on one rung. On the first rung bands open one by one; later rungs begin with all open.
+     *
+     * @param grid       the rung
+     * @param band       its frequencies and splines
+     * @param unknowns   numbers open while it ran, lower bands included
+     * @param iterations while it was the last open one
+     * @param gradients  likewise
+     * @param loss       at its end, as a share of the original's
+     * @param seconds    that it took
+     */
+    public record BandRun(GridShape grid, Band band, int unknowns, int iterations, int gradients, double loss, double seconds) { }
+}
