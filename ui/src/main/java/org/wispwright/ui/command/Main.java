@@ -22,14 +22,16 @@ import picocli.CommandLine.ParameterException;
 /** The program: finds the command, runs it, and turns whatever happens into an exit code and at most one sentence. */
 @Command(name = "wispwright", versionProvider = Main.Version.class, sortOptions = false,
         description = "Changes a smoke simulation so that it satisfies review notes drawn on its frames.",
-        subcommands = {SimulateCommand.class, PictureCommand.class, SolveCommand.class, CompareCommand.class, CheckCommand.class},
+        subcommands = {TourCommand.class, SimulateCommand.class, PictureCommand.class, SolveCommand.class, CompareCommand.class, CheckCommand.class},
         synopsisSubcommandLabel = "COMMAND",
         footer = {"",
             "Exit codes: 0 done, 1 an error of ours, 2 wrong usage, 3 bad input, 130 stopped by Ctrl-C.",
             "",
             "Examples:",
+            "  java -jar wispwright.jar tour",
             "  java -jar wispwright.jar check samples/kiln-yard",
-            "  java -jar wispwright.jar COMMAND --help"})
+            "  java -jar wispwright.jar solve samples/kiln-yard",
+            "  java -jar wispwright.jar solve --help"})
 public final class Main implements Runnable {
     private static final long SECONDS_TO_STOP = 20;
 

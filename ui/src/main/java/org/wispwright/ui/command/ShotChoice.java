@@ -8,21 +8,16 @@ import org.wispwright.ui.shot.ShotException;
 import org.wispwright.ui.shot.ShotFolder;
 import org.wispwright.ui.shot.ShotView;
 import org.wispwright.ui.shot.Takes;
-import picocli.CommandLine.Option;
+import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Parameters;
 
-/** Which shot a command works on, and with how much. Mixed into the commands that run something. */
+/** Which shot a command works on. Mixed into the commands that run something. */
 final class ShotChoice {
     @Parameters(paramLabel = "SHOT", description = "The shot folder.")
     private Path folder;
 
-    @Option(names = "--threads", paramLabel = "N", converter = ThreadCount.Converter.class,
-            description = "Threads to use; the result has the same bits for any number. Default: one for each core.")
-    private ThreadCount threads;
-
-    @Option(names = "--memory", paramLabel = "SIZE", converter = ByteSize.Converter.class,
-            description = "The memory that the work may take, such as 512M or 2G. Default: what Java has.")
-    private ByteSize memory;
+    @Mixin
+    private Means means;
 
     /** The folder. */
     ShotFolder folder() {
@@ -36,12 +31,12 @@ final class ShotChoice {
 
     /** Bytes that the work may take. */
     long memoryBytes() {
-        return memory == null ? Runtime.getRuntime().maxMemory() : memory.bytes();
+        return means.memoryBytes();
     }
 
     /** Lanes to run on. */
     int threads() {
-        return threads == null ? Runtime.getRuntime().availableProcessors() : threads.count();
+        return means.threads();
     }
 
     /** A view by name. @throws ShotException if the shot has none of that name */

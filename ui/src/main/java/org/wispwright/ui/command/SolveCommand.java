@@ -34,6 +34,9 @@ final class SolveCommand implements Callable<Integer> {
             description = "End early: loss=0.03 (share of the original's), seconds=60, or iterations=40. May be given several times; the first to come true ends it.")
     private List<Until> until = List.of();
 
+    @Option(names = "--without-stay", description = "Leave out the term that keeps the frames without a note near the original; only to measure what it does.")
+    private boolean withoutStay;
+
     @Option(names = "--report", paramLabel = "FILE", description = "Also write the figures that --json prints to this file.")
     private Path report;
 
@@ -43,7 +46,7 @@ final class SolveCommand implements Callable<Integer> {
         StopRule rule = Until.all(until);
         SolveWork.Result result;
         try (Lanes lanes = new Lanes(choice.threads()); ProgressLine progress = manner.progress()) {
-            result = SolveWork.run(choice.folder(), shot, new SolveWork.Manner(choice.memoryBytes(), rule, true), lanes, progress, manner.cancel());
+            result = SolveWork.run(choice.folder(), shot, new SolveWork.Manner(choice.memoryBytes(), rule, !withoutStay), lanes, progress, manner.cancel());
         }
         ObjectNode object = SolveReport.of(result).put("ok", true);
         if (report != null) {

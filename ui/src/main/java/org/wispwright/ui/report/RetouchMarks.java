@@ -9,7 +9,10 @@ import java.awt.geom.Ellipse2D;
 import java.awt.geom.Line2D;
 import java.awt.geom.Path2D;
 import java.awt.geom.Rectangle2D;
+import java.util.EnumSet;
 import java.util.List;
+import java.util.Set;
+import org.wispwright.warp.retouch.Brush;
 import org.wispwright.warp.retouch.Handle;
 import org.wispwright.warp.retouch.MeshWarp;
 import org.wispwright.warp.retouch.Operation;
@@ -25,7 +28,8 @@ import org.wispwright.warp.retouch.Stroke;
 final class RetouchMarks {
     /** What a mark's colour says. */
     enum Meaning {
-        /** Region or hold. */ KEEP(0x9BD18B, "stays"),
+        /** A hold, or a pin of a mesh warp. */ KEEP(0x9BD18B, "stays"),
+        /** The region that an operation may act in. */ WITHIN(0xC3B1E1, "acts within"),
         /** Soften brush. */ SOFTEN(0xD9D9D9, "soften"),
         /** Remove brush. */ REMOVE(0x6EC1E4, "remove"),
         /** Handles of a mesh warp. */ PULL(0xE58A5C, "pull"),
@@ -61,12 +65,39 @@ final class RetouchMarks {
         this.height = height;
     }
 
+    /** What the marks of a retouch say; its legend needs no more. */
+    static Set<Meaning> meanings(Retouch retouch, List<Region> holds) {
+        Set<Meaning> all = EnumSet.noneOf(Meaning.class);
+        if (!holds.isEmpty()) {
+            all.add(Meaning.KEEP);
+        }
+        for (Operation operation : retouch.operations()) {
+            if (operation.within().isPresent()) {
+                all.add(Meaning.WITHIN);
+            }
+            if (operation instanceof Stroke stroke) {
+                all.add(meaning(stroke.brush()));
+            } else if (operation instanceof MeshWarp warp) {
+                warp.handles().forEach(h -> all.add(h.from().equals(h.to()) ? Meaning.KEEP : Meaning.PULL));
+            }
+        }
+        return all;
+    }
+
+    private static Meaning meaning(Brush brush) {
+        return switch (brush) {
+            case ADD -> Meaning.ADD;
+            case REMOVE -> Meaning.REMOVE;
+            case SOFTEN -> Meaning.SOFTEN;
+        };
+    }
+
     void draw(Retouch retouch, List<Region> holds) {
         for (Region hold : holds) {
             line(outline(hold), Meaning.KEEP.colour(), dashed());
         }
         for (Operation operation : retouch.operations()) {
-            operation.within().ifPresent(region -> line(outline(region), Meaning.SOFTEN.colour(), dashed()));
+            operation.within().ifPresent(region -> line(outline(region), Meaning.WITHIN.colour(), dashed()));
             if (operation instanceof Stroke stroke) {
                 draw(stroke);
             } else if (operation instanceof MeshWarp warp) {
@@ -76,11 +107,7 @@ final class RetouchMarks {
     }
 
     private void draw(Stroke stroke) {
-        Color colour = switch (stroke.brush()) {
-            case ADD -> Meaning.ADD.colour();
-            case REMOVE -> Meaning.REMOVE.colour();
-            case SOFTEN -> Meaning.SOFTEN.colour();
-        };
+        Color colour = meaning(stroke.brush()).colour();
         Path2D path = new Path2D.Double();
         Point first = stroke.line().get(0);
         path.moveTo(first.x() * height, first.y() * height);

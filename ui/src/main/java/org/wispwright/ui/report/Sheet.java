@@ -9,8 +9,10 @@ import java.awt.Shape;
 import java.awt.geom.AffineTransform;
 import java.awt.image.BufferedImage;
 import java.util.ArrayList;
+import java.util.EnumSet;
 import java.util.List;
 import java.util.Locale;
+import java.util.Set;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.picture.Rgb;
 
@@ -93,8 +95,8 @@ public record Sheet(String title, String subtitle, String before, Rgb background
             g.setColor(SURROUND);
             g.fillRect(0, 0, sheet.getWidth(), sheet.getHeight());
             text(g, shortened(g, title, font(Font.BOLD, 26), width - 2 * MARGIN), MARGIN, 58, font(Font.BOLD, 26), TEXT);
-            text(g, shortened(g, subtitle, font(Font.PLAIN, 15), width - 2 * MARGIN - 420), MARGIN, 84, font(Font.PLAIN, 15), QUIET);
-            paintLegend(g, width - MARGIN);
+            text(g, shortened(g, subtitle, font(Font.PLAIN, 15), width - 2 * MARGIN - 540), MARGIN, 84, font(Font.PLAIN, 15), QUIET);
+            paintLegend(g, width - MARGIN, meanings());
             double gain = gain();
             for (int n = 0; n < rows.size(); n++) {
                 paintRow(g, rows.get(n), HEAD + n * rowHeight, cellWidth, cellHeight, width, columns, gain);
@@ -158,12 +160,18 @@ public record Sheet(String title, String subtitle, String before, Rgb background
         text(g, cell.label(), x, y + cellHeight + 22, font(Font.PLAIN, 14), QUIET);
     }
 
+    private Set<RetouchMarks.Meaning> meanings() {
+        Set<RetouchMarks.Meaning> all = EnumSet.noneOf(RetouchMarks.Meaning.class);
+        rows.forEach(row -> all.addAll(RetouchMarks.meanings(row.retouch(), row.holds())));
+        return all;
+    }
+
     /** What the marks' colours mean, ending at {@code right}. */
-    private static void paintLegend(Graphics2D g, int right) {
+    private static void paintLegend(Graphics2D g, int right, Set<RetouchMarks.Meaning> meanings) {
         Font font = font(Font.PLAIN, 14);
         FontMetrics metrics = g.getFontMetrics(font);
         int x = right;
-        for (RetouchMarks.Meaning meaning : RetouchMarks.Meaning.values()) {
+        for (RetouchMarks.Meaning meaning : meanings) {
             x -= metrics.stringWidth(meaning.words());
             text(g, meaning.words(), x, 84, font, QUIET);
             x -= 24;
@@ -192,7 +200,8 @@ public record Sheet(String title, String subtitle, String before, Rgb background
 
     /** "met 97 %": whole percent, rounded down so that 100 % means all of it. */
     static String metInWords(double met) {
-        return "met " + (int) Math.floor(100 * Math.min(1, Math.max(-9.99, met)) + 1e-9) + " %";
+        int percent = (int) Math.floor(100 * Math.min(1, Math.max(-9.99, met)) + 1e-9);
+        return "met " + (percent < 0 ? "\u2212" : "") + Math.abs(percent) + " %";
     }
 
     private static String shortened(Graphics2D g, String words, Font font, int most) {

@@ -150,7 +150,7 @@ class CommandsTest {
 
     @ParameterizedTest
     @ValueSource(strings = {"", "paint", "check", "check a b", "check . --memory lots", "check . --memory -2G", "check . --memory 0", "check . --colour red",
-        "simulate . --threads 0", "simulate . --threads many", "compare . --takes 0 --out x", "compare . --takes a,b --out x", "picture . --take 0", "picture . --take x --frame 1 --view v --out a.png",
+        "simulate . --threads 0", "simulate . --threads many", "compare . --takes 0 --out x", "solve . --until soon", "solve . --until loss=2", "solve . --until iterations=0.5", "solve . --until seconds=0", "compare . --takes a,b --out x", "picture . --take 0", "picture . --take x --frame 1 --view v --out a.png",
         "picture . --take 0 --frame 1 --view v --out a.gif", "picture . --take 0 --frame 1 --view v --out a.png --height 0"})
     void wrongUsageIsTwo(String line) {
         Run run = Run.of(line.isEmpty() ? new String[0] : line.split(" "));
@@ -160,7 +160,7 @@ class CommandsTest {
     }
 
     @ParameterizedTest
-    @ValueSource(strings = {"", "check", "simulate", "picture", "compare"})
+    @ValueSource(strings = {"", "tour", "check", "simulate", "picture", "solve", "compare"})
     void helpShowsAnExample(String command) {
         Run run = command.isEmpty() ? Run.of("--help") : Run.of(command, "--help");
         assertEquals(0, run.code());

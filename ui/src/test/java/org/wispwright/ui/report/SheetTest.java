@@ -92,7 +92,7 @@ class SheetTest {
     void metIsRoundedDownSoThatOnlyAllOfItIsHundred() {
         assertEquals("met 99 %", Sheet.metInWords(0.9999));
         assertEquals("met 100 %", Sheet.metInWords(1));
-        assertEquals("met -5 %", Sheet.metInWords(-0.05));
+        assertEquals("met \u22125 %", Sheet.metInWords(-0.05));
     }
 
     @Test
