@@ -1,0 +1,71 @@
+package org.wispwright.warp.retouch;
+
+import org.wispwright.render.picture.Picture;
+
+/**
+ * Applies a {@link Retouch} to a picture, and tells where it acts. Works at any raster; the same retouch at two rasters shows the
+ * same picture up to resampling, because all positions and widths are fractions of the height.
+ */
+public final class Retoucher {
+    /** The widest feather of {@link #touched}, in heights. */
+    public static final double WIDEST_FEATHER = 1;
+
+    private Retoucher() {
+    }
+
+    /**
+     * The wanted picture: the operations in their order, each on what the one before it left.
+     * <p>Alpha stays in 0..1 and colour at or above 0 if they were so in the original. An operation that changes nothing, and pixels
+     * that no operation reaches, keep the original's bits.
+     *
+     * @param original read; never changed
+     * @return a new picture of the same raster
+     */
+    public static Picture wanted(Retouch retouch, Picture original) {
+        Picture picture = original.copy();
+        for (Operation operation : retouch.operations()) {
+            if (operation.changesNothing()) {
+                continue;
+            }
+            if (operation instanceof Stroke stroke) {
+                Brushwork.apply(stroke, picture);
+            } else if (operation instanceof MeshWarp warp) {
+                picture = new Bend(warp).applied(picture);
+            }
+        }
+        return picture;
+    }
+
+    /**
+     * Where a retouch acts, from the geometry of its operations alone: 1 where a stroke has coverage or a warp moves things
+     * noticeably (where smoke leaves as well as where it arrives), falling to 0 over about a feather. Operations join by the maximum.
+     *
+     * @param width   pixels along a row
+     * @param height  rows
+     * @param feather fraction of the height, 0 to {@value #WIDEST_FEATHER}
+     * @return one weight a pixel, 0 to 1, index {@code x + width * y}
+     * @throws IllegalArgumentException if the raster or the feather is out of range
+     */
+    public static float[] touched(Retouch retouch, int width, int height, double feather) {
+        if (!(feather >= 0 && feather <= WIDEST_FEATHER)) {
+            throw new IllegalArgumentException("retouch: got feather " + feather + ", needs a fraction of the picture's height, 0 to "
+                    + WIDEST_FEATHER);
+        }
+        if (width < 1 || height < 1 || width > Picture.LONGEST_SIDE || height > Picture.LONGEST_SIDE) {
+            throw new IllegalArgumentException("retouch: got a raster of " + width + "x" + height + " pixels, needs sides of 1 to "
+                    + Picture.LONGEST_SIDE);
+        }
+        float[] touched = new float[Math.multiplyExact(width, height)];
+        for (Operation operation : retouch.operations()) {
+            if (operation.changesNothing()) {
+                continue;
+            }
+            float[] one = operation instanceof MeshWarp warp ? new Bend(warp).touched(width, height, feather)
+                    : StrokeCoverage.touched((Stroke) operation, width, height, feather);
+            for (int p = 0; p < touched.length; p++) {
+                touched[p] = Math.max(touched[p], one[p]);
+            }
+        }
+        return touched;
+    }
+}
