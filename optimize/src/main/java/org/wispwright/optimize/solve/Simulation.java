@@ -27,16 +27,18 @@ public final class Simulation {
      * Runs all frames.
      *
      * @param solver    the shot's solver
+     * @param start     read: the state of the first frame
      * @param basis     of the force; not used if x is null
      * @param x         unknowns; null for no force
      * @param lastFrame where to stop, inside the shot's frames
      * @param cancelled asked before each step
      * @throws SolveCancelled if cancelled
      */
-    public static void run(SmokeSolver solver, ForceBasis basis, double[] x, int lastFrame, BooleanSupplier cancelled, EachFrame each) {
+    public static void run(SmokeSolver solver, SmokeState start, ForceBasis basis, double[] x, int lastFrame,
+                           BooleanSupplier cancelled, EachFrame each) {
         int first = solver.setup().frames().first();
         int substeps = solver.setup().substeps();
-        SmokeState now = new SmokeState(solver.setup().grid());
+        SmokeState now = start.copy();
         SmokeState next = new SmokeState(solver.setup().grid());
         MacVelocity force = x == null ? null : new MacVelocity(solver.setup().grid());
         each.frame(first, now, null);

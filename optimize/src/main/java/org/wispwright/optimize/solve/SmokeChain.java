@@ -12,7 +12,7 @@ import org.wispwright.render.volume.MacVelocity;
 import org.wispwright.render.volume.ScalarGrid;
 
 /**
- * The smoke's substeps as a chain that can be reversed. State n is the smoke after n substeps; state 0 is the first frame.
+ * The smoke's substeps as a chain that can be reversed. State n is the smoke after n substeps; state 0 is the first frame's, given.
  *
  * <p>A substep's pullback needs the state before it and the velocity after it, and the latter is part of the state that the
  * pull before this one started from. So a tape costs nothing once the reversal is under way: only the last substep, and those
@@ -23,6 +23,7 @@ final class SmokeChain implements ReversibleChain {
     private final ForceBasis basis;
     private final BooleanSupplier cancelled;
     private final Owed owed;
+    private final SmokeState start;
     private final int substeps;
     private final int firstFrame;
     private final List<SmokeState> slots = new ArrayList<>();
@@ -46,11 +47,12 @@ final class SmokeChain implements ReversibleChain {
         void addTo(int n, ScalarGrid density, ScalarGrid densityBar);
     }
 
-    SmokeChain(SmokeSolver solver, ForceBasis basis, BooleanSupplier cancelled, Owed owed) {
+    SmokeChain(SmokeSolver solver, ForceBasis basis, SmokeState start, BooleanSupplier cancelled, Owed owed) {
         this.solver = solver;
         this.basis = basis;
         this.cancelled = cancelled;
         this.owed = owed;
+        this.start = start;
         substeps = solver.setup().substeps();
         firstFrame = solver.setup().frames().first();
         GridShape shape = solver.setup().grid();
@@ -69,7 +71,7 @@ final class SmokeChain implements ReversibleChain {
         known = -1;
         forceStep = -1;
         barStep = -1;
-        current.clear();
+        current.set(start);
         bar.clear();
     }
 

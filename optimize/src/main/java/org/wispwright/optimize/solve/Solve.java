@@ -146,23 +146,24 @@ public final class Solve {
             SmokeSolver solver = new SmokeSolver(flow, lanes);
             List<View> views = here.views().stream().map(view -> proxy(view, grid.cellMetres())).toList();
             FrameTerms terms = new FrameTerms(grid, views, here.look(), grid.cellMetres(), lanes);
-            plan = new TermPlan(here, solver, terms, stay, cancelled);
+            SmokeState start = new SmokeState(grid);
+            plan = new TermPlan(here, solver, start, terms, stay, cancelled);
             int lastFrame = here.lastFrame(stay);
             int steps = (lastFrame - flow.frames().first()) * flow.substeps();
             snapshots = new Budget(memoryBytes, SmokeState.bytes(grid)).snapshots(steps);
             List<Band> bands = bands(problem.flow());
             ForceBasis basis = new ForceBasis(grid, flow.frames().count() - 1, bands, lanes);
-            loss = new SolveLoss(solver, basis, terms, lastFrame, snapshots, cancelled);
+            loss = new SolveLoss(solver, basis, terms, start, lastFrame, snapshots, cancelled);
             int open = lbfgs == null ? 1 : bands.size();
             double weight = lbfgs == null ? 0 : lbfgs.quadratic();
-            double[] start = lbfgs == null ? new double[basis.unknowns(1)] : java.util.Arrays.copyOf(lbfgs.x(), basis.unknowns(open));
-            lbfgs = new Lbfgs(loss, start, settings());
+            double[] unknowns = lbfgs == null ? new double[basis.unknowns(1)] : java.util.Arrays.copyOf(lbfgs.x(), basis.unknowns(open));
+            lbfgs = new Lbfgs(loss, unknowns, settings());
             lbfgs.addQuadratic(weight);
             losses.add(share());
             for (; open <= bands.size() && ended.isEmpty(); open++) {
                 if (lbfgs.x().length < basis.unknowns(open)) {
                     lbfgs.extend(basis.unknowns(open), loss);
-                    weighEnergy(lbfgs, plan.start());
+                    weighEnergy(lbfgs, plan.startLoss());
                 }
                 runBand(grid, bands, open);
             }
@@ -188,7 +189,7 @@ public final class Solve {
                 ended = endedBy(until, losses, iterations + lbfgs.iterations(), seconds());
                 more = !hasEnded(losses, done);
                 if ((open > 1 || rung > 1) && done % ENERGY_EVERY == 0) {
-                    weighEnergy(lbfgs, plan.start());
+                    weighEnergy(lbfgs, plan.startLoss());
                 }
             }
             runs.add(new SolveResult.BandRun(grid, bands.get(open - 1), lbfgs.x().length, lbfgs.iterations() - iterationsBefore,
@@ -215,7 +216,7 @@ public final class Solve {
         }
 
         private double share() {
-            return (lbfgs.value() - lbfgs.quadraticValue()) / plan.start();
+            return (lbfgs.value() - lbfgs.quadraticValue()) / plan.startLoss();
         }
 
         private double seconds() {
@@ -224,7 +225,7 @@ public final class Solve {
 
         SolveResult result() {
             return new SolveResult(lbfgs.x().clone(), List.copyOf(runs), List.copyOf(losses), met, gradients, seconds(), lbfgs.quadratic(),
-                    lbfgs.quadraticValue() / plan.start(), snapshots, ended.isEmpty() ? "the last band's loss has stopped falling" : ended);
+                    lbfgs.quadraticValue() / plan.startLoss(), snapshots, ended.isEmpty() ? "the last band's loss has stopped falling" : ended);
         }
     }
 

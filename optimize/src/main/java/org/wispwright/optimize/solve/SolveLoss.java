@@ -4,6 +4,7 @@ import java.util.Arrays;
 import java.util.function.BooleanSupplier;
 import org.wispwright.optimize.checkpoint.Reversal;
 import org.wispwright.optimize.flow.SmokeSolver;
+import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.force.ForceBasis;
 import org.wispwright.optimize.search.Objective;
 
@@ -21,15 +22,17 @@ final class SolveLoss implements Objective {
     private long evaluations;
 
     /**
+     * @param start     read: the state of the first frame
      * @param lastFrame the last frame that a term looks at, or later
      * @param snapshots states kept in the sweep
      */
-    SolveLoss(SmokeSolver solver, ForceBasis basis, FrameTerms terms, int lastFrame, int snapshots, BooleanSupplier cancelled) {
+    SolveLoss(SmokeSolver solver, ForceBasis basis, FrameTerms terms, SmokeState start, int lastFrame, int snapshots,
+              BooleanSupplier cancelled) {
         this.terms = terms;
         substeps = solver.setup().substeps();
         firstFrame = solver.setup().frames().first();
         losses = new double[terms.count()];
-        chain = new SmokeChain(solver, basis, cancelled, (n, density, densityBar) -> {
+        chain = new SmokeChain(solver, basis, start, cancelled, (n, density, densityBar) -> {
             if (n % substeps == 0) {
                 terms.pullback(firstFrame + n / substeps, density, densityBar);
             }

@@ -9,7 +9,7 @@ import java.util.function.BooleanSupplier;
 import java.util.stream.IntStream;
 import org.wispwright.optimize.flow.FrameRange;
 import org.wispwright.optimize.flow.SmokeSolver;
-import org.wispwright.render.lanes.Lanes;
+import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.loss.PyramidLoss;
 
@@ -32,9 +32,9 @@ final class TermPlan {
     private final Map<Long, Picture> originals = new HashMap<>();
     private final int[] noteTerms;
     private final double[] noteStarts;
-    private final double start;
+    private final double startLoss;
 
-    TermPlan(SolveProblem problem, SmokeSolver solver, FrameTerms terms, boolean stay, BooleanSupplier cancelled) {
+    TermPlan(SolveProblem problem, SmokeSolver solver, SmokeState start, FrameTerms terms, boolean stay, BooleanSupplier cancelled) {
         this.problem = problem;
         this.terms = terms;
         this.stay = stay;
@@ -42,7 +42,7 @@ final class TermPlan {
         problem.notes().forEach(note -> needed.add(key(note.frame(), note.view())));
         problem.holds().forEach(hold -> framesOf(hold).forEach(frame -> needed.add(key(frame, hold.view()))));
         stayFrames().forEach(frame -> notedViews().forEach(view -> needed.add(key(frame, view))));
-        Simulation.run(solver, null, null, problem.lastFrame(stay), cancelled, (frame, state, force) -> {
+        Simulation.run(solver, start, null, null, problem.lastFrame(stay), cancelled, (frame, state, force) -> {
             for (int view = 0; view < problem.views().size(); view++) {
                 if (needed.contains(key(frame, view))) {
                     originals.put(key(frame, view), terms.picture(state.density(), view));
@@ -51,7 +51,7 @@ final class TermPlan {
         });
         noteTerms = new int[problem.notes().size()];
         noteStarts = new double[problem.notes().size()];
-        start = addNotes();
+        startLoss = addNotes();
         double reference = IntStream.range(0, noteStarts.length).mapToDouble(n -> noteStarts[n]).average().orElseThrow();
         for (SolveProblem.Hold hold : problem.holds()) {
             addHold(hold, reference);
@@ -139,8 +139,8 @@ final class TermPlan {
     }
 
     /** The loss of the original: the sum of the notes' weights. */
-    double start() {
-        return start;
+    double startLoss() {
+        return startLoss;
     }
 
     /** Met of each note, from the terms' losses. */

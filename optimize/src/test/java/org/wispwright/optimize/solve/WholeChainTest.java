@@ -1,0 +1,177 @@
+package org.wispwright.optimize.solve;
+
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.Random;
+import org.junit.jupiter.api.Nested;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.ValueSource;
+import org.wispwright.optimize.checkpoint.BinomialPlan;
+import org.wispwright.optimize.flow.FlowSetup;
+import org.wispwright.optimize.flow.Side;
+import org.wispwright.optimize.flow.Sides;
+import org.wispwright.optimize.flow.SmokeSolver;
+import org.wispwright.optimize.flow.SmokeState;
+import org.wispwright.optimize.force.ForceBasis;
+import org.wispwright.render.contract.Operator;
+import org.wispwright.render.contract.PullbackContract;
+import org.wispwright.render.lanes.Lanes;
+import org.wispwright.render.volume.GridShape;
+
+/**
+ * Outside checks O69, O70 for the whole chain unknowns -> force -> 8 steps -> pictures -> loss; and that its gradient has the same bits
+ * for any memory and any number of threads (Griewank and Walther 2000: checkpoints do not change a gradient).
+ */
+class WholeChainTest {
+
+    private static SolveLoss loss(SolveProblem problem, SmokeState start, int snapshots, Lanes lanes) {
+        FlowSetup flow = problem.flow();
+        SmokeSolver solver = new SmokeSolver(flow, lanes);
+        ForceBasis basis = Solve.basis(flow, lanes);
+        FrameTerms terms = new FrameTerms(flow.grid(), problem.views(), problem.look(), flow.grid().cellMetres(), lanes);
+        new TermPlan(problem, solver, start, terms, true, () -> false);
+        return new SolveLoss(solver, basis, terms, start, problem.lastFrame(true), snapshots, () -> false);
+    }
+
+    private static SolveLoss loss(SolveProblem problem, int snapshots, Lanes lanes) {
+        return loss(problem, new SmokeState(problem.flow().grid()), snapshots, lanes);
+    }
+
+    /** Off the kinks of linear carrying: open on all sides, with a wind by which every departure lies between two cell centres. */
+    private static SolveProblem windy(boolean light, int substeps) {
+        SolveProblem problem = SolveScene.problem(12, 1001 + 8 / substeps, substeps, light);
+        FlowSetup flow = problem.flow();
+        Sides open = new Sides(Side.OPEN, Side.OPEN, Side.OPEN, Side.OPEN, Side.OPEN, Side.OPEN);
+        FlowSetup slow = new FlowSetup(flow.grid(), flow.frames(), substeps, flow.velocity(), flow.density(), open, 0.3, 0.1, flow.sources());
+        return new SolveProblem(slow, problem.views(), problem.look(), problem.notes(), problem.holds());
+    }
+
+    private static SmokeState wind(FlowSetup flow) {
+        GridShape shape = flow.grid();
+        float cellAStep = (float) (shape.cellMetres() / flow.stepSeconds());
+        SmokeState state = new SmokeState(shape);
+        for (int k = 0; k <= shape.nz(); k++) {
+            for (int j = 0; j <= shape.ny(); j++) {
+                for (int i = 0; i <= shape.nx(); i++) {
+                    if (j < shape.ny() && k < shape.nz()) {
+                        state.velocity().x()[shape.xFace(i, j, k)] = cellAStep * (0.45f + 0.1f * (float) Math.sin(0.4 * j + 0.3 * k));
+                    }
+                    if (i < shape.nx() && k < shape.nz()) {
+                        state.velocity().y()[shape.yFace(i, j, k)] = cellAStep * (0.5f + 0.1f * (float) Math.cos(0.3 * i - 0.4 * k));
+                    }
+                    if (i < shape.nx() && j < shape.ny()) {
+                        state.velocity().z()[shape.zFace(i, j, k)] = cellAStep * (0.45f + 0.1f * (float) Math.sin(0.5 * i + 0.2 * j));
+                    }
+                    if (i < shape.nx() && j < shape.ny() && k < shape.nz()) {
+                        double r2 = Math.pow(i - 4, 2) + Math.pow(j - 4, 2) + Math.pow(k - 4, 2);
+                        state.density().values()[shape.cell(i, j, k)] = (float) Math.exp(-r2 / 12);
+                    }
+                }
+            }
+        }
+        return state;
+    }
+
+    private static double[] unknowns(FlowSetup flow, double size, long seed) {
+        int count = Solve.basis(flow, new Lanes(1)).unknowns(1);
+        Random random = new Random(seed);
+        double[] x = new double[count];
+        for (int n = 0; n < count; n++) {
+            x[n] = size * random.nextGaussian() / Math.sqrt(count);
+        }
+        return x;
+    }
+
+    /** 8 steps, one output: the loss. */
+    private static Operator chain(boolean light, int substeps) {
+        SolveProblem problem = windy(light, substeps);
+        SolveLoss loss = loss(problem, wind(problem.flow()), 100, new Lanes(1));
+        double[] point = unknowns(problem.flow(), 0.2, 1);
+        return new Operator("whole chain", point.length, 1, false, point, unknowns(problem.flow(), 0.6, 2), (in, out) -> {
+            out[0] = loss.evaluate(in, new double[in.length]);
+        }, (in, outBar, inBar) -> {
+            double[] gradient = new double[in.length];
+            loss.evaluate(in, gradient);
+            for (int n = 0; n < in.length; n++) {
+                inBar[n] += outBar[0] * gradient[n];
+            }
+        });
+    }
+
+    /** Float fields through 8 steps and pictures: the loss carries about 1e-6 of rounding, so a central difference carries 1e-4. */
+    abstract static class Chain extends PullbackContract {
+        @Override protected double dotTolerance() {
+            return 3e-4;
+        }
+
+        @Override protected double noise() {
+            return 1e-6;
+        }
+    }
+
+    @Nested class WithoutLight extends Chain {
+        @Override protected Operator operator() {
+            return chain(false, 1);
+        }
+    }
+
+    @Nested class WithLight extends Chain {
+        @Override protected Operator operator() {
+            return chain(true, 1);
+        }
+    }
+
+    @Nested class TwoSubsteps extends Chain {
+        @Override protected Operator operator() {
+            return chain(false, 2);
+        }
+    }
+
+    /** Same bits from any number of kept states; O59, O60: never more steps than the plan. */
+    @ParameterizedTest @ValueSource(ints = {1, 2, 3, 5, 7}) void anyMemoryGivesTheSameBits(int snapshots) {
+        SolveProblem problem = SolveScene.problem(12, 1009, 1, true);
+        double[] x = unknowns(problem.flow(), 1.5, 1);
+        double[] all = new double[x.length];
+        double[] few = new double[x.length];
+        double a = loss(problem, 100, new Lanes(1)).evaluate(x, all);
+        double b = loss(problem, snapshots, new Lanes(1)).evaluate(x, few);
+        assertEquals(a, b);
+        assertArrayEquals(all, few);
+        assertTrue(BinomialPlan.leastSteps(8, snapshots) >= 7);
+    }
+
+    @ParameterizedTest @ValueSource(ints = {2, 3, 5}) void anyThreadCountGivesTheSameBits(int threads) {
+        SolveProblem problem = SolveScene.problem(16, 1009, 1, true);
+        double[] x = unknowns(problem.flow(), 1.5, 1);
+        double[] one = new double[x.length];
+        double[] many = new double[x.length];
+        double a = loss(problem, 100, new Lanes(1)).evaluate(x, one);
+        try (Lanes lanes = new Lanes(threads)) {
+            double b = loss(problem, 3, lanes).evaluate(x, many);
+            assertEquals(a, b);
+        }
+        assertArrayEquals(one, many);
+    }
+
+    /** Descent for real: a few gradient steps on the true chain lower the loss by what the gradient foretells. */
+    @Test void theGradientForetellsTheFall() {
+        SolveProblem problem = SolveScene.problem(12, 1009, 1, false);
+        SolveLoss loss = loss(problem, 100, new Lanes(1));
+        double[] x = unknowns(problem.flow(), 0, 1);
+        double[] gradient = new double[x.length];
+        double start = loss.evaluate(x, gradient);
+        double squares = 0;
+        for (double g : gradient) {
+            squares += g * g;
+        }
+        double step = 0.02 * start / squares;
+        for (int n = 0; n < x.length; n++) {
+            x[n] -= step * gradient[n];
+        }
+        double now = loss.evaluate(x, gradient);
+        assertEquals(-0.02 * start, now - start, 0.004 * start);
+    }
+}
