@@ -36,6 +36,12 @@ public final class MemoryNeed {
         return bytes(grid.cells(), (long) frames.count() * substeps);
     }
 
+    /** What of the memory given is left for the states that a sweep keeps; at least what {@link #bytes} counts for them. */
+    public static long forStates(GridShape grid, FrameRange frames, int substeps, long memoryBytes) {
+        long least = bytes(grid, frames, substeps) - BASE - grid.cells() * STEP;
+        return Math.max(least, memoryBytes - BASE - grid.cells() * STEP);
+    }
+
     /** Least bytes to hold one picture of so many pixels, draw it and write it: 80 bytes a pixel. */
     static long ofPicture(long pixels) {
         return BASE / 4 + PIXEL * Math.min(pixels, 1L << 40);
