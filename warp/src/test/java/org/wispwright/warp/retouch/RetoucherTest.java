@@ -13,6 +13,7 @@ import java.util.List;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.EnumSource;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.loss.PictureMeasure;
@@ -325,6 +326,34 @@ class RetoucherTest {
         assertTrue(touched[(int) (0.38 * 128) + 96 * (int) (0.95 * 128)] < 0.5);
         assertThrows(IllegalArgumentException.class, () -> Retoucher.touched(retouch(), 10, 10, Double.NaN));
         assertThrows(IllegalArgumentException.class, () -> Retoucher.touched(retouch(), 0, 10, 0.1));
+    }
+
+    /** The blur against its definition, pixel by pixel, at awkward sizes: wider than the picture, one row, one column. */
+    @ParameterizedTest
+    @CsvSource({"5,7,0.8", "1,9,2", "9,1,1.3", "6,4,5", "3,3,0"})
+    void blurEqualsPlain(int width, int height, double sigma) {
+        float[] in = new float[2 * width * height];
+        for (int n = 0; n < in.length; n++) {
+            in[n] = (float) Math.sin(1 + 7 * n);
+        }
+        float[] out = Gaussian.blurred(in, 2, width, height, sigma);
+        int reach = (int) Math.ceil(3 * sigma);
+        for (int p = 0; p < width * height; p++) {
+            for (int c = 0; c < 2; c++) {
+                double sum = 0;
+                double weight = 0;
+                for (int dy = -reach; dy <= reach; dy++) {
+                    for (int dx = -reach; dx <= reach; dx++) {
+                        double w = sigma == 0 ? 1 : Math.exp(-(dx * dx + dy * dy) / (2 * sigma * sigma));
+                        int x = Math.min(width - 1, Math.max(0, p % width + dx));
+                        int y = Math.min(height - 1, Math.max(0, p / width + dy));
+                        sum += w * in[2 * (x + width * y) + c];
+                        weight += w;
+                    }
+                }
+                assertEquals(sum / weight, out[2 * p + c], 1e-6, "pixel " + p + " channel " + c);
+            }
+        }
     }
 
     @Test
