@@ -198,8 +198,7 @@ public final class ThinPlateSpline {
             for (int j = 0; j < i; j++) {
                 if (!(Math.hypot(x[i] - x[j], y[i] - y[j]) > 1e-9 * scale)) {
                     throw new IllegalArgumentException("thin-plate spline: landmarks " + j + " and " + i + " are the same point ("
-                            + x[i] + ", "
-                            + y[i] + "); remove one of them");
+                            + x[i] + ", " + y[i] + "); remove one of them");
                 }
             }
             if (Math.hypot(x[i] - x[0], y[i] - y[0]) > Math.hypot(x[farthest] - x[0], y[farthest] - y[0])) {

@@ -39,8 +39,8 @@ class RetouchValuesTest {
         assertRefused("2 handles", () -> warp(0, 0, 1, 1));
         assertRefused("'from' points of all 3", () -> warp(0, 0, 0.5, 0.5, 1, 1));
         assertRefused("handles 1 and 2 have the same 'from'", () -> warp(0, 0, 0.5, 0.5, 0.5, 0.5));
-        List<Handle> folded = List.of(Handle.pin(new Point(0, 0)), Handle.pin(new Point(1, 0)), new Handle(new Point(0, 1),
-                new Point(0.5, 0)));
+        List<Handle> folded = List.of(Handle.pin(new Point(0, 0)), Handle.pin(new Point(1, 0)),
+                new Handle(new Point(0, 1), new Point(0.5, 0)));
         assertRefused("'to' points", () -> new MeshWarp(folded, Optional.empty()));
         assertEquals(3, warp(0, 0, 1, 0, 0, 1).handles().size());
     }

@@ -69,10 +69,10 @@ class RetoucherTest {
     private static Retouch everything() {
         return retouch(stroke(Brush.REMOVE, 0.06, 0.9, 0.6, new Point(0.3, 0.28), new Point(0.45, 0.32)),
                 stroke(Brush.ADD, 0.05, 0.7, 0.5, new Point(0.6, 0.2), new Point(0.65, 0.35), new Point(0.6, 0.5)),
-                        lean(Optional.of(UPPER)),
+                lean(Optional.of(UPPER)),
                 stroke(Brush.SOFTEN, 0.08, 0.8, 0.7, new Point(0.35, 0.6), new Point(0.35, 0.8)),
-                new Stroke(Brush.ADD, 0.1, 0.5, 0, List.of(new Point(0.1, 0.8)), Optional.of(new Region.Rectangle(0.05, 0.7, 0.2, 0.9,
-                        0))));
+                new Stroke(Brush.ADD, 0.1, 0.5, 0, List.of(new Point(0.1, 0.8)),
+                        Optional.of(new Region.Rectangle(0.05, 0.7, 0.2, 0.9, 0))));
     }
 
     @Test
@@ -142,8 +142,8 @@ class RetoucherTest {
     @Test
     void removeOverEmptyStaysEmpty() {
         Picture clear = new Picture(48, 64);
-        Retouch remove = retouch(stroke(Brush.REMOVE, 0.3, 1, 0.5, new Point(0.3, 0.5)), stroke(Brush.SOFTEN, 0.3, 1, 0.5,
-                new Point(0.3, 0.5)));
+        Retouch remove = retouch(stroke(Brush.REMOVE, 0.3, 1, 0.5, new Point(0.3, 0.5)),
+                stroke(Brush.SOFTEN, 0.3, 1, 0.5, new Point(0.3, 0.5)));
         for (float value : Retoucher.wanted(remove, clear).rgba()) {
             assertEquals(0f, value);
         }

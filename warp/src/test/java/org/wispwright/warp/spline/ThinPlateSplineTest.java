@@ -119,8 +119,7 @@ class ThinPlateSplineTest {
 
     /**
      * W9: energy is unchanged by rotating and translating the targets and goes as the square of their scale. The kernel's log base:
-     * with log2 in place of ln the kernel is 1/ln 2 as large and the weights ln 2 times, so the map is the same; the base changes
-     * the same way as the unit of the landmarks does, and scaling both landmarks and place leaves the map's value.
+     * with log2 in place of ln the kernel is 1/ln 2 as large and the weights ln 2 times, so the map is the same.
      */
     @Test
     void w9_energyInvariances() {
