@@ -1,0 +1,72 @@
+package org.wispwright.ui.command;
+
+import com.fasterxml.jackson.databind.node.ArrayNode;
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.io.PrintWriter;
+import java.nio.file.Path;
+import java.util.concurrent.Callable;
+import org.wispwright.optimize.flow.FlowSetup;
+import org.wispwright.ui.shot.Finding;
+import org.wispwright.ui.shot.MemoryNeed;
+import org.wispwright.ui.shot.Shot;
+import org.wispwright.ui.shot.ShotCheck;
+import picocli.CommandLine.Command;
+import picocli.CommandLine.Mixin;
+import picocli.CommandLine.Model.CommandSpec;
+import picocli.CommandLine.Option;
+import picocli.CommandLine.Parameters;
+import picocli.CommandLine.Spec;
+
+/** {@code check SHOT}: validates everything without running and without writing. */
+@Command(name = "check", sortOptions = false, description = "Read a whole shot and say everything that is wrong with it. Runs nothing, writes nothing.",
+        footer = {"", "Examples:",
+            "  java -jar wispwright.jar check samples/kiln-yard",
+            "  java -jar wispwright.jar check samples/kiln-yard --memory 512M --json"})
+final class CheckCommand implements Callable<Integer> {
+    @Mixin
+    private Manner manner;
+
+    @Parameters(paramLabel = "SHOT", description = "The shot folder.")
+    private Path shot;
+
+    @Option(names = "--memory", paramLabel = "SIZE", converter = ByteSize.Converter.class,
+            description = "The memory that a solve may take, such as 512M or 2G. Default: what Java has.")
+    private ByteSize memory;
+
+    @Spec
+    private CommandSpec spec;
+
+    @Override
+    public Integer call() {
+        long bytes = memory == null ? Runtime.getRuntime().maxMemory() : memory.bytes();
+        ShotCheck.Result result = ShotCheck.of(shot, bytes);
+        ObjectNode object = Manner.object().put("ok", result.findings().isEmpty());
+        if (!result.findings().isEmpty()) {
+            PrintWriter err = spec.commandLine().getErr();
+            ArrayNode list = object.put("exitCode", ExitCodes.BAD_INPUT).putArray("findings");
+            for (Finding finding : result.findings()) {
+                list.add(json(finding));
+                err.println("wispwright: " + finding.inWords());
+            }
+            if (manner.json()) {
+                manner.say("", object);
+            }
+            return ExitCodes.BAD_INPUT;
+        }
+        Shot checked = result.shot().orElseThrow();
+        FlowSetup flow = checked.flow();
+        long need = MemoryNeed.bytes(flow.grid(), flow.frames(), flow.substeps());
+        int rendered = checked.views().stream().mapToInt(v -> v.rendered().size()).sum();
+        object.put("name", checked.name()).put("cells", flow.grid().cells()).put("firstFrame", flow.frames().first()).put("lastFrame", flow.frames().last())
+                .put("views", checked.views().size()).put("notes", checked.notes().size()).put("renderedFrames", rendered).put("leastMemoryBytes", need);
+        manner.say("'" + checked.name() + "' is in order: " + flow.grid().inWords() + ", frames " + flow.frames().first() + " to " + flow.frames().last()
+                + ", views " + checked.views().size() + ", notes " + checked.notes().size() + ", rendered frames " + rendered
+                + "; a solve takes at least " + MemoryNeed.inWords(need) + ".", object);
+        return ExitCodes.OK;
+    }
+
+    /** A finding for other programs. */
+    static ObjectNode json(Finding finding) {
+        return Manner.object().put("file", finding.file()).put("pointer", finding.pointer()).put("sentence", finding.sentence());
+    }
+}

@@ -1,0 +1,195 @@
+package org.wispwright.ui.report;
+
+import java.awt.BasicStroke;
+import java.awt.Color;
+import java.awt.Graphics2D;
+import java.awt.Shape;
+import java.awt.geom.Area;
+import java.awt.geom.Ellipse2D;
+import java.awt.geom.Line2D;
+import java.awt.geom.Path2D;
+import java.awt.geom.Rectangle2D;
+import java.util.EnumSet;
+import java.util.List;
+import java.util.Set;
+import org.wispwright.warp.retouch.Brush;
+import org.wispwright.warp.retouch.Handle;
+import org.wispwright.warp.retouch.MeshWarp;
+import org.wispwright.warp.retouch.Operation;
+import org.wispwright.warp.retouch.Point;
+import org.wispwright.warp.retouch.Region;
+import org.wispwright.warp.retouch.Retouch;
+import org.wispwright.warp.retouch.Stroke;
+
+/**
+ * A retouch drawn as lines: strokes as the outline of what they cover (add and remove also carry their sign), handles as
+ * arrows, pins as dots, holds and regions dashed. Every line has a dark rim, so it shows on any picture.
+ */
+final class RetouchMarks {
+    /** What a mark's colour says. */
+    enum Meaning {
+        /** A hold, or a pin of a mesh warp. */ KEEP(0x9BD18B, "stays"),
+        /** The region that an operation may act in. */ WITHIN(0xC3B1E1, "acts within"),
+        /** Soften brush. */ SOFTEN(0xD9D9D9, "soften"),
+        /** Remove brush. */ REMOVE(0x6EC1E4, "remove"),
+        /** Handles of a mesh warp. */ PULL(0xE58A5C, "pull"),
+        /** Add brush. */ ADD(0xF2C14E, "add");
+
+        private final Color colour;
+        private final String words;
+
+        Meaning(int rgb, String words) {
+            this.colour = new Color(rgb);
+            this.words = words;
+        }
+
+        Color colour() {
+            return colour;
+        }
+
+        String words() {
+            return words;
+        }
+    }
+
+    private static final Color RIM = new Color(0, 0, 0, 110);
+
+    private final Graphics2D g;
+    private final double height;
+
+    /**
+     * Draws onto a picture of this height whose top left corner is at the graphics' origin.
+     */
+    RetouchMarks(Graphics2D g, double height) {
+        this.g = g;
+        this.height = height;
+    }
+
+    /** What the marks of a retouch say; its legend needs no more. */
+    static Set<Meaning> meanings(Retouch retouch, List<Region> holds) {
+        Set<Meaning> all = EnumSet.noneOf(Meaning.class);
+        if (!holds.isEmpty()) {
+            all.add(Meaning.KEEP);
+        }
+        for (Operation operation : retouch.operations()) {
+            if (operation.within().isPresent()) {
+                all.add(Meaning.WITHIN);
+            }
+            if (operation instanceof Stroke stroke) {
+                all.add(meaning(stroke.brush()));
+            } else if (operation instanceof MeshWarp warp) {
+                warp.handles().forEach(h -> all.add(h.from().equals(h.to()) ? Meaning.KEEP : Meaning.PULL));
+            }
+        }
+        return all;
+    }
+
+    private static Meaning meaning(Brush brush) {
+        return switch (brush) {
+            case ADD -> Meaning.ADD;
+            case REMOVE -> Meaning.REMOVE;
+            case SOFTEN -> Meaning.SOFTEN;
+        };
+    }
+
+    void draw(Retouch retouch, List<Region> holds) {
+        for (Region hold : holds) {
+            line(outline(hold), Meaning.KEEP.colour(), dashed());
+        }
+        for (Operation operation : retouch.operations()) {
+            operation.within().ifPresent(region -> line(outline(region), Meaning.WITHIN.colour(), dashed()));
+            if (operation instanceof Stroke stroke) {
+                draw(stroke);
+            } else if (operation instanceof MeshWarp warp) {
+                warp.handles().forEach(this::draw);
+            }
+        }
+    }
+
+    private void draw(Stroke stroke) {
+        Color colour = meaning(stroke.brush()).colour();
+        Path2D path = new Path2D.Double();
+        Point first = stroke.line().get(0);
+        path.moveTo(first.x() * height, first.y() * height);
+        for (Point p : stroke.line()) {
+            path.lineTo(p.x() * height, p.y() * height);
+        }
+        float width = (float) Math.max(1, 2 * stroke.radius() * height);
+        Shape covered = new BasicStroke(width, BasicStroke.CAP_ROUND, BasicStroke.JOIN_ROUND).createStrokedShape(path);
+        Area whole = new Area(covered);
+        g.setColor(new Color(colour.getRed(), colour.getGreen(), colour.getBlue(), 26));
+        g.fill(whole);
+        line(whole, colour, solid(1.6f));
+        Point middle = stroke.line().get(stroke.line().size() / 2);
+        double x = middle.x() * height;
+        double y = middle.y() * height;
+        double arm = Math.min(6, 0.5 * stroke.radius() * height);
+        switch (stroke.brush()) {
+            case ADD -> {
+                line(new Line2D.Double(x - arm, y, x + arm, y), colour, solid(1.6f));
+                line(new Line2D.Double(x, y - arm, x, y + arm), colour, solid(1.6f));
+            }
+            case REMOVE -> line(new Line2D.Double(x - arm, y, x + arm, y), colour, solid(1.6f));
+            case SOFTEN -> line(new Ellipse2D.Double(x - arm / 2, y - arm / 2, arm, arm), colour, solid(1.6f));
+        }
+    }
+
+    private void draw(Handle handle) {
+        double x0 = handle.from().x() * height;
+        double y0 = handle.from().y() * height;
+        double x1 = handle.to().x() * height;
+        double y1 = handle.to().y() * height;
+        double length = Math.hypot(x1 - x0, y1 - y0);
+        if (length < 1) {
+            Shape dot = new Ellipse2D.Double(x0 - 2.8, y0 - 2.8, 5.6, 5.6);
+            line(dot, Meaning.KEEP.colour(), solid(1.6f));
+            g.setColor(Meaning.KEEP.colour());
+            g.fill(dot);
+            return;
+        }
+        double ux = (x1 - x0) / length;
+        double uy = (y1 - y0) / length;
+        double head = Math.min(9, 0.6 * length);
+        Path2D arrow = new Path2D.Double();
+        arrow.moveTo(x0, y0);
+        arrow.lineTo(x1, y1);
+        arrow.moveTo(x1 - head * (ux - 0.5 * uy), y1 - head * (uy + 0.5 * ux));
+        arrow.lineTo(x1, y1);
+        arrow.lineTo(x1 - head * (ux + 0.5 * uy), y1 - head * (uy - 0.5 * ux));
+        line(arrow, Meaning.PULL.colour(), solid(2f));
+        line(new Ellipse2D.Double(x0 - 2, y0 - 2, 4, 4), Meaning.PULL.colour(), solid(1.6f));
+    }
+
+    private Shape outline(Region region) {
+        if (region instanceof Region.Rectangle r) {
+            return new Rectangle2D.Double(r.left() * height, r.top() * height, (r.right() - r.left()) * height, (r.bottom() - r.top()) * height);
+        }
+        if (region instanceof Region.Ellipse e) {
+            return new Ellipse2D.Double((e.centre().x() - e.radiusX()) * height, (e.centre().y() - e.radiusY()) * height,
+                    2 * e.radiusX() * height, 2 * e.radiusY() * height);
+        }
+        List<Point> corners = ((Region.Polygon) region).outline();
+        Path2D path = new Path2D.Double();
+        path.moveTo(corners.get(0).x() * height, corners.get(0).y() * height);
+        corners.forEach(p -> path.lineTo(p.x() * height, p.y() * height));
+        path.closePath();
+        return path;
+    }
+
+    private void line(Shape shape, Color colour, BasicStroke pen) {
+        g.setColor(RIM);
+        g.setStroke(new BasicStroke(pen.getLineWidth() + 1.6f, pen.getEndCap(), pen.getLineJoin(), pen.getMiterLimit(), pen.getDashArray(), 0));
+        g.draw(shape);
+        g.setColor(colour);
+        g.setStroke(pen);
+        g.draw(shape);
+    }
+
+    private static BasicStroke solid(float width) {
+        return new BasicStroke(width, BasicStroke.CAP_ROUND, BasicStroke.JOIN_ROUND);
+    }
+
+    private static BasicStroke dashed() {
+        return new BasicStroke(1.6f, BasicStroke.CAP_BUTT, BasicStroke.JOIN_ROUND, 10, new float[] {5, 4}, 0);
+    }
+}

@@ -1,0 +1,172 @@
+package org.wispwright.ui.shot;
+
+import java.nio.file.Path;
+import java.util.List;
+import java.util.Locale;
+import java.util.Map;
+import java.util.Optional;
+import org.wispwright.optimize.flow.FrameRange;
+import org.wispwright.optimize.flow.Source;
+import org.wispwright.render.view.Raster;
+import org.wispwright.render.view.View;
+import org.wispwright.render.volume.GridShape;
+
+/**
+ * Validates a whole shot folder before any work: what every command does first, and all that {@code check} does. Finds
+ * all faults that can be told apart, not only the first. Reads; writes nothing.
+ */
+public final class ShotCheck {
+    /** The most rows at which a view is tried for whether it sees the box. */
+    private static final int MOST_ROWS_TRIED = 1080;
+
+    private final ShotFolder folder;
+    private final long memoryBytes;
+    private final Findings findings = new Findings();
+
+    /**
+     * What came out.
+     *
+     * @param shot the shot; empty if there is a finding
+     * @param findings what is wrong; empty if nothing is
+     */
+    public record Result(Optional<Shot> shot, List<Finding> findings) {
+        /** Keeps a copy. */
+        public Result {
+            findings = List.copyOf(findings);
+        }
+    }
+
+    private ShotCheck(ShotFolder folder, long memoryBytes) {
+        this.folder = folder;
+        this.memoryBytes = memoryBytes;
+    }
+
+    /**
+     * Checks a folder.
+     *
+     * @param folder the shot folder
+     * @param memoryBytes what a solve may take
+     */
+    public static Result of(Path folder, long memoryBytes) {
+        try {
+            return new ShotCheck(ShotFolder.open(folder), memoryBytes).run();
+        } catch (ShotException noFolder) {
+            return new Result(Optional.empty(), List.of(noFolder.finding()));
+        }
+    }
+
+    /**
+     * The checked shot.
+     *
+     * @throws ShotException with the first finding, if there is any
+     */
+    public static Shot require(Path folder, long memoryBytes) {
+        Result result = of(folder, memoryBytes);
+        if (result.findings().isEmpty()) {
+            return result.shot().orElseThrow();
+        }
+        throw new ShotException(result.findings().get(0));
+    }
+
+    private Result run() {
+        Optional<Shot> setup = new SetupReader(folder, findings, memoryBytes).read();
+        List<Note> notes = new NoteReader(folder, findings).read();
+        setup.ifPresent(shot -> {
+            checkSources(shot);
+            checkViews(shot);
+            notes.forEach(note -> checkNote(note, shot));
+        });
+        Optional<Shot> whole = setup.filter(s -> findings.none())
+                .map(s -> new Shot(s.name(), s.flow(), s.look(), s.background(), s.views(), notes));
+        return new Result(whole, findings.all());
+    }
+
+    private void checkSources(Shot shot) {
+        GridShape box = shot.flow().grid();
+        List<Source> sources = shot.flow().sources();
+        for (int n = 0; n < sources.size(); n++) {
+            Source s = sources.get(n);
+            double across = Math.max(outside(s.centreX(), box.originX(), box.nx() * box.cellMetres()), outside(s.centreY(), box.originY(), box.ny() * box.cellMetres()));
+            double reach = box.isPlane() ? across : Math.max(across, outside(s.centreZ(), box.originZ(), box.nz() * box.cellMetres()));
+            if (reach >= s.radiusMetres()) {
+                findings.add(Finding.of("shot.json", "/sources/" + n, "source '" + s.name() + "' outside the box", "a ball that reaches into it",
+                        "move it to within " + middle(box)));
+            }
+        }
+    }
+
+    private static double outside(double at, double low, double length) {
+        return Math.max(low - at, at - low - length);
+    }
+
+    private static String middle(GridShape box) {
+        double h = box.cellMetres();
+        return String.format(Locale.ROOT, "x %.4g to %.4g, y %.4g to %.4g, z %.4g to %.4g m", box.originX(), box.originX() + box.nx() * h,
+                box.originY(), box.originY() + box.ny() * h, box.originZ(), box.originZ() + box.nz() * h);
+    }
+
+    private void checkViews(Shot shot) {
+        GridShape box = shot.flow().grid();
+        for (int n = 0; n < shot.views().size(); n++) {
+            ShotView view = shot.views().get(n);
+            String pointer = "/views/" + n;
+            Raster raster = view.view().raster();
+            findings.check(() -> requirePixels((long) raster.width() * raster.height(), pointer + "/raster", "a raster of " + raster.inWords(), "make it smaller"));
+            int rows = Math.min(view.view().raster().height(), MOST_ROWS_TRIED);
+            View tried = rows == view.view().raster().height() ? view.view() : view.view().withRasterHeight(rows);
+            if (!tried.sees(box)) {
+                findings.add(Finding.of("shot.json", pointer, "view '" + view.view().name() + "', in which no pixel sees the box",
+                        "a view of the box", "aim it at the box, which spans " + middle(box)));
+            }
+            for (Map.Entry<Integer, String> rendered : view.rendered().entrySet()) {
+                findings.check(() -> checkRendered(view.view(), rendered.getValue(), pointer + "/rendered/" + rendered.getKey()));
+            }
+        }
+    }
+
+    private void checkRendered(View view, String file, String pointer) {
+        RenderedFrame.StatedSize size = RenderedFrame.statedSize(folder, file, pointer);
+        Raster raster = view.raster();
+        double across = (double) size.height() * raster.width() / raster.height();
+        double down = (double) size.width() * raster.height() / raster.width();
+        if (Math.abs(size.width() - across) > 0.5 && Math.abs(size.height() - down) > 0.5) {
+            throw new ShotException(Finding.of("shot.json", pointer, "picture '" + file + "' of " + size.width() + "x" + size.height() + " pixels",
+                    "the aspect of view '" + view.name() + "', " + raster.width() + "x" + raster.height(),
+                    "render it again with this aspect, or correct the view's raster and lens"));
+        }
+        requirePixels(size.width() * size.height(), pointer, "picture '" + file + "' of " + size.width() + "x" + size.height() + " pixels", "render it smaller");
+        RenderedFrame.read(folder, file, pointer);
+    }
+
+    private void requirePixels(long pixels, String pointer, String what, String toDo) {
+        long need = MemoryNeed.ofPicture(pixels);
+        if (need > memoryBytes) {
+            throw new ShotException(Finding.of("shot.json", pointer, what + ", which takes " + MemoryNeed.inWords(need),
+                    "one that fits into " + MemoryNeed.inWords(memoryBytes), toDo + ", or " + MemoryNeed.giveMore(need)));
+        }
+    }
+
+    private void checkNote(Note note, Shot shot) {
+        String file = "notes/" + note.id() + ".json";
+        FrameRange frames = shot.flow().frames();
+        String range = frames.first() + " to " + frames.last();
+        if (!frames.contains(note.frame())) {
+            findings.add(Finding.of(file, "/frame", "frame " + note.frame(), "a frame of the shot, " + range, "correct the frame, or lengthen the shot"));
+        } else if (note.frame() == frames.first()) {
+            findings.add(Finding.of(file, "/frame", "the first frame, " + note.frame() + ", which no force can change", "a later frame, up to " + frames.last(), "correct the frame"));
+        }
+        if (shot.view(note.view()).isEmpty()) {
+            List<String> names = shot.views().stream().map(v -> v.view().name()).toList();
+            findings.add(Finding.of(file, "/view", "view '" + note.view() + "', which the shot does not have", "one of " + String.join(", ", names),
+                    NearestWord.to(note.view(), names).map(near -> "did you mean '" + near + "'").orElse("correct the name")));
+        }
+        for (int n = 0; n < note.holds().size(); n++) {
+            Hold hold = note.holds().get(n);
+            boolean ownFrame = hold.firstFrame() == note.frame() && hold.lastFrame() == note.frame();
+            if (!ownFrame && (!frames.contains(hold.firstFrame()) || !frames.contains(hold.lastFrame()))) {
+                findings.add(Finding.of(file, "/holds/" + n + "/frames", "frames " + hold.firstFrame() + " to " + hold.lastFrame(),
+                        "frames of the shot, " + range, "correct the span"));
+            }
+        }
+    }
+}

@@ -1,0 +1,52 @@
+package org.wispwright.ui.work;
+
+import org.wispwright.optimize.flow.FlowSetup;
+import org.wispwright.optimize.flow.SmokeSolver;
+import org.wispwright.optimize.flow.SmokeState;
+import org.wispwright.render.volume.ScalarGrid;
+import org.wispwright.ui.shot.TakeDraft;
+
+/** Writes each frame of a run into a draft and measures it on the way. One thread. */
+final class FrameWriting {
+    private final FlowSetup flow;
+    private final TakeDraft draft;
+    private final String what;
+    private final Progress progress;
+    private final long start = System.nanoTime();
+    private double lastMass;
+    private double divergenceMax;
+
+    FrameWriting(FlowSetup flow, TakeDraft draft, String what, Progress progress) {
+        this.flow = flow;
+        this.draft = draft;
+        this.what = what;
+        this.progress = progress;
+    }
+
+    void frame(int frame, SmokeState state, SmokeSolver solver) {
+        draft.write(frame, state);
+        lastMass = mass(state.density());
+        int done = frame - flow.frames().first();
+        if (done > 0) {
+            divergenceMax = Math.max(divergenceMax, solver.relativeDivergence(state.velocity()));
+            double seconds = (System.nanoTime() - start) / 1e9;
+            progress.now(what + ": frame " + frame + " of " + flow.frames().last() + ", about "
+                    + Math.round(seconds * (flow.frames().count() - 1 - done) / done) + " s left");
+        }
+    }
+
+    /** Sum of density times cell volume in the frame written last, m3. */
+    double lastMass() {
+        return lastMass;
+    }
+
+    /** Largest |div u| h / |u| of any frame after the first. */
+    double divergenceMax() {
+        return divergenceMax;
+    }
+
+    static double mass(ScalarGrid density) {
+        double h = density.shape().cellMetres();
+        return density.sum() * h * h * h;
+    }
+}

@@ -1,0 +1,52 @@
+package org.wispwright.ui.work;
+
+import java.util.ArrayList;
+import java.util.List;
+import org.wispwright.optimize.solve.SolveProblem;
+import org.wispwright.render.view.View;
+import org.wispwright.ui.shot.Finding;
+import org.wispwright.ui.shot.Hold;
+import org.wispwright.ui.shot.Note;
+import org.wispwright.ui.shot.Shot;
+import org.wispwright.ui.shot.ShotException;
+import org.wispwright.warp.retouch.Region;
+
+/** What a shot's notes and holds ask of the solve. */
+public final class ShotProblem {
+    private ShotProblem() {
+    }
+
+    /**
+     * The problem of a checked shot.
+     *
+     * @throws ShotException if the shot has no note
+     */
+    public static SolveProblem of(Shot shot) {
+        if (shot.notes().isEmpty()) {
+            throw new ShotException(new Finding("notes", "", "there is no note, so there is nothing to solve; add a file notes/ID.json (docs/shot-folder.md)."));
+        }
+        List<View> views = shot.views().stream().map(v -> v.view()).toList();
+        List<SolveProblem.Note> notes = new ArrayList<>();
+        List<SolveProblem.Hold> holds = new ArrayList<>();
+        for (Note note : shot.notes()) {
+            int view = index(views, note.view());
+            notes.add(new SolveProblem.Note(note.id(), note.frame(), view, note.weight(), new NoteWish(note)));
+            for (int n = 0; n < note.holds().size(); n++) {
+                Hold hold = note.holds().get(n);
+                Region region = hold.region();
+                holds.add(new SolveProblem.Hold(note.id() + " hold " + (n + 1), view, hold.firstFrame(), hold.lastFrame(),
+                        (width, height) -> NoteWish.mask(region, width, height)));
+            }
+        }
+        return new SolveProblem(shot.flow(), views, shot.look(), notes, holds);
+    }
+
+    private static int index(List<View> views, String name) {
+        for (int n = 0; n < views.size(); n++) {
+            if (views.get(n).name().equals(name)) {
+                return n;
+            }
+        }
+        throw new IllegalArgumentException("no view '" + name + "'; check the shot first");
+    }
+}

@@ -1,0 +1,142 @@
+package org.wispwright.ui.work;
+
+import com.fasterxml.jackson.databind.node.ArrayNode;
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.util.Locale;
+import java.util.stream.Collectors;
+import org.wispwright.optimize.flow.FlowSetup;
+import org.wispwright.optimize.flow.SmokeSolver;
+import org.wispwright.optimize.force.ForceBasis;
+import org.wispwright.optimize.solve.Simulation;
+import org.wispwright.optimize.solve.Solve;
+import org.wispwright.optimize.solve.SolveCancelled;
+import org.wispwright.optimize.solve.SolveProblem;
+import org.wispwright.optimize.solve.SolveResult;
+import org.wispwright.optimize.solve.StopRule;
+import org.wispwright.render.lanes.Lanes;
+import org.wispwright.ui.shot.Finding;
+import org.wispwright.ui.shot.Note;
+import org.wispwright.ui.shot.Shot;
+import org.wispwright.ui.shot.ShotException;
+import org.wispwright.ui.shot.ShotFolder;
+import org.wispwright.ui.shot.TakeDraft;
+import org.wispwright.ui.shot.TakeRecord;
+import org.wispwright.ui.shot.Takes;
+
+/** Solves a shot's notes and adds a take. Makes take 0 first if it is not there. Same bits for any number of lanes. */
+public final class SolveWork {
+    private SolveWork() {
+    }
+
+    /**
+     * How to solve.
+     *
+     * @param memoryBytes for the states that a sweep keeps
+     * @param until when to end before the program's own rule does
+     * @param stay false leaves the stay term out; only to measure what it does
+     */
+    public record Manner(long memoryBytes, StopRule until, boolean stay) {
+    }
+
+    /**
+     * What came out.
+     *
+     * @param take the new take's number
+     * @param solve what the search found
+     * @param comparison the new take against the original, note by note
+     * @param divergenceMax largest |div u| h / |u| of any frame
+     * @param massRatio smoke in the last frame as a share of the original's
+     * @param forceRms root mean square of the force over box and range, m/s2
+     * @param departure see {@link Departure}
+     * @param seconds wall time of it all
+     */
+    public record Result(int take, SolveResult solve, Comparison comparison, double divergenceMax, double massRatio, double forceRms,
+                         double departure, double seconds) {
+    }
+
+    /**
+     * Runs the solve.
+     *
+     * @throws ShotException if the shot has no note, a note wants nothing, the memory does not hold one state, a take 0 of another
+     *     set-up is there, or the disk refuses
+     * @throws Cancel.Cancelled if cancelled; no half take is left
+     */
+    public static Result run(ShotFolder folder, Shot shot, Manner manner, Lanes lanes, Progress progress, Cancel cancel) {
+        long start = System.nanoTime();
+        FlowSetup flow = shot.flow();
+        SolveProblem problem = ShotProblem.of(shot);
+        SimulateWork.Result original = SimulateWork.run(folder, shot, lanes, progress, cancel);
+        Takes takes = Takes.of(folder);
+        SolveResult solve = search(problem, manner, lanes, progress, cancel);
+        double forceRms = norm(solve.unknowns());
+        try (TakeDraft draft = takes.draft()) {
+            FrameWriting writing = new FrameWriting(flow, draft, "take", progress);
+            SmokeSolver solver = new SmokeSolver(flow, lanes);
+            ForceBasis basis = Solve.basis(flow, lanes);
+            Simulation.run(solver, basis, solve.unknowns(), flow.frames().last(), cancel::wished, (frame, state, force) -> writing.frame(frame, state, solver));
+            draft.writeForce(solve.unknowns());
+            double massRatio = original.lastMass() > 0 ? writing.lastMass() / original.lastMass() : 1;
+            cancel.stopIfWished();
+            int take = draft.finish(record(shot, manner, solve, writing.divergenceMax(), massRatio, forceRms));
+            Comparison comparison = CompareWork.compare(folder, shot, 0, take, lanes, progress, new Cancel());
+            double departure = Departure.of(shot, takes, take, lanes, new Cancel());
+            return new Result(take, solve, comparison, writing.divergenceMax(), massRatio, forceRms, departure, (System.nanoTime() - start) / 1e9);
+        } catch (SolveCancelled asked) {
+            throw new Cancel.Cancelled();
+        }
+    }
+
+    private static SolveResult search(SolveProblem problem, Manner manner, Lanes lanes, Progress progress, Cancel cancel) {
+        try {
+            int[] band = {0};
+            return new Solve(problem, manner.stay(), lanes, cancel::wished).run(manner.memoryBytes(), manner.until(), now -> {
+                String line = inWords(now);
+                if (1000 * now.rung() + now.band() != band[0]) {
+                    band[0] = 1000 * now.rung() + now.band();
+                    progress.milestone(line);
+                } else {
+                    progress.now(line);
+                }
+            });
+        } catch (SolveCancelled asked) {
+            throw new Cancel.Cancelled();
+        } catch (IllegalArgumentException refused) {
+            String words = String.valueOf(refused.getMessage());
+            throw new ShotException(new Finding("shot.json", "", words.endsWith(".") ? words : words + "."), refused);
+        }
+    }
+
+    private static String inWords(org.wispwright.optimize.solve.Progress now) {
+        String met = now.met().stream().map(m -> String.format(Locale.ROOT, "%.1f %%", 100 * m)).collect(Collectors.joining(", "));
+        return String.format(Locale.ROOT, "solve: rung %d/%d, band %d/%d, iteration %d, loss %.4f, met %s, %.0f s, about %.0f s left",
+                now.rung(), now.rungs(), now.band(), now.bands(), now.iteration(), now.loss(), met, now.seconds(), now.secondsLeft());
+    }
+
+    /** Nothing in it depends on threads, memory or the clock: the same shot gives the same bytes. */
+    private static TakeRecord record(Shot shot, Manner manner, SolveResult solve, double divergenceMax, double massRatio, double forceRms) {
+        ObjectNode settings = TakeRecord.object().put("stay", manner.stay());
+        settings.set("notes", notes(shot));
+        settings.put("untilLoss", manner.until().loss());
+        ObjectNode figures = TakeRecord.object().put("gradients", solve.gradients()).put("forceRms", forceRms).put("massRatio", massRatio)
+                .put("divergenceMax", divergenceMax).put("energyWeight", solve.energyWeight()).put("energyShare", solve.energyShare()).put("ended", solve.ended());
+        ObjectNode met = figures.putObject("met");
+        for (int n = 0; n < Math.min(shot.notes().size(), solve.met().size()); n++) {
+            met.put(shot.notes().get(n).id(), solve.met().get(n));
+        }
+        return new TakeRecord(TakeRecord.Kind.SOLVE, Build.version(), TakeRecord.digest(shot.flow()), settings, figures, solve.losses());
+    }
+
+    private static ArrayNode notes(Shot shot) {
+        ArrayNode list = TakeRecord.object().putArray("notes");
+        shot.notes().stream().map(Note::id).forEach(list::add);
+        return list;
+    }
+
+    private static double norm(double[] x) {
+        double sum = 0;
+        for (double v : x) {
+            sum += v * v;
+        }
+        return Math.sqrt(sum);
+    }
+}

@@ -1,0 +1,123 @@
+package org.wispwright.ui.work;
+
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.io.IOException;
+import java.nio.file.FileSystem;
+import java.nio.file.FileSystems;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.net.URI;
+import java.net.URISyntaxException;
+import java.net.URL;
+import java.util.List;
+import java.util.Map;
+import java.util.stream.Stream;
+import org.wispwright.render.lanes.Lanes;
+import org.wispwright.ui.shot.Finding;
+import org.wispwright.ui.shot.Shot;
+import org.wispwright.ui.shot.ShotCheck;
+import org.wispwright.ui.shot.ShotException;
+import org.wispwright.ui.shot.ShotFolder;
+
+/** The whole job on a sample, from a copy of its shot folder to the sheet and the report. */
+public final class TourWork {
+    /** The sample that travels in the program. */
+    public static final String SAMPLE = "kiln-yard";
+
+    private TourWork() {
+    }
+
+    /**
+     * What came out.
+     *
+     * @param shot the copied shot folder, with its takes
+     * @param sheet the sheet's file
+     * @param report the figures, as in the file {@code report.json}
+     * @param solve the solve
+     */
+    public record Result(Path shot, Path sheet, ObjectNode report, SolveWork.Result solve) {
+    }
+
+    /** A step that is given the sample's folder. */
+    @FunctionalInterface
+    public interface OnSample<T> {
+        /** Runs on the folder, which may lie inside a jar and is only good until this returns. */
+        T on(Path sample);
+    }
+
+    /** Runs a step on the sample that travels in the program. */
+    public static <T> T onOwnSample(OnSample<T> step) {
+        URL found = TourWork.class.getResource("/samples/" + SAMPLE + "/shot.json");
+        if (found == null) {
+            throw new IllegalStateException("the sample " + SAMPLE + " is missing from the program; build it again with mvn package");
+        }
+        try {
+            URI uri = found.toURI();
+            if (!"jar".equals(uri.getScheme())) {
+                return step.on(Path.of(uri).getParent());
+            }
+            try (FileSystem jar = FileSystems.newFileSystem(uri, Map.of())) {
+                return step.on(jar.getPath("/samples/" + SAMPLE));
+            }
+        } catch (IOException | URISyntaxException broken) {
+            throw new IllegalStateException("the sample " + SAMPLE + " cannot be read from the program; build it again with mvn package", broken);
+        }
+    }
+
+    /**
+     * Copies a sample, simulates it, solves its notes, draws the sheet, writes the report: {@code out/NAME} (the shot with its takes),
+     * {@code out/sheet.png}, the notes' pictures and {@code out/report.json}.
+     *
+     * @param sample a shot folder, of any file system
+     * @param out made if it is not there; must be empty
+     * @throws ShotException if out has something in it or cannot be written to, or the sample is not in order
+     * @throws Cancel.Cancelled if cancelled
+     */
+    public static Result run(Path sample, Path out, SolveWork.Manner manner, Lanes lanes, Progress progress, Cancel cancel) {
+        long start = System.nanoTime();
+        Path folder = out.resolve(sample.getFileName().toString().replace("/", ""));
+        requireEmpty(out);
+        copy(sample, folder);
+        Shot shot = ShotCheck.require(folder, manner.memoryBytes());
+        ShotFolder shotFolder = ShotFolder.open(folder);
+        progress.milestone("tour: '" + shot.name() + "', " + shot.flow().grid().inWords() + ", " + shot.flow().frames().count() + " frames, " + shot.notes().size() + " notes");
+        SolveWork.Result solve = SolveWork.run(shotFolder, shot, manner, lanes, progress, cancel);
+        CompareWork.write(shotFolder, shot, solve.comparison(), out);
+        ObjectNode report = SolveReport.of(solve);
+        report.put("seconds", (System.nanoTime() - start) / 1e9);
+        CompareWork.writeJson(report, out.resolve("report.json"));
+        return new Result(folder, out.resolve("sheet.png"), report, solve);
+    }
+
+    private static void requireEmpty(Path out) {
+        try {
+            if (Files.isDirectory(out)) {
+                try (Stream<Path> entries = Files.list(out)) {
+                    if (entries.findAny().isPresent()) {
+                        throw new ShotException(new Finding(out.toString(), "", "this folder is not empty, and the tour overwrites nothing; move it away or give another with --out."));
+                    }
+                }
+            } else {
+                Files.createDirectories(out);
+            }
+        } catch (IOException refused) {
+            throw PictureFile.cannotWrite(out, refused);
+        }
+    }
+
+    private static void copy(Path from, Path to) {
+        try (Stream<Path> paths = Files.walk(from)) {
+            List<Path> all = paths.toList();
+            for (Path path : all) {
+                Path there = to.resolve(from.relativize(path).toString());
+                if (Files.isDirectory(path)) {
+                    Files.createDirectories(there);
+                } else {
+                    Files.copy(path, there);
+                }
+            }
+        } catch (IOException refused) {
+            throw PictureFile.cannotWrite(to, refused);
+        }
+    }
+}
