@@ -31,6 +31,7 @@ public final class SmokeSolver {
     private final Projection projection;
     private final List<SourceCells> sources;
     private final Displacement displacement;
+    private final Clock clock = new Clock();
     private final float[] mostPerSlab;
     private Displacement displacementBar;
     private SmokeState inBar;
@@ -94,19 +95,26 @@ public final class SmokeSolver {
     public void step(SmokeState in, MacVelocity force, int frame, SmokeState out) {
         MacVelocity u = in.velocity();
         MacVelocity next = out.velocity();
+        long since = System.nanoTime();
         trace.forward(u, seconds, displacement);
+        since = clock.lap(Clock.Part.TRACE, since);
         carryX.forward(u.x(), displacement, next.x());
         carryY.forward(u.y(), displacement, next.y());
         carryZ.forward(u.z(), displacement, next.z());
+        since = clock.lap(Clock.Part.CARRY_VELOCITY, since);
         if (force != null) {
             addScaled(next, force, (float) seconds);
         }
         buoyancy.forward(in.density().values(), seconds * setup.buoyancy(), next.y());
+        since = clock.lap(Clock.Part.PUSH, since);
         projection.apply(next);
+        since = clock.lap(Clock.Part.PROJECTION, since);
         trace.forward(next, seconds, displacement);
+        since = clock.lap(Clock.Part.TRACE, since);
         carryDensity.forward(in.density().values(), displacement, out.density().values());
         fade(out.density().values(), keep);
         feed(out.density().values(), frame);
+        clock.lap(Clock.Part.CARRY_DENSITY, since);
     }
 
     /**
@@ -125,28 +133,42 @@ public final class SmokeSolver {
         clear(inBar);
         lanes.forEach(shape.nz(), displacementBar::clearSlab);
         float[] density = in.density().values();
+        long since = System.nanoTime();
         fade(bar.density().values(), keep);
         trace.forward(outVelocity, seconds, displacement);
+        since = clock.lap(Clock.Part.TRACE, since);
         int reach = displacement.reachInZ(lanes, mostPerSlab);
         carryDensity.pullback(density, displacement, reach, bar.density().values(), inBar.density().values(), displacementBar);
+        since = clock.lap(Clock.Part.CARRY_DENSITY_BACK, since);
         trace.pullback(outVelocity, seconds, displacementBar, bar.velocity());
+        since = clock.lap(Clock.Part.TRACE_BACK, since);
 
         projection.apply(bar.velocity());
+        since = clock.lap(Clock.Part.PROJECTION_BACK, since);
         if (forceBar != null) {
             addScaled(forceBar, bar.velocity(), (float) seconds);
         }
         buoyancy.pullback(bar.velocity().y(), seconds * setup.buoyancy(), inBar.density().values());
+        since = clock.lap(Clock.Part.PUSH_BACK, since);
 
         MacVelocity u = in.velocity();
         MacVelocity uBar = inBar.velocity();
         lanes.forEach(shape.nz(), displacementBar::clearSlab);
         trace.forward(u, seconds, displacement);
+        since = clock.lap(Clock.Part.TRACE, since);
         reach = displacement.reachInZ(lanes, mostPerSlab);
         carryX.pullback(u.x(), displacement, reach, bar.velocity().x(), uBar.x(), displacementBar);
         carryY.pullback(u.y(), displacement, reach, bar.velocity().y(), uBar.y(), displacementBar);
         carryZ.pullback(u.z(), displacement, reach, bar.velocity().z(), uBar.z(), displacementBar);
+        since = clock.lap(Clock.Part.CARRY_VELOCITY_BACK, since);
         trace.pullback(u, seconds, displacementBar, uBar);
         bar.set(inBar);
+        clock.lap(Clock.Part.TRACE_BACK, since);
+    }
+
+    /** Where this solver's time went; whoever drives it may add parts of its own. */
+    public Clock clock() {
+        return clock;
     }
 
     /** Largest |div u| h / |u| of a velocity: 0 for a field free of divergence, about 1 for one that is not. */

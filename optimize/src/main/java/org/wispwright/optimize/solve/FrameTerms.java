@@ -5,6 +5,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
 import java.util.TreeMap;
+import org.wispwright.optimize.flow.Clock;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.march.Look;
 import org.wispwright.render.march.RayMarcher;
@@ -25,6 +26,7 @@ final class FrameTerms {
     private final Map<Integer, List<Shown>> byFrame = new TreeMap<>();
     private final List<RayMarcher> marchers = new ArrayList<>();
     private final Look look;
+    private final Clock clock;
     private int terms;
 
     /** One picture and its terms. */
@@ -44,8 +46,9 @@ final class FrameTerms {
     /** One comparison; its number tells where its loss is written. */
     private record Term(int number, PyramidLoss loss, double scale) { }
 
-    FrameTerms(GridShape shape, List<View> views, Look look, double stepMetres, Lanes lanes) {
+    FrameTerms(GridShape shape, List<View> views, Look look, double stepMetres, Clock clock, Lanes lanes) {
         this.look = look;
+        this.clock = clock;
         for (View view : views) {
             marchers.add(new RayMarcher(shape, view, stepMetres, lanes));
         }
@@ -89,12 +92,15 @@ final class FrameTerms {
     double forward(int frame, ScalarGrid density, double[] losses) {
         double sum = 0;
         for (Shown shown : byFrame.getOrDefault(frame, List.of())) {
+            long since = System.nanoTime();
             marchers.get(shown.view).picture(density, look, shown.got);
+            since = clock.lap(Clock.Part.PICTURE, since);
             Arrays.fill(shown.bar, 0f);
             for (Term term : shown.terms) {
                 losses[term.number] = term.loss.valueAndPullback(shown.got, shown.bar, term.scale);
                 sum += term.scale * losses[term.number];
             }
+            clock.lap(Clock.Part.LOSS, since);
         }
         return sum;
     }
@@ -102,7 +108,9 @@ final class FrameTerms {
     /** Adds the derivative by a frame's density; its last {@link #forward} must have been with this density. */
     void pullback(int frame, ScalarGrid density, ScalarGrid densityBar) {
         for (Shown shown : byFrame.getOrDefault(frame, List.of())) {
+            long since = System.nanoTime();
             marchers.get(shown.view).pullback(density, look, shown.got, shown.bar, densityBar);
+            clock.lap(Clock.Part.PICTURE_BACK, since);
         }
     }
 }

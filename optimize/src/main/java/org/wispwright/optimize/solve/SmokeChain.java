@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.function.BooleanSupplier;
 import org.wispwright.optimize.checkpoint.ReversibleChain;
+import org.wispwright.optimize.flow.Clock;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.force.ForceBasis;
@@ -128,7 +129,9 @@ final class SmokeChain implements ReversibleChain {
         }
         solver.pullback(before, current.velocity(), bar, forceBar);
         if (step % substeps == 0) {
+            long since = System.nanoTime();
             basis.pullback(forceBar, at, xBar);
+            solver.clock().lap(Clock.Part.FORCE_BACK, since);
         }
         known = step;
     }
@@ -137,8 +140,10 @@ final class SmokeChain implements ReversibleChain {
         checkCancelled();
         int at = step / substeps;
         if (at != forceStep) {
+            long since = System.nanoTime();
             basis.force(x, at, force);
             forceStep = at;
+            solver.clock().lap(Clock.Part.FORCE, since);
         }
         solver.step(current, force, firstFrame + at + 1, spare);
     }

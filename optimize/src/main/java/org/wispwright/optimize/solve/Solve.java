@@ -145,7 +145,7 @@ public final class Solve {
             FlowSetup flow = here.flow();
             SmokeSolver solver = new SmokeSolver(flow, lanes);
             List<View> views = here.views().stream().map(view -> proxy(view, grid.cellMetres())).toList();
-            FrameTerms terms = new FrameTerms(grid, views, here.look(), grid.cellMetres(), lanes);
+            FrameTerms terms = new FrameTerms(grid, views, here.look(), grid.cellMetres(), solver.clock(), lanes);
             SmokeState start = new SmokeState(grid);
             plan = new TermPlan(here, solver, start, terms, stay, cancelled);
             int lastFrame = here.lastFrame(stay);

@@ -19,7 +19,6 @@ final class SolveLoss implements Objective {
     private final int substeps;
     private final int firstFrame;
     private final double[] losses;
-    private long evaluations;
 
     /**
      * @param start     read: the state of the first frame
@@ -42,8 +41,14 @@ final class SolveLoss implements Objective {
 
     @Override
     public double evaluate(double[] x, double[] gradient) {
-        evaluations++;
         Arrays.fill(gradient, 0);
+        double value = forward(x, gradient);
+        reversal.reverse();
+        return value;
+    }
+
+    /** The value alone; the gradient is left for a reversal that may follow. */
+    double forward(double[] x, double[] gradient) {
         double[] sum = new double[1];
         chain.begin(x, gradient);
         reversal.forward(n -> {
@@ -51,17 +56,11 @@ final class SolveLoss implements Objective {
                 sum[0] += terms.forward(firstFrame + n / substeps, chain.current().density(), losses);
             }
         });
-        reversal.reverse();
         return sum[0];
     }
 
     /** Losses of the terms at the last evaluation, before their scales. */
     double[] losses() {
         return losses;
-    }
-
-    /** Gradients so far. */
-    long evaluations() {
-        return evaluations;
     }
 }

@@ -31,7 +31,7 @@ class WholeChainTest {
         FlowSetup flow = problem.flow();
         SmokeSolver solver = new SmokeSolver(flow, lanes);
         ForceBasis basis = Solve.basis(flow, lanes);
-        FrameTerms terms = new FrameTerms(flow.grid(), problem.views(), problem.look(), flow.grid().cellMetres(), lanes);
+        FrameTerms terms = new FrameTerms(flow.grid(), problem.views(), problem.look(), flow.grid().cellMetres(), solver.clock(), lanes);
         new TermPlan(problem, solver, start, terms, true, () -> false);
         return new SolveLoss(solver, basis, terms, start, problem.lastFrame(true), snapshots, () -> false);
     }

@@ -135,7 +135,8 @@ public final class PyramidLoss {
         float[] m = weights[level];
         double sum = 0;
         for (int p = 0, n = 0; p < m.length; p++, n += 4) {
-            sum += m[p] * ((double) d[n] * d[n] + (double) d[n + 1] * d[n + 1] + (double) d[n + 2] * d[n + 2] + (double) d[n + 3] * d[n + 3]);
+            sum += m[p] * ((double) d[n] * d[n] + (double) d[n + 1] * d[n + 1]
+                    + (double) d[n + 2] * d[n + 2] + (double) d[n + 3] * d[n + 3]);
         }
         return sum / m.length;
     }

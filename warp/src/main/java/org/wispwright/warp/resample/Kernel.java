@@ -44,20 +44,21 @@ public enum Kernel {
     /** Overwrites {@code out[0..3]} with the weights of the samples at -1, 0, 1, 2 for the place t in [0,1). */
     public abstract void weights(double t, double[] out);
 
-    /** {@code |s| < 1: (a+2)|s|^3 - (a+3)|s|^2 + 1; 1 <= |s| < 2: a|s|^3 - 5a|s|^2 + 8a|s| - 4a}. */
+    /** {@code |s| < 1: (a+2)|s|^3 - (a+3)|s|^2 + 1; 1 <= |s| < 2: a|s|^3 - 5a|s|^2 + 8a|s| - 4a = a (|s|-1) (2-|s|)^2}. */
     private static void keys(double a, double t, double[] out) {
         for (int n = 0; n < 4; n++) {
             double s = Math.abs(t - (n - 1));
-            out[n] = s < 1 ? ((a + 2) * s - (a + 3)) * s * s + 1 : ((a * s - 5 * a) * s + 8 * a) * s - 4 * a;
+            out[n] = s < 1 ? ((a + 2) * s - (a + 3)) * s * s + 1 : a * (s - 1) * (2 - s) * (2 - s);
         }
     }
 
-    /** Equation 8 of Mitchell and Netravali (1988). */
+    /** Equation 8 of Mitchell and Netravali (1988); the outer piece in powers of 2 - s, which rounds less. */
     private static void familyBC(double b, double c, double t, double[] out) {
         for (int n = 0; n < 4; n++) {
             double s = Math.abs(t - (n - 1));
-            out[n] = (s < 1 ? ((12 - 9 * b - 6 * c) * s + (-18 + 12 * b + 6 * c)) * s * s + (6 - 2 * b)
-                    : (((-b - 6 * c) * s + (6 * b + 30 * c)) * s + (-12 * b - 48 * c)) * s + (8 * b + 24 * c)) / 6;
+            double q = 2 - s;
+            out[n] = s < 1 ? (((12 - 9 * b - 6 * c) * s + (-18 + 12 * b + 6 * c)) * s * s + (6 - 2 * b)) / 6
+                    : (b / 6 * q - c * (s - 1)) * q * q;
         }
     }
 }

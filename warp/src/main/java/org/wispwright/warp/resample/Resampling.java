@@ -93,16 +93,16 @@ public final class Resampling {
         }
     }
 
-    /** Takes the overshoot of a kernel with negative lobes away: alpha into 0..1, colour not below 0, no colour without alpha. */
+    /**
+     * Takes the overshoot of a kernel with negative lobes away: where alpha passes 1 all four are scaled down by it, so the
+     * un-premultiplied colour stays; where alpha falls under 0 the pixel is clear; colour never falls under 0.
+     */
     public static void clamp(float[] rgba, int at) {
-        if (rgba[at + 3] <= 0) {
-            rgba[at] = 0;
-            rgba[at + 1] = 0;
-            rgba[at + 2] = 0;
-        }
+        float alpha = rgba[at + 3];
+        float factor = alpha > 1 ? 1 / alpha : alpha > 0 ? 1 : 0;
         for (int c = 0; c < 3; c++) {
-            rgba[at + c] = Math.max(0f, rgba[at + c]);
+            rgba[at + c] = Math.max(0f, factor * rgba[at + c]);
         }
-        rgba[at + 3] = Math.min(1f, Math.max(0f, rgba[at + 3]));
+        rgba[at + 3] = Math.min(1f, Math.max(0f, alpha));
     }
 }

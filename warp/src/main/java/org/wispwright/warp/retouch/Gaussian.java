@@ -12,9 +12,16 @@ final class Gaussian {
     static float[] blurred(float[] in, int channels, int width, int height, double sigma) {
         double[] weights = weights(sigma);
         float[] across = new float[in.length];
-        pass(in, across, channels, height, width * channels, width, channels, weights);
+        int row = width * channels;
+        double[] line = new double[row + 2 * channels * (weights.length - 1)];
+        double[] sums = new double[row];
+        for (int y = 0; y < height; y++) {
+            alongRow(in, across, y * row, channels, width, weights, line, sums);
+        }
         float[] out = new float[in.length];
-        pass(across, out, channels, width, channels, height, width * channels, weights);
+        for (int y = 0; y < height; y++) {
+            acrossRows(across, out, y, row, height, weights, sums);
+        }
         return out;
     }
 
@@ -32,19 +39,47 @@ final class Gaussian {
         return weights;
     }
 
-    /** Blurs {@code lines} lines, {@code lineStep} floats apart, of n entries that are {@code step} floats apart. */
-    private static void pass(float[] in, float[] out, int channels, int lines, int lineStep, int n, int step, double[] weights) {
-        for (int line = 0; line < lines; line++) {
-            for (int i = 0; i < n; i++) {
-                for (int c = 0; c < channels; c++) {
-                    int at = line * lineStep + c;
-                    double sum = weights[0] * in[at + i * step];
-                    for (int k = 1; k < weights.length; k++) {
-                        sum += weights[k] * ((double) in[at + Math.max(0, i - k) * step] + in[at + Math.min(n - 1, i + k) * step]);
-                    }
-                    out[at + i * step] = (float) sum;
-                }
+    /** One row, {@code at} its first float: laid into {@code line} with the border pixels repeated, then summed tap by tap. */
+    private static void alongRow(float[] in, float[] out, int at, int channels, int width, double[] weights, double[] line, double[] sums) {
+        int reach = weights.length - 1;
+        for (int i = -reach; i < width + reach; i++) {
+            int from = at + channels * Math.min(width - 1, Math.max(0, i));
+            for (int c = 0; c < channels; c++) {
+                line[(i + reach) * channels + c] = in[from + c];
             }
+        }
+        int middle = reach * channels;
+        for (int n = 0; n < sums.length; n++) {
+            sums[n] = weights[0] * line[middle + n];
+        }
+        for (int k = 1; k <= reach; k++) {
+            double w = weights[k];
+            int left = middle - k * channels;
+            int right = middle + k * channels;
+            for (int n = 0; n < sums.length; n++) {
+                sums[n] += w * (line[left + n] + line[right + n]);
+            }
+        }
+        for (int n = 0; n < sums.length; n++) {
+            out[at + n] = (float) sums[n];
+        }
+    }
+
+    /** Row y of the result from the rows above and below it. */
+    private static void acrossRows(float[] in, float[] out, int y, int row, int height, double[] weights, double[] sums) {
+        for (int n = 0; n < row; n++) {
+            sums[n] = weights[0] * in[y * row + n];
+        }
+        for (int k = 1; k < weights.length; k++) {
+            double w = weights[k];
+            int above = row * Math.max(0, y - k);
+            int below = row * Math.min(height - 1, y + k);
+            for (int n = 0; n < row; n++) {
+                sums[n] += w * ((double) in[above + n] + in[below + n]);
+            }
+        }
+        for (int n = 0; n < row; n++) {
+            out[y * row + n] = (float) sums[n];
         }
     }
 }

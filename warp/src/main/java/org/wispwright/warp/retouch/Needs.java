@@ -28,7 +28,8 @@ final class Needs {
 
     static List<Point> points(String owner, String name, List<Point> points, int fewest, int most) {
         if (points.size() < fewest || points.size() > most) {
-            throw new IllegalArgumentException(owner + ": '" + name + "' has " + points.size() + " points, needs " + fewest + " to " + most);
+            throw new IllegalArgumentException(owner + ": '" + name + "' has " + points.size() + " points, needs " + fewest + " to "
+                    + most);
         }
         for (int n = 0; n < points.size(); n++) {
             present(owner, name + " point " + n, points.get(n));

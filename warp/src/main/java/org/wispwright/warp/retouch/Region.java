@@ -51,7 +51,8 @@ public sealed interface Region permits Region.Rectangle, Region.Ellipse, Region.
             Needs.feather("rectangle", feather);
             if (!(left < right && top < bottom && Math.abs(left) <= Point.FARTHEST && Math.abs(right) <= Point.FARTHEST
                     && Math.abs(top) <= Point.FARTHEST && Math.abs(bottom) <= Point.FARTHEST)) {
-                throw new IllegalArgumentException("rectangle: got left " + left + ", top " + top + ", right " + right + ", bottom " + bottom
+                throw new IllegalArgumentException("rectangle: got left " + left + ", top " + top + ", right " + right + ", bottom "
+                        + bottom
                         + ", needs left < right and top < bottom, in fractions of the picture's height from its top left corner");
             }
         }

@@ -29,7 +29,8 @@ public record Stroke(Brush brush, double radius, double strength, double softEdg
         Needs.present("stroke", "line", line);
         Needs.present("stroke", "within", within);
         if (!(radius > 0 && radius <= 1)) {
-            throw new IllegalArgumentException("stroke: got radius " + radius + ", needs a fraction of the picture's height above 0 and at most 1");
+            throw new IllegalArgumentException("stroke: got radius " + radius
+                    + ", needs a fraction of the picture's height above 0 and at most 1");
         }
         Needs.share("stroke", "strength", strength);
         Needs.share("stroke", "softEdge", softEdge);

@@ -75,7 +75,8 @@ public final class ThinPlateSpline {
         }
         LinearSolverDense<DMatrixRMaj> solver = LinearSolverFactory_DDRM.lu(n + 3);
         if (!solver.setA(system.copy())) {
-            throw new IllegalArgumentException("thin-plate spline: the system of the " + n + " landmarks has no single solution; move them apart");
+            throw new IllegalArgumentException("thin-plate spline: the system of the " + n
+                    + " landmarks has no single solution; move them apart");
         }
         double[][] weights = new double[2][n];
         double[][] affine = new double[2][3];
@@ -196,8 +197,8 @@ public final class ThinPlateSpline {
         for (int i = 0; i < x.length; i++) {
             for (int j = 0; j < i; j++) {
                 if (!(Math.hypot(x[i] - x[j], y[i] - y[j]) > 1e-9 * scale)) {
-                    throw new IllegalArgumentException("thin-plate spline: landmarks " + j + " and " + i + " are the same point (" + x[i] + ", "
-                            + y[i] + "); remove one of them");
+                    throw new IllegalArgumentException("thin-plate spline: landmarks " + j + " and " + i + " are the same point ("
+                            + x[i] + ", " + y[i] + "); remove one of them");
                 }
             }
             if (Math.hypot(x[i] - x[0], y[i] - y[0]) > Math.hypot(x[farthest] - x[0], y[farthest] - y[0])) {
