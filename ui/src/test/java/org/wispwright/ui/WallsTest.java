@@ -70,7 +70,8 @@ class WallsTest {
 
     @Test
     void inUiTheJobsAndTheShotKnowNoScreen() {
-        noClasses().that().resideInAnyPackage("org.wispwright.ui.shot..", "org.wispwright.ui.work..", "org.wispwright.ui.command..").should().dependOnClassesThat()
+        noClasses().that().resideInAnyPackage("org.wispwright.ui.shot..", "org.wispwright.ui.work..", "org.wispwright.ui.command..")
+                .should().dependOnClassesThat()
                 .resideInAnyPackage("javax.swing..").check(OURS);
         noClasses().that().resideInAnyPackage("org.wispwright.ui.shot..", "org.wispwright.ui.command..").should().dependOnClassesThat()
                 .resideInAnyPackage("java.awt..").check(OURS);

@@ -18,7 +18,8 @@ import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
 
 /** {@code check SHOT}: validates everything without running and without writing. */
-@Command(name = "check", sortOptions = false, description = "Read a whole shot and say everything that is wrong with it. Runs nothing, writes nothing.",
+@Command(name = "check", sortOptions = false,
+        description = "Read a whole shot and say everything that is wrong with it. Runs nothing, writes nothing.",
         footer = {"", "Examples:",
             "  java -jar wispwright.jar check samples/kiln-yard",
             "  java -jar wispwright.jar check samples/kiln-yard --memory 512M --json"})
@@ -57,9 +58,12 @@ final class CheckCommand implements Callable<Integer> {
         FlowSetup flow = checked.flow();
         long need = MemoryNeed.bytes(flow.grid(), flow.frames(), flow.substeps());
         int rendered = checked.views().stream().mapToInt(v -> v.rendered().size()).sum();
-        object.put("name", checked.name()).put("cells", flow.grid().cells()).put("firstFrame", flow.frames().first()).put("lastFrame", flow.frames().last())
-                .put("views", checked.views().size()).put("notes", checked.notes().size()).put("renderedFrames", rendered).put("leastMemoryBytes", need);
-        manner.say("'" + checked.name() + "' is in order: " + flow.grid().inWords() + ", frames " + flow.frames().first() + " to " + flow.frames().last()
+        object.put("name", checked.name()).put("cells", flow.grid().cells()).put("firstFrame", flow.frames().first())
+                .put("lastFrame", flow.frames().last())
+                .put("views", checked.views().size()).put("notes", checked.notes().size()).put("renderedFrames", rendered)
+                        .put("leastMemoryBytes", need);
+        manner.say("'" + checked.name() + "' is in order: " + flow.grid().inWords() + ", frames " + flow.frames().first() + " to "
+                + flow.frames().last()
                 + ", views " + checked.views().size() + ", notes " + checked.notes().size() + ", rendered frames " + rendered
                 + "; a solve takes at least " + MemoryNeed.inWords(need) + ".", object);
         return ExitCodes.OK;

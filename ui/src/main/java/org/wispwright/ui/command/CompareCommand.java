@@ -17,8 +17,11 @@ import picocli.CommandLine.Option;
 import picocli.CommandLine.TypeConversionException;
 
 /** {@code compare SHOT --takes A,B --out DIR}. */
-@Command(name = "compare", sortOptions = false, description = "Compare two takes note by note: original, wanted, got, their difference, and one sheet of all.",
-        footer = {"", "Writes into DIR: sheet.png, compare.json, and for every note ID.original.png, ID.wanted.png, ID.got.png, ID.difference.png.", "", "Examples:",
+@Command(name = "compare", sortOptions = false,
+        description = "Compare two takes note by note: original, wanted, got, their difference, and one sheet of all.",
+        footer = {"",
+            "Writes into DIR: sheet.png, compare.json, and for every note the pictures ID.original.png, ID.wanted.png,",
+            "ID.got.png and ID.difference.png.", "", "Examples:",
             "  java -jar wispwright.jar compare samples/kiln-yard --takes 0,1 --out review",
             "  java -jar wispwright.jar compare samples/kiln-yard --takes 1,2 --out review --json"})
 final class CompareCommand implements Callable<Integer> {
@@ -61,8 +64,10 @@ final class CompareCommand implements Callable<Integer> {
             CompareWork.write(folder, shot, comparison, out);
         }
         ObjectNode object = CompareWork.report(comparison).put("ok", true).put("out", out.toString());
-        String notes = comparison.notes().stream().map(n -> String.format(Locale.ROOT, "%s met %.1f %%", n.note().id(), 100 * n.met())).collect(Collectors.joining(", "));
-        manner.say("Take " + takes.after() + " against take " + takes.before() + ": " + notes + ". See " + out.resolve("sheet.png") + ".", object);
+        String notes = comparison.notes().stream().map(n -> String.format(Locale.ROOT, "%s met %.1f %%", n.note().id(), 100 * n.met()))
+                .collect(Collectors.joining(", "));
+        manner.say("Take " + takes.after() + " against take " + takes.before() + ": " + notes + ". See " + out.resolve("sheet.png") + ".",
+                object);
         return ExitCodes.OK;
     }
 }

@@ -22,7 +22,8 @@ import picocli.CommandLine.ParameterException;
 /** The program: finds the command, runs it, and turns whatever happens into an exit code and at most one sentence. */
 @Command(name = "wispwright", versionProvider = Main.Version.class, sortOptions = false,
         description = "Changes a smoke simulation so that it satisfies review notes drawn on its frames.",
-        subcommands = {TourCommand.class, SimulateCommand.class, PictureCommand.class, SolveCommand.class, CompareCommand.class, CheckCommand.class, MeasureCommand.class},
+        subcommands = {TourCommand.class, SimulateCommand.class, PictureCommand.class, SolveCommand.class, CompareCommand.class,
+                CheckCommand.class, MeasureCommand.class},
         synopsisSubcommandLabel = "COMMAND",
         footer = {"",
             "Exit codes: 0 done, 1 an error of ours, 2 wrong usage, 3 bad input, 130 stopped by Ctrl-C.",
@@ -65,7 +66,8 @@ public final class Main implements Runnable {
         }, "stop-on-signal"));
         int code = ExitCodes.OURS;
         try {
-            code = run(args, new PrintWriter(System.out, true, StandardCharsets.UTF_8), new PrintWriter(System.err, true, StandardCharsets.UTF_8), cancel);
+            code = run(args, new PrintWriter(System.out, true, StandardCharsets.UTF_8),
+                    new PrintWriter(System.err, true, StandardCharsets.UTF_8), cancel);
         } finally {
             ended.countDown();
         }
@@ -116,7 +118,8 @@ public final class Main implements Runnable {
         if (wrong instanceof UnmatchedArgumentException unmatched && !unmatched.getSuggestions().isEmpty()) {
             sentence += "; did you mean '" + unmatched.getSuggestions().get(0) + "'?";
         }
-        err.println("wispwright: " + sentence + (sentence.endsWith("?") || sentence.endsWith(".") ? "" : ".") + " See " + command.getCommandSpec().qualifiedName() + " --help.");
+        err.println("wispwright: " + sentence + (sentence.endsWith("?") || sentence.endsWith(".") ? "" : ".") + " See "
+                + command.getCommandSpec().qualifiedName() + " --help.");
         return ExitCodes.USAGE;
     }
 
@@ -135,9 +138,11 @@ public final class Main implements Runnable {
             sentence = "stopped as asked; nothing was left half done.";
         } else if (thrown instanceof OutOfMemoryError) {
             code = ExitCodes.BAD_INPUT;
-            sentence = "the memory of " + Runtime.getRuntime().maxMemory() / (1 << 20) + " MiB is used up; give more with java -Xmx4g -jar wispwright.jar, or take a smaller grid.";
+            sentence = "the memory of " + Runtime.getRuntime().maxMemory() / (1 << 20)
+                    + " MiB is used up; give more with java -Xmx4g -jar wispwright.jar, or take a smaller grid.";
         } else {
-            sentence = "this should not have happened: " + thrown + (verbose ? "" : "; run it again with --verbose and report what it shows") + ".";
+            sentence = "this should not have happened: " + thrown
+                    + (verbose ? "" : "; run it again with --verbose and report what it shows") + ".";
         }
         command.getErr().println("wispwright: " + sentence.replaceAll("\\s*[\\r\\n]+\\s*", " "));
         if (verbose) {

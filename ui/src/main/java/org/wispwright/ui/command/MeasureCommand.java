@@ -17,7 +17,8 @@ import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Spec;
 
 /** {@code measure}: what this machine can do. */
-@Command(name = "measure", sortOptions = false, description = "Measure what this machine can do: a forward run, a gradient, a step, and where the time goes.",
+@Command(name = "measure", sortOptions = false,
+        description = "Measure what this machine can do: a forward run, a gradient, a step, and where the time goes.",
         footer = {"", "Close other programs first: the figures are the least of a few tries.", "", "Examples:",
             "  java -jar wispwright.jar measure",
             "  java -jar wispwright.jar measure --grid 128 --frames 30 --threads 2 --memory 256M --json"})
@@ -38,7 +39,8 @@ final class MeasureCommand implements Callable<Integer> {
             description = "The memory for the states that a gradient keeps, such as 256M. Default: enough to keep all, if Java has it.")
     private ByteSize memory;
 
-    @Option(names = "--threads", paramLabel = "N", converter = ThreadCount.Converter.class, description = "Threads to use. Default: one for each core.")
+    @Option(names = "--threads", paramLabel = "N", converter = ThreadCount.Converter.class,
+            description = "Threads to use. Default: one for each core.")
     private ThreadCount threads;
 
     @Spec
@@ -47,7 +49,8 @@ final class MeasureCommand implements Callable<Integer> {
     @Override
     public Integer call() {
         if (cells < 8 || cells > MOST_CELLS || frames < 2 || frames > MOST_FRAMES) {
-            throw new ParameterException(spec.commandLine(), "measure takes a --grid of 8 to " + MOST_CELLS + " and --frames of 2 to " + MOST_FRAMES
+            throw new ParameterException(spec.commandLine(), "measure takes a --grid of 8 to " + MOST_CELLS + " and --frames of 2 to "
+                    + MOST_FRAMES
                     + ", not " + cells + " and " + frames);
         }
         GridShape grid = new GridShape(cells, cells, cells, 1);
@@ -56,12 +59,15 @@ final class MeasureCommand implements Callable<Integer> {
         long work = MemoryNeed.besidesStates(grid);
         long forStates = memory == null ? Math.min(state * frames, most - work) : memory.bytes();
         if (forStates < state || work + forStates > most) {
-            throw new ShotException(new Finding("measure", "", "a grid of " + grid.inWords() + " takes " + MemoryNeed.inWords(work) + " and " + MemoryNeed.inWords(Math.max(state, forStates))
-                    + " for states, and Java has " + MemoryNeed.inWords(most) + "; take a smaller --grid, a --memory of at least " + MemoryNeed.inWords(state)
+            throw new ShotException(new Finding("measure", "", "a grid of " + grid.inWords() + " takes " + MemoryNeed.inWords(work)
+                    + " and " + MemoryNeed.inWords(Math.max(state, forStates))
+                    + " for states, and Java has " + MemoryNeed.inWords(most) + "; take a smaller --grid, a --memory of at least "
+                            + MemoryNeed.inWords(state)
                     + ", or more for Java with java -Xmx."));
         }
         Measurement measured;
-        try (Lanes lanes = new Lanes(threads == null ? Runtime.getRuntime().availableProcessors() : threads.count()); ProgressLine progress = manner.progress()) {
+        try (Lanes lanes = new Lanes(threads == null ? Runtime.getRuntime().availableProcessors()
+                : threads.count()); ProgressLine progress = manner.progress()) {
             progress.now("measure: " + grid.inWords() + ", " + frames + " frames");
             measured = Measurement.of(cells, frames, forStates, lanes);
         }

@@ -58,7 +58,8 @@ final class PictureCommand implements Callable<Integer> {
             throw new ParameterException(spec.commandLine(), "--out '" + out + "' is not a PNG; give a name that ends in .png");
         }
         if (rows != null && (rows < 1 || rows > Picture.LONGEST_SIDE / 8)) {
-            throw new ParameterException(spec.commandLine(), "--height " + rows + " is not a number of rows from 1 to " + Picture.LONGEST_SIDE / 8);
+            throw new ParameterException(spec.commandLine(), "--height " + rows + " is not a number of rows from 1 to "
+                    + Picture.LONGEST_SIDE / 8);
         }
         Shot shot = choice.shot();
         View camera = ShotChoice.view(shot, view).view();
@@ -72,7 +73,8 @@ final class PictureCommand implements Callable<Integer> {
             picture = PictureWork.picture(shot, density, drawn, lanes);
         }
         PictureFile.write(clear ? picture : PictureWork.over(picture, shot.background()), out);
-        ObjectNode object = Manner.object().put("ok", true).put("file", out.toString()).put("width", picture.width()).put("height", picture.height());
+        ObjectNode object = Manner.object().put("ok", true).put("file", out.toString()).put("width", picture.width())
+                .put("height", picture.height());
         manner.say("Wrote " + out + " (" + picture.width() + "x" + picture.height() + " pixels).", object);
         return ExitCodes.OK;
     }

@@ -42,13 +42,15 @@ final class ShotChoice {
     /** A view by name. @throws ShotException if the shot has none of that name */
     static ShotView view(Shot shot, String name) {
         return shot.view(name).orElseThrow(() -> new ShotException(new Finding("shot.json", "/views",
-                "there is no view '" + name + "'; give one of " + String.join(", ", shot.views().stream().map(v -> v.view().name()).toList()) + ".")));
+                "there is no view '" + name + "'; give one of " + String.join(", ", shot.views().stream().map(v -> v.view().name())
+                        .toList()) + ".")));
     }
 
     /** Refuses a frame that the shot does not have. */
     static void requireFrame(Shot shot, int frame) {
         if (!shot.flow().frames().contains(frame)) {
-            throw new ShotException(new Finding("shot.json", "/frames", "there is no frame " + frame + "; give one from " + shot.flow().frames().first()
+            throw new ShotException(new Finding("shot.json", "/frames", "there is no frame " + frame + "; give one from " + shot.flow()
+                    .frames().first()
                     + " to " + shot.flow().frames().last() + "."));
         }
     }

@@ -18,7 +18,8 @@ import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Option;
 
 /** {@code solve SHOT}: searches for the force and adds a take. */
-@Command(name = "solve", sortOptions = false, description = "Search for the force with which the smoke itself arrives at the notes, and keep the result as a new take.",
+@Command(name = "solve", sortOptions = false,
+        description = "Search for the force with which the smoke itself arrives at the notes, and keep the result as a new take.",
         footer = {"", "Take 0 is made first if it is not there. Takes are never overwritten.", "", "Examples:",
             "  java -jar wispwright.jar solve samples/kiln-yard",
             "  java -jar wispwright.jar solve samples/kiln-yard --threads 2 --memory 2G --until loss=0.03",
@@ -31,10 +32,12 @@ final class SolveCommand implements Callable<Integer> {
     private ShotChoice choice;
 
     @Option(names = "--until", paramLabel = "WHAT=N", converter = Until.Converter.class,
-            description = "End early: loss=0.03 (share of the original's), seconds=60, or iterations=40. May be given several times; the first to come true ends it.")
+            description = "End early: loss=0.03 (share of the original's), seconds=60, or iterations=40. "
+                    + "May be given several times; the first to come true ends it.")
     private List<Until> until = List.of();
 
-    @Option(names = "--without-stay", description = "Leave out the term that keeps the frames without a note near the original; only to measure what it does.")
+    @Option(names = "--without-stay",
+            description = "Leave out the term that keeps the frames without a note near the original; only to measure what it does.")
     private boolean withoutStay;
 
     @Option(names = "--report", paramLabel = "FILE", description = "Also write the figures that --json prints to this file.")
@@ -46,13 +49,15 @@ final class SolveCommand implements Callable<Integer> {
         StopRule rule = Until.all(until);
         SolveWork.Result result;
         try (Lanes lanes = new Lanes(choice.threads()); ProgressLine progress = manner.progress()) {
-            result = SolveWork.run(choice.folder(), shot, new SolveWork.Manner(choice.memoryBytes(), rule, !withoutStay), lanes, progress, manner.cancel());
+            result = SolveWork.run(choice.folder(), shot, new SolveWork.Manner(choice.memoryBytes(), rule, !withoutStay), lanes, progress,
+                    manner.cancel());
         }
         ObjectNode object = SolveReport.of(result).put("ok", true);
         if (report != null) {
             CompareWork.writeJson(object, report);
         }
-        String notes = result.comparison().notes().stream().map(n -> String.format(Locale.ROOT, "%s met %.1f %%", n.note().id(), 100 * n.met())).collect(Collectors.joining(", "));
+        String notes = result.comparison().notes().stream()
+                .map(n -> String.format(Locale.ROOT, "%s met %.1f %%", n.note().id(), 100 * n.met())).collect(Collectors.joining(", "));
         manner.say(String.format(Locale.ROOT, "Take %s made in %.0f s: %s.", Takes.name(result.take()), result.seconds(), notes), object);
         return ExitCodes.OK;
     }

@@ -17,7 +17,8 @@ record Until(StopRule rule) {
         StopRule all = StopRule.OWN;
         for (Until reason : reasons) {
             StopRule r = reason.rule();
-            all = new StopRule(Math.max(all.loss(), r.loss()), Math.min(all.seconds(), r.seconds()), Math.min(all.iterations(), r.iterations()));
+            all = new StopRule(Math.max(all.loss(), r.loss()), Math.min(all.seconds(), r.seconds()),
+                    Math.min(all.iterations(), r.iterations()));
         }
         return all;
     }
@@ -42,14 +43,16 @@ record Until(StopRule rule) {
 
         private static double number(String[] parts) {
             if (parts.length < 2 || !parts[1].matches("[0-9]{1,12}(\\.[0-9]{1,12})?")) {
-                throw new TypeConversionException("'" + String.join("=", parts) + "' has no number; write for example " + parts[0] + "=0.5");
+                throw new TypeConversionException("'" + String.join("=", parts) + "' has no number; write for example " + parts[0]
+                        + "=0.5");
             }
             return Double.parseDouble(parts[1]);
         }
 
         private static int whole(String[] parts) {
             if (parts.length < 2 || !parts[1].matches("[0-9]{1,9}")) {
-                throw new TypeConversionException("'" + String.join("=", parts) + "' has no whole number; write for example " + parts[0] + "=40");
+                throw new TypeConversionException("'" + String.join("=", parts) + "' has no whole number; write for example " + parts[0]
+                        + "=40");
             }
             return Integer.parseInt(parts[1]);
         }

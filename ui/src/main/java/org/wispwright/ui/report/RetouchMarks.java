@@ -162,7 +162,8 @@ final class RetouchMarks {
 
     private Shape outline(Region region) {
         if (region instanceof Region.Rectangle r) {
-            return new Rectangle2D.Double(r.left() * height, r.top() * height, (r.right() - r.left()) * height, (r.bottom() - r.top()) * height);
+            return new Rectangle2D.Double(r.left() * height, r.top() * height, (r.right() - r.left()) * height,
+                    (r.bottom() - r.top()) * height);
         }
         if (region instanceof Region.Ellipse e) {
             return new Ellipse2D.Double((e.centre().x() - e.radiusX()) * height, (e.centre().y() - e.radiusY()) * height,
@@ -178,7 +179,8 @@ final class RetouchMarks {
 
     private void line(Shape shape, Color colour, BasicStroke pen) {
         g.setColor(RIM);
-        g.setStroke(new BasicStroke(pen.getLineWidth() + 1.6f, pen.getEndCap(), pen.getLineJoin(), pen.getMiterLimit(), pen.getDashArray(), 0));
+        g.setStroke(new BasicStroke(pen.getLineWidth() + 1.6f, pen.getEndCap(), pen.getLineJoin(), pen.getMiterLimit(), pen.getDashArray(),
+                0));
         g.draw(shape);
         g.setColor(colour);
         g.setStroke(pen);

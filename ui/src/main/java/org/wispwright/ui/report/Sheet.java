@@ -112,7 +112,8 @@ public record Sheet(String title, String subtitle, String before, Rgb background
         g.fillRect(MARGIN, top, width - 2 * MARGIN, 1);
         int metWidth = paintMet(g, row.met(), width - MARGIN, top);
         Font wordsFont = font(Font.PLAIN, 18);
-        text(g, shortened(g, "\u201C" + row.words().replaceAll("\\s+", " ").strip() + "\u201D", wordsFont, width - 2 * MARGIN - metWidth - 24), MARGIN, top + 32, wordsFont, TEXT);
+        text(g, shortened(g, "\u201C" + row.words().replaceAll("\\s+", " ").strip() + "\u201D", wordsFont,
+                width - 2 * MARGIN - metWidth - 24), MARGIN, top + 32, wordsFont, TEXT);
         text(g, row.id() + "  \u00B7  " + row.place(), MARGIN, top + 54, font(Font.PLAIN, 14), QUIET);
         List<Cell> cells = cells(row, gain, columns);
         int y = top + ROW_HEAD;
@@ -126,7 +127,8 @@ public record Sheet(String title, String subtitle, String before, Rgb background
         List<Cell> cells = new ArrayList<>();
         boolean foreign = row.rendered().isPresent();
         if (columns == 5) {
-            cells.add(foreign ? cell(row.rendered().get(), "rendered frame, with the note", true) : new Cell(null, "no rendered frame", false));
+            cells.add(foreign ? cell(row.rendered().get(), "rendered frame, with the note", true)
+                    : new Cell(null, "no rendered frame", false));
         }
         cells.add(cell(row.original(), foreign ? before : before + ", with the note", !foreign));
         cells.add(cell(row.wanted(), "wanted", false));
@@ -138,7 +140,8 @@ public record Sheet(String title, String subtitle, String before, Rgb background
     }
 
     private Cell cell(Picture picture, String label, boolean marked) {
-        return new Cell(ShownPicture.scaled(ShownPicture.over(picture, background), shownWidth(picture), shownHeight(picture)), label, marked);
+        return new Cell(ShownPicture.scaled(ShownPicture.over(picture, background), shownWidth(picture), shownHeight(picture)), label,
+                marked);
     }
 
     private static void paintCell(Graphics2D g, Cell cell, SheetRow row, int x, int y, int cellWidth, int cellHeight) {

@@ -30,7 +30,8 @@ public record SheetRow(String id, String words, String place, Optional<Picture> 
         holds = List.copyOf(holds);
         for (Picture other : List.of(wanted, got)) {
             if (other.width() != original.width() || other.height() != original.height()) {
-                throw new IllegalArgumentException("sheet row '" + id + "': got pictures of " + original.width() + "x" + original.height() + " and "
+                throw new IllegalArgumentException("sheet row '" + id + "': got pictures of " + original.width() + "x" + original.height()
+                        + " and "
                         + other.width() + "x" + other.height() + ", needs original, wanted and got at one raster");
             }
         }

@@ -19,8 +19,8 @@ public record Finding(String file, String pointer, String sentence) {
     }
 
     /** A sentence from its three parts. */
-    static Finding of(String file, String pointer, String found, String needed, String toDo) {
-        return new Finding(file, pointer, "found " + found + ", needs " + needed + "; " + toDo + ".");
+    static Finding of(String file, String pointer, String found, String needed, String wayOut) {
+        return new Finding(file, pointer, "found " + found + ", needs " + needed + "; " + wayOut + ".");
     }
 
     /** Place and sentence on one line. */

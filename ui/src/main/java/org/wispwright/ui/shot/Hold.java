@@ -15,7 +15,8 @@ public record Hold(Region region, int firstFrame, int lastFrame) {
     public Hold {
         Objects.requireNonNull(region, "hold: region");
         if (lastFrame < firstFrame) {
-            throw new IllegalArgumentException("hold: got frames " + firstFrame + " to " + lastFrame + ", needs the last not before the first");
+            throw new IllegalArgumentException("hold: got frames " + firstFrame + " to " + lastFrame
+                    + ", needs the last not before the first");
         }
     }
 

@@ -69,7 +69,8 @@ public final class JsonDoor {
             String text = StandardCharsets.UTF_8.newDecoder().decode(ByteBuffer.wrap(bytes)).toString();
             return text.startsWith("\uFEFF") ? text.substring(1) : text;
         } catch (CharacterCodingException notUtf8) {
-            throw new ShotException(Finding.of(file, "", "bytes that are not UTF-8", "text in UTF-8", "save it as UTF-8 in a text editor"), notUtf8);
+            throw new ShotException(Finding.of(file, "", "bytes that are not UTF-8", "text in UTF-8", "save it as UTF-8 in a text editor"),
+                    notUtf8);
         }
     }
 
@@ -93,11 +94,13 @@ public final class JsonDoor {
             return Finding.of(file, pointer, "a value too long or too deep" + line, "at most 64 brackets deep and 1 MiB of text a value",
                     "check which program wrote it");
         }
-        return Finding.of(file, pointer, "something that is not JSON" + line + " (" + firstClause(words) + ")", "JSON", "correct that line");
+        return Finding.of(file, pointer, "something that is not JSON" + line + " (" + firstClause(words) + ")", "JSON",
+                "correct that line");
     }
 
     private static String firstClause(String words) {
-        String line = words.split("[\\r\\n]", 2)[0].replaceAll(":? was expecting.*$", "").replaceAll("\\(code \\d+[^)]*\\)", "").replaceAll("\\s+", " ").strip();
+        String line = words.split("[\\r\\n]", 2)[0].replaceAll(":? was expecting.*$", "").replaceAll("\\(code \\d+[^)]*\\)", "")
+                .replaceAll("\\s+", " ").strip();
         return line.length() > 90 ? line.substring(0, 90) + "..." : line;
     }
 }

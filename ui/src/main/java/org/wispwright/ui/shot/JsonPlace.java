@@ -38,8 +38,8 @@ public final class JsonPlace {
     }
 
     /** A complaint about this place. */
-    public ShotException fault(String found, String needed, String toDo) {
-        return new ShotException(Finding.of(file, pointer, found, needed, toDo));
+    public ShotException fault(String found, String needed, String wayOut) {
+        return new ShotException(Finding.of(file, pointer, found, needed, wayOut));
     }
 
     /**
@@ -64,7 +64,8 @@ public final class JsonPlace {
         for (Iterator<String> names = node.fieldNames(); names.hasNext();) {
             String name = names.next();
             if (!keys.contains(name)) {
-                String hint = NearestWord.to(name, keys).map(near -> "did you mean '" + near + "'").orElse("remove it or correct its spelling");
+                String hint = NearestWord.to(name, keys).map(near -> "did you mean '" + near + "'")
+                        .orElse("remove it or correct its spelling");
                 throw at(name).fault("the unknown key '" + shorten(name) + "'", "one of " + String.join(", ", keys), hint);
             }
         }
@@ -107,7 +108,8 @@ public final class JsonPlace {
             throw fault(kind(), "a list of " + range + " values", "write it in [ ]");
         }
         if (node.size() < least || node.size() > most) {
-            throw fault("a list of " + node.size() + " values", range, node.size() < least ? "add what is missing" : "remove what is too much");
+            throw fault("a list of " + node.size() + " values", range, node.size() < least ? "add what is missing"
+                    : "remove what is too much");
         }
         List<JsonPlace> items = new ArrayList<>(node.size());
         for (int n = 0; n < node.size(); n++) {
@@ -123,7 +125,8 @@ public final class JsonPlace {
         }
         String text = node.textValue();
         if (text.isBlank() || text.length() > mostCharacters) {
-            throw fault(text.isBlank() ? "empty text" : "text of " + text.length() + " characters", "1 to " + mostCharacters + " characters",
+            throw fault(text.isBlank() ? "empty text" : "text of " + text.length() + " characters", "1 to " + mostCharacters
+                    + " characters",
                     text.isBlank() ? "fill it in" : "shorten it");
         }
         if (text.chars().anyMatch(c -> Character.isISOControl(c) && c != '\n' && c != '\t')) {

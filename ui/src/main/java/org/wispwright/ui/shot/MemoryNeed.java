@@ -79,7 +79,8 @@ public final class MemoryNeed {
             return;
         }
         String smaller = fitting(cells, steps, memoryBytes)
-                .map(f -> "make it " + f[0] + " x " + f[1] + " x " + f[2] + " cells of " + String.format(Locale.ROOT, "%.3g", cellMetres * cells[0] / f[0]) + " m, ")
+                .map(f -> "make it " + f[0] + " x " + f[1] + " x " + f[2] + " cells of "
+                        + String.format(Locale.ROOT, "%.3g", cellMetres * cells[0] / f[0]) + " m, ")
                 .orElse("");
         throw place.fault("a grid of " + cells[0] + " x " + cells[1] + " x " + cells[2] + " cells, whose solve takes " + inWords(need),
                 "one that fits into " + inWords(memoryBytes), smaller + (smaller.isEmpty() ? "" : "or ") + giveMore(need));

@@ -121,7 +121,8 @@ final class NoteReader {
 
     private static Region rectangle(JsonPlace place, double feather) {
         place.only("left", "top", "right", "bottom");
-        double[] sides = {coordinate(place.need("left")), coordinate(place.need("top")), coordinate(place.need("right")), coordinate(place.need("bottom"))};
+        double[] sides = {coordinate(place.need("left")), coordinate(place.need("top")), coordinate(place.need("right")),
+                coordinate(place.need("bottom"))};
         return place.make(() -> new Region.Rectangle(sides[0], sides[1], sides[2], sides[3], feather));
     }
 

@@ -64,8 +64,10 @@ public final class RenderedFrame {
     }
 
     private static ShotException unreadable(String file, String pointer, Exception broken) {
-        String reason = String.valueOf(broken.getMessage()).replaceAll("(?s)^picture file .*" + Pattern.quote(Path.of(file).getFileName().toString()) + ": ", "")
+        String reason = String.valueOf(broken.getMessage())
+                .replaceAll("(?s)^picture file .*" + Pattern.quote(Path.of(file).getFileName().toString()) + ": ", "")
                 .replaceAll("\\s+", " ").replaceAll("\\.$", "");
-        return new ShotException(new Finding("shot.json", pointer, "picture '" + file + "' " + reason + (reason.contains(";") ? "." : "; copy or render it again.")), broken);
+        return new ShotException(new Finding("shot.json", pointer, "picture '" + file + "' " + reason
+                + (reason.contains(";") ? "." : "; copy or render it again.")), broken);
     }
 }

@@ -68,7 +68,8 @@ final class SetupReader {
         if (findings.all().size() > before) {
             return Optional.empty();
         }
-        return Optional.of(new Shot(name.orElseThrow(), flow.orElseThrow(), look.orElseThrow(), background.orElseThrow(), views, List.of()));
+        return Optional.of(new Shot(name.orElseThrow(), flow.orElseThrow(), look.orElseThrow(), background.orElseThrow(), views,
+                List.of()));
     }
 
     /** Solver steps of the shot as far as they can be read; the flow section complains about substeps itself. */
@@ -94,10 +95,12 @@ final class SetupReader {
         return place.make(() -> new FrameRange(first, last, perSecond));
     }
 
-    private Optional<FlowSetup> flow(Optional<JsonPlace> given, JsonPlace top, Optional<GridShape> grid, Optional<FrameRange> frames, List<Source> sources) {
+    private Optional<FlowSetup> flow(Optional<JsonPlace> given, JsonPlace top, Optional<GridShape> grid, Optional<FrameRange> frames,
+            List<Source> sources) {
         given.ifPresent(p -> p.only("substeps", "interpolation", "sides", "buoyancy", "dissipation"));
         int substeps = given.flatMap(p -> p.ask("substeps")).map(p -> p.whole(1, MOST_SUBSTEPS)).orElse(1);
-        Interpolation interpolation = given.flatMap(p -> p.ask("interpolation")).map(p -> p.choice(Interpolation.class)).orElse(Interpolation.CUBIC);
+        Interpolation interpolation = given.flatMap(p -> p.ask("interpolation")).map(p -> p.choice(Interpolation.class))
+                .orElse(Interpolation.CUBIC);
         Sides sides = given.flatMap(p -> p.ask("sides")).map(SetupReader::sides).orElse(Sides.CLOSED);
         double buoyancy = given.flatMap(p -> p.ask("buoyancy")).map(p -> p.number(-1000, 1000)).orElse(0.0);
         double dissipation = given.flatMap(p -> p.ask("dissipation")).map(p -> p.number(0, 1000)).orElse(0.0);
@@ -105,12 +108,14 @@ final class SetupReader {
             return Optional.empty();
         }
         JsonPlace place = given.orElse(top);
-        return Optional.of(place.make(() -> new FlowSetup(grid.get(), frames.get(), substeps, interpolation, interpolation, sides, buoyancy, dissipation, sources)));
+        return Optional.of(place.make(() -> new FlowSetup(grid.get(), frames.get(), substeps, interpolation, interpolation, sides,
+                buoyancy, dissipation, sources)));
     }
 
     private static Sides sides(JsonPlace place) {
         place.only("left", "right", "floor", "top", "back", "front");
-        return new Sides(side(place, "left"), side(place, "right"), side(place, "floor"), side(place, "top"), side(place, "back"), side(place, "front"));
+        return new Sides(side(place, "left"), side(place, "right"), side(place, "floor"), side(place, "top"), side(place, "back"),
+                side(place, "front"));
     }
 
     private static Side side(JsonPlace place, String key) {
@@ -124,7 +129,8 @@ final class SetupReader {
         for (JsonPlace place : places) {
             findings.attempt(() -> source(place, frames)).ifPresent(source -> {
                 if (!names.add(source.name())) {
-                    findings.add(place.at("name").fault("the name '" + source.name() + "' a second time", "a name of its own for every source", "rename one").finding());
+                    findings.add(place.at("name").fault("the name '" + source.name() + "' a second time",
+                            "a name of its own for every source", "rename one").finding());
                 }
                 sources.add(source);
             });
@@ -164,7 +170,8 @@ final class SetupReader {
         for (JsonPlace place : findings.attempt(() -> top.need("views").items(1, MOST_VIEWS)).orElse(List.of())) {
             findings.attempt(() -> view(place, frames)).ifPresent(view -> {
                 if (!names.add(view.view().name())) {
-                    findings.add(place.at("name").fault("the name '" + view.view().name() + "' a second time", "a name of its own for every view", "rename one").finding());
+                    findings.add(place.at("name").fault("the name '" + view.view().name() + "' a second time",
+                            "a name of its own for every view", "rename one").finding());
                 }
                 views.add(view);
             });
@@ -206,7 +213,8 @@ final class SetupReader {
             findings.check(() -> {
                 int frame = frameKey(place.at(key), key);
                 if (frames.isPresent() && !frames.get().contains(frame)) {
-                    throw place.at(key).fault("frame " + frame, "a frame of the shot, " + frames.get().first() + " to " + frames.get().last(), "remove it or correct the frame");
+                    throw place.at(key).fault("frame " + frame, "a frame of the shot, " + frames.get().first() + " to "
+                            + frames.get().last(), "remove it or correct the frame");
                 }
                 files.put(frame, ShotFolder.named(place.at(key)));
             });

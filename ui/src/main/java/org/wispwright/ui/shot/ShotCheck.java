@@ -86,10 +86,12 @@ public final class ShotCheck {
         List<Source> sources = shot.flow().sources();
         for (int n = 0; n < sources.size(); n++) {
             Source s = sources.get(n);
-            double across = Math.max(outside(s.centreX(), box.originX(), box.nx() * box.cellMetres()), outside(s.centreY(), box.originY(), box.ny() * box.cellMetres()));
+            double across = Math.max(outside(s.centreX(), box.originX(), box.nx() * box.cellMetres()),
+                    outside(s.centreY(), box.originY(), box.ny() * box.cellMetres()));
             double reach = box.isPlane() ? across : Math.max(across, outside(s.centreZ(), box.originZ(), box.nz() * box.cellMetres()));
             if (reach >= s.radiusMetres()) {
-                findings.add(Finding.of("shot.json", "/sources/" + n, "source '" + s.name() + "' outside the box", "a ball that reaches into it",
+                findings.add(Finding.of("shot.json", "/sources/" + n, "source '" + s.name() + "' outside the box",
+                        "a ball that reaches into it",
                         "move it to within " + middle(box)));
             }
         }
@@ -111,7 +113,8 @@ public final class ShotCheck {
             ShotView view = shot.views().get(n);
             String pointer = "/views/" + n;
             Raster raster = view.view().raster();
-            findings.check(() -> requirePixels((long) raster.width() * raster.height(), pointer + "/raster", "a raster of " + raster.inWords(), "make it smaller"));
+            findings.check(() -> requirePixels((long) raster.width() * raster.height(), pointer + "/raster", "a raster of "
+                    + raster.inWords(), "make it smaller"));
             int rows = Math.min(view.view().raster().height(), MOST_ROWS_TRIED);
             View tried = rows == view.view().raster().height() ? view.view() : view.view().withRasterHeight(rows);
             if (!tried.sees(box)) {
@@ -130,19 +133,21 @@ public final class ShotCheck {
         double across = (double) size.height() * raster.width() / raster.height();
         double down = (double) size.width() * raster.height() / raster.width();
         if (Math.abs(size.width() - across) > 0.5 && Math.abs(size.height() - down) > 0.5) {
-            throw new ShotException(Finding.of("shot.json", pointer, "picture '" + file + "' of " + size.width() + "x" + size.height() + " pixels",
+            throw new ShotException(Finding.of("shot.json", pointer, "picture '" + file + "' of " + size.width() + "x" + size.height()
+                    + " pixels",
                     "the aspect of view '" + view.name() + "', " + raster.width() + "x" + raster.height(),
                     "render it again with this aspect, or correct the view's raster and lens"));
         }
-        requirePixels(size.width() * size.height(), pointer, "picture '" + file + "' of " + size.width() + "x" + size.height() + " pixels", "render it smaller");
+        requirePixels(size.width() * size.height(), pointer, "picture '" + file + "' of " + size.width() + "x" + size.height() + " pixels",
+                "render it smaller");
         RenderedFrame.read(folder, file, pointer);
     }
 
-    private void requirePixels(long pixels, String pointer, String what, String toDo) {
+    private void requirePixels(long pixels, String pointer, String what, String wayOut) {
         long need = MemoryNeed.ofPicture(pixels);
         if (need > memoryBytes) {
             throw new ShotException(Finding.of("shot.json", pointer, what + ", which takes " + MemoryNeed.inWords(need),
-                    "one that fits into " + MemoryNeed.inWords(memoryBytes), toDo + ", or " + MemoryNeed.giveMore(need)));
+                    "one that fits into " + MemoryNeed.inWords(memoryBytes), wayOut + ", or " + MemoryNeed.giveMore(need)));
         }
     }
 
@@ -151,13 +156,16 @@ public final class ShotCheck {
         FrameRange frames = shot.flow().frames();
         String range = frames.first() + " to " + frames.last();
         if (!frames.contains(note.frame())) {
-            findings.add(Finding.of(file, "/frame", "frame " + note.frame(), "a frame of the shot, " + range, "correct the frame, or lengthen the shot"));
+            findings.add(Finding.of(file, "/frame", "frame " + note.frame(), "a frame of the shot, " + range,
+                    "correct the frame, or lengthen the shot"));
         } else if (note.frame() == frames.first()) {
-            findings.add(Finding.of(file, "/frame", "the first frame, " + note.frame() + ", which no force can change", "a later frame, up to " + frames.last(), "correct the frame"));
+            findings.add(Finding.of(file, "/frame", "the first frame, " + note.frame() + ", which no force can change",
+                    "a later frame, up to " + frames.last(), "correct the frame"));
         }
         if (shot.view(note.view()).isEmpty()) {
             List<String> names = shot.views().stream().map(v -> v.view().name()).toList();
-            findings.add(Finding.of(file, "/view", "view '" + note.view() + "', which the shot does not have", "one of " + String.join(", ", names),
+            findings.add(Finding.of(file, "/view", "view '" + note.view() + "', which the shot does not have", "one of "
+                    + String.join(", ", names),
                     NearestWord.to(note.view(), names).map(near -> "did you mean '" + near + "'").orElse("correct the name")));
         }
         for (int n = 0; n < note.holds().size(); n++) {

@@ -42,7 +42,8 @@ public final class ShotFolder {
         try {
             real = folder.toRealPath();
         } catch (IOException unreadable) {
-            throw new ShotException(Finding.of(folder.toString(), "", "a folder that cannot be entered", "a readable shot folder", "check its permissions"), unreadable);
+            throw new ShotException(Finding.of(folder.toString(), "", "a folder that cannot be entered", "a readable shot folder",
+                    "check its permissions"), unreadable);
         }
         ShotFolder shot = new ShotFolder(folder, real);
         if (!Files.exists(folder.resolve("shot.json"))) {
@@ -66,19 +67,23 @@ public final class ShotFolder {
     public Path file(String relative) {
         Path path = inside(relative);
         if (!Files.exists(path)) {
-            throw new ShotException(Finding.of(relative, "", "no such file", "this file in the shot folder", "put it there or correct the name"));
+            throw new ShotException(Finding.of(relative, "", "no such file", "this file in the shot folder",
+                    "put it there or correct the name"));
         }
         Path where;
         try {
             where = path.toRealPath();
         } catch (IOException unreadable) {
-            throw new ShotException(Finding.of(relative, "", "a file that cannot be reached", "a readable file", "check its permissions"), unreadable);
+            throw new ShotException(Finding.of(relative, "", "a file that cannot be reached", "a readable file", "check its permissions"),
+                    unreadable);
         }
         if (!where.startsWith(real)) {
-            throw new ShotException(Finding.of(relative, "", "a link that leads out of the shot folder", "a file inside it", "copy the file into the folder"));
+            throw new ShotException(Finding.of(relative, "", "a link that leads out of the shot folder", "a file inside it",
+                    "copy the file into the folder"));
         }
         if (!Files.isRegularFile(where) || !Files.isReadable(where)) {
-            throw new ShotException(Finding.of(relative, "", Files.isDirectory(where) ? "a folder" : "something that is not a readable file", "a readable file",
+            throw new ShotException(Finding.of(relative, "", Files.isDirectory(where) ? "a folder"
+                    : "something that is not a readable file", "a readable file",
                     "check its name and permissions"));
         }
         return path;
@@ -106,7 +111,8 @@ public final class ShotFolder {
     }
 
     private static boolean leaves(String relative) {
-        if (relative.isBlank() || relative.indexOf('\0') >= 0 || relative.startsWith("/") || relative.startsWith("\\") || DRIVE.matcher(relative).matches()) {
+        if (relative.isBlank() || relative.indexOf('\0') >= 0 || relative.startsWith("/") || relative.startsWith("\\")
+                || DRIVE.matcher(relative).matches()) {
             return true;
         }
         for (String part : relative.split("[/\\\\]", -1)) {
@@ -132,12 +138,14 @@ public final class ShotFolder {
         try (InputStream in = Files.newInputStream(path)) {
             long size = Files.size(path);
             if (size > mostBytes) {
-                throw new ShotException(Finding.of(relative, "", size + " bytes", "at most " + mostBytes + " bytes", "check that it is the right file"));
+                throw new ShotException(Finding.of(relative, "", size + " bytes", "at most " + mostBytes + " bytes",
+                        "check that it is the right file"));
             }
             // A file may grow between the question and the reading: never take more than was allowed.
             return in.readNBytes((int) Math.min(mostBytes, Integer.MAX_VALUE - 16));
         } catch (IOException unreadable) {
-            throw new ShotException(Finding.of(relative, "", "a file that cannot be read", "a readable file", "check its permissions"), unreadable);
+            throw new ShotException(Finding.of(relative, "", "a file that cannot be read", "a readable file", "check its permissions"),
+                    unreadable);
         }
     }
 
@@ -152,13 +160,15 @@ public final class ShotFolder {
             return List.of();
         }
         try (Stream<Path> entries = Files.list(folder)) {
-            List<String> names = entries.map(p -> p.getFileName().toString()).filter(n -> n.endsWith(ending)).sorted().limit(most + 1L).toList();
+            List<String> names = entries.map(p -> p.getFileName().toString()).filter(n -> n.endsWith(ending)).sorted().limit(most + 1L)
+                    .toList();
             if (names.size() > most) {
                 throw new ShotException(Finding.of(subFolder, "", "more than " + most + " files", "at most " + most, "split the shot"));
             }
             return names;
         } catch (IOException unreadable) {
-            throw new ShotException(Finding.of(subFolder, "", "a folder that cannot be listed", "a readable folder", "check its permissions"), unreadable);
+            throw new ShotException(Finding.of(subFolder, "", "a folder that cannot be listed", "a readable folder",
+                    "check its permissions"), unreadable);
         }
     }
 }

@@ -88,7 +88,8 @@ public final class TakeDraft implements AutoCloseable {
      */
     public void finishAsOriginal(TakeRecord record) {
         if (!rename(record, 0)) {
-            throw new ShotException(Finding.of("takes/000", "", "an original that is already there", "no take 0 yet", "keep it, or move the folder takes away first"));
+            throw new ShotException(Finding.of("takes/000", "", "an original that is already there", "no take 0 yet",
+                    "keep it, or move the folder takes away first"));
         }
     }
 
@@ -128,7 +129,8 @@ public final class TakeDraft implements AutoCloseable {
 
     private int next() {
         try (Stream<Path> entries = Files.list(takes)) {
-            return 1 + entries.map(p -> p.getFileName().toString()).filter(n -> n.matches("[0-9]{3}")).mapToInt(Integer::parseInt).max().orElse(0);
+            return 1 + entries.map(p -> p.getFileName().toString()).filter(n -> n.matches("[0-9]{3}")).mapToInt(Integer::parseInt).max()
+                    .orElse(0);
         } catch (IOException refused) {
             throw cannotWrite(takes, refused);
         }
@@ -164,7 +166,8 @@ public final class TakeDraft implements AutoCloseable {
     private static void sweep(Path takes) throws IOException {
         List<Path> drafts;
         try (Stream<Path> entries = Files.list(takes)) {
-            drafts = entries.filter(p -> p.getFileName().toString().startsWith(PREFIX) && Files.isDirectory(p, LinkOption.NOFOLLOW_LINKS)).toList();
+            drafts = entries.filter(p -> p.getFileName().toString().startsWith(PREFIX) && Files.isDirectory(p, LinkOption.NOFOLLOW_LINKS))
+                    .toList();
         }
         for (Path draft : drafts) {
             if (isLeftOver(draft)) {
@@ -199,8 +202,10 @@ public final class TakeDraft implements AutoCloseable {
     }
 
     private static ShotException cannotWrite(Path where, IOException refused) {
-        String reason = refused.getMessage() == null ? refused.getClass().getSimpleName() : refused.getClass().getSimpleName().replace("Exception", "") + ": " + refused.getMessage();
-        return new ShotException(Finding.of(where.toString(), "", "a place that cannot be written to (" + reason + ")", "a writable folder with room on the disk",
+        String reason = refused.getMessage() == null ? refused.getClass().getSimpleName() : refused.getClass().getSimpleName()
+                .replace("Exception", "") + ": " + refused.getMessage();
+        return new ShotException(Finding.of(where.toString(), "", "a place that cannot be written to (" + reason + ")",
+                "a writable folder with room on the disk",
                 "check permissions and free space"), refused);
     }
 }

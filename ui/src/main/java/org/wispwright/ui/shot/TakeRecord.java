@@ -97,7 +97,8 @@ public record TakeRecord(Kind kind, String tool, String setupSha256, ObjectNode 
 
     /** As the bytes of take.json. */
     byte[] json(int number) {
-        ObjectNode top = object().put("wispwright", SetupReader.FORMAT).put("take", number).put("kind", JsonPlace.word(kind)).put("tool", tool)
+        ObjectNode top = object().put("wispwright", SetupReader.FORMAT).put("take", number).put("kind", JsonPlace.word(kind))
+                .put("tool", tool)
                 .put("setupSha256", setupSha256);
         top.set("settings", settings);
         top.set("figures", figures);

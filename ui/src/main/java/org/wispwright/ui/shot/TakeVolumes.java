@@ -58,7 +58,8 @@ final class TakeVolumes {
         try {
             NpyFile.Contents contents = NpyFile.read(folder.file(file));
             if (!Arrays.equals(shape, contents.shape())) {
-                throw new IOException("has shape " + Arrays.toString(contents.shape()) + ", the shot's grid needs " + Arrays.toString(shape));
+                throw new IOException("has shape " + Arrays.toString(contents.shape()) + ", the shot's grid needs "
+                        + Arrays.toString(shape));
             }
             return contents.values();
         } catch (IOException broken) {
@@ -67,7 +68,8 @@ final class TakeVolumes {
     }
 
     private static ShotException damaged(String file, Exception broken) {
-        String reason = String.valueOf(broken.getMessage()).replaceAll("(?s)^volume file .*" + Pattern.quote(Path.of(file).getFileName().toString()) + ": ", "")
+        String reason = String.valueOf(broken.getMessage())
+                .replaceAll("(?s)^volume file .*" + Pattern.quote(Path.of(file).getFileName().toString()) + ": ", "")
                 .replaceAll("\\s+", " ").replaceAll("; [^;]*$", "").replaceAll("\\.$", "");
         return new ShotException(new Finding(file, "", "the file " + reason + "; move the take away and make it again."), broken);
     }

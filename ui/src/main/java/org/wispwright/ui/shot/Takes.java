@@ -46,9 +46,11 @@ public final class Takes {
             return List.of();
         }
         try (Stream<Path> entries = Files.list(takes)) {
-            return entries.filter(Files::isDirectory).map(p -> p.getFileName().toString()).filter(n -> n.matches("[0-9]{3}")).map(Integer::valueOf).sorted().toList();
+            return entries.filter(Files::isDirectory).map(p -> p.getFileName().toString()).filter(n -> n.matches("[0-9]{3}"))
+                    .map(Integer::valueOf).sorted().toList();
         } catch (IOException unreadable) {
-            throw new ShotException(Finding.of("takes", "", "a folder that cannot be listed", "a readable folder", "check its permissions"), unreadable);
+            throw new ShotException(Finding.of("takes", "", "a folder that cannot be listed", "a readable folder",
+                    "check its permissions"), unreadable);
         }
     }
 
@@ -70,8 +72,10 @@ public final class Takes {
     public TakeRecord requireOf(int number, FlowSetup flow) {
         TakeRecord record = record(number);
         if (!record.belongsTo(flow)) {
-            throw new ShotException(Finding.of(file(number, "take.json"), "/setupSha256", "a take that was made with another set-up than shot.json has now",
-                    "a take of this set-up", number == 0 ? "move the folder takes away and simulate again" : "solve again, or put shot.json back as it was"));
+            throw new ShotException(Finding.of(file(number, "take.json"), "/setupSha256",
+                    "a take that was made with another set-up than shot.json has now",
+                    "a take of this set-up", number == 0 ? "move the folder takes away and simulate again"
+                            : "solve again, or put shot.json back as it was"));
         }
         return record;
     }
@@ -118,7 +122,8 @@ public final class Takes {
     private void require(int number) {
         if (!has(number)) {
             List<Integer> there = numbers();
-            throw new ShotException(Finding.of("takes/" + name(number), "", "no such take", there.isEmpty() ? "a take of the shot" : "one of " + there,
+            throw new ShotException(Finding.of("takes/" + name(number), "", "no such take", there.isEmpty() ? "a take of the shot"
+                    : "one of " + there,
                     there.isEmpty() ? "run 'simulate' first, it makes take 0" : "give a number that exists"));
         }
     }

@@ -56,7 +56,8 @@ public final class CompareWork {
             takes.requireOf(take, flow);
         }
         if (shot.notes().isEmpty()) {
-            throw new ShotException(new Finding("notes", "", "there is no note, so there is nothing to compare; add a file notes/ID.json (docs/shot-folder.md)."));
+            throw new ShotException(new Finding("notes", "",
+                    "there is no note, so there is nothing to compare; add a file notes/ID.json (docs/shot-folder.md)."));
         }
         List<Comparison.OfNote> notes = new ArrayList<>();
         for (Note note : shot.notes()) {
@@ -64,7 +65,8 @@ public final class CompareWork {
             progress.now("compare: note " + note.id());
             ShotView view = shot.view(note.view()).orElseThrow();
             Picture original = PictureWork.picture(shot, takes.density(0, note.frame(), flow), view.view(), lanes);
-            Picture shown = before == 0 ? original : PictureWork.picture(shot, takes.density(before, note.frame(), flow), view.view(), lanes);
+            Picture shown = before == 0 ? original : PictureWork.picture(shot, takes.density(before, note.frame(), flow), view.view(),
+                    lanes);
             Picture got = PictureWork.picture(shot, takes.density(after, note.frame(), flow), view.view(), lanes);
             notes.add(ofNote(note, original, shown, got));
         }
@@ -80,7 +82,8 @@ public final class CompareWork {
         double start = loss.value(original);
         double startFinest = loss.finest(original);
         if (!(start > LEAST_WISH && startFinest > 0)) {
-            throw new ShotException(new Finding("notes/" + note.id() + ".json", "/retouch", "it changes nothing that can be seen on frame " + note.frame()
+            throw new ShotException(new Finding("notes/" + note.id() + ".json", "/retouch", "it changes nothing that can be seen on frame "
+                    + note.frame()
                     + "; check where its strokes and handles lie."));
         }
         double met = 1 - loss.value(got) / start;
@@ -103,11 +106,13 @@ public final class CompareWork {
             Optional<Picture> rendered = Optional.ofNullable(view.rendered().get(note.frame()))
                     .map(file -> RenderedFrame.read(folder, file, "/views/" + shot.views().indexOf(view) + "/rendered/" + note.frame()));
             List<Region> holds = note.holds().stream().filter(h -> h.holds(note.frame())).map(Hold::region).toList();
-            rows.add(new SheetRow(note.id(), note.words(), "frame " + note.frame() + ", view " + note.view(), rendered, note.retouch(), holds,
+            rows.add(new SheetRow(note.id(), note.words(), "frame " + note.frame() + ", view " + note.view(), rendered, note.retouch(),
+                    holds,
                     n.shown(), n.wanted(), n.got(), n.met()));
         }
         String against = comparison.before() == 0 ? "the original" : "take " + Takes.name(comparison.before());
-        String subtitle = "take " + Takes.name(comparison.after()) + " against " + against + ", frames " + shot.flow().frames().first() + " to " + shot.flow().frames().last();
+        String subtitle = "take " + Takes.name(comparison.after()) + " against " + against + ", frames " + shot.flow().frames().first()
+                + " to " + shot.flow().frames().last();
         return new Sheet(shot.name(), subtitle, comparison.before() == 0 ? "original" : against, shot.background(), rows);
     }
 
@@ -143,7 +148,8 @@ public final class CompareWork {
             PictureFile.write(PictureWork.over(n.shown(), shot.background()), out.resolve(id + ".original.png"));
             PictureFile.write(PictureWork.over(n.wanted(), shot.background()), out.resolve(id + ".wanted.png"));
             PictureFile.write(PictureWork.over(n.got(), shot.background()), out.resolve(id + ".got.png"));
-            PictureFile.write(out.resolve(id + ".difference.png"), stream -> ImageIO.write(sheet.difference(n.got(), n.wanted()), "png", stream));
+            PictureFile.write(out.resolve(id + ".difference.png"),
+                    stream -> ImageIO.write(sheet.difference(n.got(), n.wanted()), "png", stream));
         }
         PictureFile.write(out.resolve("sheet.png"), stream -> ImageIO.write(sheet.paint(), "png", stream));
         writeJson(report(comparison).put("differenceGain", sheet.gain()), out.resolve("compare.json"));

@@ -29,6 +29,7 @@ public record Comparison(int before, int after, List<OfNote> notes) {
      * @param finestErrorRatio weighted squared distance of got from wanted, as a share of the original's, at this raster alone
      * @param holdChange largest mean absolute change from the original of the note's holds on this frame, over RGBA; 0 without one
      */
-    public record OfNote(Note note, Picture original, Picture shown, Picture wanted, Picture got, double met, double finestErrorRatio, double holdChange) {
+    public record OfNote(Note note, Picture original, Picture shown, Picture wanted, Picture got, double met, double finestErrorRatio,
+            double holdChange) {
     }
 }

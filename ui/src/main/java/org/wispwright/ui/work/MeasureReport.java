@@ -15,9 +15,12 @@ public final class MeasureReport {
 
     /** For programs; shares of 1. */
     public static ObjectNode of(Measurement m) {
-        ObjectNode top = JsonNodeFactory.instance.objectNode().put("cells", m.grid().inWords()).put("frames", m.frames()).put("threads", m.threads())
-                .put("stepNanosACell", m.stepNanosACell()).put("forwardSeconds", m.forwardSeconds()).put("gradientSeconds", m.gradientSeconds())
-                .put("ratio", m.ratio()).put("snapshots", m.snapshots()).put("plainSteps", m.plainSteps()).put("peakMemoryBytes", PeakMemory.bytes());
+        ObjectNode top = JsonNodeFactory.instance.objectNode().put("cells", m.grid().inWords()).put("frames", m.frames())
+                .put("threads", m.threads())
+                .put("stepNanosACell", m.stepNanosACell()).put("forwardSeconds", m.forwardSeconds())
+                        .put("gradientSeconds", m.gradientSeconds())
+                .put("ratio", m.ratio()).put("snapshots", m.snapshots()).put("plainSteps", m.plainSteps())
+                        .put("peakMemoryBytes", PeakMemory.bytes());
         shares(top.putObject("forwardShare"), m.forwardShare());
         shares(top.putObject("gradientShare"), m.gradientShare());
         return top;
@@ -29,14 +32,16 @@ public final class MeasureReport {
         words.append(String.format(Locale.ROOT, "%s, %d frames, %d threads%n", m.grid().inWords(), m.frames(), m.threads()));
         words.append(String.format(Locale.ROOT, "one step            %8.1f ns a cell%n", m.stepNanosACell()));
         words.append(String.format(Locale.ROOT, "forward run         %8.3f s%n", m.forwardSeconds()));
-        words.append(String.format(Locale.ROOT, "gradient            %8.3f s, %.2f times the forward run, %d states kept%n", m.gradientSeconds(), m.ratio(), m.snapshots()));
+        words.append(String.format(Locale.ROOT, "gradient            %8.3f s, %.2f times the forward run, %d states kept%n",
+                m.gradientSeconds(), m.ratio(), m.snapshots()));
         words.append(String.format(Locale.ROOT, "peak memory         %8s%n", MemoryNeed.inWords(PeakMemory.bytes())));
         words.append(String.format(Locale.ROOT, "share of time       %8s %8s", "forward", "gradient"));
         double forward = total(m.forwardShare());
         double gradient = total(m.gradientShare());
         for (Map.Entry<Clock.Part, Double> part : m.gradientShare().entrySet()) {
             double share = m.forwardShare().getOrDefault(part.getKey(), 0.0);
-            words.append(String.format(Locale.ROOT, "%n  %-18s%6.1f %% %6.1f %%", word(part.getKey()), 100 * share / forward, 100 * part.getValue() / gradient));
+            words.append(String.format(Locale.ROOT, "%n  %-20s%4.1f %% %6.1f %%", word(part.getKey()), 100 * share / forward,
+                    100 * part.getValue() / gradient));
         }
         return words.toString();
     }

@@ -26,6 +26,7 @@ public final class PeakMemory {
     }
 
     private static long pools() {
-        return ManagementFactory.getMemoryPoolMXBeans().stream().map(MemoryPoolMXBean::getPeakUsage).mapToLong(usage -> usage == null ? 0 : usage.getUsed()).sum();
+        return ManagementFactory.getMemoryPoolMXBeans().stream().map(MemoryPoolMXBean::getPeakUsage)
+                .mapToLong(usage -> usage == null ? 0 : usage.getUsed()).sum();
     }
 }

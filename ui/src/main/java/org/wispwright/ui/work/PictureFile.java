@@ -40,7 +40,8 @@ public final class PictureFile {
     }
 
     static ShotException cannotWrite(Path out, IOException refused) {
-        return new ShotException(new Finding(out.toString(), "", "it cannot be written (" + refused.getClass().getSimpleName().replace("Exception", "") + ": "
+        return new ShotException(new Finding(out.toString(), "", "it cannot be written (" + refused.getClass().getSimpleName()
+                .replace("Exception", "") + ": "
                 + refused.getMessage() + "); give a place in a folder that exists and can be written to."), refused);
     }
 }

@@ -23,7 +23,8 @@ public final class ShotProblem {
      */
     public static SolveProblem of(Shot shot) {
         if (shot.notes().isEmpty()) {
-            throw new ShotException(new Finding("notes", "", "there is no note, so there is nothing to solve; add a file notes/ID.json (docs/shot-folder.md)."));
+            throw new ShotException(new Finding("notes", "",
+                    "there is no note, so there is nothing to solve; add a file notes/ID.json (docs/shot-folder.md)."));
         }
         List<View> views = shot.views().stream().map(v -> v.view()).toList();
         List<SolveProblem.Note> notes = new ArrayList<>();

@@ -47,7 +47,8 @@ public final class SimulateWork {
         try (TakeDraft draft = takes.draft()) {
             FrameWriting writing = new FrameWriting(flow, draft, "simulate", progress);
             SmokeSolver solver = new SmokeSolver(flow, lanes);
-            Simulation.run(solver, new SmokeState(flow.grid()), null, null, flow.frames().last(), cancel::wished, (frame, state, force) -> writing.frame(frame, state, solver));
+            Simulation.run(solver, new SmokeState(flow.grid()), null, null, flow.frames().last(), cancel::wished,
+                    (frame, state, force) -> writing.frame(frame, state, solver));
             cancel.stopIfWished();
             draft.finishAsOriginal(TakeRecord.original(Build.version(), flow));
             return new Result(true, flow.frames().count(), seconds(start), writing.lastMass(), writing.divergenceMax());

@@ -75,14 +75,16 @@ public final class SolveWork {
             FrameWriting writing = new FrameWriting(flow, draft, "take", progress);
             SmokeSolver solver = new SmokeSolver(flow, lanes);
             ForceBasis basis = Solve.basis(flow, lanes);
-            Simulation.run(solver, new SmokeState(flow.grid()), basis, solve.unknowns(), flow.frames().last(), cancel::wished, (frame, state, force) -> writing.frame(frame, state, solver));
+            Simulation.run(solver, new SmokeState(flow.grid()), basis, solve.unknowns(), flow.frames().last(), cancel::wished,
+                    (frame, state, force) -> writing.frame(frame, state, solver));
             draft.writeForce(solve.unknowns());
             double massRatio = original.lastMass() > 0 ? writing.lastMass() / original.lastMass() : 1;
             cancel.stopIfWished();
             int take = draft.finish(record(shot, manner, solve, writing.divergenceMax(), massRatio, forceRms));
             Comparison comparison = CompareWork.compare(folder, shot, 0, take, lanes, progress, new Cancel());
             double departure = Departure.of(shot, takes, take, lanes, new Cancel());
-            return new Result(take, solve, comparison, writing.divergenceMax(), massRatio, forceRms, departure, (System.nanoTime() - start) / 1e9);
+            return new Result(take, solve, comparison, writing.divergenceMax(), massRatio, forceRms, departure,
+                    (System.nanoTime() - start) / 1e9);
         } catch (SolveCancelled asked) {
             throw new Cancel.Cancelled();
         }
@@ -123,7 +125,8 @@ public final class SolveWork {
         settings.set("notes", notes(shot));
         settings.put("untilLoss", manner.until().loss());
         ObjectNode figures = TakeRecord.object().put("gradients", solve.gradients()).put("forceRms", forceRms).put("massRatio", massRatio)
-                .put("divergenceMax", divergenceMax).put("energyWeight", solve.energyWeight()).put("energyShare", solve.energyShare()).put("ended", solve.ended());
+                .put("divergenceMax", divergenceMax).put("energyWeight", solve.energyWeight()).put("energyShare", solve.energyShare())
+                        .put("ended", solve.ended());
         ObjectNode met = figures.putObject("met");
         for (int n = 0; n < Math.min(shot.notes().size(), solve.met().size()); n++) {
             met.put(shot.notes().get(n).id(), solve.met().get(n));

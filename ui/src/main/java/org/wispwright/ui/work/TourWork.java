@@ -60,7 +60,8 @@ public final class TourWork {
                 return step.on(jar.getPath("/samples/" + SAMPLE));
             }
         } catch (IOException | URISyntaxException broken) {
-            throw new IllegalStateException("the sample " + SAMPLE + " cannot be read from the program; build it again with mvn package", broken);
+            throw new IllegalStateException("the sample " + SAMPLE + " cannot be read from the program; build it again with mvn package",
+                    broken);
         }
     }
 
@@ -80,7 +81,8 @@ public final class TourWork {
         copy(sample, folder);
         Shot shot = ShotCheck.require(folder, manner.memoryBytes());
         ShotFolder shotFolder = ShotFolder.open(folder);
-        progress.milestone("tour: '" + shot.name() + "', " + shot.flow().grid().inWords() + ", " + shot.flow().frames().count() + " frames, " + shot.notes().size() + " notes");
+        progress.milestone("tour: '" + shot.name() + "', " + shot.flow().grid().inWords() + ", " + shot.flow().frames().count()
+                + " frames, " + shot.notes().size() + " notes");
         SolveWork.Result solve = SolveWork.run(shotFolder, shot, manner, lanes, progress, cancel);
         CompareWork.write(shotFolder, shot, solve.comparison(), out);
         ObjectNode report = SolveReport.of(solve);
@@ -94,7 +96,8 @@ public final class TourWork {
             if (Files.isDirectory(out)) {
                 try (Stream<Path> entries = Files.list(out)) {
                     if (entries.findAny().isPresent()) {
-                        throw new ShotException(new Finding(out.toString(), "", "this folder is not empty, and the tour overwrites nothing; move it away or give another with --out."));
+                        throw new ShotException(new Finding(out.toString(), "",
+                                "this folder is not empty, and the tour overwrites nothing; move it away or give another with --out."));
                     }
                 }
             } else {

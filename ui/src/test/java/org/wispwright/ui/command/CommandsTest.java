@@ -33,7 +33,8 @@ class CommandsTest {
         assertTrue(Files.isRegularFile(shot.folder().resolve("takes/000/density.1006.npy")));
         assertTrue(Files.isRegularFile(shot.folder().resolve("takes/000/take.json")));
         Path file = place.resolve("front.png");
-        Run drawn = Run.of("picture", shot.folder().toString(), "--take", "0", "--frame", "1006", "--view", "front", "--out", file.toString());
+        Run drawn = Run.of("picture", shot.folder().toString(), "--take", "0", "--frame", "1006", "--view", "front", "--out",
+                file.toString());
         assertEquals(0, drawn.code(), drawn.err());
         assertEquals(48, ImageIO.read(file.toFile()).getWidth());
         assertEquals(64, ImageIO.read(file.toFile()).getHeight());
@@ -56,7 +57,8 @@ class CommandsTest {
         assertEquals(0, Run.of("simulate", shot.folder().toString()).code());
         shot.swap("shot.json", "\"buoyancy\": 3.0", "\"buoyancy\": 4.0");
         SortedMap<String, String> before = SmallShot.listing(place);
-        for (Run run : new Run[] {Run.of("simulate", shot.folder().toString()), Run.of("picture", shot.folder().toString(), "--take", "0", "--frame", "1006",
+        for (Run run : new Run[] {Run.of("simulate", shot.folder().toString()),
+                Run.of("picture", shot.folder().toString(), "--take", "0", "--frame", "1006",
                 "--view", "front", "--out", place.resolve("front.png").toString())}) {
             assertEquals(3, run.code(), run.err());
             assertTrue(run.err().contains("another set-up"), run.err());
@@ -153,7 +155,8 @@ class CommandsTest {
     @Test
     void aTakeThatIsNotThereIsRefused() {
         SmallShot shot = SmallShot.in(place.resolve("yard"));
-        Run run = Run.of("picture", shot.folder().toString(), "--take", "3", "--frame", "1006", "--view", "front", "--out", place.resolve("a.png").toString());
+        Run run = Run.of("picture", shot.folder().toString(), "--take", "3", "--frame", "1006", "--view", "front", "--out",
+                place.resolve("a.png").toString());
         assertEquals(3, run.code());
         assertTrue(run.err().contains("takes/003") && run.err().contains("simulate"), run.err());
     }
@@ -165,15 +168,20 @@ class CommandsTest {
         Path volume = shot.folder().resolve("takes/000/density.1006.npy");
         byte[] whole = Files.readAllBytes(volume);
         Files.write(volume, Arrays.copyOf(whole, whole.length - 8));
-        Run run = Run.of("picture", shot.folder().toString(), "--take", "0", "--frame", "1006", "--view", "front", "--out", place.resolve("a.png").toString());
+        Run run = Run.of("picture", shot.folder().toString(), "--take", "0", "--frame", "1006", "--view", "front", "--out",
+                place.resolve("a.png").toString());
         assertEquals(3, run.code(), run.err());
         assertTrue(run.err().contains("density.1006.npy"), run.err());
         assertFalse(Files.exists(place.resolve("a.png")));
     }
 
     @ParameterizedTest
-    @ValueSource(strings = {"", "paint", "check", "check a b", "check . --memory lots", "check . --memory -2G", "check . --memory 0", "check . --colour red",
-        "simulate . --threads 0", "simulate . --threads many", "compare . --takes 0 --out x", "measure --grid 4", "measure --frames 1", "measure --grid big", "measure extra", "solve . --until soon", "solve . --until loss=2", "solve . --until iterations=0.5", "solve . --until seconds=0", "compare . --takes a,b --out x", "picture . --take 0", "picture . --take x --frame 1 --view v --out a.png",
+    @ValueSource(strings = {"", "paint", "check", "check a b", "check . --memory lots", "check . --memory -2G", "check . --memory 0",
+            "check . --colour red",
+        "simulate . --threads 0", "simulate . --threads many", "compare . --takes 0 --out x", "measure --grid 4", "measure --frames 1",
+                "measure --grid big", "measure extra", "solve . --until soon", "solve . --until loss=2", "solve . --until iterations=0.5",
+                "solve . --until seconds=0", "compare . --takes a,b --out x", "picture . --take 0",
+                "picture . --take x --frame 1 --view v --out a.png",
         "picture . --take 0 --frame 1 --view v --out a.gif", "picture . --take 0 --frame 1 --view v --out a.png --height 0"})
     void wrongUsageIsTwo(String line) {
         Run run = Run.of(line.isEmpty() ? new String[0] : line.split(" "));

@@ -250,7 +250,8 @@ class FaultsTest {
 
     @Test
     void viewThatDoesNotSeeTheBox() {
-        shot.swap("shot.json", "\"positionMetres\": [1, 2, 8], \"aimMetres\": [1, 2, 1]", "\"positionMetres\": [1, 2, 8], \"aimMetres\": [1, 2, 20]");
+        shot.swap("shot.json", "\"positionMetres\": [1, 2, 8], \"aimMetres\": [1, 2, 1]",
+                "\"positionMetres\": [1, 2, 8], \"aimMetres\": [1, 2, 20]");
         refused("shot.json at /views/0", "no pixel sees the box");
     }
 
@@ -307,7 +308,8 @@ class FaultsTest {
         Run run = Run.of("check", shot.folder().toString(), "--json");
         assertEquals(3, run.code());
         assertEquals(3, run.err().lines().count(), run.err());
-        assertTrue(run.out().contains("\"pointer\" : \"/flow/buoyancy\"") && run.out().contains("\"file\" : \"notes/lean.json\""), run.out());
+        assertTrue(run.out().contains("\"pointer\" : \"/flow/buoyancy\"") && run.out().contains("\"file\" : \"notes/lean.json\""),
+                run.out());
     }
 
     private void refused(String... phrases) {

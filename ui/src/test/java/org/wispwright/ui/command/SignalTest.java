@@ -28,8 +28,10 @@ class SignalTest {
         shot.swap("shot.json", "\"last\": 1006", "\"last\": 2000");
         SortedMap<String, String> before = SmallShot.listing(shot.folder());
         Path said = place.resolve("said.txt");
-        Process process = new ProcessBuilder(Path.of(System.getProperty("java.home"), "bin", "java").toString(), "-cp", System.getProperty("surefire.test.class.path", System.getProperty("java.class.path")),
-                "org.wispwright.ui.command.Main", "simulate", shot.folder().toString()).redirectErrorStream(true).redirectOutput(said.toFile()).start();
+        Process process = new ProcessBuilder(Path.of(System.getProperty("java.home"), "bin", "java").toString(), "-cp",
+                System.getProperty("surefire.test.class.path", System.getProperty("java.class.path")),
+                "org.wispwright.ui.command.Main", "simulate", shot.folder().toString()).redirectErrorStream(true)
+                        .redirectOutput(said.toFile()).start();
         try {
             Path takes = shot.folder().resolve("takes");
             for (int wait = 0; wait < 600 && !Files.exists(takes) && process.isAlive(); wait++) {

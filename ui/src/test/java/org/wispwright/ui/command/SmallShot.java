@@ -29,7 +29,8 @@ public final class SmallShot {
                 "buoyancy": 3.0, "dissipation": 0.1
               },
               "sources": [
-                {"name": "kiln mouth", "centreMetres": [1, 0.6, 1], "radiusMetres": 0.5, "edgeMetres": 0.25, "ratePerSecond": 6, "frames": [1001, 1006]}
+                {"name": "kiln mouth", "centreMetres": [1, 0.6, 1], "radiusMetres": 0.5, "edgeMetres": 0.25, "ratePerSecond": 6,
+                 "frames": [1001, 1006]}
               ],
               "look": {
                 "extinctionPerMetre": 6, "albedo": [0.8, 0.8, 0.8], "ambient": [0.4, 0.4, 0.4],
@@ -147,7 +148,8 @@ public final class SmallShot {
         try (Stream<Path> paths = Files.walk(root)) {
             List<Path> list = paths.toList();
             for (Path path : list) {
-                String sum = Files.isRegularFile(path) ? HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(Files.readAllBytes(path))) : "folder";
+                String sum = Files.isRegularFile(path) ? HexFormat.of()
+                        .formatHex(MessageDigest.getInstance("SHA-256").digest(Files.readAllBytes(path))) : "folder";
                 all.put(root.relativize(path).toString(), sum);
             }
         } catch (IOException broken) {

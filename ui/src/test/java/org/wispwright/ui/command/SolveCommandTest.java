@@ -32,10 +32,12 @@ class SolveCommandTest {
         Run run = Run.of("solve", shot.folder().toString(), "--until", "iterations=4", "--report", report.toString());
         assertEquals(0, run.code(), run.err());
         JsonNode figures = new ObjectMapper().readTree(report.toFile());
-        for (String key : List.of("divergenceMax", "massRatio", "forceRms", "gradients", "seconds", "peakMemoryBytes", "bands", "departure", "losses")) {
+        for (String key : List.of("divergenceMax", "massRatio", "forceRms", "gradients", "seconds", "peakMemoryBytes", "bands",
+                "departure", "losses")) {
             assertTrue(figures.has(key), key);
         }
-        assertEquals(List.of("lean", "open"), List.of(figures.get("notes").get(0).get("id").textValue(), figures.get("notes").get(1).get("id").textValue()));
+        assertEquals(List.of("lean", "open"), List.of(figures.get("notes").get(0).get("id").textValue(), figures.get("notes").get(1)
+                .get("id").textValue()));
         assertTrue(figures.get("notes").get(0).has("met") && figures.get("notes").get(0).has("finestErrorRatio"));
         JsonNode take = new ObjectMapper().readTree(shot.folder().resolve("takes/001/take.json").toFile());
         assertEquals("solve", take.get("kind").textValue());
@@ -80,7 +82,8 @@ class SolveCommandTest {
         };
         try (Lanes lanes = new Lanes(2)) {
             SolveWork.Manner manner = new SolveWork.Manner(64L << 20, StopRule.OWN, true);
-            assertThrows(Cancel.Cancelled.class, () -> SolveWork.run(ShotFolder.open(shot.folder()), ShotCheck.require(shot.folder(), 1L << 30), manner, lanes, stopping, cancel));
+            assertThrows(Cancel.Cancelled.class, () -> SolveWork.run(ShotFolder.open(shot.folder()),
+                    ShotCheck.require(shot.folder(), 1L << 30), manner, lanes, stopping, cancel));
         }
         assertEquals(before, SmallShot.listing(place));
     }

@@ -45,7 +45,8 @@ class TourTest {
             TourWork.run(sample, out, SHORT, lanes, Progress.SILENT, new Cancel());
         }
         JsonNode report = new ObjectMapper().readTree(out.resolve("report.json").toFile());
-        for (String key : new String[] {"divergenceMax", "massRatio", "forceRms", "gradients", "seconds", "peakMemoryBytes", "bands", "departure"}) {
+        for (String key : new String[] {"divergenceMax", "massRatio", "forceRms", "gradients", "seconds", "peakMemoryBytes", "bands",
+                "departure"}) {
             assertTrue(report.has(key), key);
         }
         assertEquals(2, report.get("notes").size());
@@ -61,7 +62,8 @@ class TourTest {
         Files.writeString(out.resolve("mine.txt"), "mine");
         SortedMap<String, String> before = SmallShot.listing(place);
         try (Lanes lanes = new Lanes(1)) {
-            ShotException refused = assertThrows(ShotException.class, () -> TourWork.run(shot.folder(), out, SHORT, lanes, Progress.SILENT, new Cancel()));
+            ShotException refused = assertThrows(ShotException.class,
+                    () -> TourWork.run(shot.folder(), out, SHORT, lanes, Progress.SILENT, new Cancel()));
             assertTrue(refused.getMessage().contains("not empty"), refused.getMessage());
         }
         assertEquals(before, SmallShot.listing(place));

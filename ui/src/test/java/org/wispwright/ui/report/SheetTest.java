@@ -28,7 +28,8 @@ class SheetTest {
             new Handle(new Point(0.38, 0.22), new Point(0.24, 0.25)), new Handle(new Point(0.40, 0.40), new Point(0.31, 0.41)),
             Handle.pin(new Point(0.375, 0.75)), Handle.pin(new Point(0.33, 0.95)), Handle.pin(new Point(0.42, 0.95))), Optional.empty())));
     private static final Retouch GAP = new Retouch(List.of(
-            new Stroke(Brush.REMOVE, 0.06, 0.9, 0.5, List.of(new Point(0.34, 0.40), new Point(0.39, 0.41), new Point(0.43, 0.39)), Optional.empty()),
+            new Stroke(Brush.REMOVE, 0.06, 0.9, 0.5, List.of(new Point(0.34, 0.40), new Point(0.39, 0.41), new Point(0.43, 0.39)),
+                    Optional.empty()),
             new Stroke(Brush.ADD, 0.045, 0.7, 0.5, List.of(new Point(0.56, 0.30), new Point(0.60, 0.24)), Optional.empty())));
     private static final Region BASE = new Region.Rectangle(0.28, 0.68, 0.48, 0.97, 0.04);
 
@@ -38,13 +39,14 @@ class SheetTest {
         Picture holed = PaintedSmoke.column(width, height, 0.02, 0.95, 0.8);
         Optional<Picture> rendered = foreign ? Optional.of(PaintedSmoke.column(2 * width, 2 * height, 0.02, 0, 1.3)) : Optional.empty();
         return new Sheet("Kiln yard", "take 001 against the original, frames 1001 to 1048", "original", SKY, List.of(
-                new SheetRow("lean-head", "Lean the head to frame left by a good part of its width, keep the base as it is.", "frame 1036, view front",
+                new SheetRow("lean-head", "Lean the head to frame left by a good part of its width, keep the base as it is.",
+                        "frame 1036, view front",
                         rendered, LEAN, List.of(BASE), original, leaning, PaintedSmoke.column(width, height, -0.105, 0, 0.8), 0.9742),
                 new SheetRow("open-gap", "Open a gap here and let a wisp come out on the other side.", "frame 1044, view front",
                         rendered, GAP, List.of(), original, holed, PaintedSmoke.column(width, height, 0.02, 0.7, 0.8), 0.93)));
     }
 
-    /** By hand: 5 columns of 300, 4 gaps of 20, 2 margins of 48; head 104, 2 rows of 70 + 400 + 34 + 40, margin 48 less the last gap of 40. */
+    /** By hand: 5 columns of 300, 4 gaps of 20, 2 margins of 48; head 104, 2 rows of 70 + 400 + 34 + 40, margin 48 less a gap of 40. */
     @Test
     void theSheetIsAsLargeAsItsPartsAddUpTo() throws IOException {
         BufferedImage image = sheet(360, 480, true).paint();
@@ -73,7 +75,8 @@ class SheetTest {
     @Test
     void whereGotIsWantedTheDifferenceIsBlack() {
         Picture column = PaintedSmoke.column(36, 48, 0, 0, 1);
-        SheetRow met = new SheetRow("a", "words", "frame 1", Optional.empty(), LEAN, List.of(), PaintedSmoke.column(36, 48, 0.1, 0, 1), column, column, 1);
+        SheetRow met = new SheetRow("a", "words", "frame 1", Optional.empty(), LEAN, List.of(), PaintedSmoke.column(36, 48, 0.1, 0, 1),
+                column, column, 1);
         BufferedImage image = new Sheet("t", "s", "original", SKY, List.of(met)).paint();
         assertEquals(0xFF000000, image.getRGB(48 + 3 * 320 + 150, 104 + 70 + 200));
     }

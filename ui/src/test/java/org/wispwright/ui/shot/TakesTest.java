@@ -25,7 +25,8 @@ import org.wispwright.render.volume.GridShape;
 
 class TakesTest {
     private static final GridShape BOX = new GridShape(3, 5, 2, 0.5);
-    private static final FlowSetup FLOW = new FlowSetup(BOX, new FrameRange(1001, 1002, 24), 1, Interpolation.CUBIC, Interpolation.CUBIC, Sides.CLOSED, 1, 0, List.of());
+    private static final FlowSetup FLOW = new FlowSetup(BOX, new FrameRange(1001, 1002, 24), 1, Interpolation.CUBIC, Interpolation.CUBIC,
+            Sides.CLOSED, 1, 0, List.of());
 
     @TempDir
     private Path place;
@@ -116,14 +117,16 @@ class TakesTest {
 
     @Test
     void theSetUpsDigestChangesWithAnyValue() {
-        FlowSetup other = new FlowSetup(BOX, new FrameRange(1001, 1002, 24), 1, Interpolation.CUBIC, Interpolation.CUBIC, Sides.CLOSED, 1.0000001, 0, List.of());
+        FlowSetup other = new FlowSetup(BOX, new FrameRange(1001, 1002, 24), 1, Interpolation.CUBIC, Interpolation.CUBIC, Sides.CLOSED,
+                1.0000001, 0, List.of());
         assertFalse(TakeRecord.original("0.1.0", FLOW).belongsTo(other));
         assertTrue(TakeRecord.original("0.1.0", FLOW).belongsTo(FLOW));
     }
 
     @Test
     void aLossThatIsNoNumberIsRefused() {
-        assertThrows(IllegalArgumentException.class, () -> new TakeRecord(TakeRecord.Kind.SOLVE, "0.1.0", "", TakeRecord.object(), TakeRecord.object(), List.of(Double.NaN)));
+        assertThrows(IllegalArgumentException.class, () -> new TakeRecord(TakeRecord.Kind.SOLVE, "0.1.0", "", TakeRecord.object(),
+                TakeRecord.object(), List.of(Double.NaN)));
     }
 
     @Test
