@@ -9,12 +9,13 @@ final class Means {
     private ThreadCount threads;
 
     @Option(names = "--memory", paramLabel = "SIZE", converter = ByteSize.Converter.class,
-            description = "The memory that the work may take, such as 512M or 2G. Default: what Java has.")
+            description = "The memory that the work may take, such as 512M or 2G, and never more than Java has (java -Xmx2g). Default: what Java has.")
     private ByteSize memory;
 
     /** Bytes that the work may take. */
     long memoryBytes() {
-        return memory == null ? Runtime.getRuntime().maxMemory() : memory.bytes();
+        long most = Runtime.getRuntime().maxMemory();
+        return memory == null ? most : Math.min(most, memory.bytes());
     }
 
     /** Lanes to run on. */

@@ -36,6 +36,17 @@ public final class MemoryNeed {
         return bytes(grid.cells(), (long) frames.count() * substeps);
     }
 
+    /** What of the memory given is left for the states that a sweep keeps; at least what {@link #bytes} counts for them. */
+    public static long forStates(GridShape grid, FrameRange frames, int substeps, long memoryBytes) {
+        long least = bytes(grid, frames, substeps) - besidesStates(grid);
+        return Math.max(least, memoryBytes - besidesStates(grid));
+    }
+
+    /** Bytes that a gradient takes beside the states it keeps. */
+    public static long besidesStates(GridShape grid) {
+        return BASE + grid.cells() * STEP;
+    }
+
     /** Least bytes to hold one picture of so many pixels, draw it and write it: 80 bytes a pixel. */
     static long ofPicture(long pixels) {
         return BASE / 4 + PIXEL * Math.min(pixels, 1L << 40);

@@ -2,6 +2,7 @@ package org.wispwright.ui.work;
 
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
+import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.solve.Simulation;
 import org.wispwright.optimize.solve.SolveCancelled;
 import org.wispwright.render.lanes.Lanes;
@@ -46,7 +47,7 @@ public final class SimulateWork {
         try (TakeDraft draft = takes.draft()) {
             FrameWriting writing = new FrameWriting(flow, draft, "simulate", progress);
             SmokeSolver solver = new SmokeSolver(flow, lanes);
-            Simulation.run(solver, null, null, flow.frames().last(), cancel::wished, (frame, state, force) -> writing.frame(frame, state, solver));
+            Simulation.run(solver, new SmokeState(flow.grid()), null, null, flow.frames().last(), cancel::wished, (frame, state, force) -> writing.frame(frame, state, solver));
             cancel.stopIfWished();
             draft.finishAsOriginal(TakeRecord.original(Build.version(), flow));
             return new Result(true, flow.frames().count(), seconds(start), writing.lastMass(), writing.divergenceMax());

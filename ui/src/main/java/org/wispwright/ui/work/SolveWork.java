@@ -6,6 +6,7 @@ import java.util.Locale;
 import java.util.stream.Collectors;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
+import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.force.ForceBasis;
 import org.wispwright.optimize.solve.Simulation;
 import org.wispwright.optimize.solve.Solve;
@@ -15,6 +16,7 @@ import org.wispwright.optimize.solve.SolveResult;
 import org.wispwright.optimize.solve.StopRule;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.ui.shot.Finding;
+import org.wispwright.ui.shot.MemoryNeed;
 import org.wispwright.ui.shot.Note;
 import org.wispwright.ui.shot.Shot;
 import org.wispwright.ui.shot.ShotException;
@@ -31,7 +33,7 @@ public final class SolveWork {
     /**
      * How to solve.
      *
-     * @param memoryBytes for the states that a sweep keeps
+     * @param memoryBytes that all of it may take; what the work itself does not need goes to the states that a sweep keeps
      * @param until when to end before the program's own rule does
      * @param stay false leaves the stay term out; only to measure what it does
      */
@@ -73,7 +75,7 @@ public final class SolveWork {
             FrameWriting writing = new FrameWriting(flow, draft, "take", progress);
             SmokeSolver solver = new SmokeSolver(flow, lanes);
             ForceBasis basis = Solve.basis(flow, lanes);
-            Simulation.run(solver, basis, solve.unknowns(), flow.frames().last(), cancel::wished, (frame, state, force) -> writing.frame(frame, state, solver));
+            Simulation.run(solver, new SmokeState(flow.grid()), basis, solve.unknowns(), flow.frames().last(), cancel::wished, (frame, state, force) -> writing.frame(frame, state, solver));
             draft.writeForce(solve.unknowns());
             double massRatio = original.lastMass() > 0 ? writing.lastMass() / original.lastMass() : 1;
             cancel.stopIfWished();
@@ -89,7 +91,10 @@ public final class SolveWork {
     private static SolveResult search(SolveProblem problem, Manner manner, Lanes lanes, Progress progress, Cancel cancel) {
         try {
             int[] band = {0};
-            return new Solve(problem, manner.stay(), lanes, cancel::wished).run(manner.memoryBytes(), manner.until(), now -> {
+            FlowSetup flow = problem.flow();
+            long forStates = MemoryNeed.forStates(flow.grid(), flow.frames(), flow.substeps(), manner.memoryBytes());
+            return new Solve(problem, manner.stay(), lanes, cancel::wished)
+                    .run(forStates, manner.until(), now -> {
                 String line = inWords(now);
                 if (1000 * now.rung() + now.band() != band[0]) {
                     band[0] = 1000 * now.rung() + now.band();

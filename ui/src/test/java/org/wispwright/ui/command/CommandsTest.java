@@ -128,6 +128,29 @@ class CommandsTest {
     }
 
     @Test
+    void measureTellsItsFigures() throws IOException {
+        Run run = Run.of("measure", "--grid", "8", "--frames", "3", "--threads", "1", "--json");
+        assertEquals(0, run.code(), run.err());
+        JsonNode figures = new ObjectMapper().readTree(run.out());
+        for (String key : new String[] {"stepNanosACell", "forwardSeconds", "gradientSeconds", "ratio", "peakMemoryBytes"}) {
+            assertTrue(figures.get(key).doubleValue() > 0, key);
+        }
+        double sum = 0;
+        for (JsonNode share : figures.get("gradientShare")) {
+            sum += share.doubleValue();
+        }
+        assertEquals(1, sum, 1e-9);
+        assertTrue(Run.of("measure", "--grid", "8", "--frames", "3").out().contains("projection back"));
+    }
+
+    @Test
+    void measureBeyondTheMemoryIsRefused() {
+        Run run = Run.of("measure", "--grid", "512", "--frames", "3", "--memory", "1M");
+        assertEquals(3, run.code(), run.err());
+        assertTrue(run.err().contains("512x512x512 cells"), run.err());
+    }
+
+    @Test
     void aTakeThatIsNotThereIsRefused() {
         SmallShot shot = SmallShot.in(place.resolve("yard"));
         Run run = Run.of("picture", shot.folder().toString(), "--take", "3", "--frame", "1006", "--view", "front", "--out", place.resolve("a.png").toString());
@@ -150,7 +173,7 @@ class CommandsTest {
 
     @ParameterizedTest
     @ValueSource(strings = {"", "paint", "check", "check a b", "check . --memory lots", "check . --memory -2G", "check . --memory 0", "check . --colour red",
-        "simulate . --threads 0", "simulate . --threads many", "compare . --takes 0 --out x", "solve . --until soon", "solve . --until loss=2", "solve . --until iterations=0.5", "solve . --until seconds=0", "compare . --takes a,b --out x", "picture . --take 0", "picture . --take x --frame 1 --view v --out a.png",
+        "simulate . --threads 0", "simulate . --threads many", "compare . --takes 0 --out x", "measure --grid 4", "measure --frames 1", "measure --grid big", "measure extra", "solve . --until soon", "solve . --until loss=2", "solve . --until iterations=0.5", "solve . --until seconds=0", "compare . --takes a,b --out x", "picture . --take 0", "picture . --take x --frame 1 --view v --out a.png",
         "picture . --take 0 --frame 1 --view v --out a.gif", "picture . --take 0 --frame 1 --view v --out a.png --height 0"})
     void wrongUsageIsTwo(String line) {
         Run run = Run.of(line.isEmpty() ? new String[0] : line.split(" "));
@@ -160,7 +183,7 @@ class CommandsTest {
     }
 
     @ParameterizedTest
-    @ValueSource(strings = {"", "tour", "check", "simulate", "picture", "solve", "compare"})
+    @ValueSource(strings = {"", "tour", "check", "simulate", "picture", "solve", "compare", "measure"})
     void helpShowsAnExample(String command) {
         Run run = command.isEmpty() ? Run.of("--help") : Run.of(command, "--help");
         assertEquals(0, run.code());
