@@ -97,9 +97,11 @@ final class SetupReader {
 
     private Optional<FlowSetup> flow(Optional<JsonPlace> given, JsonPlace top, Optional<GridShape> grid, Optional<FrameRange> frames,
             List<Source> sources) {
-        given.ifPresent(p -> p.only("substeps", "interpolation", "sides", "buoyancy", "dissipation"));
+        given.ifPresent(p -> p.only("substeps", "velocityInterpolation", "densityInterpolation", "sides", "buoyancy", "dissipation"));
         int substeps = given.flatMap(p -> p.ask("substeps")).map(p -> p.whole(1, MOST_SUBSTEPS)).orElse(1);
-        Interpolation interpolation = given.flatMap(p -> p.ask("interpolation")).map(p -> p.choice(Interpolation.class))
+        Interpolation velocity = given.flatMap(p -> p.ask("velocityInterpolation")).map(p -> p.choice(Interpolation.class))
+                .orElse(Interpolation.LINEAR);
+        Interpolation density = given.flatMap(p -> p.ask("densityInterpolation")).map(p -> p.choice(Interpolation.class))
                 .orElse(Interpolation.CUBIC);
         Sides sides = given.flatMap(p -> p.ask("sides")).map(SetupReader::sides).orElse(Sides.CLOSED);
         double buoyancy = given.flatMap(p -> p.ask("buoyancy")).map(p -> p.number(-1000, 1000)).orElse(0.0);
@@ -108,8 +110,8 @@ final class SetupReader {
             return Optional.empty();
         }
         JsonPlace place = given.orElse(top);
-        return Optional.of(place.make(() -> new FlowSetup(grid.get(), frames.get(), substeps, interpolation, interpolation, sides,
-                buoyancy, dissipation, sources)));
+        return Optional.of(place.make(() -> new FlowSetup(grid.get(), frames.get(), substeps, velocity, density, sides, buoyancy,
+                dissipation, sources)));
     }
 
     private static Sides sides(JsonPlace place) {

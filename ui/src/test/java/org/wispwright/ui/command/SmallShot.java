@@ -24,7 +24,7 @@ public final class SmallShot {
               "grid": {"cells": [8, 16, 8], "cellMetres": 0.25, "originMetres": [0, 0, 0]},
               "frames": {"first": 1001, "last": 1006, "perSecond": 24},
               "flow": {
-                "substeps": 1, "interpolation": "cubic",
+                "substeps": 1, "velocityInterpolation": "cubic",
                 "sides": {"left": "open", "right": "open", "floor": "wall", "top": "open", "back": "open", "front": "open"},
                 "buoyancy": 3.0, "dissipation": 0.1
               },
