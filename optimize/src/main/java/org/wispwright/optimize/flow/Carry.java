@@ -73,8 +73,8 @@ public final class Carry {
      */
     void pullback(float[] q, Displacement d, int reach, float[] outBar, float[] qBar, Displacement dBar) {
         boolean linear = interpolation == Interpolation.LINEAR;
-        // Beyond the departure: the far corner, one more for the face's second cell and, for the cubic, its outer ring.
-        new Slabs(lattice.mz(), reach + (linear ? 2 : 3)).forEach(lanes, k -> {
+        // A departure lies at most the reach away; beyond it the interpolation's far corner and, for the cubic, its outer ring.
+        new Slabs(lattice.mz(), reach + (linear ? 1 : 2)).forEach(lanes, k -> {
             if (linear) {
                 lattice.forSlab(k, lowest, highest, (first, count, i, j, kk, cell, before) ->
                         LinearKernel.pullback(lattice, q, d, outBar, qBar, dBar, first, count, i, j, kk, cell, before));

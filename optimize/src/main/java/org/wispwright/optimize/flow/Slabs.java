@@ -17,10 +17,9 @@ final class Slabs {
     /** @param reach how far in z a piece may write, in cells, 0 or more */
     Slabs(int nz, int reach) {
         this.nz = nz;
-        int slabs = MOST;
-        while (slabs > 1 && nz / slabs < Math.max(1, 2 * reach)) {
-            slabs /= 2;
-        }
+        int slabs = Math.max(1, Math.min(MOST, nz / Math.max(1, 2 * reach)));
+        // Three or an even number: with five, one of the even slabs would run alone.
+        slabs = slabs > 3 ? slabs / 2 * 2 : slabs;
         count = slabs;
     }
 

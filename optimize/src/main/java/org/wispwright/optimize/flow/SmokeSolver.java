@@ -33,6 +33,7 @@ public final class SmokeSolver {
     private final Displacement displacement;
     private final Clock clock = new Clock();
     private final float[] mostPerSlab;
+    private final float[] scratch;
     private Displacement displacementBar;
     private SmokeState inBar;
 
@@ -77,6 +78,7 @@ public final class SmokeSolver {
         sources = setup.sources().stream().map(source -> SourceCells.of(source, shape)).toList();
         displacement = new Displacement(shape);
         mostPerSlab = new float[shape.nz()];
+        scratch = new float[shape.cells()];
     }
 
     /** What is simulated. */
@@ -90,13 +92,16 @@ public final class SmokeSolver {
      * @param in    read
      * @param force read: acceleration on faces, m/s2; null for none
      * @param frame the frame that this substep leads to; says which sources feed it
+     * @param follows true if {@code in} is, unchanged, what the last call of this solver wrote to {@code out}: its departures are known
      * @param out   overwritten; must not be in
      */
-    public void step(SmokeState in, MacVelocity force, int frame, SmokeState out) {
+    public void step(SmokeState in, MacVelocity force, int frame, boolean follows, SmokeState out) {
         MacVelocity u = in.velocity();
         MacVelocity next = out.velocity();
         long since = System.nanoTime();
-        trace.forward(u, seconds, displacement);
+        if (!follows) {
+            trace.forward(u, seconds, displacement);
+        }
         since = clock.lap(Clock.Part.TRACE, since);
         carryX.forward(u.x(), displacement, next.x());
         carryY.forward(u.y(), displacement, next.y());
@@ -122,10 +127,12 @@ public final class SmokeSolver {
      *
      * @param in       read: the state before the substep
      * @param outVelocity read: the velocity after it
+     * @param follows     true if outVelocity is, unchanged, what the last call of this solver traced last: the velocity of a step's
+     *                    {@code out} or of a pullback's {@code in}
      * @param bar      on entry the derivative by the state after the substep, on exit by the state before it
      * @param forceBar added to: the derivative by the force; null if not wanted
      */
-    public void pullback(SmokeState in, MacVelocity outVelocity, SmokeState bar, MacVelocity forceBar) {
+    public void pullback(SmokeState in, MacVelocity outVelocity, boolean follows, SmokeState bar, MacVelocity forceBar) {
         if (inBar == null) {
             inBar = new SmokeState(shape);
             displacementBar = new Displacement(shape);
@@ -135,7 +142,9 @@ public final class SmokeSolver {
         float[] density = in.density().values();
         long since = System.nanoTime();
         fade(bar.density().values(), keep);
-        trace.forward(outVelocity, seconds, displacement);
+        if (!follows) {
+            trace.forward(outVelocity, seconds, displacement);
+        }
         since = clock.lap(Clock.Part.TRACE, since);
         int reach = displacement.reachInZ(lanes, mostPerSlab);
         carryDensity.pullback(density, displacement, reach, bar.density().values(), inBar.density().values(), displacementBar);
@@ -173,7 +182,7 @@ public final class SmokeSolver {
 
     /** Largest |div u| h / |u| of a velocity: 0 for a field free of divergence, about 1 for one that is not. */
     public double relativeDivergence(MacVelocity u) {
-        return DivergenceKernel.relativeMax(u, displacement.x, lanes);
+        return DivergenceKernel.relativeMax(u, scratch, lanes);
     }
 
     private void addScaled(MacVelocity to, MacVelocity from, float by) {

@@ -41,6 +41,7 @@ public final class Simulation {
         SmokeState now = start.copy();
         SmokeState next = new SmokeState(solver.setup().grid());
         MacVelocity force = x == null ? null : new MacVelocity(solver.setup().grid());
+        boolean follows = false;
         each.frame(first, now, null);
         for (int frame = first + 1; frame <= lastFrame; frame++) {
             if (force != null) {
@@ -50,7 +51,8 @@ public final class Simulation {
                 if (cancelled.getAsBoolean()) {
                     throw new SolveCancelled();
                 }
-                solver.step(now, force, frame, next);
+                solver.step(now, force, frame, follows, next);
+                follows = true;
                 SmokeState swap = now;
                 now = next;
                 next = swap;

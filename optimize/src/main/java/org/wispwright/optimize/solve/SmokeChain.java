@@ -36,6 +36,10 @@ final class SmokeChain implements ReversibleChain {
     private SmokeState spare;
     /** Which state {@link #before} is once its step was pulled; -1 if none. */
     private int known = -1;
+    /** True while the solver's last call left {@link #current}'s departures with it. */
+    private boolean follows;
+    /** True while nothing has been run since the last pull. */
+    private boolean undisturbed;
     private int forceStep = -1;
     private int barStep = -1;
     private double[] x;
@@ -70,6 +74,7 @@ final class SmokeChain implements ReversibleChain {
         x = unknowns;
         xBar = gradient;
         known = -1;
+        follows = false;
         forceStep = -1;
         barStep = -1;
         current.set(start);
@@ -92,6 +97,7 @@ final class SmokeChain implements ReversibleChain {
     @Override
     public void restore(int slot) {
         current.set(slots.get(slot));
+        follows = false;
     }
 
     @Override
@@ -104,7 +110,8 @@ final class SmokeChain implements ReversibleChain {
 
     @Override
     public void tape(int step) {
-        if (known == step + 1) {
+        boolean pulled = known == step + 1;
+        if (pulled) {
             SmokeState after = before;
             before = current;
             current = after;
@@ -115,6 +122,7 @@ final class SmokeChain implements ReversibleChain {
             current = spare;
             spare = free;
         }
+        follows = !pulled || undisturbed;
         known = -1;
     }
 
@@ -127,7 +135,9 @@ final class SmokeChain implements ReversibleChain {
             forceBar.fill(0);
             barStep = at;
         }
-        solver.pullback(before, current.velocity(), bar, forceBar);
+        solver.pullback(before, current.velocity(), follows, bar, forceBar);
+        follows = false;
+        undisturbed = true;
         if (step % substeps == 0) {
             long since = System.nanoTime();
             basis.pullback(forceBar, at, xBar);
@@ -145,7 +155,9 @@ final class SmokeChain implements ReversibleChain {
             forceStep = at;
             solver.clock().lap(Clock.Part.FORCE, since);
         }
-        solver.step(current, force, firstFrame + at + 1, spare);
+        solver.step(current, force, firstFrame + at + 1, follows, spare);
+        follows = true;
+        undisturbed = false;
     }
 
     private void checkCancelled() {

@@ -18,7 +18,7 @@ import org.wispwright.render.volume.GridShape;
 public record SolveProblem(FlowSetup flow, List<View> views, Look look, List<Note> notes, List<Hold> holds) {
 
     /** Share of a pixel's weight where a note's retouch does not reach, so that the rest of the frame stays put. */
-    public static final float WEIGHT_ELSEWHERE = 0.25f;
+    public static final float WEIGHT_ELSEWHERE = 0.5f;
 
     /**
      * One wish on one frame.
@@ -87,12 +87,12 @@ public record SolveProblem(FlowSetup flow, List<View> views, Look look, List<Not
         return new SolveProblem(flow.on(grid), views, look, notes, holds);
     }
 
-    /** The last frame that anything is wished of: later frames cannot change the loss. */
-    int lastFrame(boolean stay) {
+    /** The last frame that anything is wished of; later frames take no part in a solve. */
+    int lastFrame() {
         int last = notes.stream().mapToInt(Note::frame).max().orElseThrow();
         for (Hold hold : holds) {
             last = Math.max(last, Math.min(hold.lastFrame(), flow.frames().last()));
         }
-        return stay ? flow.frames().last() : last;
+        return last;
     }
 }

@@ -3,7 +3,7 @@ package org.wispwright.optimize.solve;
 /**
  * When a solve ends before its own rule ends it. A number that is not wanted is infinite or, for the loss, 0.
  *
- * @param loss       stop once the loss is at most this share of the original's, 0..1
+ * @param loss       stop once the loss on the last rung is at most this share of the original's, 0..1
  * @param seconds    stop after the iteration in which so many seconds have passed
  * @param iterations stop after so many iterations in all
  */

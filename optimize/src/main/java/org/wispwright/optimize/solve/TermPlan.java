@@ -19,7 +19,8 @@ import org.wispwright.warp.loss.PyramidLoss;
  * <p>Scales, so that every note starts at its weight: a note's term is {@code weight / (its loss for the original)}. Holds and the
  * stay term start at 0, so they are measured in R, the mean of the notes' losses for the original: a hold weighs {@value #HOLD_WEIGHT}/R,
  * shared by the frames it is looked at (noted frames, and every third); the stay term {@value #STAY_WEIGHT}/R on every third frame
- * without a note, in each view that has one, falling to 0 within a third of the range of a noted frame.
+ * without a note, in each view that has one, falling to 0 within a third of the range of a noted frame. Frames after the last that anything
+ * is wished of are left to themselves: no force acts there, and to pull them back would fight the note.
  */
 final class TermPlan {
     static final double HOLD_WEIGHT = 1;
@@ -42,7 +43,7 @@ final class TermPlan {
         problem.notes().forEach(note -> needed.add(key(note.frame(), note.view())));
         problem.holds().forEach(hold -> framesOf(hold).forEach(frame -> needed.add(key(frame, hold.view()))));
         stayFrames().forEach(frame -> notedViews().forEach(view -> needed.add(key(frame, view))));
-        Simulation.run(solver, start, null, null, problem.lastFrame(stay), cancelled, (frame, state, force) -> {
+        Simulation.run(solver, start, null, null, problem.lastFrame(), cancelled, (frame, state, force) -> {
             for (int view = 0; view < problem.views().size(); view++) {
                 if (needed.contains(key(frame, view))) {
                     originals.put(key(frame, view), terms.picture(state.density(), view));
@@ -111,7 +112,7 @@ final class TermPlan {
         if (!stay) {
             return List.of();
         }
-        return IntStream.rangeClosed(range.first() + 1, range.last())
+        return IntStream.rangeClosed(range.first() + 1, problem.lastFrame())
                 .filter(frame -> (frame - range.first()) % EVERY == 0)
                 .filter(frame -> problem.notes().stream().noneMatch(note -> note.frame() == frame))
                 .boxed().toList();

@@ -226,18 +226,18 @@ final class FlowOperators {
             MacVelocity force = new MacVelocity(shape);
             read(in, state, force);
             SmokeState next = new SmokeState(shape);
-            solver.step(state, force, 2, next);
+            solver.step(state, force, 2, false, next);
             write(out, next.density().values(), next.velocity().x(), next.velocity().y(), next.velocity().z());
         }, (in, outBar, inBar) -> {
             SmokeState state = new SmokeState(shape);
             MacVelocity force = new MacVelocity(shape);
             read(in, state, force);
             SmokeState next = new SmokeState(shape);
-            solver.step(state, force, 2, next);
+            solver.step(state, force, 2, false, next);
             SmokeState bar = new SmokeState(shape);
             unpack(outBar, bar.density().values(), bar.velocity().x(), bar.velocity().y(), bar.velocity().z());
             MacVelocity forceBar = new MacVelocity(shape);
-            solver.pullback(state, next.velocity(), bar, forceBar);
+            solver.pullback(state, next.velocity(), false, bar, forceBar);
             add(inBar, bar.density().values(), bar.velocity().x(), bar.velocity().y(), bar.velocity().z(),
                     forceBar.x(), forceBar.y(), forceBar.z());
         });

@@ -33,7 +33,7 @@ class WholeChainTest {
         ForceBasis basis = Solve.basis(flow, lanes);
         FrameTerms terms = new FrameTerms(flow.grid(), problem.views(), problem.look(), flow.grid().cellMetres(), solver.clock(), lanes);
         new TermPlan(problem, solver, start, terms, true, () -> false);
-        return new SolveLoss(solver, basis, terms, start, problem.lastFrame(true), snapshots, () -> false);
+        return new SolveLoss(solver, basis, terms, start, problem.lastFrame(), snapshots, () -> false);
     }
 
     private static SolveLoss loss(SolveProblem problem, int snapshots, Lanes lanes) {
