@@ -66,7 +66,8 @@ public class MarchBench {
         GridShape box = Plume.box(48, 64, 48);
         smoke = Plume.grown(Plume.in(box, Interpolation.LINEAR), ours).density();
         smokeBar = new ScalarGrid(box);
-        View view = new View("front", new Orthographic(3, 4), new Vec3(1.5, 2, 10), new Vec3(1.5, 2, 1.5), new Vec3(0, 1, 0), new Raster(96, 128));
+        View view = new View("front", new Orthographic(3, 4), new Vec3(1.5, 2, 10), new Vec3(1.5, 2, 1.5), new Vec3(0, 1, 0),
+                new Raster(96, 128));
         marcher = new RayMarcher(box, view, box.cellMetres(), ours);
         got = view.raster().picture();
         out = view.raster().picture();

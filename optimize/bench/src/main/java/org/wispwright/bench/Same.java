@@ -28,16 +28,21 @@ public final class Same {
     public static void close(String what, double[] got, double[] expected, double share) {
         require(what, got.length, expected.length);
         double largest = 0;
+        double most = -1;
         int worst = 0;
         for (int n = 0; n < got.length; n++) {
             largest = Math.max(largest, Math.abs(expected[n]));
-            // Negated form: NaN is the worst of all.
-            worst = Math.abs(got[n] - expected[n]) <= Math.abs(got[worst] - expected[worst]) ? worst : n;
+            double difference = Math.abs(got[n] - expected[n]);
+            // NaN is the worst of all, and stays so: no later difference is above it.
+            if (difference > most || Double.isNaN(difference) && !Double.isNaN(most)) {
+                most = difference;
+                worst = n;
+            }
         }
         if (!(largest > 0)) {
             throw new IllegalStateException(what + ": everything expected is 0, so the check shows nothing; give it other values");
         }
-        if (!(Math.abs(got[worst] - expected[worst]) <= share * largest)) {
+        if (!(most <= share * largest)) {
             throw new IllegalStateException(what + ": the two sides differ; worst at " + worst + ": got " + got[worst] + ", expected "
                     + expected[worst] + ", needs a difference of at most " + share * largest);
         }
