@@ -30,7 +30,7 @@ import org.wispwright.ui.shot.Shot;
  * @param without without it
  */
 public record StayTrade(GridShape grid, Side with, Side without) {
-    static final int ITERATIONS = 30;
+    static final int ITERATIONS = 20;
 
     /**
      * One of the two solves.
