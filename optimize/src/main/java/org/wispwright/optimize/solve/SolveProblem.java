@@ -83,7 +83,7 @@ public record SolveProblem(FlowSetup flow, List<View> views, Look look, List<Not
     }
 
     /** The same wishes on another grid of the same box. */
-    SolveProblem on(GridShape grid) {
+    public SolveProblem on(GridShape grid) {
         return new SolveProblem(flow.on(grid), views, look, notes, holds);
     }
 

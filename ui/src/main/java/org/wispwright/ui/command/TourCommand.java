@@ -1,5 +1,6 @@
 package org.wispwright.ui.command;
 
+import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.Locale;
 import java.util.concurrent.Callable;
@@ -22,8 +23,11 @@ final class TourCommand implements Callable<Integer> {
     @Mixin
     private Manner manner;
 
-    @Option(names = "--out", paramLabel = "DIR", defaultValue = "tour",
-            description = "An empty or new folder to leave everything in. Default: ${DEFAULT-VALUE}.")
+    /** The tour's solve may stop here: further iterations would polish what a person no longer sees on the sheet. */
+    private static final StopRule GOOD_ENOUGH = new StopRule(0.05, Double.POSITIVE_INFINITY, Integer.MAX_VALUE);
+
+    @Option(names = "--out", paramLabel = "DIR",
+            description = "An empty or new folder to leave everything in. Default: tour, or tour-2 if that is there, and so on.")
     private Path out;
 
     @Mixin
@@ -33,8 +37,9 @@ final class TourCommand implements Callable<Integer> {
     public Integer call() {
         TourWork.Result result;
         try (Lanes lanes = new Lanes(means.threads()); ProgressLine progress = manner.progress()) {
-            SolveWork.Manner how = new SolveWork.Manner(means.memoryBytes(), StopRule.OWN, true);
-            result = TourWork.onOwnSample(sample -> TourWork.run(sample, out, how, lanes, progress, manner.cancel()));
+            SolveWork.Manner how = new SolveWork.Manner(means.memoryBytes(), GOOD_ENOUGH, true);
+            Path into = out == null ? freeFolder() : out;
+            result = TourWork.onOwnSample(sample -> TourWork.run(sample, into, how, lanes, progress, manner.cancel()));
         }
         StringBuilder words = new StringBuilder();
         for (Comparison.OfNote n : result.solve().comparison().notes()) {
@@ -44,5 +49,13 @@ final class TourCommand implements Callable<Integer> {
         words.append("Before, wanted and after: ").append(result.sheet());
         manner.say("Met:" + System.lineSeparator() + words, result.report().deepCopy().put("ok", true));
         return ExitCodes.OK;
+    }
+
+    private static Path freeFolder() {
+        Path folder = Path.of("tour");
+        for (int n = 2; Files.exists(folder); n++) {
+            folder = Path.of("tour-" + n);
+        }
+        return folder;
     }
 }

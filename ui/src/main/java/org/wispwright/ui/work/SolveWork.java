@@ -53,7 +53,7 @@ public final class SolveWork {
      * @param seconds wall time of it all
      */
     public record Result(int take, SolveResult solve, Comparison comparison, double divergenceMax, double massRatio, double forceRms,
-                         double departure, double seconds) {
+                         Departure departure, double seconds) {
     }
 
     /**
@@ -82,7 +82,8 @@ public final class SolveWork {
             cancel.stopIfWished();
             int take = draft.finish(record(shot, manner, solve, writing.divergenceMax(), massRatio, forceRms));
             Comparison comparison = CompareWork.compare(folder, shot, 0, take, lanes, progress, new Cancel());
-            double departure = Departure.of(shot, takes, take, lanes, new Cancel());
+            Departure departure = Departure.of(shot, frame -> takes.density(0, frame, flow), frame -> takes.density(take, frame, flow),
+                    lanes, new Cancel());
             return new Result(take, solve, comparison, writing.divergenceMax(), massRatio, forceRms, departure,
                     (System.nanoTime() - start) / 1e9);
         } catch (SolveCancelled asked) {

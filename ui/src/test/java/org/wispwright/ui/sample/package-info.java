@@ -1,0 +1,2 @@
+/** Room: what made the samples' files. Nothing in the program uses it. */
+package org.wispwright.ui.sample;
