@@ -15,13 +15,42 @@ public final class Lanes implements AutoCloseable {
     private static final int SPINS_BEFORE_SLEEP = 2_000;
 
     private final Thread[] helpers;
-    private final AtomicInteger next = new AtomicInteger();
-    private final AtomicInteger busy = new AtomicInteger();
-    private volatile IntConsumer body;
-    private volatile int pieces;
-    private volatile int round;
-    private volatile Throwable failure;
+    private volatile Job job;
     private volatile boolean closed;
+
+    /** One call of {@link #forEach}. A helper that wakes late finds its pieces gone and touches nothing, so nobody waits for it. */
+    private static final class Job {
+        final IntConsumer body;
+        final int pieces;
+        final AtomicInteger next = new AtomicInteger();
+        final AtomicInteger left;
+        volatile Throwable failure;
+
+        Job(int pieces, IntConsumer body) {
+            this.pieces = pieces;
+            this.body = body;
+            left = new AtomicInteger(pieces);
+        }
+
+        void takePieces() {
+            for (int n = next.getAndIncrement(); n < pieces; n = next.getAndIncrement()) {
+                if (failure == null) {
+                    try {
+                        body.accept(n);
+                    } catch (Throwable thrown) {
+                        failed(thrown);
+                    }
+                }
+                left.decrementAndGet();
+            }
+        }
+
+        private synchronized void failed(Throwable thrown) {
+            if (failure == null) {
+                failure = thrown;
+            }
+        }
+    }
 
     /**
      * Starts {@code threads - 1} helper threads; they are daemons.
@@ -60,27 +89,21 @@ public final class Lanes implements AutoCloseable {
             }
             return;
         }
-        this.body = body;
-        this.pieces = pieces;
-        failure = null;
-        next.set(0);
-        busy.set(helpers.length);
-        round++;
-        for (Thread helper : helpers) {
-            LockSupport.unpark(helper);
+        Job mine = new Job(pieces, body);
+        job = mine;
+        for (int t = 0; t < Math.min(helpers.length, pieces - 1); t++) {
+            LockSupport.unpark(helpers[t]);
         }
-        takePieces(body, pieces);
-        for (int spin = 0; busy.get() != 0; spin++) {
+        mine.takePieces();
+        for (int spin = 0; mine.left.get() != 0; spin++) {
             if (spin < SPINS_BEFORE_SLEEP) {
                 Thread.onSpinWait();
             } else {
                 Thread.yield();
             }
         }
-        this.body = null;
-        Throwable failed = failure;
-        if (failed != null) {
-            rethrow(failed);
+        if (mine.failure != null) {
+            rethrow(mine.failure);
         }
     }
 
@@ -93,25 +116,10 @@ public final class Lanes implements AutoCloseable {
         }
     }
 
-    private void takePieces(IntConsumer work, int count) {
-        try {
-            for (int n = next.getAndIncrement(); n < count; n = next.getAndIncrement()) {
-                work.accept(n);
-            }
-        } catch (Throwable thrown) {
-            next.set(count);
-            synchronized (this) {
-                if (failure == null) {
-                    failure = thrown;
-                }
-            }
-        }
-    }
-
     private void help() {
-        int seen = 0;
+        Job seen = null;
         while (true) {
-            for (int spin = 0; round == seen && !closed; spin++) {
+            for (int spin = 0; job == seen && !closed; spin++) {
                 if (spin < SPINS_BEFORE_SLEEP) {
                     Thread.onSpinWait();
                 } else {
@@ -121,9 +129,8 @@ public final class Lanes implements AutoCloseable {
             if (closed) {
                 return;
             }
-            seen++;
-            takePieces(body, pieces);
-            busy.decrementAndGet();
+            seen = job;
+            seen.takePieces();
         }
     }
 
