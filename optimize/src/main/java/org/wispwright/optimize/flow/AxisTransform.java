@@ -1,5 +1,6 @@
 package org.wispwright.optimize.flow;
 
+import org.jtransforms.dct.FloatDCT_1D;
 import org.wispwright.optimize.product.RowProduct;
 
 /**
@@ -16,13 +17,21 @@ import org.wispwright.optimize.product.RowProduct;
  * each with eigenvalue {@code -4 sin^2(theta / 2)} and scaled to unit length, so the inverse is the transpose.
  * Sources: Strang (1999), SIAM Review 41(1), 135-147; LeVeque (2007), Finite Difference Methods, ch. 2.
  *
- * <p>Both directions are matrix products, which for the sizes of a proxy box are as quick as a fast transform and take any
- * n and any pair of sides; {@code docs/benchmarks.md} has where the two cross. With two equal sides the modes are by turns
+ * <p>Both directions are matrix products, which take any n and any pair of sides. With two equal sides the modes are by turns
  * even and odd about the middle, so {@code e[i] = x[i] + x[n-1-i]} and {@code o[i] = x[i] - x[n-1-i]} go through half-size
- * matrices each: half the work. (n odd: the middle value is even, {@code e = x}.)
+ * matrices each: half the work. (n odd: the middle value is even, {@code e = x}.) Between two walls and for powers of two from
+ * {@value #FAST_FROM} on, the fast transform of JTransforms wins ({@code docs/benchmarks.md}) and takes their place.
  */
 final class AxisTransform {
+    /** The shortest axis for which the fast transform pays. */
+    static final int FAST_FROM = 64;
+    /** Columns that the fast transform copies out at a time: a cache line of them. */
+    private static final int TILE = 16;
+
     private final int n;
+    /** The fast transform, or null where the products serve. One is used by all threads: it keeps only tables. */
+    private final FloatDCT_1D fast;
+    private final ThreadLocal<float[]> tile;
     /** Even and odd parts; without symmetry "even" is everything. */
     private final int evens;
     private final int odds;
@@ -36,18 +45,26 @@ final class AxisTransform {
 
     AxisTransform(int n, Side low, Side high) {
         this.n = n;
-        folded = low == high && n > 1;
+        boolean walls = low == Side.WALL && high == Side.WALL;
+        fast = walls && n >= FAST_FROM && Integer.bitCount(n) == 1 ? new FloatDCT_1D(n) : null;
+        tile = ThreadLocal.withInitial(() -> new float[TILE * n]);
+        folded = low == high && n > 1 && fast == null;
         evens = folded ? (n + 1) / 2 : n;
         odds = n - evens;
         eigenvalues = new double[n];
-        evenByCells = new float[evens * evens];
-        cellsByEven = new float[evens * evens];
+        int evenSize = fast == null ? evens * evens : 0;
+        evenByCells = new float[evenSize];
+        cellsByEven = new float[evenSize];
         oddByCells = new float[odds * odds];
         cellsByOdd = new float[odds * odds];
         double[] mode = new double[n];
         for (int m = 0; m < n; m++) {
             double theta = angle(n, low, high, m);
             double half = Math.sin(theta / 2);
+            if (fast != null) {
+                eigenvalues[m] = 4 * half * half;
+                continue;
+            }
             double squares = 0;
             for (int i = 0; i < n; i++) {
                 mode[i] = valueAt(n, low, high, theta, i);
@@ -83,13 +100,19 @@ final class AxisTransform {
         return high == Side.OPEN ? Math.sin(theta * (i + 1)) : Math.cos(theta * (n - 1 - i + 0.5));
     }
 
-    /** Eigenvalue of minus the operator for the mode at position m of the transformed values, cells as the unit of length. */
+    /** Eigenvalue of minus the operator for the mode at position m of the transformed values (even modes first where folded). */
     double eigenvalue(int m) {
         return eigenvalues[m];
     }
 
     /** Cells to modes, in place, for {@code rows} rows of n neighbouring values from {@code start}; scratch: the same range. */
     void rowsToModes(float[] values, float[] scratch, int start, int rows) {
+        if (fast != null) {
+            for (int r = 0; r < rows; r++) {
+                fast.forward(values, start + r * n, true);
+            }
+            return;
+        }
         if (folded) {
             for (int r = 0; r < rows; r++) {
                 foldRow(values, scratch, start + r * n);
@@ -103,6 +126,12 @@ final class AxisTransform {
 
     /** Modes to cells, in place; the inverse of {@link #rowsToModes}. */
     void rowsToCells(float[] values, float[] scratch, int start, int rows) {
+        if (fast != null) {
+            for (int r = 0; r < rows; r++) {
+                fast.inverse(values, start + r * n, true);
+            }
+            return;
+        }
         RowProduct.multiply(values, start, n, rows, evens, evenByCells, 0, evens, scratch, start, n, evens);
         RowProduct.multiply(values, start + evens, n, rows, odds, oddByCells, 0, odds, scratch, start + evens, n, odds);
         if (!folded) {
@@ -119,6 +148,10 @@ final class AxisTransform {
      * {@code start..start+count-1}; scratch: the same places.
      */
     void columnsToModes(float[] values, float[] scratch, int stride, int start, int count) {
+        if (fast != null) {
+            columnsFast(values, stride, start, count, false);
+            return;
+        }
         int last = n - 1;
         for (int i = 0; i < evens; i++) {
             int low = i * stride + start;
@@ -142,6 +175,10 @@ final class AxisTransform {
 
     /** Modes to cells, in place, along the slow axis; the inverse of {@link #columnsToModes}. */
     void columnsToCells(float[] values, float[] scratch, int stride, int start, int count) {
+        if (fast != null) {
+            columnsFast(values, stride, start, count, true);
+            return;
+        }
         int middle = evens * stride + start;
         RowProduct.multiply(cellsByEven, 0, evens, evens, evens, values, start, stride, scratch, start, stride, count);
         RowProduct.multiply(cellsByOdd, 0, odds, odds, odds, values, middle, stride, scratch, middle, stride, count);
@@ -158,6 +195,30 @@ final class AxisTransform {
                 }
                 for (int c = 0; c < count; c++) {
                     values[high + c] = scratch[low + c] - scratch[odd + c];
+                }
+            }
+        }
+    }
+
+    private void columnsFast(float[] values, int stride, int start, int count, boolean inverse) {
+        float[] columns = tile.get();
+        for (int first = start; first < start + count; first += TILE) {
+            int width = Math.min(TILE, start + count - first);
+            for (int i = 0; i < n; i++) {
+                for (int c = 0; c < width; c++) {
+                    columns[c * n + i] = values[i * stride + first + c];
+                }
+            }
+            for (int c = 0; c < width; c++) {
+                if (inverse) {
+                    fast.inverse(columns, c * n, true);
+                } else {
+                    fast.forward(columns, c * n, true);
+                }
+            }
+            for (int i = 0; i < n; i++) {
+                for (int c = 0; c < width; c++) {
+                    values[i * stride + first + c] = columns[c * n + i];
                 }
             }
         }

@@ -17,6 +17,9 @@ import org.wispwright.render.volume.MacVelocity;
  * velocity after it, and runs no step again. A solver owns about 100 bytes a cell of workspace; one caller at a time.
  */
 public final class SmokeSolver {
+    /** Pieces of a plain loop over one array. */
+    private static final int CHUNKS = 8;
+
     private final FlowSetup setup;
     private final GridShape shape;
     private final Lanes lanes;
@@ -186,10 +189,13 @@ public final class SmokeSolver {
     }
 
     private void addScaled(MacVelocity to, MacVelocity from, float by) {
-        lanes.forEach(3, axis -> {
-            float[] t = axis == 0 ? to.x() : axis == 1 ? to.y() : to.z();
-            float[] f = axis == 0 ? from.x() : axis == 1 ? from.y() : from.z();
-            for (int n = 0; n < t.length; n++) {
+        float[][] tos = {to.x(), to.y(), to.z()};
+        float[][] froms = {from.x(), from.y(), from.z()};
+        lanes.forEach(3 * CHUNKS, piece -> {
+            float[] t = tos[piece / CHUNKS];
+            float[] f = froms[piece / CHUNKS];
+            int end = chunkStart(t.length, piece % CHUNKS + 1);
+            for (int n = chunkStart(t.length, piece % CHUNKS); n < end; n++) {
                 t[n] += by * f[n];
             }
         });
@@ -206,9 +212,16 @@ public final class SmokeSolver {
         if (by == 1) {
             return;
         }
-        for (int n = 0; n < density.length; n++) {
-            density[n] *= by;
-        }
+        lanes.forEach(CHUNKS, piece -> {
+            int end = chunkStart(density.length, piece + 1);
+            for (int n = chunkStart(density.length, piece); n < end; n++) {
+                density[n] *= by;
+            }
+        });
+    }
+
+    private static int chunkStart(int length, int chunk) {
+        return (int) ((long) length * chunk / CHUNKS);
     }
 
     private void feed(float[] density, int frame) {

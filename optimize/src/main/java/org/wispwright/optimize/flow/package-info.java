@@ -7,6 +7,6 @@
  * {@link org.wispwright.optimize.flow.Projection}.
  * <p>Words: <i>substep</i> = one solver step, a frame has one or more; <i>departure</i> = where the fluid of a cell came
  * from; xBar = derivative of the loss by x.
- * <p>May use: render.volume, render.lanes. Held by {@code WallsTest}.
+ * <p>May use: render.volume, render.lanes, optimize.product. Held by {@code WallsTest}.
  */
 package org.wispwright.optimize.flow;

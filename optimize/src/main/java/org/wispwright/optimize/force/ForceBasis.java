@@ -24,7 +24,9 @@ public final class ForceBasis {
     private final List<List<Mode>> modes;
     private final List<double[][]> splines;
     private final int[] firstUnknown;
-    private final WaveSum waves;
+    private final Lanes lanes;
+    /** Workspace for the first b + 1 bands: low bands have few waves, and their sums are the cheaper for it. */
+    private final WaveSum[] waves;
 
     /**
      * Prepares the basis.
@@ -37,22 +39,40 @@ public final class ForceBasis {
         }
         this.shape = shape;
         this.steps = steps;
+        this.lanes = lanes;
         this.bands = List.copyOf(bands);
         modes = this.bands.stream().map(band -> Mode.in(shape, band)).toList();
         splines = this.bands.stream().map(band -> TimeSplines.orthonormal(steps, Math.min(band.splines(), steps))).toList();
         firstUnknown = new int[bands.size() + 1];
-        int l = 0;
-        int m = 0;
-        int n = 0;
         for (int b = 0; b < bands.size(); b++) {
             firstUnknown[b + 1] = firstUnknown[b] + modes.get(b).size() * splines.get(b)[0].length;
-            for (Mode mode : modes.get(b)) {
+        }
+        waves = new WaveSum[bands.size()];
+    }
+
+    private WaveSum wavesOf(int openBands) {
+        if (waves[openBands - 1] == null) {
+            int l = 0;
+            int m = 0;
+            int n = 0;
+            for (Mode mode : modes.subList(0, openBands).stream().flatMap(List::stream).toList()) {
                 l = Math.max(l, mode.l());
                 m = Math.max(m, mode.m());
                 n = Math.max(n, mode.n());
             }
+            waves[openBands - 1] = new WaveSum(shape, l + 1, m + 1, n + 1, lanes);
         }
-        waves = new WaveSum(shape, l + 1, m + 1, n + 1, lanes);
+        return waves[openBands - 1];
+    }
+
+    private int openBands(double[] x) {
+        for (int b = 1; b < firstUnknown.length; b++) {
+            if (x.length == firstUnknown[b]) {
+                return b;
+            }
+        }
+        throw new IllegalArgumentException("force: got " + x.length + " unknowns, needs one of "
+                + java.util.Arrays.toString(java.util.Arrays.copyOfRange(firstUnknown, 1, firstUnknown.length)));
     }
 
     /** The box. */
@@ -86,10 +106,13 @@ public final class ForceBasis {
      * @param x    read: {@code unknowns(b)} numbers for some b
      * @param step 0..steps-1
      * @param out  overwritten, m/s2
+     * @throws IllegalArgumentException if x has not the length of a number of open bands
      */
     public void force(double[] x, int step, MacVelocity out) {
-        waves.clear();
-        for (int b = 0; b < bands.size() && firstUnknown[b] < x.length; b++) {
+        int open = openBands(x);
+        WaveSum sum = wavesOf(open);
+        sum.clear();
+        for (int b = 0; b < open; b++) {
             double[] q = splines.get(b)[step];
             int at = firstUnknown[b];
             for (Mode mode : modes.get(b)) {
@@ -97,10 +120,10 @@ public final class ForceBasis {
                 for (double weight : q) {
                     amplitude += weight * x[at++];
                 }
-                waves.add(mode, amplitude);
+                sum.add(mode, amplitude);
             }
         }
-        waves.sum(out);
+        sum.sum(out);
     }
 
     /**
@@ -111,12 +134,14 @@ public final class ForceBasis {
      * @param xBar     added to, as long as x
      */
     public void pullback(MacVelocity forceBar, int step, double[] xBar) {
-        waves.project(forceBar);
-        for (int b = 0; b < bands.size() && firstUnknown[b] < xBar.length; b++) {
+        int open = openBands(xBar);
+        WaveSum sum = wavesOf(open);
+        sum.project(forceBar);
+        for (int b = 0; b < open; b++) {
             double[] q = splines.get(b)[step];
             int at = firstUnknown[b];
             for (Mode mode : modes.get(b)) {
-                double along = waves.along(mode);
+                double along = sum.along(mode);
                 for (double weight : q) {
                     xBar[at++] += weight * along;
                 }

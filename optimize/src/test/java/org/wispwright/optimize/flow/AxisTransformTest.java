@@ -1,5 +1,6 @@
 package org.wispwright.optimize.flow;
 
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
@@ -7,6 +8,7 @@ import java.util.Arrays;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
+import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.volume.GridShape;
 import org.wispwright.render.volume.MacVelocity;
 
@@ -128,7 +130,7 @@ class AxisTransformTest {
     }
 
     /** Both directions, along rows and along columns, against sums written out in double, for even, odd and mixed sizes. */
-    @ParameterizedTest @CsvSource({"1,WALL,WALL", "1,OPEN,OPEN", "2,WALL,WALL", "5,OPEN,OPEN", "8,WALL,OPEN", "9,OPEN,WALL", "33,WALL,WALL", "48,OPEN,OPEN"})
+    @ParameterizedTest @CsvSource({"1,WALL,WALL", "1,OPEN,OPEN", "2,WALL,WALL", "5,OPEN,OPEN", "8,WALL,OPEN", "9,OPEN,WALL", "33,WALL,WALL", "48,OPEN,OPEN", "64,WALL,WALL", "64,OPEN,OPEN", "128,WALL,WALL"})
     void blockedEqualsPlain(int n, Side low, Side high) {
         AxisTransform transform = new AxisTransform(n, low, high);
         int rows = 3;
@@ -161,6 +163,20 @@ class AxisTransformTest {
                 assertEquals(start[r * n + i], columns[i * rows + r], 1e-5);
             }
         }
+    }
+
+    /** The fast transform is shared by all lanes: the same bits for any number of them, and the box is as free of divergence as by products. */
+    @Test void fastTransformOnManyLanes() {
+        GridShape shape = new GridShape(64, 5, 64, 0.1);
+        MacVelocity one = FlowOperators.wind(shape, 0, 1, 3);
+        MacVelocity many = one.copy();
+        new Projection(shape, Sides.CLOSED, FlowOperators.ONE).apply(one);
+        try (Lanes lanes = new Lanes(4)) {
+            Projection projection = new Projection(shape, Sides.CLOSED, lanes);
+            projection.apply(many);
+            assertTrue(DivergenceKernel.relativeMax(many, new float[shape.cells()], lanes) < 3e-6);
+        }
+        assertArrayEquals(FlowOperators.all(one), FlowOperators.all(many));
     }
 
     /** {@code -x' L x} from the definition: squared differences across inner faces, plus x^2 at each open end. */
