@@ -2,6 +2,7 @@ package org.wispwright.optimize.flow;
 
 import org.jtransforms.dct.FloatDCT_1D;
 import org.wispwright.optimize.product.RowProduct;
+import pl.edu.icm.jlargearrays.ConcurrencyUtils;
 
 /**
  * The eigenvectors of the 1-D pressure operator along one axis, as an orthonormal transform: cells to modes and back.
@@ -27,6 +28,11 @@ final class AxisTransform {
     static final int FAST_FROM = 64;
     /** Columns that the fast transform copies out at a time: a cache line of them. */
     private static final int TILE = 16;
+
+    static {
+        // Threads come from Lanes alone; the library would start its own for long axes.
+        ConcurrencyUtils.setNumberOfThreads(1);
+    }
 
     private final int n;
     /** The fast transform, or null where the products serve. One is used by all threads: it keeps only tables. */

@@ -12,7 +12,7 @@ import org.wispwright.render.volume.MacVelocity;
  * the ghost cell of an open side. Then G is exactly minus the transpose of D, so {@code P = I - G (D G)^-1 D} is an orthogonal
  * projection, for walls and open sides alike.
  *
- * <p>Pullback: P is symmetric, so {@code uBar := P uBar}. The same method serves both; {@code ProjectionTest} proves it.
+ * <p>Pullback: P is symmetric, so {@code uBar := P uBar}. The same method serves both; {@code FlowPullbackTest} proves it.
  *
  * <p>D G is solved directly: {@link AxisTransform} along x and z, then for each pair of modes the tridiagonal system
  * {@code p[j-1] - (2 + lambda) p[j] + p[j+1] = d[j]} along y by the Thomas algorithm, with any mix of wall and open at floor

@@ -49,6 +49,7 @@ public final class Solve {
     static final int USUAL_ITERATIONS = 14;
 
     private final SolveProblem problem;
+    private final List<GridShape> climb;
     private final boolean stay;
     private final Lanes lanes;
     private final BooleanSupplier cancelled;
@@ -59,7 +60,16 @@ public final class Solve {
      * @param cancelled asked at every substep
      */
     public Solve(SolveProblem problem, boolean stay, Lanes lanes, BooleanSupplier cancelled) {
+        this(problem, rungs(problem.flow().grid()), stay, lanes, cancelled);
+    }
+
+    /** A solve that climbs other rungs of the same box; the last must be the problem's own grid. */
+    public Solve(SolveProblem problem, List<GridShape> climb, boolean stay, Lanes lanes, BooleanSupplier cancelled) {
+        if (climb.isEmpty() || !climb.get(climb.size() - 1).equals(problem.flow().grid())) {
+            throw new IllegalArgumentException("solve: the last rung must be the shot's own grid, " + problem.flow().grid().inWords());
+        }
         this.problem = problem;
+        this.climb = List.copyOf(climb);
         this.stay = stay;
         this.lanes = lanes;
         this.cancelled = cancelled;
@@ -104,9 +114,8 @@ public final class Solve {
      * @throws IllegalArgumentException if a note wants nothing, or not one state fits in the memory
      */
     public SolveResult run(long memoryBytes, StopRule until, Progress.Listener listener) {
-        List<GridShape> rungs = rungs(problem.flow().grid());
-        Search search = new Search(until, listener, rungs.size());
-        for (GridShape grid : rungs) {
+        Search search = new Search(until, listener, climb.size());
+        for (GridShape grid : climb) {
             if (search.ended.isEmpty()) {
                 search.climb(grid, memoryBytes);
             }

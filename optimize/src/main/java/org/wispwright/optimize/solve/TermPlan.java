@@ -128,9 +128,12 @@ final class TermPlan {
         for (int frame = Math.max(hold.firstFrame(), range.first() + 1); frame <= Math.min(hold.lastFrame(), range.last()); frame++) {
             int at = frame;
             boolean noted = problem.notes().stream().anyMatch(note -> note.frame() == at);
-            if (noted || (frame - range.first()) % EVERY == 0 || hold.firstFrame() == hold.lastFrame()) {
+            if (noted || (frame - range.first()) % EVERY == 0) {
                 frames.add(frame);
             }
+        }
+        if (frames.isEmpty() && hold.lastFrame() > range.first()) {
+            frames.add(Math.min(hold.lastFrame(), range.last()));              // a hold of a frame or two between those looked at
         }
         return frames;
     }

@@ -30,7 +30,7 @@ import org.wispwright.ui.shot.Shot;
  * @param without without it
  */
 public record StayTrade(GridShape grid, Side with, Side without) {
-    static final int ITERATIONS = 20;
+    static final int ITERATIONS = 30;
 
     /**
      * One of the two solves.
@@ -45,22 +45,23 @@ public record StayTrade(GridShape grid, Side with, Side without) {
      *
      * @throws Cancel.Cancelled if cancelled
      */
-    public static StayTrade of(Shot shot, long memoryBytes, Lanes lanes, Cancel cancel) {
+    public static StayTrade of(Shot shot, Lanes lanes, Cancel cancel) {
         GridShape grid = Solve.rungs(shot.flow().grid()).get(0);
         SolveProblem problem = ShotProblem.of(shot).on(grid);
         try {
             Map<Integer, ScalarGrid> original = densities(shot, problem.flow(), null, lanes, cancel);
-            return new StayTrade(grid, side(shot, problem, original, true, memoryBytes, lanes, cancel),
-                    side(shot, problem, original, false, memoryBytes, lanes, cancel));
+            return new StayTrade(grid, side(shot, problem, original, true, lanes, cancel),
+                    side(shot, problem, original, false, lanes, cancel));
         } catch (SolveCancelled asked) {
             throw new Cancel.Cancelled();
         }
     }
 
-    private static Side side(Shot shot, SolveProblem problem, Map<Integer, ScalarGrid> original, boolean stay, long memoryBytes, Lanes lanes,
-                             Cancel cancel) {
+    private static Side side(Shot shot, SolveProblem problem, Map<Integer, ScalarGrid> original, boolean stay, Lanes lanes, Cancel cancel) {
+        // An eighth of the cells: every state of the rung together is less than what the take's own solve kept.
+        long states = SmokeState.bytes(problem.flow().grid()) * problem.flow().frames().count() * problem.flow().substeps();
         StopRule few = new StopRule(0, Double.POSITIVE_INFINITY, ITERATIONS);
-        SolveResult solve = new Solve(problem, stay, lanes, cancel::wished).run(memoryBytes, few, now -> { });
+        SolveResult solve = new Solve(problem, List.of(problem.flow().grid()), stay, lanes, cancel::wished).run(states, few, now -> { });
         Map<Integer, ScalarGrid> take = densities(shot, problem.flow(), solve.unknowns(), lanes, cancel);
         return new Side(Departure.of(shot, original::get, take::get, lanes, cancel), solve.met());
     }

@@ -86,7 +86,7 @@ public final class TourWork {
         SolveWork.Result solve = SolveWork.run(shotFolder, shot, manner, lanes, progress, cancel);
         CompareWork.write(shotFolder, shot, solve.comparison(), out);
         progress.milestone("tour: two short solves, to tell what the stay term does");
-        StayTrade trade = StayTrade.of(shot, manner.memoryBytes(), lanes, cancel);
+        StayTrade trade = StayTrade.of(shot, lanes, cancel);
         ObjectNode report = SolveReport.of(solve);
         report.set("stayTrade", SolveReport.of(trade, shot.notes()));
         report.put("seconds", (System.nanoTime() - start) / 1e9);
