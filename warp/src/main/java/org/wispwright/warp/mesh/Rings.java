@@ -1,8 +1,10 @@
 package org.wispwright.warp.mesh;
 
 import java.util.ArrayDeque;
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Deque;
+import java.util.List;
 import java.util.TreeSet;
 
 /** Which corners of a mesh an edge joins. */
@@ -12,19 +14,22 @@ final class Rings {
 
     /** For each corner the corners joined to it, in rising order. */
     static int[][] of(TriangleMesh mesh) {
-        TreeSet<Integer>[] sets = sets(mesh.corners());
+        List<TreeSet<Integer>> sets = new ArrayList<>();
+        for (int i = 0; i < mesh.corners(); i++) {
+            sets.add(new TreeSet<>());
+        }
         int[] t = mesh.triangles();
         for (int n = 0; n < t.length; n += 3) {
             for (int k = 0; k < 3; k++) {
                 int a = t[n + k];
                 int b = t[n + (k + 1) % 3];
-                sets[a].add(b);
-                sets[b].add(a);
+                sets.get(a).add(b);
+                sets.get(b).add(a);
             }
         }
-        int[][] rings = new int[sets.length][];
+        int[][] rings = new int[sets.size()][];
         for (int i = 0; i < rings.length; i++) {
-            rings[i] = sets[i].stream().mapToInt(Integer::intValue).toArray();
+            rings[i] = sets.get(i).stream().mapToInt(Integer::intValue).toArray();
         }
         return rings;
     }
@@ -51,14 +56,5 @@ final class Rings {
                         + " holds the part of the mesh around corner " + i + "; add one there");
             }
         }
-    }
-
-    @SuppressWarnings({"unchecked", "rawtypes"})
-    private static TreeSet<Integer>[] sets(int count) {
-        TreeSet<Integer>[] sets = new TreeSet[count];
-        for (int i = 0; i < count; i++) {
-            sets[i] = new TreeSet<>();
-        }
-        return sets;
     }
 }

@@ -116,7 +116,8 @@ class MovingLeastSquaresTest {
     private static double[][] turned(double scale, double dx, double dy) {
         double[][] out = new double[4][];
         for (int n = 0; n < 4; n++) {
-            out[n] = new double[] {scale * (C * SQUARE[n][0] - .5 * SQUARE[n][1]) + dx, scale * (.5 * SQUARE[n][0] + C * SQUARE[n][1]) + dy};
+            out[n] = new double[] {scale * (C * SQUARE[n][0] - .5 * SQUARE[n][1]) + dx,
+                scale * (.5 * SQUARE[n][0] + C * SQUARE[n][1]) + dy};
         }
         return out;
     }
