@@ -10,7 +10,7 @@ import org.wispwright.render.picture.Picture;
  * gotBar += scale diffBar_0. Float storage, sums in double, row by row in a fixed order.
  * <p>Keeps its scratch space (about 6 floats a pixel and channel), so it allocates nothing when called; one caller at a time.
  */
-public final class PyramidLoss {
+public final class PyramidLoss implements PictureLoss {
     private final Pyramid pyramid;
     private final Picture wanted;
     private final float[][] weights;
@@ -29,16 +29,7 @@ public final class PyramidLoss {
     public PyramidLoss(Picture wanted, float[] weights) {
         this.wanted = wanted;
         pyramid = new Pyramid(wanted.width(), wanted.height());
-        if (weights.length != pyramid.pixels(0)) {
-            throw new IllegalArgumentException("picture loss: got " + weights.length + " weights, the wanted picture has "
-                    + wanted.width() + "x" + wanted.height() + " = " + pyramid.pixels(0) + " pixels");
-        }
-        for (int p = 0; p < weights.length; p++) {
-            if (!(weights[p] >= 0 && weights[p] < Float.POSITIVE_INFINITY)) {
-                throw new IllegalArgumentException("picture loss: weight of pixel (" + p % wanted.width() + ", " + p / wanted.width()
-                        + ") is " + weights[p] + ", needs a finite number, 0 or more");
-            }
-        }
+        LossInputs.requireWeights(wanted, weights);
         int levels = pyramid.levels();
         scratch = new float[pyramid.scratchFloats(4)];
         this.weights = new float[levels][];
@@ -55,16 +46,12 @@ public final class PyramidLoss {
         }
     }
 
-    /** The wanted picture itself. */
+    @Override
     public Picture wanted() {
         return wanted;
     }
 
-    /**
-     * J at a picture.
-     *
-     * @throws IllegalArgumentException if its raster is not that of the wanted picture
-     */
+    @Override
     public double value(Picture got) {
         takeDifference(got);
         double sum = 0;
@@ -75,18 +62,9 @@ public final class PyramidLoss {
         return sum;
     }
 
-    /**
-     * J at a picture, and {@code scale * dJ/dgot} added into {@code gotBar}.
-     *
-     * @param got    read
-     * @param gotBar added to: shape of got.rgba()
-     * @param scale  factor on the derivative only; the returned value is J itself
-     * @throws IllegalArgumentException if a raster is not that of the wanted picture
-     */
+    @Override
     public double valueAndPullback(Picture got, float[] gotBar, double scale) {
-        if (gotBar.length != difference[0].length) {
-            throw new IllegalArgumentException("picture loss: 'gotBar' has " + gotBar.length + " numbers, needs " + difference[0].length);
-        }
+        LossInputs.requireBar(wanted, gotBar);
         double value = value(got);
         for (int l = difference.length - 1; l >= 0; l--) {
             levelBar(l, 2 * scale / pyramid.pixels(l));
@@ -103,7 +81,7 @@ public final class PyramidLoss {
 
     /** The share of level 0 alone in J. */
     public double finest(Picture got) {
-        requireRaster(got);
+        LossInputs.requireRaster(wanted, got);
         subtract(got);
         return levelValue(0);
     }
@@ -114,7 +92,7 @@ public final class PyramidLoss {
     }
 
     private void takeDifference(Picture got) {
-        requireRaster(got);
+        LossInputs.requireRaster(wanted, got);
         subtract(got);
         for (int l = 0; l + 1 < difference.length; l++) {
             pyramid.down(l, 4, difference[l], difference[l + 1], scratch);
@@ -151,13 +129,6 @@ public final class PyramidLoss {
             b[n + 1] = f * d[n + 1];
             b[n + 2] = f * d[n + 2];
             b[n + 3] = f * d[n + 3];
-        }
-    }
-
-    private void requireRaster(Picture got) {
-        if (got.width() != wanted.width() || got.height() != wanted.height()) {
-            throw new IllegalArgumentException("picture loss: got a picture of " + got.width() + "x" + got.height() + " pixels, wanted is "
-                    + wanted.width() + "x" + wanted.height() + "; render the view at the wanted picture's raster");
         }
     }
 }

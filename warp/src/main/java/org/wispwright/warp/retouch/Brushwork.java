@@ -17,8 +17,7 @@ final class Brushwork {
         switch (stroke.brush()) {
             case ADD -> add(picture, coverage, new ColourNearby(picture, COLOUR_SIGMA * stroke.radius()));
             case REMOVE -> remove(picture.rgba(), coverage);
-            case SOFTEN -> mix(picture.rgba(), coverage, Gaussian.blurred(picture.rgba(), 4, picture.width(), picture.height(),
-                    SOFTEN_SIGMA * stroke.radius() * picture.height()));
+            case SOFTEN -> soften(picture, coverage, SOFTEN_SIGMA * stroke.radius() * picture.height());
         }
     }
 
@@ -45,14 +44,41 @@ final class Brushwork {
         }
     }
 
-    private static void mix(float[] rgba, float[] coverage, float[] blurred) {
-        for (int p = 0; p < coverage.length; p++) {
-            if (coverage[p] > 0) {
-                for (int n = 4 * p; n < 4 * p + 4; n++) {
-                    rgba[n] += coverage[p] * (blurred[n] - rgba[n]);
+    /** Blurs only the window that the stroke covers; the pixels have the bits they would have if all were blurred. */
+    private static void soften(Picture picture, float[] coverage, double sigma) {
+        Gaussian.Window window = covered(coverage, picture.width());
+        if (window == null) {
+            return;
+        }
+        float[] rgba = picture.rgba();
+        float[] blurred = Gaussian.blurred(rgba, 4, picture.width(), picture.height(), sigma, window);
+        for (int y = 0, n = 0; y < window.height(); y++) {
+            int p = window.left() + picture.width() * (window.top() + y);
+            for (int x = 0; x < window.width(); x++, p++, n += 4) {
+                if (coverage[p] > 0) {
+                    for (int c = 0; c < 4; c++) {
+                        rgba[4 * p + c] += coverage[p] * (blurred[n + c] - rgba[4 * p + c]);
+                    }
+                    rgba[4 * p + 3] = Math.min(1f, rgba[4 * p + 3]);
                 }
-                rgba[4 * p + 3] = Math.min(1f, rgba[4 * p + 3]);
             }
         }
+    }
+
+    /** The smallest window around all pixels with coverage; null if there are none. */
+    private static Gaussian.Window covered(float[] coverage, int width) {
+        int left = width;
+        int right = -1;
+        int top = -1;
+        int bottom = -1;
+        for (int p = 0; p < coverage.length; p++) {
+            if (coverage[p] > 0) {
+                left = Math.min(left, p % width);
+                right = Math.max(right, p % width);
+                top = top < 0 ? p / width : top;
+                bottom = p / width;
+            }
+        }
+        return right < 0 ? null : new Gaussian.Window(left, top, right - left + 1, bottom - top + 1);
     }
 }

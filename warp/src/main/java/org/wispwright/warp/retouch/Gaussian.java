@@ -10,20 +10,36 @@ final class Gaussian {
 
     /** A new array: the blurred values, {@code channels} numbers a pixel. sigma in pixels, 0 or more. */
     static float[] blurred(float[] in, int channels, int width, int height, double sigma) {
+        return blurred(in, channels, width, height, sigma, new Window(0, 0, width, height));
+    }
+
+    /**
+     * The blurred values of a window alone, with the bits they have in the whole: it reads 3 sigma beyond the window, and only there.
+     *
+     * @return a new array: channels x window.width() x window.height(), row 0 = the window's top
+     */
+    static float[] blurred(float[] in, int channels, int width, int height, double sigma, Window window) {
         double[] weights = weights(sigma);
-        float[] across = new float[in.length];
-        int row = width * channels;
-        double[] line = new double[row + 2 * channels * (weights.length - 1)];
+        int reach = weights.length - 1;
+        int top = Math.max(0, window.top() - reach);
+        int bottom = Math.min(height, window.top() + window.height() + reach);
+        int row = window.width() * channels;
+        float[] across = new float[row * (bottom - top)];
+        double[] line = new double[row + 2 * channels * reach];
         double[] sums = new double[row];
-        for (int y = 0; y < height; y++) {
-            alongRow(in, across, y * row, channels, width, weights, line, sums);
+        for (int y = top; y < bottom; y++) {
+            layOut(in, y * width * channels, channels, width, window.left() - reach, line);
+            alongRow(across, (y - top) * row, channels, weights, line, sums);
         }
-        float[] out = new float[in.length];
-        for (int y = 0; y < height; y++) {
-            acrossRows(across, out, y, row, height, weights, sums);
+        float[] out = new float[row * window.height()];
+        for (int y = 0; y < window.height(); y++) {
+            acrossRows(across, y + window.top() - top, bottom - top, out, y * row, weights, sums);
         }
         return out;
     }
+
+    /** Pixels of a raster: columns left to left + width - 1, rows top to top + height - 1. */
+    record Window(int left, int top, int width, int height) { }
 
     private static double[] weights(double sigma) {
         int reach = (int) Math.ceil(3 * sigma);
@@ -39,15 +55,19 @@ final class Gaussian {
         return weights;
     }
 
-    /** One row, {@code at} its first float: laid into {@code line} with the border pixels repeated, then summed tap by tap. */
-    private static void alongRow(float[] in, float[] out, int at, int channels, int width, double[] weights, double[] line, double[] sums) {
-        int reach = weights.length - 1;
-        for (int i = -reach; i < width + reach; i++) {
-            int from = at + channels * Math.min(width - 1, Math.max(0, i));
+    /** Pixels from {@code first} on of the row that begins at {@code rowAt}, border pixels repeated beyond the border. */
+    private static void layOut(float[] in, int rowAt, int channels, int width, int first, double[] line) {
+        for (int n = 0, i = first; n < line.length; i++) {
+            int from = rowAt + channels * Math.min(width - 1, Math.max(0, i));
             for (int c = 0; c < channels; c++) {
-                line[(i + reach) * channels + c] = in[from + c];
+                line[n++] = in[from + c];
             }
         }
+    }
+
+    /** One row, {@code at} its first float in out: {@code line} summed tap by tap. */
+    private static void alongRow(float[] out, int at, int channels, double[] weights, double[] line, double[] sums) {
+        int reach = weights.length - 1;
         int middle = reach * channels;
         for (int n = 0; n < sums.length; n++) {
             sums[n] = weights[0] * line[middle + n];
@@ -65,21 +85,22 @@ final class Gaussian {
         }
     }
 
-    /** Row y of the result from the rows above and below it. */
-    private static void acrossRows(float[] in, float[] out, int y, int row, int height, double[] weights, double[] sums) {
+    /** The row at {@code outAt} from row y of {@code in}, which has {@code rows}, and those above and below it. */
+    private static void acrossRows(float[] in, int y, int rows, float[] out, int outAt, double[] weights, double[] sums) {
+        int row = sums.length;
         for (int n = 0; n < row; n++) {
             sums[n] = weights[0] * in[y * row + n];
         }
         for (int k = 1; k < weights.length; k++) {
             double w = weights[k];
             int above = row * Math.max(0, y - k);
-            int below = row * Math.min(height - 1, y + k);
+            int below = row * Math.min(rows - 1, y + k);
             for (int n = 0; n < row; n++) {
                 sums[n] += w * ((double) in[above + n] + in[below + n]);
             }
         }
         for (int n = 0; n < row; n++) {
-            out[y * row + n] = (float) sums[n];
+            out[outAt + n] = (float) sums[n];
         }
     }
 }
