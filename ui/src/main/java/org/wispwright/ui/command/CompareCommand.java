@@ -61,7 +61,7 @@ final class CompareCommand implements Callable<Integer> {
         try (Lanes lanes = new Lanes(choice.threads()); ProgressLine progress = manner.progress()) {
             comparison = CompareWork.compare(folder, shot, takes.before(), takes.after(), lanes, progress, manner.cancel());
             manner.cancel().stopIfWished();
-            CompareWork.write(folder, shot, comparison, out);
+            CompareWork.write(folder, shot, comparison, out, progress);
         }
         ObjectNode object = CompareWork.report(comparison).put("ok", true).put("out", out.toString());
         String notes = comparison.notes().stream().map(n -> String.format(Locale.ROOT, "%s met %.1f %%", n.note().id(), 100 * n.met()))

@@ -17,7 +17,6 @@ import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
 import picocli.CommandLine.Spec;
 import picocli.CommandLine.UnmatchedArgumentException;
-import picocli.CommandLine.ParameterException;
 
 /** The program: finds the command, runs it, and turns whatever happens into an exit code and at most one sentence. */
 @Command(name = "wispwright", versionProvider = Main.Version.class, sortOptions = false,

@@ -2,7 +2,6 @@ package org.wispwright.ui.report;
 
 import java.awt.Color;
 import java.awt.Font;
-import java.awt.FontMetrics;
 import java.awt.Graphics2D;
 import java.awt.RenderingHints;
 import java.awt.Shape;
@@ -94,8 +93,8 @@ public record Sheet(String title, String subtitle, String before, Rgb background
             g.setRenderingHint(RenderingHints.KEY_STROKE_CONTROL, RenderingHints.VALUE_STROKE_PURE);
             g.setColor(SURROUND);
             g.fillRect(0, 0, sheet.getWidth(), sheet.getHeight());
-            text(g, shortened(g, title, font(Font.BOLD, 26), width - 2 * MARGIN), MARGIN, 58, font(Font.BOLD, 26), TEXT);
-            text(g, shortened(g, subtitle, font(Font.PLAIN, 15), width - 2 * MARGIN - 540), MARGIN, 84, font(Font.PLAIN, 15), QUIET);
+            Lettering.line(g, title, width - 2 * MARGIN, MARGIN, 58, Lettering.font(Font.BOLD, 26), TEXT);
+            Lettering.line(g, subtitle, width - 2 * MARGIN - 540, MARGIN, 84, Lettering.font(Font.PLAIN, 15), QUIET);
             paintLegend(g, width - MARGIN, meanings());
             double gain = gain();
             for (int n = 0; n < rows.size(); n++) {
@@ -111,10 +110,10 @@ public record Sheet(String title, String subtitle, String before, Rgb background
         g.setColor(RULE);
         g.fillRect(MARGIN, top, width - 2 * MARGIN, 1);
         int metWidth = paintMet(g, row.met(), width - MARGIN, top);
-        Font wordsFont = font(Font.PLAIN, 18);
-        text(g, shortened(g, "\u201C" + row.words().replaceAll("\\s+", " ").strip() + "\u201D", wordsFont,
-                width - 2 * MARGIN - metWidth - 24), MARGIN, top + 32, wordsFont, TEXT);
-        text(g, row.id() + "  \u00B7  " + row.place(), MARGIN, top + 54, font(Font.PLAIN, 14), QUIET);
+        Font wordsFont = Lettering.font(Font.PLAIN, 18);
+        Lettering.line(g, "\u201C" + row.words().replaceAll("\\s+", " ").strip() + "\u201D", width - 2 * MARGIN - metWidth - 24,
+                MARGIN, top + 32, wordsFont, TEXT);
+        Lettering.text(g, row.id() + "  \u00B7  " + row.place(), MARGIN, top + 54, Lettering.font(Font.PLAIN, 14), QUIET);
         List<Cell> cells = cells(row, gain, columns);
         int y = top + ROW_HEAD;
         for (int n = 0; n < cells.size(); n++) {
@@ -160,7 +159,7 @@ public record Sheet(String title, String subtitle, String before, Rgb background
                 g.setClip(clip);
             }
         }
-        text(g, cell.label(), x, y + cellHeight + 22, font(Font.PLAIN, 14), QUIET);
+        Lettering.text(g, cell.label(), x, y + cellHeight + 22, Lettering.font(Font.PLAIN, 14), QUIET);
     }
 
     private Set<RetouchMarks.Meaning> meanings() {
@@ -171,12 +170,11 @@ public record Sheet(String title, String subtitle, String before, Rgb background
 
     /** What the marks' colours mean, ending at {@code right}. */
     private static void paintLegend(Graphics2D g, int right, Set<RetouchMarks.Meaning> meanings) {
-        Font font = font(Font.PLAIN, 14);
-        FontMetrics metrics = g.getFontMetrics(font);
+        Font font = Lettering.font(Font.PLAIN, 14);
         int x = right;
         for (RetouchMarks.Meaning meaning : meanings) {
-            x -= metrics.stringWidth(meaning.words());
-            text(g, meaning.words(), x, 84, font, QUIET);
+            x -= Lettering.width(g, meaning.words(), font);
+            Lettering.text(g, meaning.words(), x, 84, font, QUIET);
             x -= 24;
             g.setColor(meaning.colour());
             g.fillRoundRect(x, 77, 16, 4, 4, 4);
@@ -186,11 +184,11 @@ public record Sheet(String title, String subtitle, String before, Rgb background
 
     /** Draws how far the note is met, ending at {@code right}; gives the width it took. */
     private static int paintMet(Graphics2D g, double met, int right, int top) {
-        Font big = font(Font.BOLD, 22);
+        Font big = Lettering.font(Font.BOLD, 22);
         String words = metInWords(met);
-        int textWidth = g.getFontMetrics(big).stringWidth(words);
+        int textWidth = Lettering.width(g, words, big);
         int barWidth = 150;
-        text(g, words, right - textWidth, top + 33, big, TEXT);
+        Lettering.text(g, words, right - textWidth, top + 33, big, TEXT);
         g.setColor(BAR_REST);
         g.fillRoundRect(right - barWidth, top + 45, barWidth, 6, 6, 6);
         int filled = (int) Math.round(barWidth * Math.min(1, Math.max(0, met)));
@@ -205,25 +203,6 @@ public record Sheet(String title, String subtitle, String before, Rgb background
     static String metInWords(double met) {
         int percent = (int) Math.floor(100 * Math.min(1, Math.max(-9.99, met)) + 1e-9);
         return "met " + (percent < 0 ? "\u2212" : "") + Math.abs(percent) + " %";
-    }
-
-    private static String shortened(Graphics2D g, String words, Font font, int most) {
-        FontMetrics metrics = g.getFontMetrics(font);
-        String fit = words;
-        while (metrics.stringWidth(fit) > most && fit.length() > 2) {
-            fit = fit.substring(0, fit.length() - 2).stripTrailing() + "\u2026";
-        }
-        return fit;
-    }
-
-    private static void text(Graphics2D g, String words, int x, int baseline, Font font, Color colour) {
-        g.setFont(font);
-        g.setColor(colour);
-        g.drawString(words, x, baseline);
-    }
-
-    private static Font font(int style, int size) {
-        return new Font(Font.SANS_SERIF, style, size);
     }
 
     private static double scale(Picture picture) {

@@ -17,6 +17,7 @@ import javax.imageio.ImageIO;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.picture.Picture;
+import org.wispwright.ui.report.Lettering;
 import org.wispwright.ui.report.Sheet;
 import org.wispwright.ui.report.SheetRow;
 import org.wispwright.ui.shot.Finding;
@@ -134,7 +135,10 @@ public final class CompareWork {
      * @param out made if it is not there; its parent must be
      * @throws ShotException if the place cannot be written to
      */
-    public static void write(ShotFolder folder, Shot shot, Comparison comparison, Path out) {
+    public static void write(ShotFolder folder, Shot shot, Comparison comparison, Path out, Progress progress) {
+        if (!Lettering.works()) {
+            progress.milestone("sheet: this machine has no fonts, so it has no words; install fontconfig and a font to see them");
+        }
         Sheet sheet = sheet(folder, shot, comparison);
         try {
             if (!Files.isDirectory(out)) {
