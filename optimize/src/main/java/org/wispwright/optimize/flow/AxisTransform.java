@@ -25,7 +25,7 @@ import pl.edu.icm.jlargearrays.ConcurrencyUtils;
  */
 final class AxisTransform {
     /** The shortest axis for which the fast transform pays. */
-    static final int FAST_FROM = 64;
+    static final int FAST_FROM = 32;
     /** Columns that the fast transform copies out at a time: a cache line of them. */
     private static final int TILE = 16;
 
@@ -50,9 +50,14 @@ final class AxisTransform {
     private final float[] cellsByOdd;
 
     AxisTransform(int n, Side low, Side high) {
+        this(n, low, high, FAST_FROM);
+    }
+
+    /** @param fastFrom the shortest axis that may take the fast transform; the benchmark keeps it away to compare */
+    AxisTransform(int n, Side low, Side high, int fastFrom) {
         this.n = n;
         boolean walls = low == Side.WALL && high == Side.WALL;
-        fast = walls && n >= FAST_FROM && Integer.bitCount(n) == 1 ? new FloatDCT_1D(n) : null;
+        fast = walls && n >= fastFrom && Integer.bitCount(n) == 1 ? new FloatDCT_1D(n) : null;
         tile = ThreadLocal.withInitial(() -> new float[TILE * n]);
         folded = low == high && n > 1 && fast == null;
         evens = folded ? (n + 1) / 2 : n;

@@ -61,7 +61,7 @@ public class TransformBench {
             start[p] = (float) random.nextGaussian();
         }
         scratch = new float[n * n];
-        product = new AxisTransform(n, Side.WALL, Side.WALL);
+        product = new AxisTransform(n, Side.WALL, Side.WALL, Integer.MAX_VALUE);
         fast = new FloatDCT_1D(n);
         fourier = new FloatFFT_1D(n);
         line = new float[n];
