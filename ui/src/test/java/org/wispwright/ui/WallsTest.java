@@ -70,7 +70,7 @@ class WallsTest {
 
     @Test
     void inUiTheJobsAndTheShotKnowNoScreen() {
-        noClasses().that().resideInAnyPackage("org.wispwright.ui.shot..", "org.wispwright.ui.work..", "org.wispwright.ui.command..")
+        noClasses().that().resideInAnyPackage("org.wispwright.ui.shot..", "org.wispwright.ui.job..", "org.wispwright.ui.command..")
                 .should().dependOnClassesThat()
                 .resideInAnyPackage("javax.swing..").check(OURS);
         noClasses().that().resideInAnyPackage("org.wispwright.ui.shot..", "org.wispwright.ui.command..").should().dependOnClassesThat()
@@ -91,7 +91,7 @@ class WallsTest {
         noClasses().that().resideInAPackage("org.wispwright.ui..").and().resideOutsideOfPackage("org.wispwright.ui.command..")
                 .should().dependOnClassesThat().resideInAnyPackage("org.wispwright.ui.command..", "picocli..").check(OURS);
         noClasses().that().resideInAPackage("org.wispwright.ui.shot..").should().dependOnClassesThat()
-                .resideInAnyPackage("org.wispwright.ui.work..", "org.wispwright.ui.report..").check(OURS);
+                .resideInAnyPackage("org.wispwright.ui.job..", "org.wispwright.ui.report..").check(OURS);
     }
 
     @Test

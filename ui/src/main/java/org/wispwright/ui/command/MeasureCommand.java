@@ -8,7 +8,7 @@ import org.wispwright.render.volume.GridShape;
 import org.wispwright.ui.shot.Finding;
 import org.wispwright.ui.shot.MemoryNeed;
 import org.wispwright.ui.shot.ShotException;
-import org.wispwright.ui.work.MeasureReport;
+import org.wispwright.ui.job.MeasureReport;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;

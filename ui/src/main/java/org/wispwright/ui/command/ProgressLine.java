@@ -1,7 +1,7 @@
 package org.wispwright.ui.command;
 
 import java.io.PrintWriter;
-import org.wispwright.ui.work.Progress;
+import org.wispwright.ui.job.Progress;
 
 /** Progress as text. */
 interface ProgressLine extends Progress, AutoCloseable {

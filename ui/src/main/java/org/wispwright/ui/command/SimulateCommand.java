@@ -5,7 +5,7 @@ import java.util.Locale;
 import java.util.concurrent.Callable;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.ui.shot.Shot;
-import org.wispwright.ui.work.SimulateWork;
+import org.wispwright.ui.job.SimulateWork;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 

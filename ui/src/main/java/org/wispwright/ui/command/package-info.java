@@ -1,5 +1,5 @@
 /**
- * Room: the command line. Each command is a thin shell: it reads options, calls a class of {@code ui.work}, and says what
+ * Room: the command line. Each command is a thin shell: it reads options, calls a class of {@code ui.job}, and says what
  * came out, in words or as JSON.
  * <p>Door: {@link org.wispwright.ui.command.Main}. Exit codes: {@link org.wispwright.ui.command.ExitCodes}.
  * <p>Words: <i>manner</i> = how a command speaks ({@code --json}, {@code --verbose}).

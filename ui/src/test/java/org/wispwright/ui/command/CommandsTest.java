@@ -19,7 +19,7 @@ import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
-import org.wispwright.ui.work.Cancel;
+import org.wispwright.ui.job.Cancel;
 
 class CommandsTest {
     @TempDir

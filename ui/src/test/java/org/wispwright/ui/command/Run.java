@@ -2,7 +2,7 @@ package org.wispwright.ui.command;
 
 import java.io.PrintWriter;
 import java.io.StringWriter;
-import org.wispwright.ui.work.Cancel;
+import org.wispwright.ui.job.Cancel;
 
 /** One run of the program inside the test: exit code and what it said. */
 record Run(int code, String out, String err) {

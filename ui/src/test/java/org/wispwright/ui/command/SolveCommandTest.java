@@ -17,9 +17,9 @@ import org.wispwright.optimize.solve.StopRule;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.ui.shot.ShotCheck;
 import org.wispwright.ui.shot.ShotFolder;
-import org.wispwright.ui.work.Cancel;
-import org.wispwright.ui.work.Progress;
-import org.wispwright.ui.work.SolveWork;
+import org.wispwright.ui.job.Cancel;
+import org.wispwright.ui.job.Progress;
+import org.wispwright.ui.job.SolveWork;
 
 class SolveCommandTest {
     @TempDir

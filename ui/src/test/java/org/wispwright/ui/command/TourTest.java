@@ -21,10 +21,10 @@ import org.junit.jupiter.api.io.TempDir;
 import org.wispwright.optimize.solve.StopRule;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.ui.shot.ShotException;
-import org.wispwright.ui.work.Cancel;
-import org.wispwright.ui.work.Progress;
-import org.wispwright.ui.work.SolveWork;
-import org.wispwright.ui.work.TourWork;
+import org.wispwright.ui.job.Cancel;
+import org.wispwright.ui.job.Progress;
+import org.wispwright.ui.job.SolveWork;
+import org.wispwright.ui.job.TourWork;
 
 class TourTest {
     private static final SolveWork.Manner SHORT = new SolveWork.Manner(256L << 20, new StopRule(0, 1000, 2), true);

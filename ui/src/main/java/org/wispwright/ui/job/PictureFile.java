@@ -1,4 +1,4 @@
-package org.wispwright.ui.work;
+package org.wispwright.ui.job;
 
 import java.io.IOException;
 import java.nio.file.Files;

@@ -1,4 +1,4 @@
-package org.wispwright.ui.work;
+package org.wispwright.ui.job;
 
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.march.RayMarcher;

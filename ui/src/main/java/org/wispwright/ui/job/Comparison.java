@@ -1,4 +1,4 @@
-package org.wispwright.ui.work;
+package org.wispwright.ui.job;
 
 import java.util.List;
 import org.wispwright.render.picture.Picture;

@@ -1,4 +1,4 @@
-package org.wispwright.ui.work;
+package org.wispwright.ui.job;
 
 /** What a running job tells. Called on the job's thread; must return soon and must not throw. */
 public interface Progress {

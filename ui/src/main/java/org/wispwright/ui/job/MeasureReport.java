@@ -1,4 +1,4 @@
-package org.wispwright.ui.work;
+package org.wispwright.ui.job;
 
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;

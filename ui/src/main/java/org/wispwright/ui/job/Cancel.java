@@ -1,4 +1,4 @@
-package org.wispwright.ui.work;
+package org.wispwright.ui.job;
 
 /** A wish to stop, made on one thread and asked about on another. */
 public final class Cancel {

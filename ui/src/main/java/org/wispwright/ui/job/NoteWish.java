@@ -1,4 +1,4 @@
-package org.wispwright.ui.work;
+package org.wispwright.ui.job;
 
 import org.wispwright.optimize.solve.SolveProblem;
 import org.wispwright.optimize.solve.Wish;
