@@ -10,6 +10,13 @@ class FlowPullbackTest {
     private static final GridShape BOX = new GridShape(7, 6, 9, 0.5);
     private static final GridShape PLANE = new GridShape(9, 8, 1, 0.5);
 
+    /** Some start from longer steps, for three halvings above the rounding of float; still off every kink. */
+    abstract static class Longer extends PullbackContract {
+        @Override protected double largestStep() {
+            return 2;
+        }
+    }
+
     @Nested class ProjectionClosed extends PullbackContract {
         @Override protected Operator operator() {
             return FlowOperators.projection(BOX, Sides.CLOSED);
@@ -46,13 +53,13 @@ class FlowPullbackTest {
         }
     }
 
-    @Nested class TraceBox extends PullbackContract {
+    @Nested class TraceBox extends Longer {
         @Override protected Operator operator() {
             return FlowOperators.trace(BOX);
         }
     }
 
-    @Nested class TracePlane extends PullbackContract {
+    @Nested class TracePlane extends Longer {
         @Override protected Operator operator() {
             return FlowOperators.trace(PLANE);
         }
@@ -84,7 +91,7 @@ class FlowPullbackTest {
 
     @Nested class CarryZLinear extends PullbackContract {
         @Override protected Operator operator() {
-            return FlowOperators.carry(BOX, Lattice.Axis.Z_FACES, Interpolation.LINEAR, Side.OPEN, Side.OPEN);
+            return FlowOperators.carry(new GridShape(6, 7, 8, 0.5), Lattice.Axis.Z_FACES, Interpolation.LINEAR, Side.OPEN, Side.OPEN);
         }
     }
 
@@ -100,19 +107,19 @@ class FlowPullbackTest {
         }
     }
 
-    @Nested class StepLinear extends PullbackContract {
+    @Nested class StepLinear extends Longer {
         @Override protected Operator operator() {
             return FlowOperators.step(BOX, Interpolation.LINEAR, Interpolation.LINEAR);
         }
     }
 
-    @Nested class StepCubic extends PullbackContract {
+    @Nested class StepCubic extends Longer {
         @Override protected Operator operator() {
             return FlowOperators.step(BOX, Interpolation.CUBIC, Interpolation.CUBIC);
         }
     }
 
-    @Nested class StepPlane extends PullbackContract {
+    @Nested class StepPlane extends Longer {
         @Override protected Operator operator() {
             return FlowOperators.step(PLANE, Interpolation.LINEAR, Interpolation.CUBIC);
         }

@@ -48,7 +48,10 @@ public abstract class PullbackContract {
                 + ", gap " + Math.abs(left - right) / scale + " of |Jd||y|, allowed " + dotTolerance() + ", seed " + SEED);
     }
 
-    /** O70: the first-order remainder falls fourfold as the step halves (slope in [1.9, 2.1]) until rounding hides it. */
+    /**
+     * O70: the first-order remainder falls fourfold as the step halves: slopes in [1.9, 2.1] over at least 3 halvings, the first two not
+     * counted where they still feel the third order, until rounding hides it.
+     */
     @Test
     protected void remainderFallsFourfold() {
         Operator op = operator();
@@ -61,6 +64,7 @@ public abstract class PullbackContract {
         double floor = noise() * normOfProducts(base, y);
         double previous = Double.NaN;
         int halvings = 0;
+        int tooLarge = 0;
         StringBuilder seen = new StringBuilder();
         for (double e = largestStep(); e > largestStep() / 40; e /= 2) {
             double[] moved = forwardAt(op, e);
@@ -77,12 +81,17 @@ public abstract class PullbackContract {
             }
             if (!Double.isNaN(previous)) {
                 double order = Math.log(previous / remainder) / Math.log(2);
-                assertTrue(order > 1.8 && order < 2.2, () -> op.name() + ": remainder order " + order + ", needs about 2:" + seen);
-                halvings++;
+                boolean second = order > 1.9 && order < 2.1;
+                if (!second && halvings == 0 && tooLarge < 2) {
+                    tooLarge++;                                              // the largest steps may still feel the third order
+                } else {
+                    assertTrue(second, () -> op.name() + ": remainder order " + order + ", needs about 2:" + seen);
+                    halvings++;
+                }
             }
             previous = remainder;
         }
-        int enough = op.linear() ? 1 : 2;
+        int enough = op.linear() ? 1 : 3;
         int counted = halvings;
         assertTrue(counted >= enough, () -> op.name() + ": only " + counted + " halvings above the noise " + floor + ":" + seen);
     }

@@ -31,7 +31,7 @@ class RayMarcherContractTest {
     abstract static class MarchContract extends PullbackContract {
         @Override
         protected double noise() {
-            return 2e-8;
+            return 1e-7;
         }
     }
 
