@@ -81,6 +81,11 @@ final class SmokeChain implements ReversibleChain {
         bar.clear();
     }
 
+    /** Lets go of the snapshots, most of the memory; a sweep after this makes new ones. */
+    void release() {
+        slots.clear();
+    }
+
     /** The current state, to read. */
     SmokeState current() {
         return current;

@@ -151,6 +151,9 @@ public final class Solve {
          */
         void climb(GridShape grid, long memoryBytes) {
             rung++;
+            if (loss != null) {
+                loss.release();                                                // the search still holds the lower rung's loss for a moment
+            }
             SolveProblem here = problem.on(grid);
             FlowSetup flow = here.flow();
             SmokeSolver solver = new SmokeSolver(flow, lanes);

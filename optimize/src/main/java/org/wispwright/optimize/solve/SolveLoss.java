@@ -59,6 +59,11 @@ final class SolveLoss implements Objective {
         return sum[0];
     }
 
+    /** Lets go of the kept states; an evaluation after this makes new ones. */
+    void release() {
+        chain.release();
+    }
+
     /** Losses of the terms at the last evaluation, before their scales. */
     double[] losses() {
         return losses;
