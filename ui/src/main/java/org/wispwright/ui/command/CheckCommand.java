@@ -60,11 +60,13 @@ final class CheckCommand implements Callable<Integer> {
         int rendered = checked.views().stream().mapToInt(v -> v.rendered().size()).sum();
         object.put("name", checked.name()).put("cells", flow.grid().cells()).put("firstFrame", flow.frames().first())
                 .put("lastFrame", flow.frames().last())
-                .put("views", checked.views().size()).put("notes", checked.notes().size()).put("renderedFrames", rendered)
+                .put("views", checked.views().size()).put("notes", checked.notes().size() + checked.off().size())
+                        .put("notesOff", checked.off().size()).put("renderedFrames", rendered)
                         .put("leastMemoryBytes", need);
         manner.say("'" + checked.name() + "' is in order: " + flow.grid().inWords() + ", frames " + flow.frames().first() + " to "
                 + flow.frames().last()
-                + ", views " + checked.views().size() + ", notes " + checked.notes().size() + ", rendered frames " + rendered
+                + ", views " + checked.views().size() + ", notes " + (checked.notes().size() + checked.off().size())
+                + (checked.off().isEmpty() ? "" : " (" + checked.off().size() + " off)") + ", rendered frames " + rendered
                 + "; a solve takes at least " + MemoryNeed.inWords(need) + ".", object);
         return ExitCodes.OK;
     }

@@ -56,6 +56,10 @@ public final class CompareWork {
         for (int take : new int[] {0, before, after}) {
             takes.requireOf(take, flow);
         }
+        if (shot.notes().isEmpty() && !shot.off().isEmpty()) {
+            throw new ShotException(new Finding("notes", "",
+                    "every note is off, so there is nothing to compare; turn one on with 'note on SHOT ID'."));
+        }
         if (shot.notes().isEmpty()) {
             throw new ShotException(new Finding("notes", "",
                     "there is no note, so there is nothing to compare; add a file notes/ID.json (docs/shot-folder.md)."));

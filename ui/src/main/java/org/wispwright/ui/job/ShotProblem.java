@@ -19,9 +19,13 @@ public final class ShotProblem {
     /**
      * The problem of a checked shot.
      *
-     * @throws ShotException if the shot has no note
+     * @throws ShotException if the shot has no note that is on
      */
     public static SolveProblem of(Shot shot) {
+        if (shot.notes().isEmpty() && !shot.off().isEmpty()) {
+            throw new ShotException(new Finding("notes", "",
+                    "every note is off, so there is nothing to solve; turn one on with 'note on SHOT ID'."));
+        }
         if (shot.notes().isEmpty()) {
             throw new ShotException(new Finding("notes", "",
                     "there is no note, so there is nothing to solve; add a file notes/ID.json (docs/shot-folder.md)."));

@@ -18,6 +18,8 @@ final class NoteReader {
     static final int MOST_NOTES = 1000;
     /** The most a note file may weigh: 4 MiB. */
     static final long MOST_BYTES = 4L << 20;
+    /** What the name of a note file without its ending must match. */
+    static final String ID = "[A-Za-z0-9][A-Za-z0-9_-]{0,63}";
     private static final int MOST_HOLDS = 100;
     private static final double FARTHEST = 100;
 
@@ -29,22 +31,41 @@ final class NoteReader {
         this.findings = findings;
     }
 
-    /** All notes that could be read, by id; what could not be read is in the findings. */
-    List<Note> read() {
-        List<Note> notes = new ArrayList<>();
+    /**
+     * Notes in the order of their ids.
+     *
+     * @param on take part
+     * @param off are read and checked all the same
+     */
+    record Notes(List<Note> on, List<Note> off) {
+    }
+
+    /** All notes that could be read; what could not be read is in the findings. */
+    Notes read() {
+        Notes notes = new Notes(new ArrayList<>(), new ArrayList<>());
         for (String name : findings.attempt(() -> folder.names("notes", ".json", MOST_NOTES)).orElse(List.of())) {
             String file = "notes/" + name;
-            findings.attempt(() -> note(JsonDoor.read(folder, file, MOST_BYTES), name)).ifPresent(notes::add);
+            findings.check(() -> {
+                JsonPlace top = JsonDoor.read(folder, file, MOST_BYTES);
+                Note note = note(top, name);
+                (isOn(top) ? notes.on() : notes.off()).add(note);
+            });
         }
         return notes;
     }
 
-    private static Note note(JsonPlace top, String fileName) {
+    /** Whether the note takes part: the key {@code on}, true where it is not written. */
+    static boolean isOn(JsonPlace top) {
+        return top.ask("on").map(JsonPlace::truth).orElse(true);
+    }
+
+    /** The note of a file. @throws ShotException if it is not as it must be */
+    static Note note(JsonPlace top, String fileName) {
         String id = fileName.substring(0, fileName.length() - ".json".length());
-        if (!id.matches("[A-Za-z0-9][A-Za-z0-9_-]{0,63}")) {
+        if (!id.matches(ID)) {
             throw top.fault("the file name '" + fileName + "'", "letters, digits, '-' and '_' before .json, at most 64", "rename the file");
         }
-        top.version(SetupReader.FORMAT).only("wispwright", "words", "frame", "view", "weight", "retouch", "holds");
+        top.version(SetupReader.FORMAT).only("wispwright", "on", "words", "frame", "view", "weight", "retouch", "holds");
         String words = top.need("words").text(2000);
         int frame = top.need("frame").whole(0, Integer.MAX_VALUE);
         String view = top.need("view").text(100);

@@ -14,13 +14,16 @@ import org.wispwright.render.picture.Rgb;
  * @param look how density becomes a picture
  * @param background linear light; behind the smoke when a picture is shown, never inside a solve
  * @param views at least one, names differ
- * @param notes in the order of their ids
+ * @param notes that take part, in the order of their ids
+ * @param off notes that are off: checked like the others, but no part of a solve or a comparison
  */
-public record Shot(String name, FlowSetup flow, Look look, Rgb background, List<ShotView> views, List<Note> notes) {
+public record Shot(String name, FlowSetup flow, Look look, Rgb background, List<ShotView> views, List<Note> notes,
+        List<Note> off) {
     /** Keeps copies. */
     public Shot {
         views = List.copyOf(views);
         notes = List.copyOf(notes);
+        off = List.copyOf(off);
     }
 
     /** The view of that name. */

@@ -49,7 +49,7 @@ public final class ShotCheck {
      */
     public static Result of(Path folder, long memoryBytes) {
         try {
-            return new ShotCheck(ShotFolder.open(folder), memoryBytes).run();
+            return new ShotCheck(ShotFolder.open(folder), memoryBytes).run(true);
         } catch (ShotException noFolder) {
             return new Result(Optional.empty(), List.of(noFolder.finding()));
         }
@@ -68,16 +68,39 @@ public final class ShotCheck {
         throw new ShotException(result.findings().get(0));
     }
 
-    private Result run() {
+    /**
+     * The set-up and the notes, checked as always, but without opening a rendered frame or asking for a solve's memory: what it
+     * takes to work on notes.
+     *
+     * @throws ShotException with the first finding, if there is any
+     */
+    static Shot requireForNotes(ShotFolder folder) {
+        ShotCheck check = new ShotCheck(folder, Long.MAX_VALUE);
+        Result result = check.run(false);
+        check.findings.throwFirst();
+        return result.shot().orElseThrow();
+    }
+
+    /** Refuses a note that does not fit the shot. @throws ShotException with the first finding */
+    static void requireFits(Note note, Shot shot) {
+        Findings findings = new Findings();
+        checkNote(note, shot, findings);
+        findings.throwFirst();
+    }
+
+    private Result run(boolean pictures) {
         Optional<Shot> setup = new SetupReader(folder, findings, memoryBytes).read();
-        List<Note> notes = new NoteReader(folder, findings).read();
+        NoteReader.Notes notes = new NoteReader(folder, findings).read();
         setup.ifPresent(shot -> {
             checkSources(shot);
-            checkViews(shot);
-            notes.forEach(note -> checkNote(note, shot));
+            if (pictures) {
+                checkViews(shot);
+            }
+            notes.on().forEach(note -> checkNote(note, shot, findings));
+            notes.off().forEach(note -> checkNote(note, shot, findings));
         });
         Optional<Shot> whole = setup.filter(s -> findings.none())
-                .map(s -> new Shot(s.name(), s.flow(), s.look(), s.background(), s.views(), notes));
+                .map(s -> new Shot(s.name(), s.flow(), s.look(), s.background(), s.views(), notes.on(), notes.off()));
         return new Result(whole, findings.all());
     }
 
@@ -151,7 +174,7 @@ public final class ShotCheck {
         }
     }
 
-    private void checkNote(Note note, Shot shot) {
+    private static void checkNote(Note note, Shot shot, Findings findings) {
         String file = "notes/" + note.id() + ".json";
         FrameRange frames = shot.flow().frames();
         String range = frames.first() + " to " + frames.last();

@@ -179,7 +179,9 @@ class CommandsTest {
     @ValueSource(strings = {"", "paint", "check", "check a b", "check . --memory lots", "check . --memory -2G", "check . --memory 0",
             "check . --colour red",
         "simulate . --threads 0", "simulate . --threads many", "compare . --takes 0 --out x", "measure --grid 4", "measure --frames 1",
-                "measure --grid big", "measure extra", "solve . --until soon", "solve . --until loss=2", "solve . --until iterations=0.5",
+                "measure --grid big", "measure extra", "note", "note paint .", "note list",
+                "note off .", "note copy . a", "note copy . a --frame x", "note undo", "solve . --until soon", "solve . --until loss=2",
+                "solve . --until iterations=0.5",
                 "solve . --until seconds=0", "compare . --takes a,b --out x", "picture . --take 0",
                 "picture . --take x --frame 1 --view v --out a.png",
         "picture . --take 0 --frame 1 --view v --out a.gif", "picture . --take 0 --frame 1 --view v --out a.png --height 0"})
@@ -191,9 +193,10 @@ class CommandsTest {
     }
 
     @ParameterizedTest
-    @ValueSource(strings = {"", "tour", "check", "simulate", "picture", "solve", "compare", "measure"})
+    @ValueSource(strings = {"", "tour", "check", "simulate", "picture", "solve", "compare", "measure", "note", "note list",
+        "note off", "note on", "note copy", "note delete", "note undo"})
     void helpShowsAnExample(String command) {
-        Run run = command.isEmpty() ? Run.of("--help") : Run.of(command, "--help");
+        Run run = command.isEmpty() ? Run.of("--help") : Run.of((command + " --help").split(" "));
         assertEquals(0, run.code());
         assertTrue(run.out().contains("java -jar wispwright.jar"), run.out());
     }
