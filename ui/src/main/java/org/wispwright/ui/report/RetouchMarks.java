@@ -30,6 +30,7 @@ final class RetouchMarks {
     enum Meaning {
         /** A hold, or a pin of a mesh warp. */ KEEP(0x9BD18B, "stays"),
         /** The region that an operation may act in. */ WITHIN(0xC3B1E1, "acts within"),
+        /** Restore brush. */ RESTORE(0xB7B07A, "restore"),
         /** Soften brush. */ SOFTEN(0xD9D9D9, "soften"),
         /** Remove brush. */ REMOVE(0x6EC1E4, "remove"),
         /** Handles of a mesh warp. */ PULL(0xE58A5C, "pull"),
@@ -89,6 +90,7 @@ final class RetouchMarks {
             case ADD -> Meaning.ADD;
             case REMOVE -> Meaning.REMOVE;
             case SOFTEN -> Meaning.SOFTEN;
+            case RESTORE -> Meaning.RESTORE;
         };
     }
 
@@ -131,6 +133,7 @@ final class RetouchMarks {
             }
             case REMOVE -> line(new Line2D.Double(x - arm, y, x + arm, y), colour, solid(1.6f));
             case SOFTEN -> line(new Ellipse2D.Double(x - arm / 2, y - arm / 2, arm, arm), colour, solid(1.6f));
+            case RESTORE -> line(new Rectangle2D.Double(x - arm / 2, y - arm / 2, arm, arm), colour, solid(1.6f));
         }
     }
 

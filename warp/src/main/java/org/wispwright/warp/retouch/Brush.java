@@ -10,5 +10,10 @@ public enum Brush {
     /** {@code rgba' = (1 - m) rgba}: smoke thinned, colour kept. */
     REMOVE,
     /** {@code rgba' = rgba + m (blurred - rgba)}: blurred with a Gaussian whose width follows the stroke's radius. */
-    SOFTEN
+    SOFTEN,
+    /**
+     * {@code rgba' = rgba + m (original - rgba)}: the picture as it was before any operation of the retouch. Coverage 1 gives the very
+     * bits of the original; a place that nothing has changed keeps its own.
+     */
+    RESTORE
 }

@@ -12,12 +12,14 @@ final class Brushwork {
     private Brushwork() {
     }
 
-    static void apply(Stroke stroke, Picture picture) {
+    /** Changes {@code picture}; {@code original} is the picture before the retouch's first operation, read only. */
+    static void apply(Stroke stroke, Picture picture, Picture original) {
         float[] coverage = StrokeCoverage.of(stroke, picture.width(), picture.height());
         switch (stroke.brush()) {
             case ADD -> add(picture, coverage, new ColourNearby(picture, COLOUR_SIGMA * stroke.radius()));
             case REMOVE -> remove(picture.rgba(), coverage);
             case SOFTEN -> soften(picture, coverage, SOFTEN_SIGMA * stroke.radius() * picture.height());
+            case RESTORE -> restore(picture.rgba(), coverage, original.rgba());
         }
     }
 
@@ -40,6 +42,14 @@ final class Brushwork {
                 for (int c = 0; c < 4; c++) {
                     rgba[4 * p + c] *= 1 - coverage[p];
                 }
+            }
+        }
+    }
+
+    private static void restore(float[] rgba, float[] coverage, float[] original) {
+        for (int p = 0; p < coverage.length; p++) {
+            for (int n = 4 * p; coverage[p] > 0 && n < 4 * p + 4; n++) {
+                rgba[n] = coverage[p] < 1 ? rgba[n] + coverage[p] * (original[n] - rgba[n]) : original[n];
             }
         }
     }
