@@ -32,6 +32,7 @@ final class RetouchMarks {
         /** The region that an operation may act in. */ WITHIN(0xC3B1E1, "acts within"),
         /** Restore brush. */ RESTORE(0xB7B07A, "restore"),
         /** Soften brush. */ SOFTEN(0xD9D9D9, "soften"),
+        /** Push brush. */ PUSH(0xD98CB3, "push"),
         /** Remove brush. */ REMOVE(0x6EC1E4, "remove"),
         /** Handles of a mesh warp. */ PULL(0xE58A5C, "pull"),
         /** Add brush. */ ADD(0xF2C14E, "add");
@@ -91,6 +92,7 @@ final class RetouchMarks {
             case REMOVE -> Meaning.REMOVE;
             case SOFTEN -> Meaning.SOFTEN;
             case RESTORE -> Meaning.RESTORE;
+            case PUSH -> Meaning.PUSH;
         };
     }
 
@@ -133,6 +135,7 @@ final class RetouchMarks {
             }
             case REMOVE -> line(new Line2D.Double(x - arm, y, x + arm, y), colour, solid(1.6f));
             case SOFTEN -> line(new Ellipse2D.Double(x - arm / 2, y - arm / 2, arm, arm), colour, solid(1.6f));
+            case PUSH -> line(path, colour, solid(1.6f));
             case RESTORE -> line(new Rectangle2D.Double(x - arm / 2, y - arm / 2, arm, arm), colour, solid(1.6f));
         }
     }

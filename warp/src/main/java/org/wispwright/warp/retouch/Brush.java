@@ -15,5 +15,10 @@ public enum Brush {
      * {@code rgba' = rgba + m (original - rgba)}: the picture as it was before any operation of the retouch. Coverage 1 gives the very
      * bits of the original; a place that nothing has changed keeps its own.
      */
-    RESTORE
+    RESTORE,
+    /**
+     * {@code rgba'(p) = rgba(p - m T(p))}, T the travel of the stroke near p, at most its radius: smoke moved the way the stroke went, read
+     * bicubically. A dab has no direction and changes nothing.
+     */
+    PUSH
 }

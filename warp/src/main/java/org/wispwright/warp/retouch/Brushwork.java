@@ -20,6 +20,7 @@ final class Brushwork {
             case REMOVE -> remove(picture.rgba(), coverage);
             case SOFTEN -> soften(picture, coverage, SOFTEN_SIGMA * stroke.radius() * picture.height());
             case RESTORE -> restore(picture.rgba(), coverage, original.rgba());
+            case PUSH -> push(stroke, picture, coverage);
         }
     }
 
@@ -51,6 +52,13 @@ final class Brushwork {
             for (int n = 4 * p; coverage[p] > 0 && n < 4 * p + 4; n++) {
                 rgba[n] = coverage[p] < 1 ? rgba[n] + coverage[p] * (original[n] - rgba[n]) : original[n];
             }
+        }
+    }
+
+    private static void push(Stroke stroke, Picture picture, float[] coverage) {
+        Gaussian.Window window = covered(coverage, picture.width());
+        if (window != null) {
+            Push.apply(stroke, picture, coverage, window);
         }
     }
 
