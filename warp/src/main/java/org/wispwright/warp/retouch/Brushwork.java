@@ -21,6 +21,8 @@ final class Brushwork {
             case SOFTEN -> soften(picture, coverage, SOFTEN_SIGMA * stroke.radius() * picture.height());
             case RESTORE -> restore(picture.rgba(), coverage, original.rgba());
             case PUSH -> push(stroke, picture, coverage);
+            case EVEN -> contrast(picture, coverage, stroke.radius(), -1);
+            case LIFT -> contrast(picture, coverage, stroke.radius(), 1);
         }
     }
 
@@ -59,6 +61,13 @@ final class Brushwork {
         Gaussian.Window window = covered(coverage, picture.width());
         if (window != null) {
             Push.apply(stroke, picture, coverage, window);
+        }
+    }
+
+    private static void contrast(Picture picture, float[] coverage, double radius, int direction) {
+        Gaussian.Window window = covered(coverage, picture.width());
+        if (window != null) {
+            LocalContrast.apply(picture, coverage, window, radius, direction);
         }
     }
 
