@@ -22,7 +22,7 @@ import org.wispwright.warp.retouch.Retouch;
 import org.wispwright.warp.retouch.Stroke;
 
 /**
- * A retouch drawn as lines: strokes as the outline of what they cover (add and remove also carry their sign), handles as
+ * A retouch drawn as lines: strokes as the outline of what they cover, with a sign (push: its line), handles as
  * arrows, pins as dots, holds and regions dashed. Every line has a dark rim, so it shows on any picture.
  */
 final class RetouchMarks {
@@ -30,7 +30,11 @@ final class RetouchMarks {
     enum Meaning {
         /** A hold, or a pin of a mesh warp. */ KEEP(0x9BD18B, "stays"),
         /** The region that an operation may act in. */ WITHIN(0xC3B1E1, "acts within"),
+        /** Restore brush. */ RESTORE(0xB7B07A, "restore"),
         /** Soften brush. */ SOFTEN(0xD9D9D9, "soften"),
+        /** Even out brush. */ EVEN(0x8FB8A8, "even out"),
+        /** Lift contrast brush. */ LIFT(0xF0907A, "lift contrast"),
+        /** Push brush. */ PUSH(0xD98CB3, "push"),
         /** Remove brush. */ REMOVE(0x6EC1E4, "remove"),
         /** Handles of a mesh warp. */ PULL(0xE58A5C, "pull"),
         /** Add brush. */ ADD(0xF2C14E, "add");
@@ -89,6 +93,10 @@ final class RetouchMarks {
             case ADD -> Meaning.ADD;
             case REMOVE -> Meaning.REMOVE;
             case SOFTEN -> Meaning.SOFTEN;
+            case RESTORE -> Meaning.RESTORE;
+            case PUSH -> Meaning.PUSH;
+            case EVEN -> Meaning.EVEN;
+            case LIFT -> Meaning.LIFT;
         };
     }
 
@@ -131,6 +139,16 @@ final class RetouchMarks {
             }
             case REMOVE -> line(new Line2D.Double(x - arm, y, x + arm, y), colour, solid(1.6f));
             case SOFTEN -> line(new Ellipse2D.Double(x - arm / 2, y - arm / 2, arm, arm), colour, solid(1.6f));
+            case PUSH -> line(path, colour, solid(1.6f));
+            case EVEN -> {
+                line(new Line2D.Double(x - arm, y - arm / 3, x + arm, y - arm / 3), colour, solid(1.6f));
+                line(new Line2D.Double(x - arm, y + arm / 3, x + arm, y + arm / 3), colour, solid(1.6f));
+            }
+            case LIFT -> {
+                line(new Line2D.Double(x - arm / 3, y - arm, x - arm / 3, y + arm), colour, solid(1.6f));
+                line(new Line2D.Double(x + arm / 3, y - arm, x + arm / 3, y + arm), colour, solid(1.6f));
+            }
+            case RESTORE -> line(new Rectangle2D.Double(x - arm / 2, y - arm / 2, arm, arm), colour, solid(1.6f));
         }
     }
 

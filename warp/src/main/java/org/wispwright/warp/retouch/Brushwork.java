@@ -12,12 +12,17 @@ final class Brushwork {
     private Brushwork() {
     }
 
-    static void apply(Stroke stroke, Picture picture) {
+    /** Changes {@code picture}; {@code original} is the picture before the retouch's first operation, read only. */
+    static void apply(Stroke stroke, Picture picture, Picture original) {
         float[] coverage = StrokeCoverage.of(stroke, picture.width(), picture.height());
         switch (stroke.brush()) {
             case ADD -> add(picture, coverage, new ColourNearby(picture, COLOUR_SIGMA * stroke.radius()));
             case REMOVE -> remove(picture.rgba(), coverage);
             case SOFTEN -> soften(picture, coverage, SOFTEN_SIGMA * stroke.radius() * picture.height());
+            case RESTORE -> restore(picture.rgba(), coverage, original.rgba());
+            case PUSH -> push(stroke, picture, coverage);
+            case EVEN -> contrast(picture, coverage, stroke.radius(), -1);
+            case LIFT -> contrast(picture, coverage, stroke.radius(), 1);
         }
     }
 
@@ -41,6 +46,28 @@ final class Brushwork {
                     rgba[4 * p + c] *= 1 - coverage[p];
                 }
             }
+        }
+    }
+
+    private static void restore(float[] rgba, float[] coverage, float[] original) {
+        for (int p = 0; p < coverage.length; p++) {
+            for (int n = 4 * p; coverage[p] > 0 && n < 4 * p + 4; n++) {
+                rgba[n] = coverage[p] < 1 ? rgba[n] + coverage[p] * (original[n] - rgba[n]) : original[n];
+            }
+        }
+    }
+
+    private static void push(Stroke stroke, Picture picture, float[] coverage) {
+        Gaussian.Window window = covered(coverage, picture.width());
+        if (window != null) {
+            Push.apply(stroke, picture, coverage, window);
+        }
+    }
+
+    private static void contrast(Picture picture, float[] coverage, double radius, int direction) {
+        Gaussian.Window window = covered(coverage, picture.width());
+        if (window != null) {
+            LocalContrast.apply(picture, coverage, window, radius, direction);
         }
     }
 

@@ -28,7 +28,7 @@ public final class Retoucher {
                 continue;
             }
             if (operation instanceof Stroke stroke) {
-                Brushwork.apply(stroke, picture);
+                Brushwork.apply(stroke, picture, original);
             } else if (operation instanceof MeshWarp warp) {
                 picture = new Bend(warp).applied(picture);
             }

@@ -39,6 +39,6 @@ public record Stroke(Brush brush, double radius, double strength, double softEdg
 
     @Override
     public boolean changesNothing() {
-        return strength == 0;
+        return strength == 0 || brush == Brush.PUSH && line.stream().allMatch(line.get(0)::equals);
     }
 }

@@ -31,10 +31,10 @@ class RetoucherTest {
     }
 
     /** A column with a head, in the colours of warm grey smoke: alpha and colour are smooth functions of the place. */
-    private static Picture smoke(int height) {
+    static Picture smoke(int height) {
         int width = (int) Math.round(ASPECT * height);
         Picture picture = new Picture(width, height);
-        int fine = 4;
+        int fine = Math.max(1, Math.min(4, 1024 / height));
         for (int j = 0; j < height; j++) {
             for (int i = 0; i < width; i++) {
                 int at = 4 * (i + width * j);
@@ -66,11 +66,16 @@ class RetoucherTest {
 
     private static final Region UPPER = new Region.Ellipse(new Point(0.35, 0.3), 0.3, 0.28, 0.1);
 
-    private static Retouch everything() {
+    /** Every brush and a warp; the restore takes back a part of the removal and the warp. */
+    static Retouch everything() {
         return retouch(stroke(Brush.REMOVE, 0.06, 0.9, 0.6, new Point(0.3, 0.28), new Point(0.45, 0.32)),
                 stroke(Brush.ADD, 0.05, 0.7, 0.5, new Point(0.6, 0.2), new Point(0.65, 0.35), new Point(0.6, 0.5)),
                 lean(Optional.of(UPPER)),
                 stroke(Brush.SOFTEN, 0.08, 0.8, 0.7, new Point(0.35, 0.6), new Point(0.35, 0.8)),
+                stroke(Brush.PUSH, 0.09, 0.9, 0.6, new Point(0.45, 0.66), new Point(0.3, 0.7), new Point(0.2, 0.62)),
+                stroke(Brush.EVEN, 0.07, 0.8, 0.5, new Point(0.34, 0.85), new Point(0.42, 0.93)),
+                stroke(Brush.LIFT, 0.06, 0.9, 0.5, new Point(0.2, 0.25), new Point(0.3, 0.18)),
+                stroke(Brush.RESTORE, 0.05, 1, 0.6, new Point(0.44, 0.3), new Point(0.4, 0.42)),
                 new Stroke(Brush.ADD, 0.1, 0.5, 0, List.of(new Point(0.1, 0.8)),
                         Optional.of(new Region.Rectangle(0.05, 0.7, 0.2, 0.9, 0))));
     }
@@ -189,10 +194,11 @@ class RetoucherTest {
     @EnumSource(Brush.class)
     void resultsStayInRange(Brush brush) {
         Picture wanted = smoke(96);
-        Retouch again = retouch(stroke(brush, 0.15, 1, 0.3, new Point(0.2, 0.2), new Point(0.5, 0.7)),
+        Operation before = stroke(Brush.REMOVE, 0.2, 0.7, 0.5, new Point(0.4, 0.4));
+        Retouch again = retouch(before, stroke(brush, 0.15, 1, 0.3, new Point(0.2, 0.2), new Point(0.5, 0.7)),
                 stroke(brush, 0.4, 0.9, 1, new Point(0.35, 0.5)));
         Picture once = Retoucher.wanted(again, wanted);
-        assertFalse(Arrays.equals(wanted.rgba(), once.rgba()));
+        assertFalse(Arrays.equals(Retoucher.wanted(retouch(before), wanted).rgba(), once.rgba()));
         assertInRange(once);
     }
 
@@ -300,9 +306,24 @@ class RetoucherTest {
     /** Whatever a retouch changes noticeably lies inside what it says it touches. */
     @Test
     void touchedCoversEveryNoticeableChange() {
-        Picture original = smoke(128);
-        Picture wanted = Retoucher.wanted(everything(), original);
-        float[] touched = Retoucher.touched(everything(), 96, 128, 0.04);
+        assertTouchedCovers(retouch(), everything(), 0.1);
+    }
+
+    @ParameterizedTest
+    @EnumSource(Brush.class)
+    void touchedCoversWhatEachBrushChanges(Brush brush) {
+        Retouch before = retouch(stroke(Brush.REMOVE, 0.2, 0.7, 0.5, new Point(0.4, 0.4)));
+        Stroke last = stroke(brush, 0.12, 1, 0.3, new Point(0.3, 0.25), new Point(0.42, 0.4));
+        assertTouchedCovers(before, retouch(before.operations().get(0), last), 0.6);
+    }
+
+    /** What the last of {@code all} change of the picture after {@code before} lies where they touch it; the far share is left out. */
+    private static void assertTouchedCovers(Retouch before, Retouch all, double far) {
+        Picture original = Retoucher.wanted(before, smoke(128));
+        Picture wanted = Retoucher.wanted(all, smoke(128));
+        float[] touched = Retoucher.touched(new Retouch(all.operations().subList(before.operations().size(), all.operations().size())), 96,
+                128, 0.04);
+        assertFalse(Arrays.equals(original.rgba(), wanted.rgba()));
         double untouched = 0;
         for (int p = 0; p < touched.length; p++) {
             assertTrue(touched[p] >= 0 && touched[p] <= 1);
@@ -317,7 +338,7 @@ class RetoucherTest {
             }
             untouched += touched[p] == 0 ? 1 : 0;
         }
-        assertTrue(untouched > 0.2 * touched.length, "the far parts stay out");
+        assertTrue(untouched > far * touched.length, "the far parts stay out: only " + untouched / touched.length);
     }
 
     /** A strong pull: both where the smoke was and where it goes are touched, and the pinned foot is not. */
@@ -393,7 +414,7 @@ class RetoucherTest {
         }
     }
 
-    private static Picture halved(Picture in) {
+    static Picture halved(Picture in) {
         Picture out = new Picture(in.width() / 2, in.height() / 2);
         for (int y = 0; y < out.height(); y++) {
             for (int x = 0; x < out.width(); x++) {

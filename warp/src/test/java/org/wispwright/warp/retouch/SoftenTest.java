@@ -72,7 +72,7 @@ class SoftenTest {
         com.sun.management.ThreadMXBean threads =
                 (com.sun.management.ThreadMXBean) ManagementFactory.getThreadMXBean();
         long before = threads.getCurrentThreadAllocatedBytes();
-        Brushwork.apply(dab, original);
+        Brushwork.apply(dab, original, original);
         long bytes = threads.getCurrentThreadAllocatedBytes() - before;
         // Coverage and its distances take 12 bytes a pixel, a whole blur 32 more.
         assertTrue(bytes < 14L * 1200 * 900, "took " + bytes + " bytes");

@@ -1,0 +1,57 @@
+package org.wispwright.ui.report;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.awt.Graphics2D;
+import java.awt.image.BufferedImage;
+import java.util.Arrays;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Optional;
+import java.util.Set;
+import org.junit.jupiter.api.Test;
+import org.wispwright.warp.retouch.Brush;
+import org.wispwright.warp.retouch.Point;
+import org.wispwright.warp.retouch.Retouch;
+import org.wispwright.warp.retouch.Stroke;
+
+class RetouchMarksTest {
+    /** Every brush has its own word, its own colour and its own sign: no two look alike on a sheet, in grey neither. */
+    @Test
+    void noTwoBrushesLookAlike() {
+        Set<String> words = new HashSet<>();
+        Set<Integer> colours = new HashSet<>();
+        Set<String> signs = new HashSet<>();
+        for (Brush brush : Brush.values()) {
+            Retouch retouch = new Retouch(List.of(new Stroke(brush, 0.2, 1, 0.5,
+                    List.of(new Point(0.3, 0.7), new Point(0.5, 0.5), new Point(0.7, 0.5)), Optional.empty())));
+            Set<RetouchMarks.Meaning> meanings = RetouchMarks.meanings(retouch, List.of());
+            assertEquals(1, meanings.size());
+            RetouchMarks.Meaning meaning = meanings.iterator().next();
+            words.add(meaning.words());
+            colours.add(meaning.colour().getRGB());
+            signs.add(sign(retouch, meaning.colour().getRGB()));
+        }
+        assertEquals(Brush.values().length, words.size());
+        assertEquals(Brush.values().length, colours.size());
+        assertEquals(Brush.values().length, signs.size());
+    }
+
+    /** Where the pen's very colour stands, as a string of bits. */
+    private static String sign(Retouch retouch, int rgb) {
+        BufferedImage image = new BufferedImage(200, 200, BufferedImage.TYPE_INT_ARGB);
+        Graphics2D g = image.createGraphics();
+        new RetouchMarks(g, 200).draw(retouch, List.of());
+        g.dispose();
+        int[] pixels = image.getRGB(0, 0, 200, 200, null, 0, 200);
+        boolean[] set = new boolean[pixels.length];
+        int count = 0;
+        for (int p = 0; p < pixels.length; p++) {
+            set[p] = pixels[p] == rgb;
+            count += set[p] ? 1 : 0;
+        }
+        assertTrue(count > 100, "only " + count + " pixels are drawn");
+        return Arrays.toString(set);
+    }
+}
