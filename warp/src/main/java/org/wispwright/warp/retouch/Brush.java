@@ -17,11 +17,11 @@ public enum Brush {
      */
     RESTORE,
     /**
-     * {@code rgba'(p) = rgba(p - m T(p))}, T the travel of the stroke near p, at most its radius: smoke moved the way the stroke went, read
-     * bicubically. A dab has no direction and changes nothing.
+     * {@code rgba'(p) = rgba(p - m T(p))}, T the travel of the stroke near p, at most its radius: smoke moved the way the stroke went,
+     * read bicubically. A dab has no direction and changes nothing.
      */
     PUSH,
-    /** {@code a' = mean + (1 - m) (a - mean)}, mean the opacity blurred over the stroke's radius; colour follows: local contrast lowered. */
+    /** {@code a' = mean + (1 - m) (a - mean)}, mean the opacity blurred with sigma = the radius; colour follows: local contrast lowered. */
     EVEN,
     /** {@code a' = mean + (1 + m) (a - mean)}, then clamped to 0..1; colour follows: local contrast raised. */
     LIFT

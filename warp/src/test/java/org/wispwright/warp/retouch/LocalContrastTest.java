@@ -109,6 +109,7 @@ class LocalContrastTest {
     @EnumSource(value = Brush.class, names = {"EVEN", "LIFT"})
     void beyondItsReachTheBitsStayAndEmptyStaysEmpty(Brush brush) {
         Picture original = grating(0.5, 0.3, 25);
+        original.rgba()[4 * (81 + 200 * 61) + 3] = 1.25f;       // in a corner of the window, not under the stroke
         Picture wanted = wanted(original, brush, 0.1, 1, new Point(0.5, 0.5), new Point(0.8, 0.4));
         int changed = 0;
         for (int p = 0; p < 200 * 200; p++) {

@@ -50,8 +50,8 @@ class RasterAgreementTest {
         double low = PictureMeasure.meanAbsoluteDifference(at256, at2048, weights);
         double middle = PictureMeasure.meanAbsoluteDifference(at512, at2048, weights);
         double between = PictureMeasure.meanAbsoluteDifference(at256, at512, weights);
-        String seen = what + ": changes " + changed + "; 256 against 2048 rows " + low + ", 512 against 2048 " + middle + ", 256 against 512 "
-                + between;
+        String seen = what + ": changes " + changed + "; 256 against 2048 rows " + low + ", 512 against 2048 " + middle
+                + ", 256 against 512 " + between;
         assertTrue(changed > 5 * MOST, seen + ": too little for this test to fail");
         assertTrue(low <= MOST && middle <= MOST && between <= MOST, seen);
     }
