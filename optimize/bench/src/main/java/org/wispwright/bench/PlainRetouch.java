@@ -36,6 +36,7 @@ final class PlainRetouch {
                 case ADD -> was + m * (1 - alpha) * (c < 3 ? colour[c] : 1);
                 case REMOVE -> (1 - m) * was;
                 case SOFTEN -> was + m * (blurred[c] - was);
+                default -> throw new IllegalArgumentException("no plain side for brush " + stroke.brush());
             };
         }
         return out;
