@@ -20,9 +20,4 @@ public record Sides(Side left, Side right, Side floor, Side top, Side back, Side
             throw new IllegalArgumentException("sides: needs all of left, right, floor, top, back and front to be wall or open");
         }
     }
-
-    /** True if no side is open. */
-    public boolean allWalls() {
-        return equals(CLOSED);
-    }
 }

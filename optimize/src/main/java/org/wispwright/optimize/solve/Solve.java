@@ -172,17 +172,21 @@ public final class Solve {
             if (lbfgs == null) {
                 lbfgs = new Lbfgs(loss, new double[basis.unknowns(1)], settings());
             } else {
-                lbfgs.extend(basis.unknowns(open), loss);
-                weighEnergy(lbfgs, plan.startLoss());
+                lengthen(basis.unknowns(open));
             }
             losses.add(share());
             for (; open <= last && ended.isEmpty(); open++) {
                 if (lbfgs.x().length < basis.unknowns(open)) {
-                    lbfgs.extend(basis.unknowns(open), loss);
-                    weighEnergy(lbfgs, plan.startLoss());
+                    lengthen(basis.unknowns(open));
                 }
                 runBand(grid, bands, open);
             }
+        }
+
+        /** Goes on with this rung's loss and so many unknowns, the new ones 0. */
+        private void lengthen(int unknowns) {
+            lbfgs.extend(unknowns, loss);
+            weighEnergy(lbfgs, plan.startLoss());
         }
 
         private void runBand(GridShape grid, List<Band> bands, int open) {
