@@ -4,7 +4,7 @@ import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.resample.Resampling;
 import org.wispwright.warp.retouch.Handle;
 import org.wispwright.warp.retouch.MeshWarp;
-import org.wispwright.warp.retouch.Point;
+import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.retouch.Stroke;
 import org.wispwright.warp.spline.ThinPlateSpline;
 
@@ -55,10 +55,10 @@ final class PlainRetouch {
             double along = Math.min(length, Math.max(0, (px - a.x()) * ux + (py - a.y()) * uy));
             nearest = Math.min(nearest, Math.hypot(px - a.x() - along * ux, py - a.y() - along * uy));
         }
-        double soft = stroke.softEdge() * stroke.radius();
+        double soft = stroke.sweep().softEdge() * stroke.radius();
         double s = 0.5 + (stroke.radius() - soft / 2 - nearest) / Math.max(soft, 1.0 / original.height());
         s = Math.min(1, Math.max(0, s));
-        return stroke.strength() * s * s * (3 - 2 * s);
+        return stroke.sweep().strength() * s * s * (3 - 2 * s);
     }
 
     /** Both axes at once: a Gaussian of sigma pixels over a square of 3 sigma each way, border pixels repeated. */

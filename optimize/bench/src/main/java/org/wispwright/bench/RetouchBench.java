@@ -22,7 +22,7 @@ import org.wispwright.warp.retouch.Brush;
 import org.wispwright.warp.retouch.Handle;
 import org.wispwright.warp.retouch.MeshWarp;
 import org.wispwright.warp.retouch.Operation;
-import org.wispwright.warp.retouch.Point;
+import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.retouch.Retouch;
 import org.wispwright.warp.retouch.Retoucher;
 import org.wispwright.warp.retouch.Stroke;

@@ -3,6 +3,7 @@ package org.wispwright.optimize.solve;
 import java.util.List;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.render.march.Look;
+import org.wispwright.render.picture.Picture;
 import org.wispwright.render.view.View;
 import org.wispwright.render.volume.GridShape;
 
@@ -50,11 +51,11 @@ public record SolveProblem(FlowSetup flow, List<View> views, Look look, List<Not
     public record Hold(String id, int view, int firstFrame, int lastFrame, PixelWeights weights) {
     }
 
-    /** Weights of a picture's pixels, at any raster. */
+    /** Weights of an original picture's pixels, at any raster. */
     @FunctionalInterface
     public interface PixelWeights {
         /** One weight a pixel, 0..1, row 0 at the top. */
-        float[] at(int width, int height);
+        float[] at(Picture original);
     }
 
     /** Copies the lists and checks what refers to what. @throws IllegalArgumentException naming what is off */

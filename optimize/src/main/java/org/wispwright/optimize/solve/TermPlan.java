@@ -65,7 +65,7 @@ final class TermPlan {
         for (int n = 0; n < noteTerms.length; n++) {
             SolveProblem.Note note = problem.notes().get(n);
             Picture original = originals.get(key(note.frame(), note.view()));
-            PyramidLoss loss = new PyramidLoss(note.wish().wanted(original), note.wish().weights(original.width(), original.height()));
+            PyramidLoss loss = new PyramidLoss(note.wish().wanted(original), note.wish().weights(original));
             noteStarts[n] = loss.value(original);
             if (!(noteStarts[n] > 1e-9)) {
                 throw new IllegalArgumentException("note '" + note.id() + "': its retouch changes nothing that can be seen on frame " + note.frame()
@@ -81,7 +81,7 @@ final class TermPlan {
         List<Integer> frames = framesOf(hold);
         for (int frame : frames) {
             Picture original = originals.get(key(frame, hold.view()));
-            float[] weights = hold.weights().at(original.width(), original.height());
+            float[] weights = hold.weights().at(original);
             terms.add(frame, hold.view(), new PyramidLoss(original, weights), HOLD_WEIGHT / (reference * frames.size()));
         }
     }

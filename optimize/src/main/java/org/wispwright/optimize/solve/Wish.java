@@ -9,6 +9,6 @@ public interface Wish {
     /** The wanted picture for an original of any raster; the original is left as it is. */
     Picture wanted(Picture original);
 
-    /** How much each pixel counts, 0..1, row 0 at the top: 1 where retouched, a smaller number elsewhere. */
-    float[] weights(int width, int height);
+    /** How much each pixel of an original counts, 0..1, row 0 at the top: 1 where retouched, a smaller number elsewhere. */
+    float[] weights(Picture original);
 }

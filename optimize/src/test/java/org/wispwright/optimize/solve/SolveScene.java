@@ -61,8 +61,8 @@ final class SolveScene {
                 return out;
             }
 
-            @Override public float[] weights(int width, int height) {
-                float[] weights = new float[width * height];
+            @Override public float[] weights(Picture original) {
+                float[] weights = new float[original.width() * original.height()];
                 java.util.Arrays.fill(weights, 1f);
                 return weights;
             }
@@ -72,7 +72,9 @@ final class SolveScene {
     static SolveProblem problem(int n, int lastFrame, int substeps, boolean light) {
         return new SolveProblem(flow(n, lastFrame, substeps, Interpolation.LINEAR), List.of(FRONT, SIDE), look(light),
                 List.of(new SolveProblem.Note("lean", lastFrame - 2, 0, 1, lean(0.25))),
-                List.of(new SolveProblem.Hold("foot", 0, 1001, lastFrame, (w, h) -> {
+                List.of(new SolveProblem.Hold("foot", 0, 1001, lastFrame, original -> {
+                    int w = original.width();
+                    int h = original.height();
                     float[] weights = new float[w * h];
                     java.util.Arrays.fill(weights, w * (h - h / 5), w * h, 1f);
                     return weights;

@@ -72,8 +72,8 @@ class SolveTest {
                 return original;
             }
 
-            @Override public float[] weights(int width, int height) {
-                return new float[width * height];
+            @Override public float[] weights(Picture original) {
+                return new float[original.width() * original.height()];
             }
         });
         SolveProblem problem = new SolveProblem(leaning.flow(), leaning.views(), leaning.look(), List.of(none), List.of());

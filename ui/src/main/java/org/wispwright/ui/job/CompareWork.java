@@ -30,7 +30,7 @@ import org.wispwright.ui.shot.ShotFolder;
 import org.wispwright.ui.shot.ShotView;
 import org.wispwright.ui.shot.Takes;
 import org.wispwright.warp.loss.PyramidLoss;
-import org.wispwright.warp.retouch.Region;
+import org.wispwright.warp.matte.Matte;
 
 /** Compares takes: the pictures of every note, how far each is met, one sheet for people and one report for programs. */
 public final class CompareWork {
@@ -82,7 +82,7 @@ public final class CompareWork {
     static Comparison.OfNote ofNote(Note note, Picture original, Picture shown, Picture got) {
         NoteWish wish = new NoteWish(note);
         Picture wanted = wish.wanted(original);
-        float[] weights = wish.weights(original.width(), original.height());
+        float[] weights = wish.weights(original);
         PyramidLoss loss = new PyramidLoss(wanted, weights);
         double start = loss.value(original);
         double startFinest = loss.finest(original);
@@ -96,7 +96,7 @@ public final class CompareWork {
         double change = 0;
         for (Hold hold : note.holds()) {
             if (hold.holds(note.frame())) {
-                change = Math.max(change, meanChange(got, original, NoteWish.mask(hold.region(), original.width(), original.height())));
+                change = Math.max(change, meanChange(got, original, hold.matte().values(original)));
             }
         }
         return new Comparison.OfNote(note, original, shown, wanted, got, met, finest, change);
@@ -110,7 +110,7 @@ public final class CompareWork {
             ShotView view = shot.view(note.view()).orElseThrow();
             Optional<Picture> rendered = Optional.ofNullable(view.rendered().get(note.frame()))
                     .map(file -> RenderedFrame.read(folder, file, "/views/" + shot.views().indexOf(view) + "/rendered/" + note.frame()));
-            List<Region> holds = note.holds().stream().filter(h -> h.holds(note.frame())).map(Hold::region).toList();
+            List<Matte> holds = note.holds().stream().filter(h -> h.holds(note.frame())).map(Hold::matte).toList();
             rows.add(new SheetRow(note.id(), note.words(), "frame " + note.frame() + ", view " + note.view(), rendered, note.retouch(),
                     holds,
                     n.shown(), n.wanted(), n.got(), n.met()));

@@ -9,7 +9,6 @@ import org.wispwright.ui.shot.Hold;
 import org.wispwright.ui.shot.Note;
 import org.wispwright.ui.shot.Shot;
 import org.wispwright.ui.shot.ShotException;
-import org.wispwright.warp.retouch.Region;
 
 /** What a shot's notes and holds ask of the solve. */
 public final class ShotProblem {
@@ -38,9 +37,8 @@ public final class ShotProblem {
             notes.add(new SolveProblem.Note(note.id(), note.frame(), view, note.weight(), new NoteWish(note)));
             for (int n = 0; n < note.holds().size(); n++) {
                 Hold hold = note.holds().get(n);
-                Region region = hold.region();
                 holds.add(new SolveProblem.Hold(note.id() + " hold " + (n + 1), view, hold.firstFrame(), hold.lastFrame(),
-                        (width, height) -> NoteWish.mask(region, width, height)));
+                        hold.matte()::values));
             }
         }
         return new SolveProblem(shot.flow(), views, shot.look(), notes, holds);

@@ -16,8 +16,9 @@ import org.wispwright.warp.retouch.Brush;
 import org.wispwright.warp.retouch.Handle;
 import org.wispwright.warp.retouch.MeshWarp;
 import org.wispwright.warp.retouch.Operation;
-import org.wispwright.warp.retouch.Point;
-import org.wispwright.warp.retouch.Region;
+import org.wispwright.warp.matte.Matte;
+import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Region;
 import org.wispwright.warp.retouch.Retouch;
 import org.wispwright.warp.retouch.Stroke;
 
@@ -70,7 +71,7 @@ final class RetouchMarks {
     }
 
     /** What the marks of a retouch say; its legend needs no more. */
-    static Set<Meaning> meanings(Retouch retouch, List<Region> holds) {
+    static Set<Meaning> meanings(Retouch retouch, List<Matte> holds) {
         Set<Meaning> all = EnumSet.noneOf(Meaning.class);
         if (!holds.isEmpty()) {
             all.add(Meaning.KEEP);
@@ -100,8 +101,8 @@ final class RetouchMarks {
         };
     }
 
-    void draw(Retouch retouch, List<Region> holds) {
-        for (Region hold : holds) {
+    void draw(Retouch retouch, List<Matte> holds) {
+        for (Matte hold : holds) {
             line(outline(hold), Meaning.KEEP.colour(), dashed());
         }
         for (Operation operation : retouch.operations()) {
@@ -178,7 +179,8 @@ final class RetouchMarks {
         line(new Ellipse2D.Double(x0 - 2, y0 - 2, 4, 4), Meaning.PULL.colour(), solid(1.6f));
     }
 
-    private Shape outline(Region region) {
+    private Shape outline(Matte matte) {
+        Region region = (Region) matte;
         if (region instanceof Region.Rectangle r) {
             return new Rectangle2D.Double(r.left() * height, r.top() * height, (r.right() - r.left()) * height,
                     (r.bottom() - r.top()) * height);

@@ -4,7 +4,7 @@ import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
 import org.wispwright.render.picture.Picture;
-import org.wispwright.warp.retouch.Region;
+import org.wispwright.warp.matte.Matte;
 import org.wispwright.warp.retouch.Retouch;
 
 /**
@@ -15,13 +15,13 @@ import org.wispwright.warp.retouch.Retouch;
  * @param place where it is, such as "frame 1030, view front"
  * @param rendered the production renderer's frame, if there is one
  * @param retouch drawn lightly over the rendered frame, or over the original where there is none
- * @param holds regions that must stay, drawn dashed
+ * @param holds mattes of what must stay, drawn dashed
  * @param original what the original shows there
  * @param wanted what the retouch makes of the original; same raster as original
  * @param got what the take shows there; same raster as original
  * @param met share of the wish that is fulfilled; 1 is all of it, below 0 is worse than the original
  */
-public record SheetRow(String id, String words, String place, Optional<Picture> rendered, Retouch retouch, List<Region> holds,
+public record SheetRow(String id, String words, String place, Optional<Picture> rendered, Retouch retouch, List<Matte> holds,
                        Picture original, Picture wanted, Picture got, double met) {
 
     /** Checks the rasters. @throws IllegalArgumentException if original, wanted and got differ in size, or met is NaN */

@@ -12,7 +12,7 @@ import java.util.Optional;
 import java.util.Set;
 import org.junit.jupiter.api.Test;
 import org.wispwright.warp.retouch.Brush;
-import org.wispwright.warp.retouch.Point;
+import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.retouch.Retouch;
 import org.wispwright.warp.retouch.Stroke;
 

@@ -17,8 +17,8 @@ import org.wispwright.render.picture.Rgb;
 import org.wispwright.warp.retouch.Brush;
 import org.wispwright.warp.retouch.Handle;
 import org.wispwright.warp.retouch.MeshWarp;
-import org.wispwright.warp.retouch.Point;
-import org.wispwright.warp.retouch.Region;
+import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Region;
 import org.wispwright.warp.retouch.Retouch;
 import org.wispwright.warp.retouch.Stroke;
 

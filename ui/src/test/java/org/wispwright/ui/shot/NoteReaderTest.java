@@ -13,7 +13,7 @@ import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.wispwright.warp.retouch.Brush;
-import org.wispwright.warp.retouch.Point;
+import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.retouch.Stroke;
 
 /** The words that a note may name a brush with. */

@@ -3,6 +3,8 @@ package org.wispwright.warp.retouch;
 import java.util.List;
 import java.util.function.Function;
 import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Sweep;
 import org.wispwright.warp.resample.Kernel;
 import org.wispwright.warp.resample.Resampling;
 import org.wispwright.warp.spline.ThinPlateSpline;
@@ -27,14 +29,15 @@ final class Bend {
     }
 
     /** A new picture: bicubic (Keys, a = -1/2), clear outside the frame, overshoot taken away; bits kept where nothing moves. */
-    Picture applied(Picture picture) {
+    Picture applied(Picture picture, Picture original) {
         int width = picture.width();
         int height = picture.height();
         Picture out = picture.copy();
         Resampling resampling = new Resampling(Kernel.KEYS);
+        float[] mask = mask(original);
         for (int j = 0; j < height; j++) {
             for (int i = 0; i < width; i++) {
-                if (sourceOf((i + 0.5) / height, (j + 0.5) / height, 1.0 / height)) {
+                if (sourceOf((i + 0.5) / height, (j + 0.5) / height, mask == null ? 1 : mask[i + width * j])) {
                     int at = 4 * (i + width * j);
                     resampling.read(picture, source[0] * height - 0.5, source[1] * height - 0.5, out.rgba(), at);
                     Resampling.clamp(out.rgba(), at);
@@ -48,14 +51,17 @@ final class Bend {
      * Where the bend shows: both where smoke arrives (p) and where it came from (q), each as far as the displacement is noticeable,
      * then widened by about a feather: {@code max(t, min(1, 2 G(feather / 2) * t))}.
      */
-    float[] touched(int width, int height, double feather) {
+    float[] touched(Picture original, double feather) {
+        int width = original.width();
+        int height = original.height();
+        float[] mask = mask(original);
         float[] touched = new float[width * height];
         for (int j = 0; j < height; j++) {
             for (int i = 0; i < width; i++) {
                 double x = (i + 0.5) / height;
                 double y = (j + 0.5) / height;
-                if (sourceOf(x, y, 1.0 / height)) {
-                    float t = (float) StrokeCoverage.smooth(Math.hypot(source[0] - x, source[1] - y) / NOTICEABLE);
+                if (sourceOf(x, y, mask == null ? 1 : mask[i + width * j])) {
+                    float t = (float) Sweep.smooth(Math.hypot(source[0] - x, source[1] - y) / NOTICEABLE);
                     touched[i + width * j] = Math.max(touched[i + width * j], t);
                     double qi = Math.floor(source[0] * height);
                     double qj = Math.floor(source[1] * height);
@@ -73,9 +79,12 @@ final class Bend {
         return touched;
     }
 
-    /** Sets {@code source} to q for p = (x,y); false if the region keeps the place where it is. */
-    private boolean sourceOf(double x, double y, double finest) {
-        double mask = warp.within().isPresent() ? warp.within().get().mask(x, y, finest) : 1;
+    private float[] mask(Picture original) {
+        return warp.within().map(matte -> matte.values(original)).orElse(null);
+    }
+
+    /** Sets {@code source} to q for p = (x,y); false if the matte keeps the place where it is. */
+    private boolean sourceOf(double x, double y, double mask) {
         if (mask == 0) {
             return false;
         }

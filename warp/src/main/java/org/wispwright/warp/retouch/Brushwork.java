@@ -1,6 +1,7 @@
 package org.wispwright.warp.retouch;
 
 import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.matte.Window;
 
 /** Lays strokes on a picture; the formulas are those of {@link Brush}. Changes the picture it is given. */
 final class Brushwork {
@@ -14,7 +15,7 @@ final class Brushwork {
 
     /** Changes {@code picture}; {@code original} is the picture before the retouch's first operation, read only. */
     static void apply(Stroke stroke, Picture picture, Picture original) {
-        float[] coverage = StrokeCoverage.of(stroke, picture.width(), picture.height());
+        float[] coverage = stroke.coverage(original);
         switch (stroke.brush()) {
             case ADD -> add(picture, coverage, new ColourNearby(picture, COLOUR_SIGMA * stroke.radius()));
             case REMOVE -> remove(picture.rgba(), coverage);
@@ -58,14 +59,14 @@ final class Brushwork {
     }
 
     private static void push(Stroke stroke, Picture picture, float[] coverage) {
-        Gaussian.Window window = covered(coverage, picture.width());
+        Window window = covered(coverage, picture.width());
         if (window != null) {
             Push.apply(stroke, picture, coverage, window);
         }
     }
 
     private static void contrast(Picture picture, float[] coverage, double radius, int direction) {
-        Gaussian.Window window = covered(coverage, picture.width());
+        Window window = covered(coverage, picture.width());
         if (window != null) {
             LocalContrast.apply(picture, coverage, window, radius, direction);
         }
@@ -73,7 +74,7 @@ final class Brushwork {
 
     /** Blurs only the window that the stroke covers; the pixels have the bits they would have if all were blurred. */
     private static void soften(Picture picture, float[] coverage, double sigma) {
-        Gaussian.Window window = covered(coverage, picture.width());
+        Window window = covered(coverage, picture.width());
         if (window == null) {
             return;
         }
@@ -93,7 +94,7 @@ final class Brushwork {
     }
 
     /** The smallest window around all pixels with coverage; null if there are none. */
-    private static Gaussian.Window covered(float[] coverage, int width) {
+    private static Window covered(float[] coverage, int width) {
         int left = width;
         int right = -1;
         int top = -1;
@@ -106,6 +107,6 @@ final class Brushwork {
                 bottom = p / width;
             }
         }
-        return right < 0 ? null : new Gaussian.Window(left, top, right - left + 1, bottom - top + 1);
+        return right < 0 ? null : new Window(left, top, right - left + 1, bottom - top + 1);
     }
 }

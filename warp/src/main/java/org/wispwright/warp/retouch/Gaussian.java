@@ -1,5 +1,7 @@
 package org.wispwright.warp.retouch;
 
+import org.wispwright.warp.matte.Window;
+
 /**
  * Separable Gaussian blur of numbers on a raster: weights {@code exp(-k^2 / (2 sigma^2))}, |k| up to 3 sigma, scaled to sum 1.
  * Beyond the border stands the border pixel.
@@ -37,9 +39,6 @@ final class Gaussian {
         }
         return out;
     }
-
-    /** Pixels of a raster: columns left to left + width - 1, rows top to top + height - 1. */
-    record Window(int left, int top, int width, int height) { }
 
     private static double[] weights(double sigma) {
         int reach = (int) Math.ceil(3 * sigma);

@@ -1,5 +1,8 @@
 package org.wispwright.warp.retouch;
 
+import org.wispwright.warp.matte.Needs;
+import org.wispwright.warp.matte.Point;
+
 /**
  * One control point of a {@link MeshWarp}. A handle with from = to pins the picture there.
  *

@@ -1,6 +1,7 @@
 package org.wispwright.warp.retouch;
 
 import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.matte.Window;
 
 /**
  * {@link Brush#EVEN} and {@link Brush#LIFT}: how far opacity departs from its mean nearby,
@@ -23,7 +24,7 @@ final class LocalContrast {
      *
      * @param direction gain is {@code 1 + direction m}: -1 evens out, 1 lifts
      */
-    static void apply(Picture picture, float[] coverage, Gaussian.Window window, double radius, int direction) {
+    static void apply(Picture picture, float[] coverage, Window window, double radius, int direction) {
         int width = picture.width();
         float[] rgba = picture.rgba();
         float[] opacity = new float[width * picture.height()];

@@ -3,15 +3,18 @@ package org.wispwright.warp.retouch;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
+import org.wispwright.warp.matte.Matte;
+import org.wispwright.warp.matte.Needs;
+import org.wispwright.warp.matte.Point;
 
 /**
  * A smooth bend of the picture that carries every handle's {@code from} to its {@code to}: a thin-plate spline between the handles
  * (Bookstein 1989). Without pins or a region it also moves what lies far from the handles.
  *
  * @param handles 3 to {@value #MOST_HANDLES}; neither the starts nor the ends may lie on one line or coincide
- * @param within  region outside which nothing moves: the displacement is scaled by its mask; empty means anywhere
+ * @param within  matte outside which nothing moves: the displacement is scaled by its mask; empty means anywhere
  */
-public record MeshWarp(List<Handle> handles, Optional<Region> within) implements Operation {
+public record MeshWarp(List<Handle> handles, Optional<Matte> within) implements Operation {
     /** The most handles a warp may have; its cost per pixel grows with their number. */
     public static final int MOST_HANDLES = 500;
     /** Two handles closer than this, in heights, count as the same place. */

@@ -1,6 +1,8 @@
 package org.wispwright.warp.retouch;
 
 import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Window;
 import org.wispwright.warp.resample.Kernel;
 import org.wispwright.warp.resample.Resampling;
 
@@ -28,7 +30,7 @@ final class Push {
     }
 
     /** Changes the picture inside {@code window}, which holds all pixels with coverage. */
-    static void apply(Stroke stroke, Picture picture, float[] coverage, Gaussian.Window window) {
+    static void apply(Stroke stroke, Picture picture, float[] coverage, Window window) {
         float[] moved = new Push(stroke, picture).moved(coverage, window);
         int row = 4 * window.width();
         for (int y = 0; y < window.height(); y++) {
@@ -36,7 +38,7 @@ final class Push {
         }
     }
 
-    private float[] moved(float[] coverage, Gaussian.Window window) {
+    private float[] moved(float[] coverage, Window window) {
         int height = picture.height();
         double[] travel = travel(stroke, height, window);
         float[] out = new float[4 * window.width() * window.height()];
@@ -57,7 +59,7 @@ final class Push {
     }
 
     /** T at the pixels of a window: x and y in heights, two numbers a pixel, row 0 = the window's top. */
-    static double[] travel(Stroke stroke, int height, Gaussian.Window window) {
+    static double[] travel(Stroke stroke, int height, Window window) {
         double r = stroke.radius();
         double[] travel = new double[2 * window.width() * window.height()];
         for (int n = 1; n < stroke.line().size(); n++) {

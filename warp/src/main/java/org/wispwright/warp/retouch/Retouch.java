@@ -1,6 +1,7 @@
 package org.wispwright.warp.retouch;
 
 import java.util.List;
+import org.wispwright.warp.matte.Needs;
 
 /**
  * The ordered, non-destructive list of operations of a note. Order matters: each operation works on what the one before it left.

@@ -30,7 +30,7 @@ public final class Retoucher {
             if (operation instanceof Stroke stroke) {
                 Brushwork.apply(stroke, picture, original);
             } else if (operation instanceof MeshWarp warp) {
-                picture = new Bend(warp).applied(picture);
+                picture = new Bend(warp).applied(picture, original);
             }
         }
         return picture;
@@ -40,28 +40,23 @@ public final class Retoucher {
      * Where a retouch acts, from the geometry of its operations alone: 1 where a stroke has coverage or a warp moves things
      * noticeably (where smoke leaves as well as where it arrives), falling to 0 over about a feather. Operations join by the maximum.
      *
-     * @param width   pixels along a row
-     * @param height  rows
+     * @param original read: gives the raster, and the smoke for mattes that depend on it
      * @param feather fraction of the height, 0 to {@value #WIDEST_FEATHER}
      * @return one weight a pixel, 0 to 1, index {@code x + width * y}
-     * @throws IllegalArgumentException if the raster or the feather is out of range
+     * @throws IllegalArgumentException if the feather is out of range
      */
-    public static float[] touched(Retouch retouch, int width, int height, double feather) {
+    public static float[] touched(Retouch retouch, Picture original, double feather) {
         if (!(feather >= 0 && feather <= WIDEST_FEATHER)) {
             throw new IllegalArgumentException("retouch: got feather " + feather + ", needs a fraction of the picture's height, 0 to "
                     + WIDEST_FEATHER);
         }
-        if (width < 1 || height < 1 || width > Picture.LONGEST_SIDE || height > Picture.LONGEST_SIDE) {
-            throw new IllegalArgumentException("retouch: got a raster of " + width + "x" + height + " pixels, needs sides of 1 to "
-                    + Picture.LONGEST_SIDE);
-        }
-        float[] touched = new float[Math.multiplyExact(width, height)];
+        float[] touched = new float[original.width() * original.height()];
         for (Operation operation : retouch.operations()) {
             if (operation.changesNothing()) {
                 continue;
             }
-            float[] one = operation instanceof MeshWarp warp ? new Bend(warp).touched(width, height, feather)
-                    : StrokeCoverage.touched((Stroke) operation, width, height, feather);
+            float[] one = operation instanceof MeshWarp warp ? new Bend(warp).touched(original, feather)
+                    : ((Stroke) operation).reach(original, feather);
             for (int p = 0; p < touched.length; p++) {
                 touched[p] = Math.max(touched[p], one[p]);
             }

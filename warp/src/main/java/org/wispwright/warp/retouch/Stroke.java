@@ -2,43 +2,74 @@ package org.wispwright.warp.retouch;
 
 import java.util.List;
 import java.util.Optional;
+import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.matte.Matte;
+import org.wispwright.warp.matte.Needs;
+import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Sweep;
+import org.wispwright.warp.matte.Window;
 
 /**
- * A brush drawn along a polyline. Coverage of a pixel follows from its distance to the whole line, so a line that crosses itself
- * or dwells at a place does not act there twice.
+ * A brush drawn along a polyline.
  *
- * @param brush    what it does
- * @param radius   distance from the line at which the brush ends, fraction of the height, in (0, 1]
- * @param strength coverage on the line, 0 to 1; 0 changes nothing
- * @param softEdge share of the radius over which coverage fades to nothing, 0 to 1
- * @param line     1 to {@value #MOST_POINTS} points; one point is a dab
- * @param within   region outside which nothing changes; empty means anywhere
+ * @param brush  what it does
+ * @param sweep  the line, its width, strength and edge
+ * @param within outside it nothing changes; empty means anywhere
  */
-public record Stroke(Brush brush, double radius, double strength, double softEdge, List<Point> line, Optional<Region> within)
-        implements Operation {
-    /** The most points a line may have. */
-    public static final int MOST_POINTS = 10_000;
-
+public record Stroke(Brush brush, Sweep sweep, Optional<Matte> within) implements Operation {
     /**
-     * Checks and copies.
+     * Checks that all is there.
      *
-     * @throws IllegalArgumentException if a number or the count of points is out of its range
+     * @throws IllegalArgumentException if a part is missing
      */
     public Stroke {
         Needs.present("stroke", "brush", brush);
-        Needs.present("stroke", "line", line);
+        Needs.present("stroke", "sweep", sweep);
         Needs.present("stroke", "within", within);
-        if (!(radius > 0 && radius <= 1)) {
-            throw new IllegalArgumentException("stroke: got radius " + radius
-                    + ", needs a fraction of the picture's height above 0 and at most 1");
-        }
-        Needs.share("stroke", "strength", strength);
-        Needs.share("stroke", "softEdge", softEdge);
-        line = Needs.points("stroke", "line", line, 1, MOST_POINTS);
+    }
+
+    /**
+     * A stroke of a new {@link Sweep}.
+     *
+     * @throws IllegalArgumentException as there
+     */
+    public Stroke(Brush brush, double radius, double strength, double softEdge, List<Point> line, Optional<? extends Matte> within) {
+        this(brush, new Sweep(radius, strength, softEdge, line), within == null ? null : within.map(m -> m));
+    }
+
+    /** Distance from the line at which the brush ends, fraction of the height. */
+    public double radius() {
+        return sweep.radius();
+    }
+
+    /** The line's points. */
+    public List<Point> line() {
+        return sweep.line();
     }
 
     @Override
     public boolean changesNothing() {
-        return strength == 0 || brush == Brush.PUSH && line.stream().allMatch(line.get(0)::equals);
+        return sweep.strength() == 0 || brush == Brush.PUSH && line().stream().allMatch(line().get(0)::equals);
+    }
+
+    /** Coverage of every pixel of a picture, the matte taken in; {@code original} is the picture before the retouch. */
+    float[] coverage(Picture original) {
+        float[] coverage = sweep.coverage(Window.all(original.width(), original.height()), original.height());
+        within.ifPresent(matte -> times(coverage, matte.values(original)));
+        return coverage;
+    }
+
+    /** Where the stroke reaches, the matte taken in. */
+    float[] reach(Picture original, double feather) {
+        Window all = Window.all(original.width(), original.height());
+        float[] reach = sweep.reach(all, original.height(), feather);
+        within.ifPresent(matte -> times(reach, matte.reach(original, all, feather)));
+        return reach;
+    }
+
+    private static void times(float[] a, float[] b) {
+        for (int n = 0; n < a.length; n++) {
+            a[n] *= b[n];
+        }
     }
 }

@@ -11,6 +11,8 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.EnumSource;
 import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Segment;
 
 /** Even out and lift: gain about the local mean by hand, colour that follows, range, and nothing beyond the reach. */
 class LocalContrastTest {
@@ -63,7 +65,7 @@ class LocalContrastTest {
             opacity[p] = original.rgba()[4 * p + 3];
         }
         float[] mean = Gaussian.blurred(opacity, 1, 48, 64, 0.08 * 64);
-        float[] coverage = StrokeCoverage.of(new Stroke(Brush.EVEN, 0.08, 0.4, 0, List.of(line), Optional.empty()), 48, 64);
+        float[] coverage = new Stroke(Brush.EVEN, 0.08, 0.4, 0, List.of(line), Optional.empty()).coverage(new Picture(48, 64));
         int changed = 0;
         for (int p = 0; p < 48 * 64; p++) {
             double a = original.rgba()[4 * p + 3];

@@ -14,6 +14,9 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
 import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Segment;
+import org.wispwright.warp.matte.Window;
 
 /** The push brush: how far by hand, the same however the line is sampled, no holes, no folds, nothing beyond its reach. */
 class PushTest {
@@ -77,7 +80,7 @@ class PushTest {
     @Test
     void travelEqualsPlain() {
         Point[] line = {new Point(0.2, 0.3), new Point(0.45, 0.25), new Point(0.4, 0.6), new Point(0.35, 0.62)};
-        Gaussian.Window window = new Gaussian.Window(5, 3, 23, 31);
+        Window window = new Window(5, 3, 23, 31);
         double[] travel = Push.travel(push(0.15, 1, 1, line), 40, window);
         double longest = 0;
         for (int p = 0; p < 23 * 31; p++) {

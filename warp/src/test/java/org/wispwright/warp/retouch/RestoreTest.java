@@ -8,6 +8,9 @@ import java.util.List;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
 import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Region;
+import org.wispwright.warp.matte.Segment;
 
 /** The restore brush: the original's bits in the core, a mix in the soft edge, nothing beyond, whatever came before. */
 class RestoreTest {

@@ -8,6 +8,8 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import org.junit.jupiter.api.Test;
+import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Region;
 
 /** The values of a retouch refuse what makes no sense, each with a sentence that names it. */
 class RetouchValuesTest {

@@ -17,6 +17,9 @@ import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.EnumSource;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.loss.PictureMeasure;
+import org.wispwright.warp.matte.Matte;
+import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Region;
 
 /** The brushes' formulas by hand, what a retouch must keep, and the same retouch at three rasters. */
 class RetoucherTest {
@@ -54,7 +57,7 @@ class RetoucherTest {
         return picture;
     }
 
-    private static MeshWarp lean(Optional<Region> within) {
+    private static MeshWarp lean(Optional<Matte> within) {
         List<Handle> handles = new ArrayList<>();
         handles.add(new Handle(new Point(0.38, 0.3), new Point(0.26, 0.32)));
         handles.add(new Handle(new Point(0.38, 0.15), new Point(0.24, 0.19)));
@@ -91,7 +94,7 @@ class RetoucherTest {
             Picture wanted = Retoucher.wanted(nothing, original);
             assertNotSame(original, wanted);
             assertArrayEquals(original.rgba(), wanted.rgba());
-            for (float t : Retoucher.touched(nothing, 48, 64, 0.05)) {
+            for (float t : Retoucher.touched(nothing, original, 0.05)) {
                 assertEquals(0f, t);
             }
         }
@@ -125,7 +128,7 @@ class RetoucherTest {
     @Test
     void softEdgeByHand() {
         Stroke stroke = stroke(Brush.ADD, 0.25, 0.8, 1, new Point(0.5 / 64, 0.5 / 64), new Point(0.5 / 64, 100.5 / 64));
-        float[] coverage = StrokeCoverage.of(stroke, 64, 64);
+        float[] coverage = stroke.coverage(new Picture(64, 64));
         assertEquals(0.8, coverage[64 * 30], 1e-6);
         assertEquals(0.4, coverage[8 + 64 * 30], 1e-6);
         double s = 0.25;
@@ -321,8 +324,8 @@ class RetoucherTest {
     private static void assertTouchedCovers(Retouch before, Retouch all, double far) {
         Picture original = Retoucher.wanted(before, smoke(128));
         Picture wanted = Retoucher.wanted(all, smoke(128));
-        float[] touched = Retoucher.touched(new Retouch(all.operations().subList(before.operations().size(), all.operations().size())), 96,
-                128, 0.04);
+        float[] touched = Retoucher.touched(new Retouch(all.operations().subList(before.operations().size(), all.operations().size())), original,
+                0.04);
         assertFalse(Arrays.equals(original.rgba(), wanted.rgba()));
         double untouched = 0;
         for (int p = 0; p < touched.length; p++) {
@@ -344,12 +347,11 @@ class RetoucherTest {
     /** A strong pull: both where the smoke was and where it goes are touched, and the pinned foot is not. */
     @Test
     void touchedShowsBothEndsOfAPull() {
-        float[] touched = Retoucher.touched(retouch(lean(Optional.empty())), 96, 128, 0.02);
+        float[] touched = Retoucher.touched(retouch(lean(Optional.empty())), smoke(128), 0.02);
         assertEquals(1, touched[(int) (0.38 * 128) + 96 * (int) (0.3 * 128)], 1e-6);
         assertEquals(1, touched[(int) (0.26 * 128) + 96 * (int) (0.32 * 128)], 1e-6);
         assertTrue(touched[(int) (0.38 * 128) + 96 * (int) (0.95 * 128)] < 0.5);
-        assertThrows(IllegalArgumentException.class, () -> Retoucher.touched(retouch(), 10, 10, Double.NaN));
-        assertThrows(IllegalArgumentException.class, () -> Retoucher.touched(retouch(), 0, 10, 0.1));
+        assertThrows(IllegalArgumentException.class, () -> Retoucher.touched(retouch(), smoke(16), Double.NaN));
     }
 
     /** The blur against its definition, pixel by pixel, at awkward sizes: wider than the picture, one row, one column. */

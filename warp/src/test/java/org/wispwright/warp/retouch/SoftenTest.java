@@ -11,6 +11,8 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Window;
 
 /** A soft stroke blurs its own window only; the whole picture blurred is the slow twin. */
 class SoftenTest {
@@ -26,7 +28,7 @@ class SoftenTest {
                 in[n] = (float) Math.sin(1 + 7 * n);
             }
             float[] whole = Gaussian.blurred(in, channels, width, height, sigma);
-            float[] part = Gaussian.blurred(in, channels, width, height, sigma, new Gaussian.Window(left, top, wide, high));
+            float[] part = Gaussian.blurred(in, channels, width, height, sigma, new Window(left, top, wide, high));
             assertEquals(channels * wide * high, part.length);
             for (int n = 0; n < part.length; n++) {
                 int x = left + n / channels % wide;
@@ -43,7 +45,7 @@ class SoftenTest {
         Picture original = picture(75, 57);
         Stroke stroke = new Stroke(Brush.SOFTEN, radius, .9, .6, List.of(new Point(ax, ay), new Point(bx, by)), Optional.empty());
         Picture wanted = Retoucher.wanted(new Retouch(List.of(stroke)), original);
-        float[] coverage = StrokeCoverage.of(stroke, 75, 57);
+        float[] coverage = stroke.coverage(new Picture(75, 57));
         float[] blurred = Gaussian.blurred(original.rgba(), 4, 75, 57, Brushwork.SOFTEN_SIGMA * radius * 57);
         float[] plain = original.rgba().clone();
         int covered = 0;
@@ -63,7 +65,7 @@ class SoftenTest {
     void aSmallDabTakesLittle() {
         Picture original = picture(1200, 900);
         Stroke dab = new Stroke(Brush.SOFTEN, .02, 1, .5, List.of(new Point(.5, .5)), Optional.empty());
-        float[] coverage = StrokeCoverage.of(dab, 1200, 900);
+        float[] coverage = dab.coverage(new Picture(1200, 900));
         int count = 0;
         for (float c : coverage) {
             count += c > 0 ? 1 : 0;

@@ -1,12 +1,13 @@
-package org.wispwright.warp.retouch;
+package org.wispwright.warp.matte;
 
 import java.util.List;
+import org.wispwright.render.picture.Picture;
 
 /**
  * A part of the picture with a soft edge. Its mask is 1/2 on the outline and goes from 1 to 0 over a width of {@code feather}
  * centred there, by {@code s^2 (3 - 2 s)}.
  */
-public sealed interface Region permits Region.Rectangle, Region.Ellipse, Region.Polygon {
+public sealed interface Region extends Matte permits Region.Rectangle, Region.Ellipse, Region.Polygon {
     /** The widest feather, in heights. */
     double WIDEST_FEATHER = 4;
 
@@ -30,6 +31,29 @@ public sealed interface Region permits Region.Rectangle, Region.Ellipse, Region.
         double width = Math.max(feather(), finest);
         double s = Math.min(1, Math.max(0, 0.5 - signedDistance(x, y) / width));
         return s * s * (3 - 2 * s);
+    }
+
+    @Override
+    default float[] values(Picture original, Window window) {
+        int height = original.height();
+        float[] values = new float[window.pixels()];
+        for (int n = 0; n < values.length; n++) {
+            values[n] = (float) mask((window.left() + n % window.width() + 0.5) / height, (window.top() + n / window.width() + 0.5) / height,
+                    1.0 / height);
+        }
+        return values;
+    }
+
+    @Override
+    default float[] reach(Picture original, Window window, double feather) {
+        int height = original.height();
+        double fade = Math.max(feather, 1.0 / height);
+        float[] reach = new float[window.pixels()];
+        for (int n = 0; n < reach.length; n++) {
+            double d = signedDistance((window.left() + n % window.width() + 0.5) / height, (window.top() + n / window.width() + 0.5) / height);
+            reach[n] = (float) Sweep.smooth(1 + (feather() / 2 - d) / fade);
+        }
+        return reach;
     }
 
     /**

@@ -1,12 +1,12 @@
-package org.wispwright.warp.retouch;
+package org.wispwright.warp.matte;
 
 /** Distances to a straight piece of line. */
-final class Segment {
+public final class Segment {
     private Segment() {
     }
 
     /** Squared distance from (x,y) to the piece from (ax,ay) to (bx,by), which may be a single point. */
-    static double squaredDistance(double x, double y, double ax, double ay, double bx, double by) {
+    public static double squaredDistance(double x, double y, double ax, double ay, double bx, double by) {
         double abx = bx - ax;
         double aby = by - ay;
         double length = abx * abx + aby * aby;

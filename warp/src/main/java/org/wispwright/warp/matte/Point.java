@@ -1,4 +1,4 @@
-package org.wispwright.warp.retouch;
+package org.wispwright.warp.matte;
 
 /**
  * A position on a picture, in fractions of the raster's height from its top left corner: inside the frame y runs 0 to 1

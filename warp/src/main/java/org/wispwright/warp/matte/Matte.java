@@ -1,0 +1,30 @@
+package org.wispwright.warp.matte;
+
+import org.wispwright.render.picture.Picture;
+
+/**
+ * Which part of a picture is meant, and how much: 0 to 1 a pixel, at any raster. A retouch acts within it, a hold keeps it, a note
+ * weighs it.
+ */
+public sealed interface Matte permits Region {
+    /**
+     * The matte's values in a window.
+     *
+     * @param original read: the picture before any retouch; gives the raster, and the smoke for mattes that depend on it
+     * @return a new array: 0 to 1, one a pixel of the window
+     */
+    float[] values(Picture original, Window window);
+
+    /**
+     * Where the matte reaches: 1 wherever its value is above 0, falling to 0 over a feather beyond.
+     *
+     * @param feather fraction of the height, 0 or more; a pixel is the least
+     * @return a new array: 0 to 1, one a pixel of the window
+     */
+    float[] reach(Picture original, Window window, double feather);
+
+    /** The matte's values at every pixel of the picture. */
+    default float[] values(Picture original) {
+        return values(original, Window.all(original.width(), original.height()));
+    }
+}

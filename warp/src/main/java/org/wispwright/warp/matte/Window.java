@@ -1,0 +1,22 @@
+package org.wispwright.warp.matte;
+
+/**
+ * Pixels of a raster: columns left to left + width - 1, rows top to top + height - 1. Numbers of a window are laid out row by row,
+ * index {@code (x - left) + width * (y - top)}.
+ *
+ * @param left   first column
+ * @param top    first row
+ * @param width  columns, 1 or more
+ * @param height rows, 1 or more
+ */
+public record Window(int left, int top, int width, int height) {
+    /** All pixels of a raster. */
+    public static Window all(int width, int height) {
+        return new Window(0, 0, width, height);
+    }
+
+    /** How many pixels. */
+    public int pixels() {
+        return width * height;
+    }
+}

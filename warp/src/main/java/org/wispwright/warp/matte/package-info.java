@@ -1,0 +1,10 @@
+/**
+ * Room: which part of a picture is meant, as values.
+ * <p>Doors: {@link org.wispwright.warp.matte.Matte} (0 to 1 a pixel: {@link org.wispwright.warp.matte.Region} is one),
+ * {@link org.wispwright.warp.matte.Sweep} (a brush drawn along a line, and what it covers), {@link org.wispwright.warp.matte.Point}.
+ * <p>Words: <i>position</i> = fraction of the raster's height from its top left corner, see {@link org.wispwright.warp.matte.Point};
+ * <i>coverage</i> = how much of a brush a pixel gets, 0 to 1; <i>feather</i> = width of a soft edge, fraction of the height;
+ * <i>window</i> = a rectangle of pixels.
+ * <p>May use: render's picture. Must not use: optimize, ui, javax.swing. Held by {@code WallsTest}.
+ */
+package org.wispwright.warp.matte;
