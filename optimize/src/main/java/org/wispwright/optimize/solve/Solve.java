@@ -22,10 +22,10 @@ import org.wispwright.render.volume.GridShape;
  * The search for the smallest smooth extra force with which the smoke arrives at the wanted pictures.
  *
  * <p>L-BFGS on notes + holds + stay term + {@code energyWeight |x|^2 / 2}. Bands open from low to high; one ends when the loss fell
- * by less than 5 % over 5 iterations, the next starts from the same force. The energy weight is the program's: it is 0 in the first
- * band and then set every few iterations so that the energy is 2 % of the starting loss, with the stored pairs and the gradient
- * moved along exactly. At the solution that is a stationary point of {@code loss + 0.02 start ln |x|^2}: doubling the force has one price,
- * whatever its size.
+ * by less than 5 % over 5 iterations (the very last: over 8), the next starts from the same force. The energy weight is the program's: it
+ * is 0 in the first band and then set every few iterations so that the energy is 2 % of the starting loss, with the stored pairs and the
+ * gradient moved along exactly; a force that moves still smoke by less than a cell counts as one that moves it by a cell. At the
+ * solution that is a stationary point of {@code loss + 0.02 start ln |x|^2}: doubling the force has one price, whatever its size.
  *
  * <p>The pictures of a solve are small: a pixel covers about a cell, a sample a cell. Same bits for any number of lanes and any budget of
  * memory. One solve at a time for one set of lanes.
@@ -35,6 +35,8 @@ public final class Solve {
     static final double LEAST_FALL = 0.05;
     /** ... over so many iterations. */
     static final int OVER_ITERATIONS = 5;
+    /** The same for the last band of the last rung, after which nothing follows: a search often rests for a few iterations and goes on. */
+    static final int OVER_LAST_ITERATIONS = 8;
     /** The force energy's part of the objective, as a share of the starting loss. */
     static final double ENERGY_SHARE = 0.02;
     /** Iterations between two settings of the energy weight. */
@@ -205,7 +207,7 @@ public final class Solve {
                 int done = lbfgs.iterations() - iterationsBefore;
                 tell(bands.size(), open, done, seconds() - secondsBefore);
                 ended = endedBy(until, rung == rungs, losses, lbfgs.iterations(), seconds());
-                more = !hasEnded(losses, done);
+                more = !hasEnded(losses, done, rung == rungs && open == bands.size() ? OVER_LAST_ITERATIONS : OVER_ITERATIONS);
                 if ((open > 1 || rung > 1) && done % ENERGY_EVERY == 0) {
                     weighEnergy(lbfgs, plan.startLoss());
                 }
@@ -226,11 +228,8 @@ public final class Solve {
         }
 
         private Lbfgs.Settings settings() {
-            // A force that moves still smoke by four cells over the range is a fair first guess of what a note asks.
-            FlowSetup flow = problem.flow();
-            double range = (flow.frames().count() - 1) * flow.frames().secondsPerFrame();
-            double trial = 8 * flow.grid().cellMetres() / (range * range);
-            return new Lbfgs.Settings(PAIRS, LineSearch.Rule.forQuasiNewton().withMostEvaluations(MOST_EVALUATIONS), trial);
+            // To move still smoke by four cells over the range is a fair first guess of what a note asks.
+            return new Lbfgs.Settings(PAIRS, LineSearch.Rule.forQuasiNewton().withMostEvaluations(MOST_EVALUATIONS), forceOfCells(4));
         }
 
         private double share() {
@@ -247,21 +246,31 @@ public final class Solve {
         }
     }
 
-    private static void weighEnergy(Lbfgs search, double start) {
+    /**
+     * Sets the energy's weight for the force there is, but for no less than one that moves still smoke by a cell: a weight that grew
+     * without end as the force shrinks would keep a hard note's search at nothing for ever.
+     */
+    private void weighEnergy(Lbfgs search, double start) {
         double squares = 0;
         for (double v : search.x()) {
             squares += v * v;
         }
-        if (squares > 0) {
-            search.addQuadratic(2 * ENERGY_SHARE * start / squares - search.quadratic());
-        }
+        double least = forceOfCells(1);
+        search.addQuadratic(2 * ENERGY_SHARE * start / Math.max(squares, least * least) - search.quadratic());
     }
 
-    private static boolean hasEnded(List<Double> losses, int iterationsOfBand) {
-        if (iterationsOfBand < OVER_ITERATIONS) {
+    /** Norm of a steady force, m/s2, that moves still smoke by so many cells over the range. */
+    private double forceOfCells(double cells) {
+        FlowSetup flow = problem.flow();
+        double range = (flow.frames().count() - 1) * flow.frames().secondsPerFrame();
+        return 2 * cells * flow.grid().cellMetres() / (range * range);
+    }
+
+    private static boolean hasEnded(List<Double> losses, int iterationsOfBand, int over) {
+        if (iterationsOfBand < over) {
             return false;
         }
-        double before = losses.get(losses.size() - 1 - OVER_ITERATIONS);
+        double before = losses.get(losses.size() - 1 - over);
         return !(last(losses) < before * (1 - LEAST_FALL));
     }
 
