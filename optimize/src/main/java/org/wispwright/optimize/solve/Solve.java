@@ -2,16 +2,12 @@ package org.wispwright.optimize.solve;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.function.BooleanSupplier;
-import org.wispwright.optimize.checkpoint.Budget;
 import org.wispwright.optimize.flow.FlowSetup;
-import org.wispwright.optimize.flow.SmokeSolver;
-import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.force.Band;
 import org.wispwright.optimize.force.BandPlan;
 import org.wispwright.optimize.force.ForceBasis;
-import org.wispwright.optimize.search.Lbfgs;
-import org.wispwright.optimize.search.LineSearch;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.view.Pinhole;
 import org.wispwright.render.view.Orthographic;
@@ -45,8 +41,12 @@ public final class Solve {
     static final int PAIRS = 20;
     /** A line search that needs more gradients than this is lost in rounding. */
     static final int MOST_EVALUATIONS = 8;
+    /** Cells of the shot along one cell of the coarsest rung. */
+    static final int MOST_COARSENING = 4;
     /** The coarsest rung has at least so many cells each way. */
     static final int LEAST_RUNG = 12;
+    /** A rung opens a band if its shortest waves have at least so many cells there. */
+    static final double LEAST_CELLS = 5;
     /** Iterations that a band usually takes; only for the estimate of the time left. */
     static final int USUAL_ITERATIONS = 14;
 
@@ -55,6 +55,16 @@ public final class Solve {
     private final boolean stay;
     private final Lanes lanes;
     private final BooleanSupplier cancelled;
+
+    /** Told where the solve stands after each accepted iteration, so that it can be gone on with from there. */
+    @FunctionalInterface
+    public interface Recorder {
+        /** Keeps nothing. */
+        Recorder NONE = state -> { };
+
+        /** Keeps a state, on the thread that solves. */
+        void record(SolveState state);
+    }
 
     /**
      * @param stay      true for the stay term; false only to measure what it does
@@ -65,10 +75,10 @@ public final class Solve {
         this(problem, rungs(problem.flow().grid()), stay, lanes, cancelled);
     }
 
-    /** A solve that climbs other rungs of the same box; the last must be the problem's own grid. */
+    /** A solve that climbs other rungs of the same box, coarse to fine: the lower ones of {@link #rungs}, for a first look. */
     public Solve(SolveProblem problem, List<GridShape> climb, boolean stay, Lanes lanes, BooleanSupplier cancelled) {
-        if (climb.isEmpty() || !climb.get(climb.size() - 1).equals(problem.flow().grid())) {
-            throw new IllegalArgumentException("solve: the last rung must be the shot's own grid, " + problem.flow().grid().inWords());
+        if (climb.isEmpty()) {
+            throw new IllegalArgumentException("solve: got no rung, needs at least one");
         }
         this.problem = problem;
         this.climb = List.copyOf(climb);
@@ -87,15 +97,30 @@ public final class Solve {
         return new ForceBasis(flow.grid(), flow.frames().count() - 1, bands(flow), lanes);
     }
 
-    /** The grids that a solve climbs: half the cells each way if that leaves whole cells enough, then the shot's own. */
+    /**
+     * The grids that a solve climbs: a quarter of the cells each way, half of them, then the shot's own; without those that do not come
+     * out whole or have fewer than {@value #LEAST_RUNG} cells along a side.
+     */
     public static List<GridShape> rungs(GridShape grid) {
-        boolean even = grid.nx() % 2 == 0 && grid.ny() % 2 == 0 && grid.nz() % 2 == 0;
-        boolean enough = Math.min(grid.nx(), Math.min(grid.ny(), grid.nz())) >= 2 * LEAST_RUNG;
-        if (!even || !enough) {
-            return List.of(grid);
+        List<GridShape> rungs = new ArrayList<>();
+        for (int part = MOST_COARSENING; part > 1; part /= 2) {
+            boolean whole = grid.nx() % part == 0 && grid.ny() % part == 0 && grid.nz() % part == 0;
+            if (whole && Math.min(grid.nx(), Math.min(grid.ny(), grid.nz())) >= part * LEAST_RUNG) {
+                rungs.add(new GridShape(grid.nx() / part, grid.ny() / part, grid.nz() / part, part * grid.cellMetres(),
+                        grid.originX(), grid.originY(), grid.originZ()));
+            }
         }
-        return List.of(new GridShape(grid.nx() / 2, grid.ny() / 2, grid.nz() / 2, 2 * grid.cellMetres(),
-                grid.originX(), grid.originY(), grid.originZ()), grid);
+        rungs.add(grid);
+        return rungs;
+    }
+
+    /** How many of a shot's bands a rung opens: those whose waves have at least {@value #LEAST_CELLS} cells there, one at the least. */
+    static int open(List<Band> bands, GridShape rung) {
+        int open = 1;
+        while (open < bands.size() && bands.get(open).high() * rung.cellMetres() * LEAST_CELLS <= 1 + 1e-9) {
+            open++;
+        }
+        return open;
     }
 
     /** The view as a solve draws it: a pixel at the aim covers about a cell, never more rows than the view's own. */
@@ -116,175 +141,27 @@ public final class Solve {
      * @throws IllegalArgumentException if a note wants nothing, or not one state fits in the memory
      */
     public SolveResult run(long memoryBytes, StopRule until, Progress.Listener listener) {
-        Search search = new Search(until, listener, climb.size());
-        for (GridShape grid : climb) {
-            if (search.ended.isEmpty()) {
-                search.climb(grid, memoryBytes);
-            }
-        }
-        return search.result();
-    }
-
-    /** What a running solve carries from iteration to iteration. */
-    private final class Search {
-        private final long began = System.nanoTime();
-        private final StopRule until;
-        private final Progress.Listener listener;
-        private final int rungs;
-        private final List<Double> losses = new ArrayList<>();
-        private final List<SolveResult.BandRun> runs = new ArrayList<>();
-        private List<Double> met = List.of();
-        private Lbfgs lbfgs;
-        private TermPlan plan;
-        private SolveLoss loss;
-        private String ended = "";
-        private int rung;
-        private int snapshots;
-
-        Search(StopRule until, Progress.Listener listener, int rungs) {
-            this.until = until;
-            this.listener = listener;
-            this.rungs = rungs;
-        }
-
-        /**
-         * One rung: from the force of the rung below, or from none, until its last band ends. The last band's waves are resolved by the
-         * last rung alone, so the rungs below leave it closed. A finer rung's loss bends much as the coarser one's did: the pairs go on.
-         */
-        void climb(GridShape grid, long memoryBytes) {
-            rung++;
-            if (loss != null) {
-                loss.release();                                                // the search still holds the lower rung's loss for a moment
-            }
-            SolveProblem here = problem.on(grid);
-            FlowSetup flow = here.flow();
-            SmokeSolver solver = new SmokeSolver(flow, lanes);
-            List<View> views = here.views().stream().map(view -> proxy(view, grid.cellMetres())).toList();
-            FrameTerms terms = new FrameTerms(grid, views, here.look(), grid.cellMetres(), solver.clock(), lanes);
-            SmokeState start = new SmokeState(grid);
-            plan = new TermPlan(here, solver, start, terms, stay, cancelled);
-            int lastFrame = here.lastFrame();
-            int steps = (lastFrame - flow.frames().first()) * flow.substeps();
-            snapshots = new Budget(memoryBytes, SmokeState.bytes(grid)).snapshots(steps);
-            List<Band> bands = bands(problem.flow());
-            ForceBasis basis = new ForceBasis(grid, flow.frames().count() - 1, bands, lanes);
-            loss = new SolveLoss(solver, basis, terms, start, lastFrame, snapshots, cancelled);
-            int last = rung < rungs ? Math.max(1, bands.size() - 1) : bands.size();
-            int open = lbfgs == null ? 1 : bands.size();
-            if (lbfgs == null) {
-                lbfgs = new Lbfgs(loss, new double[basis.unknowns(1)], settings());
-            } else {
-                lengthen(basis.unknowns(open));
-            }
-            losses.add(share());
-            for (; open <= last && ended.isEmpty(); open++) {
-                if (lbfgs.x().length < basis.unknowns(open)) {
-                    lengthen(basis.unknowns(open));
-                }
-                runBand(grid, bands, open);
-            }
-        }
-
-        /** Goes on with this rung's loss and so many unknowns, the new ones 0. */
-        private void lengthen(int unknowns) {
-            lbfgs.extend(unknowns, loss);
-            weighEnergy(lbfgs, plan.startLoss());
-        }
-
-        private void runBand(GridShape grid, List<Band> bands, int open) {
-            int iterationsBefore = lbfgs.iterations();
-            int gradientsBefore = lbfgs.evaluations();
-            double secondsBefore = seconds();
-            boolean more = true;
-            while (more && ended.isEmpty()) {
-                Lbfgs.Iteration iteration = lbfgs.step();
-                if (iteration.outcome() != Lbfgs.Outcome.MOVED) {
-                    ended = rung == rungs && open == bands.size() ? iteration.sentence() : "";
-                    break;
-                }
-                losses.add(share());
-                met = plan.met(loss.losses());
-                int done = lbfgs.iterations() - iterationsBefore;
-                tell(bands.size(), open, done, seconds() - secondsBefore);
-                ended = endedBy(until, rung == rungs, losses, lbfgs.iterations(), seconds());
-                more = !hasEnded(losses, done, rung == rungs && open == bands.size() ? OVER_LAST_ITERATIONS : OVER_ITERATIONS);
-                if ((open > 1 || rung > 1) && done % ENERGY_EVERY == 0) {
-                    weighEnergy(lbfgs, plan.startLoss());
-                }
-            }
-            runs.add(new SolveResult.BandRun(grid, bands.get(open - 1), lbfgs.x().length, lbfgs.iterations() - iterationsBefore,
-                    lbfgs.evaluations() - gradientsBefore, last(losses), seconds() - secondsBefore));
-        }
-
-        private void tell(int bands, int open, int done, double bandSeconds) {
-            double perIteration = bandSeconds / done;
-            double left = perIteration * (Math.max(1, USUAL_ITERATIONS - done) + USUAL_ITERATIONS * (bands - open));
-            // A finer rung has eight times the cells.
-            for (int finer = rung + 1, times = 8; finer <= rungs; finer++, times *= 8) {
-                left += perIteration * times * USUAL_ITERATIONS;
-            }
-            listener.iteration(new Progress(rung, rungs, open, bands, lbfgs.iterations(), lbfgs.evaluations(),
-                    last(losses), met, seconds(), left));
-        }
-
-        private Lbfgs.Settings settings() {
-            // To move still smoke by four cells over the range is a fair first guess of what a note asks.
-            return new Lbfgs.Settings(PAIRS, LineSearch.Rule.forQuasiNewton().withMostEvaluations(MOST_EVALUATIONS), forceOfCells(4));
-        }
-
-        private double share() {
-            return (lbfgs.value() - lbfgs.quadraticValue()) / plan.startLoss();
-        }
-
-        private double seconds() {
-            return (System.nanoTime() - began) / 1e9;
-        }
-
-        SolveResult result() {
-            return new SolveResult(lbfgs.x().clone(), List.copyOf(runs), List.copyOf(losses), met, lbfgs.evaluations(), seconds(), lbfgs.quadratic(),
-                    lbfgs.quadraticValue() / plan.startLoss(), snapshots, ended.isEmpty() ? "the last band's loss has stopped falling" : ended);
-        }
+        return run(memoryBytes, until, listener, "", Optional.empty(), Recorder.NONE);
     }
 
     /**
-     * Sets the energy's weight for the force there is, but for no less than one that moves still smoke by a cell: a weight that grew
-     * without end as the force shrinks would keep a hard note's search at nothing for ever.
+     * Runs to its end from where an earlier run of the same problem stood, with the bits that run would have had. A state that had ended on a
+     * lower rung than this solve's last goes on with the next rung.
+     *
+     * @param digest   of the problem, for the records
+     * @param from     where to begin; empty begins at the beginning
+     * @param recorder told of each accepted iteration
+     * @throws SolveCancelled           if cancelled
+     * @throws IllegalArgumentException as above, or if the state is of another problem or a higher rung
      */
-    private void weighEnergy(Lbfgs search, double start) {
-        double squares = 0;
-        for (double v : search.x()) {
-            squares += v * v;
-        }
-        double least = forceOfCells(1);
-        search.addQuadratic(2 * ENERGY_SHARE * start / Math.max(squares, least * least) - search.quadratic());
-    }
-
-    /** Norm of a steady force, m/s2, that moves still smoke by so many cells over the range. */
-    private double forceOfCells(double cells) {
-        FlowSetup flow = problem.flow();
-        double range = (flow.frames().count() - 1) * flow.frames().secondsPerFrame();
-        return 2 * cells * flow.grid().cellMetres() / (range * range);
-    }
-
-    private static boolean hasEnded(List<Double> losses, int iterationsOfBand, int over) {
-        if (iterationsOfBand < over) {
-            return false;
-        }
-        double before = losses.get(losses.size() - 1 - over);
-        return !(last(losses) < before * (1 - LEAST_FALL));
-    }
-
-    private static String endedBy(StopRule until, boolean lastRung, List<Double> losses, int iterations, double seconds) {
-        if (lastRung && last(losses) <= until.loss()) {
-            return "the loss reached " + until.loss() + ", as asked";
-        }
-        if (iterations >= until.iterations()) {
-            return until.iterations() + " iterations were done, as asked";
-        }
-        return seconds >= until.seconds() ? "the " + until.seconds() + " seconds asked for had passed" : "";
-    }
-
-    private static double last(List<Double> values) {
-        return values.get(values.size() - 1);
+    public SolveResult run(long memoryBytes, StopRule until, Progress.Listener listener, String digest, Optional<SolveState> from,
+                           Recorder recorder) {
+        from.ifPresent(state -> {
+            if (!state.problem().equals(digest) || state.rung() > climb.size()) {
+                throw new IllegalArgumentException("solve: the record is of another problem or of rung " + state.rung() + ", this solve has "
+                        + climb.size() + " rungs; begin anew");
+            }
+        });
+        return new Climb(problem, climb, stay, lanes, cancelled, memoryBytes, until, listener, digest, recorder).run(from);
     }
 }

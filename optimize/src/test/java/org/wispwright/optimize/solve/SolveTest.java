@@ -97,7 +97,8 @@ class SolveTest {
     @Test void proxiesHaveAboutAPixelACell() {
         assertEquals(40, Solve.proxy(SolveScene.SIDE, 2.5 / 40).raster().height());
         assertEquals(80, Solve.proxy(SolveScene.SIDE, 0.001).raster().height());
-        assertEquals(2, Solve.rungs(new GridShape(48, 64, 48, 0.1)).size());
+        assertEquals(3, Solve.rungs(new GridShape(48, 64, 48, 0.1)).size());
+        assertEquals(2, Solve.rungs(new GridShape(48, 66, 48, 0.1)).size());
         assertEquals(1, Solve.rungs(new GridShape(48, 63, 48, 0.1)).size());
         assertEquals(1, Solve.rungs(new GridShape(16, 20, 16, 0.1)).size());
     }

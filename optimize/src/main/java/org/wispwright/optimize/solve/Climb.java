@@ -1,0 +1,250 @@
+package org.wispwright.optimize.solve;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Optional;
+import java.util.function.BooleanSupplier;
+import org.wispwright.optimize.checkpoint.Budget;
+import org.wispwright.optimize.flow.FlowSetup;
+import org.wispwright.optimize.flow.SmokeSolver;
+import org.wispwright.optimize.flow.SmokeState;
+import org.wispwright.optimize.force.Band;
+import org.wispwright.optimize.force.ForceBasis;
+import org.wispwright.optimize.search.Lbfgs;
+import org.wispwright.optimize.search.LineSearch;
+import org.wispwright.render.lanes.Lanes;
+import org.wispwright.render.view.View;
+import org.wispwright.render.volume.GridShape;
+
+/**
+ * One run of a {@link Solve}: rungs, in each its bands, in each its iterations. Whether a band or the solve ends is asked of the numbers
+ * that a {@link SolveState} holds and of nothing else, so a run that goes on from one decides as the first did.
+ */
+final class Climb {
+    private final SolveProblem problem;
+    private final List<GridShape> grids;
+    private final boolean stay;
+    private final Lanes lanes;
+    private final BooleanSupplier cancelled;
+    private final long memoryBytes;
+    private final StopRule until;
+    private final Progress.Listener listener;
+    private final String digest;
+    private final Solve.Recorder recorder;
+    private final List<Band> bands;
+    private final long began = System.nanoTime();
+    private final List<Double> losses = new ArrayList<>();
+    private final List<SolveResult.BandRun> runs = new ArrayList<>();
+    private List<Double> met = List.of();
+    private Lbfgs lbfgs;
+    private TermPlan plan;
+    private SolveLoss loss;
+    private String ended = "";
+    private double secondsBefore;
+    private int snapshots;
+    private int rung;
+    private int open;
+    private int done;
+    private int bandGradients;
+    private double bandSeconds;
+
+    Climb(SolveProblem problem, List<GridShape> grids, boolean stay, Lanes lanes, BooleanSupplier cancelled, long memoryBytes, StopRule until,
+          Progress.Listener listener, String digest, Solve.Recorder recorder) {
+        this.problem = problem;
+        this.grids = grids;
+        this.stay = stay;
+        this.lanes = lanes;
+        this.cancelled = cancelled;
+        this.memoryBytes = memoryBytes;
+        this.until = until;
+        this.listener = listener;
+        this.digest = digest;
+        this.recorder = recorder;
+        bands = Solve.bands(problem.flow());
+    }
+
+    SolveResult run(Optional<SolveState> from) {
+        from.ifPresent(this::take);
+        for (int next = Math.max(1, rung); next <= grids.size(); next++) {
+            climb(next, from.filter(state -> lbfgs == null));
+            if (!ended.isEmpty()) {
+                break;
+            }
+        }
+        if (ended.isEmpty()) {
+            ended = "the last band's loss has stopped falling";
+        }
+        record();
+        return new SolveResult(lbfgs.x().clone(), List.copyOf(runs), List.copyOf(losses), met, lbfgs.evaluations(), seconds(), lbfgs.quadratic(),
+                lbfgs.quadraticValue() / plan.startLoss(), snapshots, ended);
+    }
+
+    private void take(SolveState state) {
+        rung = state.rung();
+        open = state.band();
+        done = state.bandIterations();
+        bandGradients = state.bandGradients();
+        bandSeconds = state.bandSeconds();
+        secondsBefore = state.seconds();
+        losses.addAll(state.losses());
+        met = state.met();
+        runs.addAll(state.runs());
+        ended = state.ended();
+        if (!ended.isEmpty() && rung < grids.size()) {
+            ended = "";
+            runs.remove(runs.size() - 1);                                      // its band is open again, and ends at once or goes on
+        }
+    }
+
+    /**
+     * One rung: from the force of the rung below, or from none, until its last band ends. A rung leaves the bands closed whose waves it does
+     * not resolve. A finer rung's loss bends much as the coarser one's did: the pairs go on.
+     *
+     * @param state if given, this rung is gone on with from there, instead of begun
+     */
+    private void climb(int number, Optional<SolveState> state) {
+        rung = number;
+        GridShape grid = grids.get(rung - 1);
+        if (loss != null) {
+            loss.release();                                                    // the search still holds the lower rung's loss for a moment
+        }
+        SolveProblem here = problem.on(grid);
+        FlowSetup flow = here.flow();
+        SmokeSolver solver = new SmokeSolver(flow, lanes);
+        List<View> views = here.views().stream().map(view -> Solve.proxy(view, grid.cellMetres())).toList();
+        FrameTerms terms = new FrameTerms(grid, views, here.look(), grid.cellMetres(), solver.clock(), lanes);
+        SmokeState start = new SmokeState(grid);
+        plan = new TermPlan(here, solver, start, terms, stay, cancelled);
+        int lastFrame = here.lastFrame();
+        int steps = (lastFrame - flow.frames().first()) * flow.substeps();
+        snapshots = new Budget(memoryBytes, SmokeState.bytes(grid)).snapshots(steps);
+        ForceBasis basis = new ForceBasis(grid, flow.frames().count() - 1, bands, lanes);
+        loss = new SolveLoss(solver, basis, terms, start, lastFrame, snapshots, cancelled);
+        if (state.isPresent()) {
+            lbfgs = new Lbfgs(loss, state.get().search(), settings());
+        } else {
+            int highest = Solve.open(bands, grid);
+            open = rung == 1 ? 1 : Math.max(open, highest);
+            begin(basis.unknowns(open));
+            losses.add(share());
+        }
+        int last = Math.max(open, Solve.open(bands, grid));
+        while (ended.isEmpty()) {
+            runBand(grid, last);
+            if (open == last || !ended.isEmpty()) {
+                break;
+            }
+            open++;
+            begin(basis.unknowns(open));
+        }
+    }
+
+    /** Opens a rung or a band: this rung's loss and so many unknowns, the new ones 0. */
+    private void begin(int unknowns) {
+        int gradients = lbfgs == null ? 0 : lbfgs.evaluations();
+        if (lbfgs == null) {
+            lbfgs = new Lbfgs(loss, new double[unknowns], settings());
+        } else {
+            lbfgs.extend(unknowns, loss);
+            weighEnergy();
+        }
+        done = 0;
+        bandGradients = lbfgs.evaluations() - gradients;
+        bandSeconds = 0;
+    }
+
+    private void runBand(GridShape grid, int lastBand) {
+        boolean last = rung == grids.size() && open == lastBand;
+        // A first look on a lower rung ends its bands as the whole climb would, so that it can be gone on with.
+        boolean shotsOwn = last && grid.equals(problem.flow().grid());
+        while (ended.isEmpty() && !hasEnded(shotsOwn ? Solve.OVER_LAST_ITERATIONS : Solve.OVER_ITERATIONS)) {
+            double since = seconds();
+            int gradients = lbfgs.evaluations();
+            Lbfgs.Iteration iteration = lbfgs.step();
+            bandGradients += lbfgs.evaluations() - gradients;
+            bandSeconds += seconds() - since;
+            if (iteration.outcome() != Lbfgs.Outcome.MOVED) {
+                ended = last ? iteration.sentence() : "";
+                break;
+            }
+            done++;
+            losses.add(share());
+            met = plan.met(loss.losses());
+            if ((open > 1 || rung > 1) && done % Solve.ENERGY_EVERY == 0) {
+                weighEnergy();
+            }
+            ended = endedByRule();
+            tell(lastBand);
+            if (ended.isEmpty()) {
+                record();
+            }
+        }
+        runs.add(new SolveResult.BandRun(grid, bands.get(open - 1), lbfgs.x().length, done, bandGradients, last(losses), bandSeconds));
+    }
+
+    private void record() {
+        recorder.record(new SolveState(digest, rung, open, done, bandGradients, bandSeconds, seconds(), lbfgs.state(), losses, met, runs, ended));
+    }
+
+    private void tell(int lastBand) {
+        double perIteration = bandSeconds / done;
+        double left = perIteration * (Math.max(1, Solve.USUAL_ITERATIONS - done) + Solve.USUAL_ITERATIONS * (lastBand - open));
+        // A finer rung has eight times the cells.
+        for (int finer = rung + 1, times = 8; finer <= grids.size(); finer++, times *= 8) {
+            left += perIteration * times * Solve.USUAL_ITERATIONS;
+        }
+        listener.iteration(new Progress(rung, grids.size(), open, bands.size(), lbfgs.iterations(), lbfgs.evaluations(),
+                last(losses), met, seconds(), left));
+    }
+
+    private Lbfgs.Settings settings() {
+        // To move still smoke by four cells over the range is a fair first guess of what a note asks.
+        return new Lbfgs.Settings(Solve.PAIRS, LineSearch.Rule.forQuasiNewton().withMostEvaluations(Solve.MOST_EVALUATIONS), forceOfCells(4));
+    }
+
+    /**
+     * Sets the energy's weight for the force there is, but for no less than one that moves still smoke by a cell: a weight that grew
+     * without end as the force shrinks would keep a hard note's search at nothing for ever.
+     */
+    private void weighEnergy() {
+        double squares = 0;
+        for (double v : lbfgs.x()) {
+            squares += v * v;
+        }
+        double least = forceOfCells(1);
+        lbfgs.addQuadratic(2 * Solve.ENERGY_SHARE * plan.startLoss() / Math.max(squares, least * least) - lbfgs.quadratic());
+    }
+
+    /** Norm of a steady force, m/s2, that moves still smoke by so many cells of the shot over the range. */
+    private double forceOfCells(double cells) {
+        FlowSetup flow = problem.flow();
+        double range = (flow.frames().count() - 1) * flow.frames().secondsPerFrame();
+        return 2 * cells * flow.grid().cellMetres() / (range * range);
+    }
+
+    private boolean hasEnded(int over) {
+        return done >= over && !(last(losses) < losses.get(losses.size() - 1 - over) * (1 - Solve.LEAST_FALL));
+    }
+
+    private String endedByRule() {
+        if (rung == grids.size() && last(losses) <= until.loss()) {
+            return "the loss reached " + until.loss() + ", as asked";
+        }
+        if (lbfgs.iterations() >= until.iterations()) {
+            return until.iterations() + " iterations were done, as asked";
+        }
+        return seconds() >= until.seconds() ? "the " + until.seconds() + " seconds asked for had passed" : "";
+    }
+
+    private double share() {
+        return (lbfgs.value() - lbfgs.quadraticValue()) / plan.startLoss();
+    }
+
+    private double seconds() {
+        return secondsBefore + (System.nanoTime() - began) / 1e9;
+    }
+
+    private static double last(List<Double> values) {
+        return values.get(values.size() - 1);
+    }
+}
