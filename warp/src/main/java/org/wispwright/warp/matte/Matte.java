@@ -4,11 +4,11 @@ import org.wispwright.render.picture.Picture;
 
 /**
  * Which part of a picture is meant, and how much: 0 to 1 a pixel, at any raster. A retouch acts within it, a hold keeps it, a note
- * weighs it.
+ * weighs by it.
  */
-public sealed interface Matte permits Region {
+public sealed interface Matte permits Region, DensityRange, BrushedMatte, CombinedMatte, ImageMatte {
     /**
-     * The matte's values in a window.
+     * The matte's values in a window. They do not depend on which window a pixel is in.
      *
      * @param original read: the picture before any retouch; gives the raster, and the smoke for mattes that depend on it
      * @return a new array: 0 to 1, one a pixel of the window
@@ -16,12 +16,15 @@ public sealed interface Matte permits Region {
     float[] values(Picture original, Window window);
 
     /**
-     * Where the matte reaches: 1 wherever its value is above 0, falling to 0 over a feather beyond.
+     * Where the matte reaches: 1 wherever its value is above 1/512 (half a code of 8 bits), falling to 0 over a feather beyond. Found
+     * from the values, its border taken half a pixel beyond the outermost such pixel.
      *
      * @param feather fraction of the height, 0 or more; a pixel is the least
      * @return a new array: 0 to 1, one a pixel of the window
      */
-    float[] reach(Picture original, Window window, double feather);
+    default float[] reach(Picture original, Window window, double feather) {
+        return Reach.around(this, original, window, feather);
+    }
 
     /** The matte's values at every pixel of the picture. */
     default float[] values(Picture original) {

@@ -1,5 +1,7 @@
 package org.wispwright.warp.matte;
 
+import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import org.wispwright.render.picture.Picture;
 
@@ -33,25 +35,47 @@ public sealed interface Region extends Matte permits Region.Rectangle, Region.El
         return s * s * (3 - 2 * s);
     }
 
+    /** The smallest upright rectangle around the outline: left, top, right, bottom, in heights. */
+    double[] bounds();
+
+    /**
+     * Signed distances of pixel centres, as {@link #signedDistance}; where that is farther than {@code reach} from the outline, possibly
+     * infinite with its sign.
+     */
+    default double[] signedDistances(Window window, int height, double reach) {
+        double[] bounds = bounds();
+        double[] distances = new double[window.pixels()];
+        Arrays.fill(distances, Double.POSITIVE_INFINITY);
+        int left = Segment.pixel(bounds[0] - reach, height, window.left(), window.width());
+        int right = Segment.pixel(bounds[2] + reach, height, window.left(), window.width());
+        int top = Segment.pixel(bounds[1] - reach, height, window.top(), window.height());
+        int bottom = Segment.pixel(bounds[3] + reach, height, window.top(), window.height());
+        for (int j = top; j <= bottom; j++) {
+            for (int i = left; i <= right; i++) {
+                distances[i + window.width() * j] = signedDistance((window.left() + i + 0.5) / height, (window.top() + j + 0.5) / height);
+            }
+        }
+        return distances;
+    }
+
     @Override
     default float[] values(Picture original, Window window) {
-        int height = original.height();
-        float[] values = new float[window.pixels()];
+        double width = Math.max(feather(), 1.0 / original.height());
+        double[] distances = signedDistances(window, original.height(), width / 2);
+        float[] values = new float[distances.length];
         for (int n = 0; n < values.length; n++) {
-            values[n] = (float) mask((window.left() + n % window.width() + 0.5) / height, (window.top() + n / window.width() + 0.5) / height,
-                    1.0 / height);
+            values[n] = (float) Sweep.smooth(0.5 - distances[n] / width);
         }
         return values;
     }
 
     @Override
     default float[] reach(Picture original, Window window, double feather) {
-        int height = original.height();
-        double fade = Math.max(feather, 1.0 / height);
-        float[] reach = new float[window.pixels()];
+        double fade = Math.max(feather, 1.0 / original.height());
+        double[] distances = signedDistances(window, original.height(), feather() / 2 + fade);
+        float[] reach = new float[distances.length];
         for (int n = 0; n < reach.length; n++) {
-            double d = signedDistance((window.left() + n % window.width() + 0.5) / height, (window.top() + n / window.width() + 0.5) / height);
-            reach[n] = (float) Sweep.smooth(1 + (feather() / 2 - d) / fade);
+            reach[n] = (float) Sweep.smooth(1 + (feather() / 2 - distances[n]) / fade);
         }
         return reach;
     }
@@ -79,6 +103,11 @@ public sealed interface Region extends Matte permits Region.Rectangle, Region.El
                         + bottom
                         + ", needs left < right and top < bottom, in fractions of the picture's height from its top left corner");
             }
+        }
+
+        @Override
+        public double[] bounds() {
+            return new double[] {left, top, right, bottom};
         }
 
         @Override
@@ -112,16 +141,23 @@ public sealed interface Region extends Matte permits Region.Rectangle, Region.El
             }
         }
 
+        @Override
+        public double[] bounds() {
+            return new double[] {centre.x() - radiusX, centre.y() - radiusY, centre.x() + radiusX, centre.y() + radiusY};
+        }
+
         /** {@code f / |grad f|} with {@code f = |p / r| - 1}: Taubin (1991), IEEE PAMI 13(11), 1115-1138. */
         @Override
         public double signedDistance(double x, double y) {
             double px = (x - centre.x()) / radiusX;
             double py = (y - centre.y()) / radiusY;
-            double k = Math.hypot(px, py);
+            double k = Math.sqrt(px * px + py * py);
             if (k < 1e-9) {
                 return -Math.min(radiusX, radiusY);
             }
-            return Math.max(k * (k - 1) / Math.hypot(px / radiusX, py / radiusY), -Math.min(radiusX, radiusY));
+            double gx = px / radiusX;
+            double gy = py / radiusY;
+            return Math.max(k * (k - 1) / Math.sqrt(gx * gx + gy * gy), -Math.min(radiusX, radiusY));
         }
     }
 
@@ -159,6 +195,57 @@ public sealed interface Region extends Matte permits Region.Rectangle, Region.El
                 a = b;
             }
             return inside ? -Math.sqrt(nearest) : Math.sqrt(nearest);
+        }
+
+        @Override
+        public double[] bounds() {
+            double[] bounds = {Point.FARTHEST, Point.FARTHEST, -Point.FARTHEST, -Point.FARTHEST};
+            for (Point p : outline) {
+                bounds[0] = Math.min(bounds[0], p.x());
+                bounds[1] = Math.min(bounds[1], p.y());
+                bounds[2] = Math.max(bounds[2], p.x());
+                bounds[3] = Math.max(bounds[3], p.y());
+            }
+            return bounds;
+        }
+
+        /** Distances along the outline alone, signs row by row: time grows with the outline's length, not with corners times pixels. */
+        @Override
+        public double[] signedDistances(Window window, int height, double reach) {
+            List<Point> closed = new ArrayList<>(outline);
+            closed.add(outline.get(0));
+            double[] distances = Segment.squaredDistances(closed, window, height, reach);
+            boolean[] turns = new boolean[window.width() + 1];
+            for (int j = 0, n = 0; j < window.height(); j++) {
+                Arrays.fill(turns, false);
+                turnsOfRow((window.top() + j + 0.5) / height, window, height, turns);
+                boolean inside = false;
+                n += window.width();
+                for (int i = window.width() - 1, p = n - 1; i >= 0; i--, p--) {
+                    inside ^= turns[i + 1];
+                    distances[p] = inside ? -Math.sqrt(distances[p]) : Math.sqrt(distances[p]);
+                }
+            }
+            return distances;
+        }
+
+        /** Flips {@code turns[i + 1]} for each crossing of row y that pixels up to i of the window, and no others, lie left of. */
+        private void turnsOfRow(double y, Window window, int height, boolean[] turns) {
+            Point a = outline.get(outline.size() - 1);
+            for (Point b : outline) {
+                if (a.y() > y != b.y() > y) {
+                    double x = a.x() + (y - a.y()) / (b.y() - a.y()) * (b.x() - a.x());
+                    int i = Segment.pixel(x, height, window.left() - 1, window.width() + 1);
+                    while (i > 0 && !((window.left() + i - 1 + 0.5) / height < x)) {
+                        i--;
+                    }
+                    while (i < window.width() && (window.left() + i + 0.5) / height < x) {
+                        i++;
+                    }
+                    turns[i] ^= true;
+                }
+                a = b;
+            }
         }
     }
 }

@@ -1,6 +1,5 @@
 package org.wispwright.warp.matte;
 
-import java.util.Arrays;
 import java.util.List;
 
 /**
@@ -45,7 +44,7 @@ public record Sweep(double radius, double strength, double softEdge, List<Point>
         double fade = Math.max(soft, 1.0 / height);
         double middle = radius - soft / 2;
         float[] coverage = new float[window.pixels()];
-        double[] squared = squaredDistances(window, height, middle + fade / 2);
+        double[] squared = Segment.squaredDistances(line, window, height, middle + fade / 2);
         for (int p = 0; p < coverage.length; p++) {
             if (squared[p] < Double.POSITIVE_INFINITY) {
                 coverage[p] = (float) (strength * smooth(0.5 + (middle - Math.sqrt(squared[p])) / fade));
@@ -64,7 +63,7 @@ public record Sweep(double radius, double strength, double softEdge, List<Point>
     public float[] reach(Window window, int height, double feather) {
         double fade = Math.max(feather, 1.0 / height);
         float[] reach = new float[window.pixels()];
-        double[] squared = squaredDistances(window, height, radius + fade);
+        double[] squared = Segment.squaredDistances(line, window, height, radius + fade);
         for (int p = 0; p < reach.length; p++) {
             if (squared[p] < Double.POSITIVE_INFINITY) {
                 reach[p] = (float) smooth(1 + (radius - Math.sqrt(squared[p])) / fade);
@@ -77,32 +76,5 @@ public record Sweep(double radius, double strength, double softEdge, List<Point>
     public static double smooth(double s) {
         double c = Math.min(1, Math.max(0, s));
         return c * c * (3 - 2 * c);
-    }
-
-    /** Squared distance of pixel centres to the line, in squared heights; infinite where it is surely beyond reach. */
-    private double[] squaredDistances(Window window, int height, double reach) {
-        double[] squared = new double[window.pixels()];
-        Arrays.fill(squared, Double.POSITIVE_INFINITY);
-        Point a = line.get(0);
-        for (int n = line.size() == 1 ? 0 : 1; n < line.size(); n++) {
-            Point b = line.get(n);
-            int left = pixel(Math.min(a.x(), b.x()) - reach, height, window.left(), window.width());
-            int right = pixel(Math.max(a.x(), b.x()) + reach, height, window.left(), window.width());
-            int top = pixel(Math.min(a.y(), b.y()) - reach, height, window.top(), window.height());
-            int bottom = pixel(Math.max(a.y(), b.y()) + reach, height, window.top(), window.height());
-            for (int j = top; j <= bottom; j++) {
-                for (int i = left; i <= right; i++) {
-                    double d = Segment.squaredDistance((window.left() + i + 0.5) / height, (window.top() + j + 0.5) / height, a.x(), a.y(),
-                            b.x(), b.y());
-                    squared[i + window.width() * j] = Math.min(squared[i + window.width() * j], d);
-                }
-            }
-            a = b;
-        }
-        return squared;
-    }
-
-    private static int pixel(double position, int height, int first, int count) {
-        return (int) Math.min(count - 1, Math.max(0, Math.floor(position * height) - first));
     }
 }

@@ -15,6 +15,13 @@ public record Window(int left, int top, int width, int height) {
         return new Window(0, 0, width, height);
     }
 
+    /** This window and the pixels around it up to a distance, as far as they are on the raster. */
+    Window grown(int pixels, int rasterWidth, int rasterHeight) {
+        int x0 = Math.max(0, left - pixels);
+        int y0 = Math.max(0, top - pixels);
+        return new Window(x0, y0, Math.min(rasterWidth, left + width + pixels) - x0, Math.min(rasterHeight, top + height + pixels) - y0);
+    }
+
     /** How many pixels. */
     public int pixels() {
         return width * height;
