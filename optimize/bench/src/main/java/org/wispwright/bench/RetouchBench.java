@@ -85,7 +85,7 @@ public class RetouchBench {
         }
     }
 
-    private static Picture puff(int width, int height) {
+    static Picture puff(int width, int height) {
         Picture picture = new Picture(width, height);
         for (int y = 0; y < height; y++) {
             for (int x = 0; x < width; x++) {

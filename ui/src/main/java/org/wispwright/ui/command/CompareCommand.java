@@ -10,6 +10,9 @@ import org.wispwright.ui.shot.Shot;
 import org.wispwright.ui.shot.ShotFolder;
 import org.wispwright.ui.job.CompareWork;
 import org.wispwright.ui.job.Comparison;
+import org.wispwright.ui.job.Review;
+import org.wispwright.ui.job.ReviewReport;
+import org.wispwright.ui.job.ReviewWork;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.ITypeConverter;
 import picocli.CommandLine.Mixin;
@@ -20,8 +23,8 @@ import picocli.CommandLine.TypeConversionException;
 @Command(name = "compare", sortOptions = false,
         description = "Compare two takes note by note: original, wanted, got, their difference, and one sheet of all.",
         footer = {"",
-            "Writes into DIR: sheet.png, compare.json, and for every note the pictures ID.original.png, ID.wanted.png,",
-            "ID.got.png and ID.difference.png.", "", "Examples:",
+            "Writes into DIR: sheet.png, compare.json, measures.csv, and for every note the pictures ID.original.png,",
+            "ID.wanted.png, ID.got.png and ID.difference.png. Prints a table of measures (docs/commands.md).", "", "Examples:",
             "  java -jar wispwright.jar compare samples/kiln-yard --takes 0,1 --out review",
             "  java -jar wispwright.jar compare samples/kiln-yard --takes 1,2 --out review --json"})
 final class CompareCommand implements Callable<Integer> {
@@ -58,16 +61,18 @@ final class CompareCommand implements Callable<Integer> {
         Shot shot = choice.shot();
         ShotFolder folder = choice.folder();
         Comparison comparison;
+        Review review;
         try (Lanes lanes = new Lanes(choice.threads()); ProgressLine progress = manner.progress()) {
             comparison = CompareWork.compare(folder, shot, takes.before(), takes.after(), lanes, progress, manner.cancel());
+            review = ReviewWork.of(folder, shot, comparison, lanes, progress, manner.cancel());
             manner.cancel().stopIfWished();
-            CompareWork.write(folder, shot, comparison, out, progress);
+            CompareWork.write(folder, shot, comparison, review, out, progress);
         }
         ObjectNode object = CompareWork.report(comparison).put("ok", true).put("out", out.toString());
         String notes = comparison.notes().stream().map(n -> String.format(Locale.ROOT, "%s met %.1f %%", n.note().id(), 100 * n.met()))
                 .collect(Collectors.joining(", "));
-        manner.say("Take " + takes.after() + " against take " + takes.before() + ": " + notes + ". See " + out.resolve("sheet.png") + ".",
-                object);
+        manner.say("Take " + takes.after() + " against take " + takes.before() + ": " + notes + ". See " + out.resolve("sheet.png") + ".\n"
+                + ReviewReport.table(review), object);
         return ExitCodes.OK;
     }
 }

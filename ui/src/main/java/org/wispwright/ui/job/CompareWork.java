@@ -89,7 +89,7 @@ public final class CompareWork {
         if (!(start > LEAST_WISH && startFinest > 0)) {
             throw new ShotException(new Finding("notes/" + note.id() + ".json", "/retouch", "it changes nothing that can be seen on frame "
                     + note.frame()
-                    + "; check where its strokes and handles lie."));
+                    + (note.weighBy().isPresent() ? ", where its weighBy counts" : "") + "; check where its strokes and handles lie."));
         }
         double met = 1 - loss.value(got) / start;
         double finest = loss.finest(got) / startFinest;
@@ -112,7 +112,7 @@ public final class CompareWork {
                     .map(file -> RenderedFrame.read(folder, file, "/views/" + shot.views().indexOf(view) + "/rendered/" + note.frame()));
             List<Matte> holds = note.holds().stream().filter(h -> h.holds(note.frame())).map(Hold::matte).toList();
             rows.add(new SheetRow(note.id(), note.words(), "frame " + note.frame() + ", view " + note.view(), rendered, note.retouch(),
-                    holds,
+                    holds, note.weighBy(),
                     n.shown(), n.wanted(), n.got(), n.met()));
         }
         String against = comparison.before() == 0 ? "the original" : "take " + Takes.name(comparison.before());
@@ -133,13 +133,13 @@ public final class CompareWork {
     }
 
     /**
-     * Writes {@code sheet.png}, {@code compare.json} and, for every note, {@code ID.original.png}, {@code ID.wanted.png},
+     * Writes {@code sheet.png}, {@code compare.json}, {@code measures.csv} and, for every note, {@code ID.original.png}, {@code ID.wanted.png},
      * {@code ID.got.png} and {@code ID.difference.png} (|got - wanted| times the sheet's gain). Each file appears whole.
      *
      * @param out made if it is not there; its parent must be
      * @throws ShotException if the place cannot be written to
      */
-    public static void write(ShotFolder folder, Shot shot, Comparison comparison, Path out, Progress progress) {
+    public static void write(ShotFolder folder, Shot shot, Comparison comparison, Review review, Path out, Progress progress) {
         if (!Lettering.works()) {
             progress.milestone("sheet: this machine has no fonts, so it has no words; install fontconfig and a font to see them");
         }
@@ -160,7 +160,9 @@ public final class CompareWork {
                     stream -> ImageIO.write(sheet.difference(n.got(), n.wanted()), "png", stream));
         }
         PictureFile.write(out.resolve("sheet.png"), stream -> ImageIO.write(sheet.paint(), "png", stream));
-        writeJson(report(comparison).put("differenceGain", sheet.gain()), out.resolve("compare.json"));
+        byte[] csv = ReviewReport.csv(review).getBytes(StandardCharsets.UTF_8);
+        PictureFile.write(out.resolve("measures.csv"), stream -> stream.write(csv));
+        writeJson(ReviewReport.add(review, report(comparison).put("differenceGain", sheet.gain())), out.resolve("compare.json"));
     }
 
     /** Writes an object as a file that appears whole. @throws ShotException if the place cannot be written to */

@@ -9,11 +9,12 @@ import org.wispwright.warp.retouch.Retoucher;
 
 /**
  * A note's retouch as a wish of the solve: applied anew at any raster. A pixel weighs 1 where the retouch acts and in the note's
- * holds on its frame, {@link SolveProblem#WEIGHT_ELSEWHERE} elsewhere, with a soft edge between.
+ * holds on its frame, {@link SolveProblem#WEIGHT_ELSEWHERE} elsewhere, with a soft edge between; all times the matte that the note
+ * weighs by, if it has one.
  */
 final class NoteWish implements Wish {
     /** Width of the soft edge around what is retouched, fraction of the height. */
-    private static final double FEATHER = 0.04;
+    static final double FEATHER = 0.04;
 
     private final Note note;
 
@@ -40,6 +41,12 @@ final class NoteWish implements Wish {
                 }
             }
         }
+        note.weighBy().ifPresent(matte -> {
+            float[] share = matte.values(original);
+            for (int n = 0; n < weights.length; n++) {
+                weights[n] *= share[n];
+            }
+        });
         return weights;
     }
 }

@@ -84,7 +84,8 @@ public final class TourWork {
         progress.milestone("tour: '" + shot.name() + "', " + shot.flow().grid().inWords() + ", " + shot.flow().frames().count()
                 + " frames, " + shot.notes().size() + " notes");
         SolveWork.Result solve = SolveWork.run(shotFolder, shot, manner, lanes, progress, cancel);
-        CompareWork.write(shotFolder, shot, solve.comparison(), out, progress);
+        Review review = ReviewWork.of(shotFolder, shot, solve.comparison(), lanes, progress, cancel);
+        CompareWork.write(shotFolder, shot, solve.comparison(), review, out, progress);
         progress.milestone("tour: two short solves, to tell what the stay term does");
         StayTrade trade = StayTrade.of(shot, lanes, cancel);
         ObjectNode report = SolveReport.of(solve);

@@ -11,7 +11,9 @@ import java.awt.geom.Path2D;
 import java.awt.geom.Rectangle2D;
 import java.util.EnumSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.Set;
+import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.retouch.Brush;
 import org.wispwright.warp.retouch.Handle;
 import org.wispwright.warp.retouch.MeshWarp;
@@ -19,6 +21,9 @@ import org.wispwright.warp.retouch.Operation;
 import org.wispwright.warp.matte.Matte;
 import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.matte.Region;
+import org.wispwright.warp.measure.Plane;
+import org.wispwright.warp.outline.Loop;
+import org.wispwright.warp.outline.OutlineTracer;
 import org.wispwright.warp.retouch.Retouch;
 import org.wispwright.warp.retouch.Stroke;
 
@@ -30,7 +35,8 @@ final class RetouchMarks {
     /** What a mark's colour says. */
     enum Meaning {
         /** A hold, or a pin of a mesh warp. */ KEEP(0x9BD18B, "stays"),
-        /** The region that an operation may act in. */ WITHIN(0xC3B1E1, "acts within"),
+        /** The matte that an operation may act in. */ WITHIN(0xC3B1E1, "acts within"),
+        /** The matte that a note weighs by. */ WEIGHS(0x8FA8E8, "counts"),
         /** Restore brush. */ RESTORE(0xB7B07A, "restore"),
         /** Soften brush. */ SOFTEN(0xD9D9D9, "soften"),
         /** Even out brush. */ EVEN(0x8FB8A8, "even out"),
@@ -61,18 +67,23 @@ final class RetouchMarks {
 
     private final Graphics2D g;
     private final double height;
+    private final Picture original;
 
     /**
      * Draws onto a picture of this height whose top left corner is at the graphics' origin.
+     *
+     * @param original what the retouch works on, at any raster: gives the outlines of mattes that depend on the smoke or are pixels
      */
-    RetouchMarks(Graphics2D g, double height) {
+    RetouchMarks(Graphics2D g, double height, Picture original) {
         this.g = g;
         this.height = height;
+        this.original = original;
     }
 
     /** What the marks of a retouch say; its legend needs no more. */
-    static Set<Meaning> meanings(Retouch retouch, List<Matte> holds) {
+    static Set<Meaning> meanings(Retouch retouch, List<Matte> holds, Optional<Matte> weighBy) {
         Set<Meaning> all = EnumSet.noneOf(Meaning.class);
+        weighBy.ifPresent(matte -> all.add(Meaning.WEIGHS));
         if (!holds.isEmpty()) {
             all.add(Meaning.KEEP);
         }
@@ -101,7 +112,8 @@ final class RetouchMarks {
         };
     }
 
-    void draw(Retouch retouch, List<Matte> holds) {
+    void draw(Retouch retouch, List<Matte> holds, Optional<Matte> weighBy) {
+        weighBy.ifPresent(matte -> line(outline(matte), Meaning.WEIGHS.colour(), dashed()));
         for (Matte hold : holds) {
             line(outline(hold), Meaning.KEEP.colour(), dashed());
         }
@@ -179,8 +191,19 @@ final class RetouchMarks {
         line(new Ellipse2D.Double(x0 - 2, y0 - 2, 4, 4), Meaning.PULL.colour(), solid(1.6f));
     }
 
+    /** A region as it was drawn; any other matte where its value is 1/2. */
     private Shape outline(Matte matte) {
-        Region region = (Region) matte;
+        if (!(matte instanceof Region region)) {
+            Path2D path = new Path2D.Double();
+            for (Loop loop : OutlineTracer.trace(Plane.of(original.width(), original.height(), matte.values(original)), 0.5)) {
+                path.moveTo(loop.x()[0] * height, loop.y()[0] * height);
+                for (int n = 1; n < loop.size(); n++) {
+                    path.lineTo(loop.x()[n] * height, loop.y()[n] * height);
+                }
+                path.closePath();
+            }
+            return path;
+        }
         if (region instanceof Region.Rectangle r) {
             return new Rectangle2D.Double(r.left() * height, r.top() * height, (r.right() - r.left()) * height,
                     (r.bottom() - r.top()) * height);

@@ -16,17 +16,19 @@ import org.wispwright.warp.retouch.Retouch;
  * @param rendered the production renderer's frame, if there is one
  * @param retouch drawn lightly over the rendered frame, or over the original where there is none
  * @param holds mattes of what must stay, drawn dashed
+ * @param weighBy the matte that the note weighs by, drawn dashed
  * @param original what the original shows there
  * @param wanted what the retouch makes of the original; same raster as original
  * @param got what the take shows there; same raster as original
  * @param met share of the wish that is fulfilled; 1 is all of it, below 0 is worse than the original
  */
 public record SheetRow(String id, String words, String place, Optional<Picture> rendered, Retouch retouch, List<Matte> holds,
-                       Picture original, Picture wanted, Picture got, double met) {
+                       Optional<Matte> weighBy, Picture original, Picture wanted, Picture got, double met) {
 
     /** Checks the rasters. @throws IllegalArgumentException if original, wanted and got differ in size, or met is NaN */
     public SheetRow {
         Objects.requireNonNull(rendered, "sheet row: rendered");
+        Objects.requireNonNull(weighBy, "sheet row: weighBy");
         holds = List.copyOf(holds);
         for (Picture other : List.of(wanted, got)) {
             if (other.width() != original.width() || other.height() != original.height()) {

@@ -19,12 +19,31 @@ public final class JsonPlace {
     private final String file;
     private final String pointer;
     private final JsonNode node;
+    private final MattePictures pictures;
 
     /** The place of a node. */
     JsonPlace(String file, String pointer, JsonNode node) {
+        this(file, pointer, node, null);
+    }
+
+    private JsonPlace(String file, String pointer, JsonNode node, MattePictures pictures) {
         this.file = file;
         this.pointer = pointer;
         this.node = node;
+        this.pictures = pictures;
+    }
+
+    /** The same place; it and all below it know the pictures that values here may name. */
+    JsonPlace with(MattePictures those) {
+        return new JsonPlace(file, pointer, node, those);
+    }
+
+    /** The pictures that values here may name. @throws IllegalStateException if none were given: this file has no say over pictures */
+    MattePictures pictures() {
+        if (pictures == null) {
+            throw new IllegalStateException(file + ": read without a folder for its pictures; give it one by with()");
+        }
+        return pictures;
     }
 
     /** The file this place is in. */
@@ -113,7 +132,7 @@ public final class JsonPlace {
         }
         List<JsonPlace> items = new ArrayList<>(node.size());
         for (int n = 0; n < node.size(); n++) {
-            items.add(new JsonPlace(file, pointer + "/" + n, node.get(n)));
+            items.add(new JsonPlace(file, pointer + "/" + n, node.get(n), pictures));
         }
         return items;
     }
@@ -207,7 +226,7 @@ public final class JsonPlace {
 
     /** The same place, one key deeper, whether or not it exists. */
     public JsonPlace at(String key) {
-        return new JsonPlace(file, pointer + "/" + key.replace("~", "~0").replace("/", "~1"), node.get(key));
+        return new JsonPlace(file, pointer + "/" + key.replace("~", "~0").replace("/", "~1"), node.get(key), pictures);
     }
 
     private double finite(String needed) {

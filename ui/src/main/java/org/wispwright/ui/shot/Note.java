@@ -2,6 +2,8 @@ package org.wispwright.ui.shot;
 
 import java.util.List;
 import java.util.Objects;
+import java.util.Optional;
+import org.wispwright.warp.matte.Matte;
 import org.wispwright.warp.retouch.Retouch;
 
 /**
@@ -12,12 +14,15 @@ import org.wispwright.warp.retouch.Retouch;
  * @param frame the frame it is about
  * @param view name of the view it was drawn in
  * @param weight share among the notes, above 0
+ * @param weighBy how much each pixel counts, beside what the retouch and the holds say; empty for alike
  * @param retouch what makes the wanted picture of the original
  * @param holds what must stay
  */
-public record Note(String id, String words, int frame, String view, double weight, Retouch retouch, List<Hold> holds) {
+public record Note(String id, String words, int frame, String view, double weight, Optional<Matte> weighBy, Retouch retouch,
+        List<Hold> holds) {
     /** Checks the weight. @throws IllegalArgumentException if it is not a finite number above 0 */
     public Note {
+        Objects.requireNonNull(weighBy, "note: weighBy");
         Objects.requireNonNull(retouch, "note: retouch");
         if (!(weight > 0) || Double.isInfinite(weight)) {
             throw new IllegalArgumentException("note '" + id + "': got a weight of " + weight + ", needs a finite number above 0");

@@ -48,7 +48,7 @@ public final class NoteEdits {
     }
 
     /**
-     * All notes in the order of their ids. Reads the set-up and the notes, no picture.
+     * All notes in the order of their ids. Reads the set-up and the notes with their mattes, no rendered frame.
      *
      * @throws ShotException with the first thing that is wrong with them
      */
@@ -102,8 +102,9 @@ public final class NoteEdits {
         if (view.isPresent()) {
             after = NoteText.with(after, "view", new TextNode(view.get()).toString());
         }
-        Note note = NoteReader.note(parsed(file, after), to + ".json");
-        ShotCheck.requireFits(note, shot);
+        JsonPlace top = parsed(file, after);
+        Note note = NoteReader.note(top, to + ".json");
+        ShotCheck.requireFits(note, top.pictures(), shot);
         change("note copy " + id + " --frame " + frame + view.map(v -> " --view " + v).orElse("") + newId.map(n -> " --id " + n).orElse(""),
                 file, Optional.empty(), Optional.of(after));
         return note;
@@ -141,8 +142,8 @@ public final class NoteEdits {
         return new Undone(last.command(), last.file(), last.before().isPresent(), changed);
     }
 
-    private static JsonPlace parsed(String file, String text) {
-        return JsonDoor.parse(file, text.getBytes(StandardCharsets.UTF_8));
+    private JsonPlace parsed(String file, String text) {
+        return JsonDoor.parse(file, text.getBytes(StandardCharsets.UTF_8)).with(new MattePictures(folder, Long.MAX_VALUE));
     }
 
     private void change(String command, String file, Optional<String> before, Optional<String> after) {

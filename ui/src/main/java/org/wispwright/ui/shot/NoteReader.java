@@ -2,6 +2,7 @@ package org.wispwright.ui.shot;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import org.wispwright.warp.matte.Matte;
 import org.wispwright.warp.retouch.Operation;
 import org.wispwright.warp.retouch.Retouch;
@@ -17,10 +18,12 @@ final class NoteReader {
     private static final int MOST_HOLDS = 100;
 
     private final ShotFolder folder;
+    private final MattePictures mattes;
     private final Findings findings;
 
-    NoteReader(ShotFolder folder, Findings findings) {
+    NoteReader(ShotFolder folder, MattePictures mattes, Findings findings) {
         this.folder = folder;
+        this.mattes = mattes;
         this.findings = findings;
     }
 
@@ -39,7 +42,7 @@ final class NoteReader {
         for (String name : findings.attempt(() -> folder.names("notes", ".json", MOST_NOTES)).orElse(List.of())) {
             String file = "notes/" + name;
             findings.check(() -> {
-                JsonPlace top = JsonDoor.read(folder, file, MOST_BYTES);
+                JsonPlace top = JsonDoor.read(folder, file, MOST_BYTES).with(mattes);
                 Note note = note(top, name);
                 (isOn(top) ? notes.on() : notes.off()).add(note);
             });
@@ -58,11 +61,12 @@ final class NoteReader {
         if (!id.matches(ID)) {
             throw top.fault("the file name '" + fileName + "'", "letters, digits, '-' and '_' before .json, at most 64", "rename the file");
         }
-        top.version(SetupReader.FORMAT).only("wispwright", "on", "words", "frame", "view", "weight", "retouch", "holds");
+        top.version(SetupReader.FORMAT).only("wispwright", "on", "words", "frame", "view", "weight", "weighBy", "retouch", "holds");
         String words = top.need("words").text(2000);
         int frame = top.need("frame").whole(0, Integer.MAX_VALUE);
         String view = top.need("view").text(100);
         double weight = top.ask("weight").map(p -> p.positive(1000)).orElse(1.0);
+        Optional<Matte> weighBy = top.ask("weighBy").map(MatteReader::matte);
         JsonPlace list = top.need("retouch");
         List<Operation> operations = list.items(1, Retouch.MOST_OPERATIONS).stream().map(RetouchReader::operation).toList();
         List<Hold> holds = new ArrayList<>();
@@ -71,7 +75,7 @@ final class NoteReader {
                 holds.add(hold(place, frame));
             }
         }
-        return top.make(() -> new Note(id, words, frame, view, weight, list.make(() -> new Retouch(operations)), holds));
+        return top.make(() -> new Note(id, words, frame, view, weight, weighBy, list.make(() -> new Retouch(operations)), holds));
     }
 
     private static Hold hold(JsonPlace place, int noteFrame) {

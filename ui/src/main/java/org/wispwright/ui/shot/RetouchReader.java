@@ -3,7 +3,6 @@ package org.wispwright.ui.shot;
 import java.util.List;
 import java.util.Optional;
 import org.wispwright.warp.matte.Matte;
-import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.matte.Sweep;
 import org.wispwright.warp.retouch.Brush;
 import org.wispwright.warp.retouch.Handle;
@@ -28,12 +27,9 @@ final class RetouchReader {
     private static Operation stroke(JsonPlace place) {
         place.only("brush", "radius", "strength", "softEdge", "line", "within");
         Brush brush = place.need("brush").choice(Brush.class);
-        double radius = place.need("radius").positive(1);
-        double strength = place.ask("strength").map(p -> p.number(0, 1)).orElse(1.0);
-        double softEdge = place.ask("softEdge").map(p -> p.number(0, 1)).orElse(0.5);
-        List<Point> line = place.need("line").items(1, Sweep.MOST_POINTS).stream().map(MatteReader::point).toList();
+        Sweep sweep = MatteReader.sweep(place);
         Optional<Matte> within = place.ask("within").map(MatteReader::matte);
-        return place.make(() -> new Stroke(brush, radius, strength, softEdge, line, within));
+        return place.make(() -> new Stroke(brush, sweep, within));
     }
 
     private static Operation meshWarp(JsonPlace place) {

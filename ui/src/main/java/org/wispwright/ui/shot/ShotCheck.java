@@ -81,23 +81,24 @@ public final class ShotCheck {
         return result.shot().orElseThrow();
     }
 
-    /** Refuses a note that does not fit the shot. @throws ShotException with the first finding */
-    static void requireFits(Note note, Shot shot) {
+    /** Refuses a note, or the pictures it names, that does not fit the shot. @throws ShotException with the first finding */
+    static void requireFits(Note note, MattePictures pictures, Shot shot) {
         Findings findings = new Findings();
-        checkNote(note, shot, findings);
+        checkNote(note, pictures, shot, findings);
         findings.throwFirst();
     }
 
     private Result run(boolean pictures) {
+        MattePictures mattes = new MattePictures(folder, memoryBytes);
         Optional<Shot> setup = new SetupReader(folder, findings, memoryBytes).read();
-        NoteReader.Notes notes = new NoteReader(folder, findings).read();
+        NoteReader.Notes notes = new NoteReader(folder, mattes, findings).read();
         setup.ifPresent(shot -> {
             checkSources(shot);
             if (pictures) {
                 checkViews(shot);
             }
-            notes.on().forEach(note -> checkNote(note, shot, findings));
-            notes.off().forEach(note -> checkNote(note, shot, findings));
+            notes.on().forEach(note -> checkNote(note, mattes, shot, findings));
+            notes.off().forEach(note -> checkNote(note, mattes, shot, findings));
         });
         Optional<Shot> whole = setup.filter(s -> findings.none())
                 .map(s -> new Shot(s.name(), s.flow(), s.look(), s.background(), s.views(), notes.on(), notes.off()));
@@ -151,18 +152,9 @@ public final class ShotCheck {
     }
 
     private void checkRendered(View view, String file, String pointer) {
-        RenderedFrame.StatedSize size = RenderedFrame.statedSize(folder, file, pointer);
-        Raster raster = view.raster();
-        double across = (double) size.height() * raster.width() / raster.height();
-        double down = (double) size.width() * raster.height() / raster.width();
-        if (Math.abs(size.width() - across) > 0.5 && Math.abs(size.height() - down) > 0.5) {
-            throw new ShotException(Finding.of("shot.json", pointer, "picture '" + file + "' of " + size.width() + "x" + size.height()
-                    + " pixels",
-                    "the aspect of view '" + view.name() + "', " + raster.width() + "x" + raster.height(),
-                    "render it again with this aspect, or correct the view's raster and lens"));
-        }
-        requirePixels(size.width() * size.height(), pointer, "picture '" + file + "' of " + size.width() + "x" + size.height() + " pixels",
-                "render it smaller");
+        RenderedFrame.StatedSize size = RenderedFrame.statedSize(folder, file, "shot.json", pointer);
+        size.requireAspect(view, file, "shot.json", pointer, "render it again with this aspect, or correct the view's raster and lens");
+        requirePixels(size.width() * size.height(), pointer, "picture '" + file + "' of " + size.inWords(), "render it smaller");
         RenderedFrame.read(folder, file, pointer);
     }
 
@@ -174,7 +166,7 @@ public final class ShotCheck {
         }
     }
 
-    private static void checkNote(Note note, Shot shot, Findings findings) {
+    private static void checkNote(Note note, MattePictures mattes, Shot shot, Findings findings) {
         String file = "notes/" + note.id() + ".json";
         FrameRange frames = shot.flow().frames();
         String range = frames.first() + " to " + frames.last();
@@ -191,6 +183,7 @@ public final class ShotCheck {
                     + String.join(", ", names),
                     NearestWord.to(note.view(), names).map(near -> "did you mean '" + near + "'").orElse("correct the name")));
         }
+        shot.view(note.view()).ifPresent(view -> mattes.requireAspect(file, view.view(), findings));
         for (int n = 0; n < note.holds().size(); n++) {
             Hold hold = note.holds().get(n);
             boolean ownFrame = hold.firstFrame() == note.frame() && hold.lastFrame() == note.frame();

@@ -116,7 +116,7 @@ class CommandsTest {
         }
         assertEquals(48, ImageIO.read(out.resolve("lean.difference.png").toFile()).getWidth());
         assertTrue(ImageIO.read(out.resolve("sheet.png").toFile()).getWidth() > 1000);
-        assertEquals(10, SmallShot.listing(out).size() - 1, SmallShot.listing(out).keySet().toString());
+        assertEquals(11, SmallShot.listing(out).size() - 1, SmallShot.listing(out).keySet().toString());
     }
 
     @Test

@@ -11,7 +11,10 @@ import java.util.List;
 import java.util.Optional;
 import java.util.Set;
 import org.junit.jupiter.api.Test;
+import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.retouch.Brush;
+import org.wispwright.warp.matte.ImageMatte;
+import org.wispwright.warp.matte.Matte;
 import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.retouch.Retouch;
 import org.wispwright.warp.retouch.Stroke;
@@ -26,7 +29,7 @@ class RetouchMarksTest {
         for (Brush brush : Brush.values()) {
             Retouch retouch = new Retouch(List.of(new Stroke(brush, 0.2, 1, 0.5,
                     List.of(new Point(0.3, 0.7), new Point(0.5, 0.5), new Point(0.7, 0.5)), Optional.empty())));
-            Set<RetouchMarks.Meaning> meanings = RetouchMarks.meanings(retouch, List.of());
+            Set<RetouchMarks.Meaning> meanings = RetouchMarks.meanings(retouch, List.of(), Optional.empty());
             assertEquals(1, meanings.size());
             RetouchMarks.Meaning meaning = meanings.iterator().next();
             words.add(meaning.words());
@@ -42,7 +45,7 @@ class RetouchMarksTest {
     private static String sign(Retouch retouch, int rgb) {
         BufferedImage image = new BufferedImage(200, 200, BufferedImage.TYPE_INT_ARGB);
         Graphics2D g = image.createGraphics();
-        new RetouchMarks(g, 200).draw(retouch, List.of());
+        new RetouchMarks(g, 200, new Picture(1, 1)).draw(retouch, List.of(), Optional.empty());
         g.dispose();
         int[] pixels = image.getRGB(0, 0, 200, 200, null, 0, 200);
         boolean[] set = new boolean[pixels.length];
@@ -53,5 +56,28 @@ class RetouchMarksTest {
         }
         assertTrue(count > 100, "only " + count + " pixels are drawn");
         return Arrays.toString(set);
+    }
+
+    /** A matte without an outline of its own is drawn where its value is 1/2: left half in, so a line at the middle and nothing far from it. */
+    @Test
+    void aMatteOfPixelsIsDrawnWhereItIsHalf() {
+        float[] pixels = new float[100];
+        for (int p = 0; p < 100; p++) {
+            pixels[p] = p % 10 < 5 ? 1 : 0;
+        }
+        BufferedImage image = new BufferedImage(200, 200, BufferedImage.TYPE_INT_ARGB);
+        Graphics2D g = image.createGraphics();
+        Matte half = new ImageMatte(10, 10, pixels, 0);
+        assertEquals(Set.of(RetouchMarks.Meaning.WEIGHS), RetouchMarks.meanings(new Retouch(List.of()), List.of(), Optional.of(half)));
+        new RetouchMarks(g, 200, new Picture(100, 100)).draw(new Retouch(List.of()), List.of(), Optional.of(half));
+        g.dispose();
+        int atMiddle = 0;
+        for (int y = 20; y < 180; y++) {
+            atMiddle += image.getRGB(100, y) >>> 24 > 0 || image.getRGB(99, y) >>> 24 > 0 ? 1 : 0;
+            for (int x = 0; x < 200; x++) {
+                assertTrue(image.getRGB(x, y) >>> 24 == 0 || Math.abs(x - 100) <= 4 || x <= 4, "something is drawn at " + x + ", " + y);
+            }
+        }
+        assertTrue(atMiddle > 60 && atMiddle < 160, "dashes, found " + atMiddle);
     }
 }

@@ -48,6 +48,7 @@ class NoteReaderTest {
                 {"wispwright": 1, "words": "As drawn.", "frame": 3, "view": "front",
                  "retouch": [{"stroke": {"brush": "%s", "radius": 0.1, "line": [[0.3, 0.8], [0.4, 0.7]]}}]}
                 """.formatted(brush));
-        return new NoteReader(ShotFolder.open(folder), findings).read().on();
+        ShotFolder shot = ShotFolder.open(folder);
+        return new NoteReader(shot, new MattePictures(shot, 1L << 30), findings).read().on();
     }
 }

@@ -197,6 +197,9 @@ class PlaneMeasuresTest {
         assertEquals(1144.0 / 1384, likeness.overlap(), 1e-15);
         assertEquals(3.0 / 64, likeness.farthest(), 1e-15);
         assertTrue(likeness.nearest() > 0 && likeness.nearest() < likeness.farthest());
+        // U45: a shift by c moves everything by c.
+        assertEquals(3.0 / 64, likeness.across(), 1e-12);
+        assertEquals(0, likeness.down(), 1e-12);
         float[] middle = new float[64 * 64];
         Arrays.fill(middle, 32 * 64 + 20, 32 * 64 + 44, 1f);
         Likeness inside = Likeness.of(a, b, middle, .5);
@@ -204,6 +207,23 @@ class PlaneMeasuresTest {
         assertEquals(0, inside.farthest());
         assertEquals(Double.POSITIVE_INFINITY, inside.peakSignalToNoise());
         assertThrows(IllegalArgumentException.class, () -> Likeness.of(a, b, ones, 0));
+    }
+
+    /** Ours: nothing against nothing has nowhere to move, nothing against something no way; a picture too small for the window has no structure. */
+    @Test
+    void likenessOfNothing() {
+        Picture none = new Picture(10, 20);
+        Picture one = new Picture(10, 20);
+        one.rgba()[4 * 25 + 3] = 1;
+        float[] ones = new float[200];
+        Arrays.fill(ones, 1f);
+        Likeness nothing = Likeness.of(none, none, ones, .5);
+        assertEquals(0, nothing.across() + nothing.down());
+        assertTrue(Double.isNaN(nothing.structure()));
+        Likeness lost = Likeness.of(none, one, ones, .5);
+        assertEquals(Double.POSITIVE_INFINITY, lost.across());
+        assertEquals(Double.POSITIVE_INFINITY, lost.down());
+        assertEquals(0, lost.overlap());
     }
 
     @Test
