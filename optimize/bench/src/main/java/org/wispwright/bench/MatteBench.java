@@ -81,7 +81,7 @@ public class MatteBench {
             case "DENSITY" -> new DensityRange(0.2, 0.8, 0.1, 0);
             case "DENSITY_FEATHERED" -> new DensityRange(0.2, 0.8, 0.1, 0.05);
             case "BRUSHED" -> new BrushedMatte(List.of(new BrushedMatte.Dab(BrushedMatte.Way.ADD, new Sweep(0.05, 1, 0.5, star))));
-            case "IMAGE" -> new ImageMatte(480, 270, new float[480 * 270], 0);
+            case "IMAGE" -> new ImageMatte(480, 270, ImageMatte.pixels(RetouchBench.puff(480, 270), ImageMatte.Channel.ALPHA), 0);
             default -> new CombinedMatte(CombinedMatte.Way.SUBTRACT, List.of(rectangle, matte("DENSITY")));
         };
     }

@@ -41,13 +41,17 @@ public record DensityRange(double from, double to, double soft, double feather) 
 
     private float[] plain(Picture original, Window window) {
         float[] rgba = original.rgba();
+        double slope = 1 / soft;
         float[] values = new float[window.pixels()];
         for (int y = 0, n = 0; y < window.height(); y++) {
             int at = 4 * (window.left() + original.width() * (window.top() + y)) + 3;
             for (int x = 0; x < window.width(); x++, n++, at += 4) {
-                double a = rgba[at];
-                double up = from == 0 ? 1 : Sweep.smooth(0.5 + (a - from) / soft);
-                values[n] = (float) (to == 1 ? up : up * Sweep.smooth(0.5 + (to - a) / soft));
+                double up = from == 0 ? 1 : 0.5 + (rgba[at] - from) * slope;
+                double down = to == 1 ? 1 : 0.5 + (to - rgba[at]) * slope;
+                // Most pixels are air or well inside.
+                if (up > 0 && down > 0) {
+                    values[n] = up >= 1 && down >= 1 ? 1 : (float) (Sweep.smooth(up) * Sweep.smooth(down));
+                }
             }
         }
         return values;

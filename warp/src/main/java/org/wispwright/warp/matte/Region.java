@@ -1,6 +1,5 @@
 package org.wispwright.warp.matte;
 
-import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import org.wispwright.render.picture.Picture;
@@ -39,45 +38,57 @@ public sealed interface Region extends Matte permits Region.Rectangle, Region.El
     double[] bounds();
 
     /**
-     * Signed distances of pixel centres, as {@link #signedDistance}; where that is farther than {@code reach} from the outline, possibly
-     * infinite with its sign.
+     * Signed distances of the pixel centres of a window's row, as {@link #signedDistance}; where that is {@code reach} or more from the
+     * outline, any number at least as far out or in.
+     *
+     * @param y      of the row, in heights
+     * @param x      of the pixel centres, in heights, one pixel apart
+     * @param height rows of the raster
+     * @param out    overwritten, as many as x
      */
-    default double[] signedDistances(Window window, int height, double reach) {
-        double[] bounds = bounds();
-        double[] distances = new double[window.pixels()];
-        Arrays.fill(distances, Double.POSITIVE_INFINITY);
-        int left = Segment.pixel(bounds[0] - reach, height, window.left(), window.width());
-        int right = Segment.pixel(bounds[2] + reach, height, window.left(), window.width());
-        int top = Segment.pixel(bounds[1] - reach, height, window.top(), window.height());
-        int bottom = Segment.pixel(bounds[3] + reach, height, window.top(), window.height());
-        for (int j = top; j <= bottom; j++) {
-            for (int i = left; i <= right; i++) {
-                distances[i + window.width() * j] = signedDistance((window.left() + i + 0.5) / height, (window.top() + j + 0.5) / height);
-            }
+    default void rowDistances(double y, double[] x, int height, double reach, double[] out) {
+        for (int i = 0; i < x.length; i++) {
+            out[i] = signedDistance(x[i], y);
         }
-        return distances;
     }
 
     @Override
     default float[] values(Picture original, Window window) {
-        double width = Math.max(feather(), 1.0 / original.height());
-        double[] distances = signedDistances(window, original.height(), width / 2);
-        float[] values = new float[distances.length];
-        for (int n = 0; n < values.length; n++) {
-            values[n] = (float) Sweep.smooth(0.5 - distances[n] / width);
-        }
-        return values;
+        return drawn(window, original.height(), 0, Math.max(feather(), 1.0 / original.height()));
     }
 
     @Override
     default float[] reach(Picture original, Window window, double feather) {
         double fade = Math.max(feather, 1.0 / original.height());
-        double[] distances = signedDistances(window, original.height(), feather() / 2 + fade);
-        float[] reach = new float[distances.length];
-        for (int n = 0; n < reach.length; n++) {
-            reach[n] = (float) Sweep.smooth(1 + (feather() / 2 - distances[n]) / fade);
+        return drawn(window, original.height(), (feather() + fade) / 2, fade);
+    }
+
+    /** {@code smooth(1/2 - (d - shift) / width)}; rows and columns that nothing reaches are passed over. */
+    private float[] drawn(Window window, int height, double shift, double width) {
+        double out = shift + width / 2;
+        double in = shift - width / 2;
+        double reach = Math.max(Math.abs(out), Math.abs(in));
+        double[] bounds = bounds();
+        int left = Segment.pixel(bounds[0] - reach, height, window.left(), window.width());
+        int right = Segment.pixel(bounds[2] + reach, height, window.left(), window.width());
+        int top = Segment.pixel(bounds[1] - reach, height, window.top(), window.height());
+        int bottom = Segment.pixel(bounds[3] + reach, height, window.top(), window.height());
+        double[] x = new double[right - left + 1];
+        for (int i = 0; i < x.length; i++) {
+            x[i] = (window.left() + left + i + 0.5) / height;
         }
-        return reach;
+        double[] distances = new double[x.length];
+        float[] values = new float[window.pixels()];
+        for (int j = top; j <= bottom; j++) {
+            rowDistances((window.top() + j + 0.5) / height, x, height, reach, distances);
+            for (int i = 0, n = left + window.width() * j; i < x.length; i++, n++) {
+                double d = distances[i];
+                if (d < out) {
+                    values[n] = d <= in ? 1 : (float) Sweep.smooth(0.5 - (d - shift) / width);
+                }
+            }
+        }
+        return values;
     }
 
     /**
@@ -146,6 +157,20 @@ public sealed interface Region extends Matte permits Region.Rectangle, Region.El
             return new double[] {centre.x() - radiusX, centre.y() - radiusY, centre.x() + radiusX, centre.y() + radiusY};
         }
 
+        /** Most pixels need no root: {@code |d| >= |k - 1| r}, k = |p / r|, r the smaller radius. */
+        @Override
+        public void rowDistances(double y, double[] x, int height, double reach, double[] out) {
+            double least = Math.min(radiusX, radiusY);
+            double outer = 1 + reach / least;
+            double inner = Math.max(0, 1 - reach / least);
+            double py = (y - centre.y()) / radiusY;
+            for (int i = 0; i < out.length; i++) {
+                double px = (x[i] - centre.x()) / radiusX;
+                double kk = px * px + py * py;
+                out[i] = kk >= outer * outer ? Double.POSITIVE_INFINITY : kk < inner * inner ? -least : signedDistance(x[i], y);
+            }
+        }
+
         /** {@code f / |grad f|} with {@code f = |p / r| - 1}: Taubin (1991), IEEE PAMI 13(11), 1115-1138. */
         @Override
         public double signedDistance(double x, double y) {
@@ -209,43 +234,60 @@ public sealed interface Region extends Matte permits Region.Rectangle, Region.El
             return bounds;
         }
 
-        /** Distances along the outline alone, signs row by row: time grows with the outline's length, not with corners times pixels. */
+        /** Distances near the outline alone, signs by the crossings: time grows with the outline's length, not with corners times pixels. */
         @Override
-        public double[] signedDistances(Window window, int height, double reach) {
-            List<Point> closed = new ArrayList<>(outline);
-            closed.add(outline.get(0));
-            double[] distances = Segment.squaredDistances(closed, window, height, reach);
-            boolean[] turns = new boolean[window.width() + 1];
-            for (int j = 0, n = 0; j < window.height(); j++) {
-                Arrays.fill(turns, false);
-                turnsOfRow((window.top() + j + 0.5) / height, window, height, turns);
-                boolean inside = false;
-                n += window.width();
-                for (int i = window.width() - 1, p = n - 1; i >= 0; i--, p--) {
-                    inside ^= turns[i + 1];
-                    distances[p] = inside ? -Math.sqrt(distances[p]) : Math.sqrt(distances[p]);
-                }
-            }
-            return distances;
-        }
-
-        /** Flips {@code turns[i + 1]} for each crossing of row y that pixels up to i of the window, and no others, lie left of. */
-        private void turnsOfRow(double y, Window window, int height, boolean[] turns) {
+        public void rowDistances(double y, double[] x, int height, double reach, double[] out) {
+            Arrays.fill(out, Double.POSITIVE_INFINITY);
+            boolean[] turns = new boolean[x.length + 1];
             Point a = outline.get(outline.size() - 1);
             for (Point b : outline) {
+                if (Math.min(a.y(), b.y()) - reach <= y && Math.max(a.y(), b.y()) + reach >= y) {
+                    squared(a, b, y, x, height, reach, out);
+                }
                 if (a.y() > y != b.y() > y) {
-                    double x = a.x() + (y - a.y()) / (b.y() - a.y()) * (b.x() - a.x());
-                    int i = Segment.pixel(x, height, window.left() - 1, window.width() + 1);
-                    while (i > 0 && !((window.left() + i - 1 + 0.5) / height < x)) {
-                        i--;
-                    }
-                    while (i < window.width() && (window.left() + i + 0.5) / height < x) {
-                        i++;
-                    }
-                    turns[i] ^= true;
+                    turns[leftOf(a.x() + (y - a.y()) / (b.y() - a.y()) * (b.x() - a.x()), x, height)] ^= true;
                 }
                 a = b;
             }
+            boolean inside = false;
+            for (int i = x.length - 1; i >= 0; i--) {
+                inside ^= turns[i + 1];
+                double d = out[i] == Double.POSITIVE_INFINITY ? out[i] : Math.sqrt(out[i]);
+                out[i] = inside ? -d : d;
+            }
+        }
+
+        /** Lowers {@code out} to the squared distance to the edge from a to b, where that may be within reach of the row. */
+        private static void squared(Point a, Point b, double y, double[] x, int height, double reach, double[] out) {
+            double t0 = 0;
+            double t1 = 1;
+            if (a.y() != b.y()) {
+                // The part of the edge that is within reach of the row's height.
+                double s = (y - reach - a.y()) / (b.y() - a.y());
+                double t = (y + reach - a.y()) / (b.y() - a.y());
+                t0 = Math.min(1, Math.max(0, Math.min(s, t)));
+                t1 = Math.min(1, Math.max(0, Math.max(s, t)));
+            }
+            double x0 = a.x() + t0 * (b.x() - a.x());
+            double x1 = a.x() + t1 * (b.x() - a.x());
+            // A pixel more on either side, for what rounding does.
+            int first = Math.max(0, leftOf(Math.min(x0, x1) - reach, x, height) - 1);
+            int end = Math.min(x.length, leftOf(Math.max(x0, x1) + reach, x, height) + 1);
+            for (int i = first; i < end; i++) {
+                out[i] = Math.min(out[i], Segment.squaredDistance(x[i], y, a.x(), a.y(), b.x(), b.y()));
+            }
+        }
+
+        /** How many of the pixel centres x lie left of a place. */
+        private static int leftOf(double place, double[] x, int height) {
+            int n = (int) Math.min(x.length, Math.max(0, Math.ceil((place - x[0]) * height)));
+            while (n > 0 && !(x[n - 1] < place)) {
+                n--;
+            }
+            while (n < x.length && x[n] < place) {
+                n++;
+            }
+            return n;
         }
     }
 }

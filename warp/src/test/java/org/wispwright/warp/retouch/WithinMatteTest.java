@@ -1,7 +1,7 @@
 package org.wispwright.warp.retouch;
 
-import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
+import static org.junit.jupiter.api.Assertions.fail;
 
 import java.util.ArrayList;
 import java.util.List;
@@ -18,7 +18,7 @@ import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.matte.Region;
 import org.wispwright.warp.matte.Sweep;
 
-/** Every operation within a matte of every kind changes nothing where the matte is 0, something where it is not, and says where. */
+/** Every operation within a matte of every kind changes nothing where the matte is 0, something where it is not, and a stroke says where. */
 class WithinMatteTest {
     static List<Matte> mattes() {
         float[] half = new float[12 * 16];
@@ -57,13 +57,14 @@ class WithinMatteTest {
                 for (int n = 4 * p; n < 4 * p + 4; n++) {
                     change = Math.max(change, Math.abs(wanted.rgba()[n] - start.rgba()[n]));
                 }
-                if (values[p] == 0) {
-                    assertEquals(0.0, change, operation + " at pixel " + p);
+                // A warp's touched goes by the displacement, not by what it changes: RetoucherTest.
+                if (values[p] == 0 && change > 0 || operation instanceof Stroke && change >= 0.01 && touched[p] < 0.5) {
+                    fail(operation + " at pixel " + p + " changes " + change + ", matte " + values[p] + ", touched " + touched[p]);
                 }
                 most = Math.max(most, change);
-                assertTrue(change < 0.01 || touched[p] > 0.5, operation + " at pixel " + p + " changes " + change + ", touched " + touched[p]);
             }
-            assertTrue(most > 0.002, operation + " changes at most " + most + ", so this test could not fail");
+            double seen = most;
+            assertTrue(most > 0.002, () -> operation + " changes at most " + seen + ", so this test could not fail");
         }
     }
 }
