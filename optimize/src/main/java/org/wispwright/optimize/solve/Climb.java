@@ -122,6 +122,7 @@ final class Climb {
         loss = new SolveLoss(solver, basis, terms, start, lastFrame, snapshots, cancelled);
         if (state.isPresent()) {
             lbfgs = new Lbfgs(loss, state.get().search(), settings());
+            ended = ended.isEmpty() ? endedByRule() : ended;
         } else {
             int highest = Solve.open(bands, grid);
             open = rung == 1 ? 1 : Math.max(open, highest);

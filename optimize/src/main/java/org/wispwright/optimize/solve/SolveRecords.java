@@ -26,6 +26,8 @@ import org.wispwright.render.volume.GridShape;
  * <p>Layout, big-endian: the 8 bytes {@code WISPREC1}, the payload's length (int64), the payload ({@link #encoded}), its SHA-256 (32 bytes).
  */
 public final class SolveRecords {
+    /** Name of a record that stands alone. */
+    public static final String ONLY = "record-0.bin";
     private static final byte[] MAGIC = {'W', 'I', 'S', 'P', 'R', 'E', 'C', '1'};
     private static final int DIGEST = 32;
     /** The most a record may weigh: 1 GiB. */
@@ -57,9 +59,18 @@ public final class SolveRecords {
      * @throws IOException if the disk refuses; both records are then as they were
      */
     public void write(SolveState state) throws IOException {
+        write(state, file(state.search().iterations() % 2));
+    }
+
+    /** Writes a state as the folder's only record, {@value #ONLY}. @throws IOException if the disk refuses */
+    public void writeOnly(SolveState state) throws IOException {
+        write(state, file(0));
+    }
+
+    private static void write(SolveState state, Path file) throws IOException {
         byte[] payload = encoded(state);
         byte[] digest = digest(payload);
-        WholeFile.write(file(state.search().iterations() % 2), out -> {
+        WholeFile.write(file, out -> {
             out.write(MAGIC);
             out.write(ByteBuffer.allocate(Long.BYTES).putLong(payload.length).array());
             out.write(payload);

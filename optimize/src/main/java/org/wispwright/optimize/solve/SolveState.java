@@ -32,4 +32,11 @@ public record SolveState(String problem, int rung, int band, int bandIterations,
                     + bandGradients + " gradients of it, " + bandSeconds + " and " + seconds + " s; needs counts of at least 1, 1, 0 and 0");
         }
     }
+
+    /** The same with all wall times 0, so that the same search gives the same bytes. */
+    public SolveState withoutTimes() {
+        List<SolveResult.BandRun> timeless = runs.stream().map(r -> new SolveResult.BandRun(r.grid(), r.band(), r.unknowns(), r.iterations(),
+                r.gradients(), r.loss(), 0)).toList();
+        return new SolveState(problem, rung, band, bandIterations, bandGradients, 0, 0, search, losses, met, timeless, ended);
+    }
 }

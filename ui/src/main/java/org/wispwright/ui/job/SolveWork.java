@@ -3,7 +3,6 @@ package org.wispwright.ui.job;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.Locale;
-import java.util.stream.Collectors;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
@@ -15,8 +14,6 @@ import org.wispwright.optimize.solve.SolveProblem;
 import org.wispwright.optimize.solve.SolveResult;
 import org.wispwright.optimize.solve.StopRule;
 import org.wispwright.render.lanes.Lanes;
-import org.wispwright.ui.shot.Finding;
-import org.wispwright.ui.shot.MemoryNeed;
 import org.wispwright.ui.shot.Note;
 import org.wispwright.ui.shot.Shot;
 import org.wispwright.ui.shot.ShotException;
@@ -36,8 +33,14 @@ public final class SolveWork {
      * @param memoryBytes that all of it may take; what the work itself does not need goes to the states that a sweep keeps
      * @param until when to end before the program's own rule does
      * @param stay false leaves the stay term out; only to measure what it does
+     * @param quality how far it climbs
+     * @param beginning where it begins
      */
-    public record Manner(long memoryBytes, StopRule until, boolean stay) {
+    public record Manner(long memoryBytes, StopRule until, boolean stay, Quality quality, Beginning beginning) {
+        /** A whole solve from the beginning, whatever an unfinished one has left. */
+        public Manner(long memoryBytes, StopRule until, boolean stay) {
+            this(memoryBytes, until, stay, Quality.FINAL, Beginning.ANEW);
+        }
     }
 
     /**
@@ -61,15 +64,25 @@ public final class SolveWork {
      *
      * @throws ShotException if the shot has no note, a note wants nothing, the memory does not hold one state, a take 0 of another
      *     set-up is there, or the disk refuses
-     * @throws Cancel.Cancelled if cancelled; no half take is left
+     * @throws Cancel.Cancelled if cancelled; no half take is left, and what the search had found can be gone on with
      */
     public static Result run(ShotFolder folder, Shot shot, Manner manner, Lanes lanes, Progress progress, Cancel cancel) {
         long start = System.nanoTime();
         FlowSetup flow = shot.flow();
         SolveProblem problem = ShotProblem.of(shot);
         SimulateWork.Result original = SimulateWork.run(folder, shot, lanes, progress, cancel);
+        try (SolveSearch search = SolveSearch.begin(folder, problem, manner, progress)) {
+            SolveResult solve = search.run(lanes, cancel);
+            Result result = take(folder, shot, manner, original, solve, search, lanes, progress, cancel, start);
+            search.over();
+            return result;
+        }
+    }
+
+    private static Result take(ShotFolder folder, Shot shot, Manner manner, SimulateWork.Result original, SolveResult solve,
+                               SolveSearch search, Lanes lanes, Progress progress, Cancel cancel, long start) {
+        FlowSetup flow = shot.flow();
         Takes takes = Takes.of(folder);
-        SolveResult solve = search(problem, manner, lanes, progress, cancel);
         double forceRms = norm(solve.unknowns());
         try (TakeDraft draft = takes.draft()) {
             FrameWriting writing = new FrameWriting(flow, draft, "take", progress);
@@ -78,6 +91,7 @@ public final class SolveWork {
             Simulation.run(solver, new SmokeState(flow.grid()), basis, solve.unknowns(), flow.frames().last(), cancel::wished,
                     (frame, state, force) -> writing.frame(frame, state, solver));
             draft.writeForce(solve.unknowns());
+            draft.writeSearch(search.end());
             double massRatio = original.lastMass() > 0 ? writing.lastMass() / original.lastMass() : 1;
             cancel.stopIfWished();
             int take = draft.finish(record(shot, manner, solve, writing.divergenceMax(), massRatio, forceRms));
@@ -91,38 +105,9 @@ public final class SolveWork {
         }
     }
 
-    private static SolveResult search(SolveProblem problem, Manner manner, Lanes lanes, Progress progress, Cancel cancel) {
-        try {
-            int[] band = {0};
-            FlowSetup flow = problem.flow();
-            long forStates = MemoryNeed.forStates(flow.grid(), flow.frames(), flow.substeps(), manner.memoryBytes());
-            return new Solve(problem, manner.stay(), lanes, cancel::wished)
-                    .run(forStates, manner.until(), now -> {
-                String line = inWords(now);
-                if (1000 * now.rung() + now.band() != band[0]) {
-                    band[0] = 1000 * now.rung() + now.band();
-                    progress.milestone(line);
-                } else {
-                    progress.now(line);
-                }
-            });
-        } catch (SolveCancelled asked) {
-            throw new Cancel.Cancelled();
-        } catch (IllegalArgumentException refused) {
-            String words = String.valueOf(refused.getMessage());
-            throw new ShotException(new Finding("shot.json", "", words.endsWith(".") ? words : words + "."), refused);
-        }
-    }
-
-    private static String inWords(org.wispwright.optimize.solve.Progress now) {
-        String met = now.met().stream().map(m -> String.format(Locale.ROOT, "%.1f %%", 100 * m)).collect(Collectors.joining(", "));
-        return String.format(Locale.ROOT, "solve: rung %d/%d, band %d/%d, iteration %d, loss %.4f, met %s, %.0f s, about %.0f s left",
-                now.rung(), now.rungs(), now.band(), now.bands(), now.iteration(), now.loss(), met, now.seconds(), now.secondsLeft());
-    }
-
     /** Nothing in it depends on threads, memory or the clock: the same shot gives the same bytes. */
     private static TakeRecord record(Shot shot, Manner manner, SolveResult solve, double divergenceMax, double massRatio, double forceRms) {
-        ObjectNode settings = TakeRecord.object().put("stay", manner.stay());
+        ObjectNode settings = TakeRecord.object().put("stay", manner.stay()).put("quality", manner.quality().name().toLowerCase(Locale.ROOT));
         settings.set("notes", notes(shot));
         settings.put("untilLoss", manner.until().loss());
         ObjectNode figures = TakeRecord.object().put("gradients", solve.gradients()).put("forceRms", forceRms).put("massRatio", massRatio)

@@ -19,7 +19,7 @@ public record Finding(String file, String pointer, String sentence) {
     }
 
     /** A sentence from its three parts. */
-    static Finding of(String file, String pointer, String found, String needed, String wayOut) {
+    public static Finding of(String file, String pointer, String found, String needed, String wayOut) {
         return new Finding(file, pointer, "found " + found + ", needs " + needed + "; " + wayOut + ".");
     }
 

@@ -17,6 +17,8 @@ import java.util.Comparator;
 import java.util.List;
 import java.util.stream.Stream;
 import org.wispwright.optimize.flow.SmokeState;
+import org.wispwright.optimize.solve.SolveRecords;
+import org.wispwright.optimize.solve.SolveState;
 import org.wispwright.render.files.WholeFile;
 
 /**
@@ -76,6 +78,15 @@ public final class TakeDraft implements AutoCloseable {
     public void writeForce(double[] coefficients) {
         try {
             TakeVolumes.writeForce(making, coefficients);
+        } catch (IOException refused) {
+            throw cannotWrite(making, refused);
+        }
+    }
+
+    /** Writes where the search ended, from which a finer one can go on. */
+    public void writeSearch(SolveState end) {
+        try {
+            new SolveRecords(making).writeOnly(end.withoutTimes());
         } catch (IOException refused) {
             throw cannotWrite(making, refused);
         }

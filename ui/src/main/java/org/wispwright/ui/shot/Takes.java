@@ -8,6 +8,8 @@ import java.util.Locale;
 import java.util.stream.Stream;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeState;
+import org.wispwright.optimize.solve.SolveRecords;
+import org.wispwright.optimize.solve.SolveState;
 import org.wispwright.render.volume.ScalarGrid;
 
 /**
@@ -108,6 +110,23 @@ public final class Takes {
     public double[] force(int number) {
         require(number);
         return TakeVolumes.force(folder, "takes/" + name(number));
+    }
+
+    /**
+     * Where the search of a take ended.
+     *
+     * @throws ShotException if there is no such take, it was not solved, or the file is damaged
+     */
+    public SolveState search(int number) {
+        require(number);
+        String where = file(number, SolveRecords.ONLY);
+        try {
+            SolveRecords.Found found = new SolveRecords(folder.inside("takes/" + name(number))).latest();
+            return found.state().orElseThrow(() -> new ShotException(Finding.of(where, "", found.damaged().isEmpty() ? "no such file"
+                    : "a damaged record", "where the search of a solved take ended", "give another take, or solve without --from")));
+        } catch (IOException unreadable) {
+            throw new ShotException(Finding.of(where, "", "a file that cannot be read", "a readable file", "check its permissions"), unreadable);
+        }
     }
 
     /**

@@ -85,7 +85,9 @@ class SolveCommandTest {
             assertThrows(Cancel.Cancelled.class, () -> SolveWork.run(ShotFolder.open(shot.folder()),
                     ShotCheck.require(shot.folder(), 1L << 30), manner, lanes, stopping, cancel));
         }
-        assertEquals(before, SmallShot.listing(place));
+        SortedMap<String, String> after = SmallShot.listing(place);
+        after.keySet().removeIf(name -> name.startsWith("yard/takes/.solving"));           // what it can be resumed from
+        assertEquals(before, after);
     }
 
     @Test
