@@ -6,10 +6,14 @@ import java.io.PrintWriter;
 import java.nio.file.Path;
 import java.util.concurrent.Callable;
 import org.wispwright.optimize.flow.FlowSetup;
+import org.wispwright.ui.job.Comparison;
+import org.wispwright.ui.job.NoteFolds;
 import org.wispwright.ui.shot.Finding;
 import org.wispwright.ui.shot.MemoryNeed;
+import org.wispwright.ui.shot.Note;
 import org.wispwright.ui.shot.Shot;
 import org.wispwright.ui.shot.ShotCheck;
+import org.wispwright.warp.retouch.Folds;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
@@ -63,11 +67,21 @@ final class CheckCommand implements Callable<Integer> {
                 .put("views", checked.views().size()).put("notes", checked.notes().size() + checked.off().size())
                         .put("notesOff", checked.off().size()).put("renderedFrames", rendered)
                         .put("leastMemoryBytes", need);
+        ArrayNode folding = object.putArray("foldingNotes");
+        StringBuilder folds = new StringBuilder();
+        for (Note note : checked.notes()) {
+            Folds found = NoteFolds.of(note, checked.view(note.view()).orElseThrow().view());
+            if (found.cells() > 0) {
+                folding.add(note.id());
+                folds.append(" Note ").append(note.id()).append(": ").append(Comparison.OfNote.inWords(found))
+                        .append("; pull its handles less far, or spread the pull over more of them.");
+            }
+        }
         manner.say("'" + checked.name() + "' is in order: " + flow.grid().inWords() + ", frames " + flow.frames().first() + " to "
                 + flow.frames().last()
                 + ", views " + checked.views().size() + ", notes " + (checked.notes().size() + checked.off().size())
                 + (checked.off().isEmpty() ? "" : " (" + checked.off().size() + " off)") + ", rendered frames " + rendered
-                + "; a solve takes at least " + MemoryNeed.inWords(need) + ".", object);
+                + "; a solve takes at least " + MemoryNeed.inWords(need) + "." + folds, object);
         return ExitCodes.OK;
     }
 

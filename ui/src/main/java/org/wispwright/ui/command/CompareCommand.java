@@ -2,7 +2,6 @@ package org.wispwright.ui.command;
 
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.nio.file.Path;
-import java.util.Locale;
 import java.util.concurrent.Callable;
 import java.util.stream.Collectors;
 import org.wispwright.render.lanes.Lanes;
@@ -69,7 +68,7 @@ final class CompareCommand implements Callable<Integer> {
             CompareWork.write(folder, shot, comparison, review, out, progress);
         }
         ObjectNode object = CompareWork.report(comparison).put("ok", true).put("out", out.toString());
-        String notes = comparison.notes().stream().map(n -> String.format(Locale.ROOT, "%s met %.1f %%", n.note().id(), 100 * n.met()))
+        String notes = comparison.notes().stream().map(Comparison.OfNote::inWords)
                 .collect(Collectors.joining(", "));
         manner.say("Take " + takes.after() + " against take " + takes.before() + ": " + notes + ". See " + out.resolve("sheet.png") + ".\n"
                 + ReviewReport.table(review), object);

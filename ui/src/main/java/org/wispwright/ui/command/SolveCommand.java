@@ -12,6 +12,7 @@ import org.wispwright.render.lanes.Lanes;
 import org.wispwright.ui.shot.Shot;
 import org.wispwright.ui.shot.Takes;
 import org.wispwright.ui.job.CompareWork;
+import org.wispwright.ui.job.Comparison;
 import org.wispwright.ui.job.SolveReport;
 import org.wispwright.ui.job.Beginning;
 import org.wispwright.ui.job.Quality;
@@ -99,7 +100,7 @@ final class SolveCommand implements Callable<Integer> {
             CompareWork.writeJson(object, report);
         }
         String notes = result.comparison().notes().stream()
-                .map(n -> String.format(Locale.ROOT, "%s met %.1f %%", n.note().id(), 100 * n.met())).collect(Collectors.joining(", "));
+                .map(Comparison.OfNote::inWords).collect(Collectors.joining(", "));
         manner.say(String.format(Locale.ROOT, "Take %s made in %.0f s: %s.", Takes.name(result.take()), result.seconds(), notes), object);
         return ExitCodes.OK;
     }

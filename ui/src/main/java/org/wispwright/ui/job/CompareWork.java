@@ -29,8 +29,10 @@ import org.wispwright.ui.shot.ShotException;
 import org.wispwright.ui.shot.ShotFolder;
 import org.wispwright.ui.shot.ShotView;
 import org.wispwright.ui.shot.Takes;
+import org.wispwright.warp.loss.PictureMeasure;
 import org.wispwright.warp.loss.PyramidLoss;
 import org.wispwright.warp.matte.Matte;
+import org.wispwright.warp.retouch.Folds;
 
 /** Compares takes: the pictures of every note, how far each is met, one sheet for people and one report for programs. */
 public final class CompareWork {
@@ -99,7 +101,9 @@ public final class CompareWork {
                 change = Math.max(change, meanChange(got, original, hold.matte().values(original)));
             }
         }
-        return new Comparison.OfNote(note, original, shown, wanted, got, met, finest, change);
+        return new Comparison.OfNote(note, original, shown, wanted, got, met, finest, change,
+                new Comparison.Mass(PictureMeasure.mass(original), PictureMeasure.mass(wanted), PictureMeasure.mass(got)),
+                Folds.of(note.retouch(), original));
     }
 
     /** The sheet of a comparison. */
@@ -113,7 +117,7 @@ public final class CompareWork {
             List<Matte> holds = note.holds().stream().filter(h -> h.holds(note.frame())).map(Hold::matte).toList();
             rows.add(new SheetRow(note.id(), note.words(), "frame " + note.frame() + ", view " + note.view(), rendered, note.retouch(),
                     holds, note.weighBy(),
-                    n.shown(), n.wanted(), n.got(), n.met()));
+                    n.shown(), n.wanted(), n.got(), n.folds(), n.met()));
         }
         String against = comparison.before() == 0 ? "the original" : "take " + Takes.name(comparison.before());
         String subtitle = "take " + Takes.name(comparison.after()) + " against " + against + ", frames " + shot.flow().frames().first()
@@ -126,8 +130,11 @@ public final class CompareWork {
         ObjectNode top = JSON.createObjectNode().put("before", comparison.before()).put("after", comparison.after());
         ArrayNode list = top.putArray("notes");
         for (Comparison.OfNote n : comparison.notes()) {
-            list.addObject().put("id", n.note().id()).put("frame", n.note().frame()).put("view", n.note().view()).put("met", n.met())
-                    .put("finestErrorRatio", n.finestErrorRatio()).put("holdChange", n.holdChange());
+            ObjectNode one = list.addObject().put("id", n.note().id()).put("frame", n.note().frame()).put("view", n.note().view()).put("met", n.met())
+                    .put("finestErrorRatio", n.finestErrorRatio()).put("holdChange", n.holdChange())
+                    .put("massBefore", n.mass().before()).put("massWanted", n.mass().wanted()).put("massGot", n.mass().got())
+                    .put("foldedCells", n.folds().cells()).put("worstJacobian", n.folds().worstJacobian());
+            n.folds().worst().ifPresent(p -> one.putArray("worstFold").add(p.x()).add(p.y()));
         }
         return top;
     }

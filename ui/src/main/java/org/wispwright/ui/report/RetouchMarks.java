@@ -15,9 +15,11 @@ import java.util.Optional;
 import java.util.Set;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.retouch.Brush;
+import org.wispwright.warp.retouch.Folds;
 import org.wispwright.warp.retouch.Handle;
 import org.wispwright.warp.retouch.MeshWarp;
 import org.wispwright.warp.retouch.Operation;
+import org.wispwright.warp.retouch.OutlineWarp;
 import org.wispwright.warp.matte.Matte;
 import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.matte.Region;
@@ -29,7 +31,7 @@ import org.wispwright.warp.retouch.Stroke;
 
 /**
  * A retouch drawn as lines: strokes as the outline of what they cover, with a sign (push: its line), handles as
- * arrows, pins as dots, holds and regions dashed. Every line has a dark rim, so it shows on any picture.
+ * arrows, pins as dots, holds and regions dashed, folds as squares with a cross at the worst. Every line has a dark rim, so it shows on any picture.
  */
 final class RetouchMarks {
     /** What a mark's colour says. */
@@ -43,7 +45,8 @@ final class RetouchMarks {
         /** Lift contrast brush. */ LIFT(0xF0907A, "lift contrast"),
         /** Push brush. */ PUSH(0xD98CB3, "push"),
         /** Remove brush. */ REMOVE(0x6EC1E4, "remove"),
-        /** Handles of a mesh warp. */ PULL(0xE58A5C, "pull"),
+        /** Handles of a mesh warp, drags of an outline. */ PULL(0xE58A5C, "pull"),
+        /** Where a warp turns the picture over. */ FOLD(0xFF5555, "folds"),
         /** Add brush. */ ADD(0xF2C14E, "add");
 
         private final Color colour;
@@ -81,7 +84,7 @@ final class RetouchMarks {
     }
 
     /** What the marks of a retouch say; its legend needs no more. */
-    static Set<Meaning> meanings(Retouch retouch, List<Matte> holds, Optional<Matte> weighBy) {
+    static Set<Meaning> meanings(Retouch retouch, List<Matte> holds, Optional<Matte> weighBy, Folds folds) {
         Set<Meaning> all = EnumSet.noneOf(Meaning.class);
         weighBy.ifPresent(matte -> all.add(Meaning.WEIGHS));
         if (!holds.isEmpty()) {
@@ -95,7 +98,12 @@ final class RetouchMarks {
                 all.add(meaning(stroke.brush()));
             } else if (operation instanceof MeshWarp warp) {
                 warp.handles().forEach(h -> all.add(h.from().equals(h.to()) ? Meaning.KEEP : Meaning.PULL));
+            } else if (operation instanceof OutlineWarp outline) {
+                outline.drags().forEach(h -> all.add(h.from().equals(h.to()) ? Meaning.KEEP : Meaning.PULL));
             }
+        }
+        if (folds.cells() > 0) {
+            all.add(Meaning.FOLD);
         }
         return all;
     }
@@ -112,7 +120,7 @@ final class RetouchMarks {
         };
     }
 
-    void draw(Retouch retouch, List<Matte> holds, Optional<Matte> weighBy) {
+    void draw(Retouch retouch, List<Matte> holds, Optional<Matte> weighBy, Folds folds) {
         weighBy.ifPresent(matte -> line(outline(matte), Meaning.WEIGHS.colour(), dashed()));
         for (Matte hold : holds) {
             line(outline(hold), Meaning.KEEP.colour(), dashed());
@@ -123,8 +131,38 @@ final class RetouchMarks {
                 draw(stroke);
             } else if (operation instanceof MeshWarp warp) {
                 warp.handles().forEach(this::draw);
+            } else if (operation instanceof OutlineWarp outline) {
+                outline.drags().forEach(drag -> draw(outline, drag));
             }
         }
+        draw(folds);
+    }
+
+    /** An arrow, and dashed how far it bends the outline. */
+    private void draw(OutlineWarp outline, Handle drag) {
+        double radius = outline.reach() * height;
+        line(new Ellipse2D.Double(drag.from().x() * height - radius, drag.from().y() * height - radius, 2 * radius, 2 * radius),
+                Meaning.PULL.colour(), dashed());
+        draw(drag);
+    }
+
+    /** A small square over every folded place, and a cross at the worst. */
+    private void draw(Folds folds) {
+        double side = Math.max(3, height / Folds.ROWS);
+        g.setColor(Meaning.FOLD.colour());
+        for (Point p : folds.places()) {
+            g.fill(new Rectangle2D.Double(p.x() * height - side / 2, p.y() * height - side / 2, side, side));
+        }
+        folds.worst().ifPresent(p -> {
+            double x = p.x() * height;
+            double y = p.y() * height;
+            Path2D cross = new Path2D.Double();
+            cross.moveTo(x - 7, y - 7);
+            cross.lineTo(x + 7, y + 7);
+            cross.moveTo(x - 7, y + 7);
+            cross.lineTo(x + 7, y - 7);
+            line(cross, Meaning.FOLD.colour(), solid(2.4f));
+        });
     }
 
     private void draw(Stroke stroke) {

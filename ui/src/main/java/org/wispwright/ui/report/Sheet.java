@@ -154,7 +154,7 @@ public record Sheet(String title, String subtitle, String before, Rgb background
                 Shape clip = g.getClip();
                 g.clipRect(x, y, cell.image().getWidth(), cell.image().getHeight());
                 g.translate(x, y);
-                new RetouchMarks(g, cell.image().getHeight(), row.original()).draw(row.retouch(), row.holds(), row.weighBy());
+                new RetouchMarks(g, cell.image().getHeight(), row.original()).draw(row.retouch(), row.holds(), row.weighBy(), row.folds());
                 g.setTransform(before);
                 g.setClip(clip);
             }
@@ -164,7 +164,7 @@ public record Sheet(String title, String subtitle, String before, Rgb background
 
     private Set<RetouchMarks.Meaning> meanings() {
         Set<RetouchMarks.Meaning> all = EnumSet.noneOf(RetouchMarks.Meaning.class);
-        rows.forEach(row -> all.addAll(RetouchMarks.meanings(row.retouch(), row.holds(), row.weighBy())));
+        rows.forEach(row -> all.addAll(RetouchMarks.meanings(row.retouch(), row.holds(), row.weighBy(), row.folds())));
         return all;
     }
 

@@ -5,6 +5,7 @@ import java.util.Objects;
 import java.util.Optional;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.matte.Matte;
+import org.wispwright.warp.retouch.Folds;
 import org.wispwright.warp.retouch.Retouch;
 
 /**
@@ -20,10 +21,11 @@ import org.wispwright.warp.retouch.Retouch;
  * @param original what the original shows there
  * @param wanted what the retouch makes of the original; same raster as original
  * @param got what the take shows there; same raster as original
+ * @param folds where the retouch turns the original over
  * @param met share of the wish that is fulfilled; 1 is all of it, below 0 is worse than the original
  */
 public record SheetRow(String id, String words, String place, Optional<Picture> rendered, Retouch retouch, List<Matte> holds,
-                       Optional<Matte> weighBy, Picture original, Picture wanted, Picture got, double met) {
+                       Optional<Matte> weighBy, Picture original, Picture wanted, Picture got, Folds folds, double met) {
 
     /** Checks the rasters. @throws IllegalArgumentException if original, wanted and got differ in size, or met is NaN */
     public SheetRow {

@@ -87,10 +87,15 @@ final class MatteReader {
         return place.make(() -> new Sweep(radius, strength, softEdge, line));
     }
 
-    private static Region rectangle(JsonPlace place, double feather) {
+    /** Left, top, right, bottom. */
+    static double[] sides(JsonPlace place) {
         place.only("left", "top", "right", "bottom");
-        double[] sides = {coordinate(place.need("left")), coordinate(place.need("top")), coordinate(place.need("right")),
-                coordinate(place.need("bottom"))};
+        return new double[] {coordinate(place.need("left")), coordinate(place.need("top")), coordinate(place.need("right")),
+            coordinate(place.need("bottom"))};
+    }
+
+    private static Region rectangle(JsonPlace place, double feather) {
+        double[] sides = sides(place);
         return place.make(() -> new Region.Rectangle(sides[0], sides[1], sides[2], sides[3], feather));
     }
 

@@ -98,6 +98,32 @@ class CommandsTest {
         assertEquals("/grid/cells/1", refused.get("findings").get(0).get("pointer").textValue());
     }
 
+    /** A handle pulled beyond two pins turns the picture over between them: said by check, with the place, and counted by compare. */
+    @Test
+    void aFoldIsSaidByCheckAndCompare() throws IOException {
+        SmallShot shot = SmallShot.in(place.resolve("yard"));
+        assertFalse(Run.of("check", shot.folder().toString()).out().contains("folds"));
+        shot.swap("notes/lean.json", "\"to\": [0.31, 0.8]", "\"to\": [0.4, 0.995]");
+        Run check = Run.of("check", shot.folder().toString());
+        assertEquals(0, check.code(), check.err());
+        assertTrue(check.out().contains("Note lean: its warp folds the picture over in "), check.out());
+        assertEquals("lean", new ObjectMapper().readTree(Run.of("check", shot.folder().toString(), "--json").out()).get("foldingNotes").get(0)
+                .textValue());
+        assertEquals(0, Run.of("simulate", shot.folder().toString()).code());
+        Run compare = Run.of("compare", shot.folder().toString(), "--takes", "0,0", "--out", place.resolve("review").toString());
+        assertEquals(0, compare.code(), compare.err());
+        assertTrue(compare.out().contains("its warp folds the picture over in ") && compare.out().contains("(mass "), compare.out());
+        JsonNode notes = new ObjectMapper().readTree(place.resolve("review/compare.json").toFile()).get("notes");
+        assertTrue(notes.get(0).get("foldedCells").intValue() > 0 && notes.get(0).get("worstJacobian").doubleValue() < 0, notes.toString());
+        assertEquals(2, notes.get(0).get("worstFold").size());
+        assertEquals(0, notes.get(1).get("foldedCells").intValue());
+        assertFalse(notes.get(1).has("worstFold"));
+        // A take compared with itself has the original's mass; the note that adds and removes wants another.
+        assertEquals(notes.get(1).get("massBefore").doubleValue(), notes.get(1).get("massGot").doubleValue());
+        assertTrue(notes.get(1).get("massWanted").doubleValue() != notes.get(1).get("massBefore").doubleValue());
+        assertTrue(notes.get(1).get("massBefore").doubleValue() > 0.01);
+    }
+
     /** A take that is the original's copy has met nothing: 1 - 1 = 0, and all of the wish is still apart. */
     @Test
     void compareMeasuresEveryNoteAndDrawsTheSheet() throws IOException {

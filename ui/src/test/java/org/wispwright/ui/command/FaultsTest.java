@@ -300,6 +300,68 @@ class FaultsTest {
         refused("notes/lean.json at /retouch/0/meshWarp", "one line");
     }
 
+    private static final String WARP = "{\"meshWarp\": {\"handles\": [{\"from\": [0.37, 0.8], \"to\": [0.31, 0.8]}, {\"pin\": [0.3, 0.98]}, "
+            + "{\"pin\": [0.45, 0.98]}]}}";
+
+    private void swapWarp(String now) {
+        shot.swap("notes/lean.json", WARP, now.replace('\'', '"'));
+    }
+
+    @Test
+    void unknownKindOfWarp() {
+        shot.swap("notes/lean.json", "{\"handles\"", "{\"kind\": \"elastic\", \"handles\"");
+        refused("notes/lean.json at /retouch/0/meshWarp/kind", "\"elastic\"", "\"as rigid as possible\"", "\"similarity\"");
+    }
+
+    @Test
+    void cellsWithoutAMesh() {
+        shot.swap("notes/lean.json", "{\"handles\"", "{\"cells\": [10, 10], \"handles\"");
+        refused("notes/lean.json at /retouch/0/meshWarp/cells", "no mesh");
+    }
+
+    @Test
+    void tooManyCells() {
+        shot.swap("notes/lean.json", "{\"handles\"", "{\"kind\": \"as rigid as possible\", \"cells\": [10, 1000], \"handles\"");
+        refused("notes/lean.json at /retouch/0/meshWarp/cells/1", "found 1000", "3 to 64");
+    }
+
+    @Test
+    void gridBesideHandles() {
+        shot.swap("notes/lean.json", "{\"handles\"", "{\"grid\": {}, \"handles\"");
+        refused("notes/lean.json at /retouch/0/meshWarp", "both 'handles' and 'grid'");
+    }
+
+    @Test
+    void gridWithNoPlace() {
+        swapWarp("{'meshWarp': {'grid': {'columns': 2, 'rows': 2, 'moved': [{'corner': [1, 1], 'to': [0.4, 0.5]}]}}}");
+        refused("notes/lean.json at /retouch/0/meshWarp/grid", "no place", "'box'");
+    }
+
+    @Test
+    void gridCornerThatIsNotThere() {
+        swapWarp("{'meshWarp': {'grid': {'columns': 2, 'rows': 2, 'box': {'left': 0.1, 'top': 0.1, 'right': 0.5, 'bottom': 0.9}, "
+                + "'moved': [{'corner': [1, 3], 'to': [0.4, 0.5]}]}}}");
+        refused("notes/lean.json at /retouch/0/meshWarp/grid/moved/0/corner/1", "found 3", "0 to 2");
+    }
+
+    @Test
+    void outlineLevelOutOfRange() {
+        swapWarp("{'outline': {'level': 1, 'drags': [{'from': [0.3, 0.5], 'to': [0.25, 0.5]}]}}");
+        refused("notes/lean.json at /retouch/0/outline", "level 1.0", "below 1");
+    }
+
+    @Test
+    void outlineWithNothingDragged() {
+        swapWarp("{'outline': {'drags': []}}");
+        refused("notes/lean.json at /retouch/0/outline/drags", "a list of 0 values");
+    }
+
+    @Test
+    void outlineWithAnUnknownKey() {
+        swapWarp("{'outline': {'drag': [{'from': [0.3, 0.5], 'to': [0.25, 0.5]}]}}");
+        refused("notes/lean.json at /retouch/0/outline/drag", "unknown key 'drag'", "did you mean 'drags'");
+    }
+
     @Test
     void severalFaultsAreAllFound() {
         shot.swap("shot.json", "\"buoyancy\": 3.0", "\"buoyancy\": NaN");

@@ -15,6 +15,7 @@ import org.junit.jupiter.api.Test;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.picture.Rgb;
 import org.wispwright.warp.retouch.Brush;
+import org.wispwright.warp.retouch.Folds;
 import org.wispwright.warp.retouch.Handle;
 import org.wispwright.warp.retouch.MeshWarp;
 import org.wispwright.warp.matte.Point;
@@ -42,9 +43,10 @@ class SheetTest {
                 new SheetRow("lean-head", "Lean the head to frame left by a good part of its width, keep the base as it is.",
                         "frame 1036, view front",
                         rendered, LEAN, List.of(BASE), Optional.empty(), original, leaning,
-                        PaintedSmoke.column(width, height, -0.105, 0, 0.8), 0.9742),
+                        PaintedSmoke.column(width, height, -0.105, 0, 0.8), Folds.NONE, 0.9742),
                 new SheetRow("open-gap", "Open a gap here and let a wisp come out on the other side.", "frame 1044, view front",
-                        rendered, GAP, List.of(), Optional.empty(), original, holed, PaintedSmoke.column(width, height, 0.02, 0.7, 0.8), 0.93)));
+                        rendered, GAP, List.of(), Optional.empty(), original, holed, PaintedSmoke.column(width, height, 0.02, 0.7, 0.8),
+                        Folds.NONE, 0.93)));
     }
 
     /** By hand: 5 columns of 300, 4 gaps of 20, 2 margins of 48; head 104, 2 rows of 70 + 400 + 34 + 40, margin 48 less a gap of 40. */
@@ -77,7 +79,7 @@ class SheetTest {
     void whereGotIsWantedTheDifferenceIsBlack() {
         Picture column = PaintedSmoke.column(36, 48, 0, 0, 1);
         SheetRow met = new SheetRow("a", "words", "frame 1", Optional.empty(), LEAN, List.of(), Optional.empty(),
-                PaintedSmoke.column(36, 48, 0.1, 0, 1), column, column, 1);
+                PaintedSmoke.column(36, 48, 0.1, 0, 1), column, column, Folds.NONE, 1);
         BufferedImage image = new Sheet("t", "s", "original", SKY, List.of(met)).paint();
         assertEquals(0xFF000000, image.getRGB(48 + 3 * 320 + 150, 104 + 70 + 200));
     }
@@ -88,7 +90,8 @@ class SheetTest {
         Picture dark = new Picture(4, 4);
         Picture lit = new Picture(4, 4);
         lit.rgba()[0] = 0.2f;
-        SheetRow row = new SheetRow("a", "words", "frame 1", Optional.empty(), new Retouch(List.of()), List.of(), Optional.empty(), dark, lit, dark, 0);
+        SheetRow row = new SheetRow("a", "words", "frame 1", Optional.empty(), new Retouch(List.of()), List.of(), Optional.empty(), dark, lit, dark,
+                Folds.NONE, 0);
         assertEquals(4, new Sheet("t", "s", "original", Rgb.BLACK, List.of(row)).gain());
     }
 
@@ -111,7 +114,7 @@ class SheetTest {
     @Test
     void refusesPicturesOfDifferentRasters() {
         IllegalArgumentException refused = assertThrows(IllegalArgumentException.class, () -> new SheetRow("n", "w", "p", Optional.empty(),
-                new Retouch(List.of()), List.of(), Optional.empty(), new Picture(4, 4), new Picture(4, 4), new Picture(5, 4), 0));
+                new Retouch(List.of()), List.of(), Optional.empty(), new Picture(4, 4), new Picture(4, 4), new Picture(5, 4), Folds.NONE, 0));
         assertTrue(refused.getMessage().contains("4x4") && refused.getMessage().contains("5x4"), refused.getMessage());
     }
 

@@ -55,6 +55,63 @@ public record Loop(double[] x, double[] y) {
     }
 
     /**
+     * A place on the loop.
+     *
+     * @param piece  number of the point before it
+     * @param share  how far along the piece to the next point, 0 to 1
+     * @param x      where that is
+     * @param y      where that is
+     */
+    public record Place(int piece, double share, double x, double y) { }
+
+    /** The place of the loop nearest to (px,py); the first of those as near. */
+    public Place nearest(double px, double py) {
+        Place best = null;
+        double least = Double.POSITIVE_INFINITY;
+        for (int a = 0; a < x.length; a++) {
+            int b = (a + 1) % x.length;
+            double abx = x[b] - x[a];
+            double aby = y[b] - y[a];
+            double squared = abx * abx + aby * aby;
+            double t = squared == 0 ? 0 : Math.min(1, Math.max(0, ((px - x[a]) * abx + (py - y[a]) * aby) / squared));
+            double dx = px - x[a] - t * abx;
+            double dy = py - y[a] - t * aby;
+            if (dx * dx + dy * dy < least) {
+                least = dx * dx + dy * dy;
+                best = new Place(a, t, x[a] + t * abx, y[a] + t * aby);
+            }
+        }
+        return best;
+    }
+
+    /**
+     * Overwrites {@code out[0..1]} with the place some way along the loop from another.
+     *
+     * @param distance 0 or more; longer than the loop goes round again
+     */
+    public void along(Place from, double distance, double[] out) {
+        double left = distance % length();
+        int piece = from.piece();
+        double startX = from.x();
+        double startY = from.y();
+        for (int n = 0; n <= x.length; n++) {
+            int b = (piece + 1) % x.length;
+            double piecewise = Math.hypot(x[b] - startX, y[b] - startY);
+            if (left <= piecewise && piecewise > 0) {
+                out[0] = startX + left / piecewise * (x[b] - startX);
+                out[1] = startY + left / piecewise * (y[b] - startY);
+                return;
+            }
+            left -= piecewise;
+            piece = b;
+            startX = x[b];
+            startY = y[b];
+        }
+        out[0] = startX;
+        out[1] = startY;
+    }
+
+    /**
      * The same loop through fewer of its points: every point left out lies within the tolerance of the piece that stands for it. A
      * line is cut at its farthest point from the chord as long as that is farther than the tolerance. The first cuts are at the
      * point farthest from the middle, at the point farthest from that one, and at the point farthest from the chord between these;

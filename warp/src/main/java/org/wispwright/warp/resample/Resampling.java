@@ -26,8 +26,11 @@ public final class Resampling {
      * @param py in pixels, 0 at the centre of the top row
      */
     public void read(Picture in, double px, double py, float[] out, int at) {
-        int width = in.width();
-        int height = in.height();
+        read(in.rgba(), in.width(), in.height(), px, py, out, at);
+    }
+
+    /** The same from plain numbers. */
+    void read(float[] values, int width, int height, double px, double py, float[] out, int at) {
         if (!(px > -2 && py > -2 && px < width + 1 && py < height + 1)) {
             out[at] = 0;
             out[at + 1] = 0;
@@ -35,7 +38,6 @@ public final class Resampling {
             out[at + 3] = 0;
             return;
         }
-        float[] values = in.rgba();
         int x0 = (int) Math.floor(px);
         int y0 = (int) Math.floor(py);
         kernel.weights(px - x0, wx);

@@ -1,5 +1,6 @@
 package org.wispwright.warp.retouch;
 
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
@@ -8,13 +9,17 @@ import org.wispwright.warp.matte.Needs;
 import org.wispwright.warp.matte.Point;
 
 /**
- * A smooth bend of the picture that carries every handle's {@code from} to its {@code to}: a thin-plate spline between the handles
- * (Bookstein 1989). Without pins or a region it also moves what lies far from the handles.
+ * A bend of the picture that carries every handle's {@code from} to its {@code to}. Without pins or a region it also moves what lies
+ * far from the handles.
  *
- * @param handles 3 to {@value #MOST_HANDLES}; neither the starts nor the ends may lie on one line or coincide
- * @param within  matte outside which nothing moves: the displacement is scaled by its mask; empty means anywhere
+ * @param kind    how the places between the handles follow
+ * @param handles as many as the kind needs, to {@value #MOST_HANDLES}; no two starts and no two ends alike; for kinds that need 3,
+ *                neither may lie on one line
+ * @param cells   of the mesh; only {@link WarpKind#AS_RIGID_AS_POSSIBLE} has one
+ * @param within  matte outside which nothing moves: the displacement is scaled by its mask; empty means anywhere. An
+ *                as-rigid-as-possible mesh then covers the region's box alone, and its rim stays
  */
-public record MeshWarp(List<Handle> handles, Optional<Matte> within) implements Operation {
+public record MeshWarp(WarpKind kind, List<Handle> handles, Cells cells, Optional<Matte> within) implements Operation {
     /** The most handles a warp may have; its cost per pixel grows with their number. */
     public static final int MOST_HANDLES = 500;
     /** Two handles closer than this, in heights, count as the same place. */
@@ -28,17 +33,40 @@ public record MeshWarp(List<Handle> handles, Optional<Matte> within) implements 
      * @throws IllegalArgumentException if there are too few or too many handles, or they coincide or lie on one line
      */
     public MeshWarp {
+        Needs.present("mesh warp", "kind", kind);
         Needs.present("mesh warp", "handles", handles);
+        Needs.present("mesh warp", "cells", cells);
         Needs.present("mesh warp", "within", within);
-        if (handles.size() < 3 || handles.size() > MOST_HANDLES) {
-            throw new IllegalArgumentException("mesh warp: got " + handles.size() + " handles, needs 3 to " + MOST_HANDLES);
+        if (handles.size() < kind.fewestHandles() || handles.size() > MOST_HANDLES) {
+            throw new IllegalArgumentException("mesh warp: got " + handles.size() + " handles, needs " + kind.fewestHandles() + " to "
+                    + MOST_HANDLES);
         }
-        for (int n = 0; n < handles.size(); n++) {
-            Needs.present("mesh warp", "handle " + n, handles.get(n));
-        }
+        requireApart("mesh warp", "handle", handles, Handle::from, "from");
+        requireApart("mesh warp", "handle", handles, Handle::to, "to");
         handles = List.copyOf(handles);
-        requireSpread(handles, Handle::from, "from");
-        requireSpread(handles, Handle::to, "to");
+        if (kind.fewestHandles() >= 3) {
+            requireSpread(handles, Handle::from, "from");
+            requireSpread(handles, Handle::to, "to");
+        }
+    }
+
+    /** A thin-plate spline. @throws IllegalArgumentException as above */
+    public MeshWarp(List<Handle> handles, Optional<Matte> within) {
+        this(WarpKind.SPLINE, handles, Cells.USUAL, within);
+    }
+
+    /**
+     * The same warp with one handle pulled to another place.
+     *
+     * @throws IllegalArgumentException if there is no such handle, or two ends then coincide or all lie on one line
+     */
+    public MeshWarp with(int handle, Point to) {
+        if (handle < 0 || handle >= handles.size()) {
+            throw new IllegalArgumentException("mesh warp: there is no handle " + handle + ", needs 0 to " + (handles.size() - 1));
+        }
+        List<Handle> moved = new ArrayList<>(handles);
+        moved.set(handle, new Handle(handles.get(handle).from(), to));
+        return new MeshWarp(kind, moved, cells, within);
     }
 
     @Override
@@ -46,19 +74,26 @@ public record MeshWarp(List<Handle> handles, Optional<Matte> within) implements 
         return handles.stream().allMatch(handle -> handle.from().equals(handle.to()));
     }
 
-    private static void requireSpread(List<Handle> handles, Function<Handle, Point> end, String name) {
-        double meanX = 0;
-        double meanY = 0;
+    /** Throws if a handle is missing or two have one end at the same place. */
+    static void requireApart(String owner, String name, List<Handle> handles, Function<Handle, Point> end, String endName) {
         for (int n = 0; n < handles.size(); n++) {
+            Needs.present(owner, name + " " + n, handles.get(n));
             Point p = end.apply(handles.get(n));
-            meanX += p.x() / handles.size();
-            meanY += p.y() / handles.size();
             for (int m = 0; m < n; m++) {
                 if (p.distanceTo(end.apply(handles.get(m))) < CLOSEST) {
-                    throw new IllegalArgumentException("mesh warp: handles " + m + " and " + n + " have the same '" + name + "' point ("
+                    throw new IllegalArgumentException(owner + ": " + name + "s " + m + " and " + n + " have the same '" + endName + "' point ("
                             + p.x() + ", " + p.y() + "); remove one of them or move it by at least " + CLOSEST);
                 }
             }
+        }
+    }
+
+    private static void requireSpread(List<Handle> handles, Function<Handle, Point> end, String name) {
+        double meanX = 0;
+        double meanY = 0;
+        for (Handle handle : handles) {
+            meanX += end.apply(handle).x() / handles.size();
+            meanY += end.apply(handle).y() / handles.size();
         }
         double xx = 0;
         double xy = 0;

@@ -30,7 +30,9 @@ public final class Retoucher {
             if (operation instanceof Stroke stroke) {
                 Brushwork.apply(stroke, picture, original);
             } else if (operation instanceof MeshWarp warp) {
-                picture = new Bend(warp).applied(picture, original);
+                picture = Bend.of(warp, original).applied(picture);
+            } else if (operation instanceof OutlineWarp warp) {
+                picture = Bend.of(warp, original).applied(picture);
             }
         }
         return picture;
@@ -55,7 +57,8 @@ public final class Retoucher {
             if (operation.changesNothing()) {
                 continue;
             }
-            float[] one = operation instanceof MeshWarp warp ? new Bend(warp).touched(original, feather)
+            float[] one = operation instanceof MeshWarp warp ? Bend.of(warp, original).touched(feather)
+                    : operation instanceof OutlineWarp outline ? Bend.of(outline, original).touched(feather)
                     : ((Stroke) operation).reach(original, feather);
             for (int p = 0; p < touched.length; p++) {
                 touched[p] = Math.max(touched[p], one[p]);

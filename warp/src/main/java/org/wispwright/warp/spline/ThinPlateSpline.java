@@ -18,6 +18,7 @@ public final class ThinPlateSpline {
     private final double[] landmarkX;
     private final double[] landmarkY;
     private final double[][] weights;
+    private final double[] lengths;
     private final double[][] affine;
     private final double[] energy;
     private final DMatrixRMaj energyMatrix;
@@ -27,6 +28,10 @@ public final class ThinPlateSpline {
         this.landmarkX = landmarkX;
         this.landmarkY = landmarkY;
         this.weights = weights;
+        lengths = new double[landmarkX.length];
+        for (int i = 0; i < lengths.length; i++) {
+            lengths[i] = Math.hypot(weights[0][i], weights[1][i]);
+        }
         this.affine = affine;
         this.energy = energy;
         this.energyMatrix = energyMatrix;
@@ -125,6 +130,62 @@ public final class ThinPlateSpline {
         }
         out[0] = sumX;
         out[1] = sumY;
+    }
+
+    /**
+     * Writes value, slope along x, slope along y and mixed slope of the map's x into {@code out[0..3]}, of its y into
+     * {@code out[4..7]}: {@code U_x = 2 dx (ln r^2 + 1)}, {@code U_xy = 4 dx dy / r^2}, both 0 at a landmark.
+     */
+    void jet(double px, double py, double[] out) {
+        for (int axis = 0; axis < 2; axis++) {
+            double[] a = affine[axis];
+            out[4 * axis] = a[0] + a[1] * px + a[2] * py;
+            out[4 * axis + 1] = a[1];
+            out[4 * axis + 2] = a[2];
+            out[4 * axis + 3] = 0;
+        }
+        for (int i = 0; i < landmarkX.length; i++) {
+            double dx = px - landmarkX[i];
+            double dy = py - landmarkY[i];
+            double squared = dx * dx + dy * dy;
+            if (squared == 0) {
+                continue;
+            }
+            double log = Math.log(squared);
+            double u = squared * log;
+            double slope = 2 * (log + 1);
+            double mixed = 4 * dx * dy / squared;
+            for (int axis = 0; axis < 2; axis++) {
+                double w = weights[axis][i];
+                out[4 * axis] += w * u;
+                out[4 * axis + 1] += w * slope * dx;
+                out[4 * axis + 2] += w * slope * dy;
+                out[4 * axis + 3] += w * mixed;
+            }
+        }
+    }
+
+    /**
+     * An upper bound of the distance between the map and its bicubic Hermite interpolant over a square: with r_i the distance of
+     * landmark i from the square, {@code side^4 / 384 sum_i |w_i| (24 + 6 side / r_i) / r_i^2}; infinite with a landmark in it.
+     * <p>Cubic Hermite H along one axis errs by at most {@code side^4 / 384} times the largest fourth derivative (Davis 1975,
+     * Interpolation and Approximation, 3.5). Along both, {@code f - HxHy f = (f - Hx f) + Hx (f - Hy f)}, and
+     * {@code |Hx g| <= max |g| + side / 4 max |g_x|}. For U: {@code |U_xxxx| <= 12 / r^2}, y alike, {@code |U_xyyyy| <= 24 / r^3}.
+     * The sum of it is ours.
+     *
+     * @param left x of the square's left side
+     * @param top  y of its top
+     * @param side its side, above 0
+     */
+    double hermiteError(double left, double top, double side) {
+        double sum = 0;
+        for (int i = 0; i < landmarkX.length; i++) {
+            double dx = Math.max(0, Math.max(left - landmarkX[i], landmarkX[i] - left - side));
+            double dy = Math.max(0, Math.max(top - landmarkY[i], landmarkY[i] - top - side));
+            double squared = dx * dx + dy * dy;
+            sum += lengths[i] * (24 + 6 * side / Math.sqrt(squared)) / squared;
+        }
+        return Double.isNaN(sum) ? Double.POSITIVE_INFINITY : side * side * side * side / 384 * sum;
     }
 
     /** A copy of the n kernel weights of an axis, 0 = x, 1 = y. */

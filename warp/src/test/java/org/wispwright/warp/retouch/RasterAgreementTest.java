@@ -10,7 +10,9 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.EnumSource;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.loss.PictureMeasure;
+import org.wispwright.warp.matte.Matte;
 import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Region;
 
 /**
  * The same retouch at 256, 512 and 2048 rows agrees after down-sampling: mean absolute difference at most 0.003, over the whole
@@ -38,6 +40,29 @@ class RasterAgreementTest {
                 Optional.empty());
         assertAgrees(brush.name(), new Retouch(List.of(before, stroke)), Retoucher.wanted(new Retouch(List.of(before)), AT_256),
                 Retoucher.touched(new Retouch(List.of(stroke)), AT_256, 0));
+    }
+
+    /** A pull of the head, pinned at the foot and the corners, over the pixels that it touches. */
+    @ParameterizedTest
+    @EnumSource(WarpKind.class)
+    void eachKindOfMeshWarp(WarpKind kind) {
+        List<Handle> handles = List.of(new Handle(new Point(0.38, 0.3), new Point(0.27, 0.33)), Handle.pin(new Point(0.3, 0.7)),
+                Handle.pin(new Point(0.45, 0.7)), Handle.pin(new Point(0.37, 0.95)), Handle.pin(new Point(0.02, 0.02)),
+                Handle.pin(new Point(0.73, 0.02)));
+        for (Optional<Matte> within : List.<Optional<Matte>>of(Optional.empty(),
+                Optional.of(new Region.Ellipse(new Point(0.34, 0.34), 0.3, 0.33, 0.1)))) {
+            Retouch retouch = new Retouch(List.of(new MeshWarp(kind, handles, Cells.USUAL, within)));
+            assertAgrees(kind + " " + within, retouch, AT_256, Retoucher.touched(retouch, AT_256, 0));
+        }
+    }
+
+    /** The head's right side pulled out; the outline is found anew at each raster. */
+    @ParameterizedTest
+    @EnumSource(WarpKind.class)
+    void anOutline(WarpKind inside) {
+        Retouch retouch = new Retouch(List.of(new OutlineWarp(0.3, List.of(new Handle(new Point(0.5, 0.3), new Point(0.57, 0.27))), 0.1, inside,
+                Optional.empty())));
+        assertAgrees("outline " + inside, retouch, AT_256, Retoucher.touched(retouch, AT_256, 0));
     }
 
     private static void assertAgrees(String what, Retouch retouch, Picture without, float[] weights) {
