@@ -130,8 +130,8 @@ public final class CompareWork {
         ObjectNode top = JSON.createObjectNode().put("before", comparison.before()).put("after", comparison.after());
         ArrayNode list = top.putArray("notes");
         for (Comparison.OfNote n : comparison.notes()) {
-            ObjectNode one = list.addObject().put("id", n.note().id()).put("frame", n.note().frame()).put("view", n.note().view()).put("met", n.met())
-                    .put("finestErrorRatio", n.finestErrorRatio()).put("holdChange", n.holdChange())
+            ObjectNode one = list.addObject().put("id", n.note().id()).put("frame", n.note().frame()).put("view", n.note().view())
+                    .put("met", n.met()).put("finestErrorRatio", n.finestErrorRatio()).put("holdChange", n.holdChange())
                     .put("massBefore", n.mass().before()).put("massWanted", n.mass().wanted()).put("massGot", n.mass().got())
                     .put("foldedCells", n.folds().cells()).put("worstJacobian", n.folds().worstJacobian());
             n.folds().worst().ifPresent(p -> one.putArray("worstFold").add(p.x()).add(p.y()));

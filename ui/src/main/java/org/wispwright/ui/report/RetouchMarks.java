@@ -31,7 +31,8 @@ import org.wispwright.warp.retouch.Stroke;
 
 /**
  * A retouch drawn as lines: strokes as the outline of what they cover, with a sign (push: its line), handles as
- * arrows, pins as dots, holds and regions dashed, folds as squares with a cross at the worst. Every line has a dark rim, so it shows on any picture.
+ * arrows, pins as dots, holds and regions dashed, folds as squares with a cross at the worst. Every line has a dark rim, so it
+ * shows on any picture.
  */
 final class RetouchMarks {
     /** What a mark's colour says. */

@@ -107,8 +107,8 @@ class CommandsTest {
         Run check = Run.of("check", shot.folder().toString());
         assertEquals(0, check.code(), check.err());
         assertTrue(check.out().contains("Note lean: its warp folds the picture over in "), check.out());
-        assertEquals("lean", new ObjectMapper().readTree(Run.of("check", shot.folder().toString(), "--json").out()).get("foldingNotes").get(0)
-                .textValue());
+        JsonNode checked = new ObjectMapper().readTree(Run.of("check", shot.folder().toString(), "--json").out());
+        assertEquals("lean", checked.get("foldingNotes").get(0).textValue());
         assertEquals(0, Run.of("simulate", shot.folder().toString()).code());
         Run compare = Run.of("compare", shot.folder().toString(), "--takes", "0,0", "--out", place.resolve("review").toString());
         assertEquals(0, compare.code(), compare.err());

@@ -300,8 +300,8 @@ class FaultsTest {
         refused("notes/lean.json at /retouch/0/meshWarp", "one line");
     }
 
-    private static final String WARP = "{\"meshWarp\": {\"handles\": [{\"from\": [0.37, 0.8], \"to\": [0.31, 0.8]}, {\"pin\": [0.3, 0.98]}, "
-            + "{\"pin\": [0.45, 0.98]}]}}";
+    private static final String WARP = "{\"meshWarp\": {\"handles\": [{\"from\": [0.37, 0.8], \"to\": [0.31, 0.8]}, "
+            + "{\"pin\": [0.3, 0.98]}, {\"pin\": [0.45, 0.98]}]}}";
 
     private void swapWarp(String now) {
         shot.swap("notes/lean.json", WARP, now.replace('\'', '"'));

@@ -37,8 +37,8 @@ public final class MeshPainting {
      */
     public MeshPainting(TriangleMesh rest, int[] handles, double[] x, double[] y) {
         if (x.length != rest.corners() || y.length != rest.corners()) {
-            throw new IllegalArgumentException("mesh painting: got " + x.length + " x and " + y.length + " y, the mesh has " + rest.corners()
-                    + " corners");
+            throw new IllegalArgumentException("mesh painting: got " + x.length + " x and " + y.length + " y, the mesh has "
+                    + rest.corners() + " corners");
         }
         this.rest = rest;
         this.x = x;

@@ -55,8 +55,8 @@ public record HandleGrid(int columns, int rows, double left, double top, double 
         boolean[] seen = new boolean[(columns + 1) * (rows + 1)];
         for (Moved corner : moved) {
             if (corner.column() < 0 || corner.row() < 0 || corner.column() > columns || corner.row() > rows) {
-                throw new IllegalArgumentException("grid: there is no corner (" + corner.column() + ", " + corner.row() + "); corners are (0, 0)"
-                        + " to (" + columns + ", " + rows + ")");
+                throw new IllegalArgumentException("grid: there is no corner (" + corner.column() + ", " + corner.row() + "); corners are "
+                        + "(0, 0) to (" + columns + ", " + rows + ")");
             }
             int n = corner.column() + (columns + 1) * corner.row();
             if (seen[n]) {

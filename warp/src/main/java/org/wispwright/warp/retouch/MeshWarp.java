@@ -81,8 +81,8 @@ public record MeshWarp(WarpKind kind, List<Handle> handles, Cells cells, Optiona
             Point p = end.apply(handles.get(n));
             for (int m = 0; m < n; m++) {
                 if (p.distanceTo(end.apply(handles.get(m))) < CLOSEST) {
-                    throw new IllegalArgumentException(owner + ": " + name + "s " + m + " and " + n + " have the same '" + endName + "' point ("
-                            + p.x() + ", " + p.y() + "); remove one of them or move it by at least " + CLOSEST);
+                    throw new IllegalArgumentException(owner + ": " + name + "s " + m + " and " + n + " have the same '" + endName
+                            + "' point (" + p.x() + ", " + p.y() + "); remove one of them or move it by at least " + CLOSEST);
                 }
             }
         }

@@ -14,7 +14,8 @@ import org.wispwright.warp.outline.Outlines;
  * <p>Handles: the drags u_k, each from the outline's nearest point s_k; along the outline a quarter of a reach apart, but never closer to
  * each other or to an s_k than an eighth: at b within a reach of some s_k, moved by {@code sum phi_k u_k / max(1, sum phi_k)},
  * {@code phi_k = s^2 (3 - 2 s)}, {@code s = 1 - |b - s_k| / reach}; pins where b is 1 to {@value #FAR} reaches from what the drags
- * sweep; pins at the corners of the box {@value #FAR} reaches around the drags. Mask: 1 up to one reach from what the drags sweep, falling to 0 at two by {@code s^2 (3 - 2 s)}. Ours.
+ * sweep; pins at the corners of the box {@value #FAR} reaches around the drags. Mask: 1 up to one reach from what
+ * the drags sweep, falling to 0 at two by {@code s^2 (3 - 2 s)}. Ours.
  */
 record OutlinePull(List<Handle> handles, float[] mask, Box box) {
     private static final double FAR = 2.5;
@@ -28,7 +29,8 @@ record OutlinePull(List<Handle> handles, float[] mask, Box box) {
                     .orElse(drag.from());
             Point end = new Point(start.x() + drag.to().x() - drag.from().x(), start.y() + drag.to().y() - drag.from().y());
             // Two drags of neighbouring points may find the same place on a coarser picture: the first has it.
-            if (handles.stream().allMatch(h -> h.from().distanceTo(start) > MeshWarp.CLOSEST && h.to().distanceTo(end) > MeshWarp.CLOSEST)) {
+            if (handles.stream().allMatch(h -> h.from().distanceTo(start) > MeshWarp.CLOSEST
+                    && h.to().distanceTo(end) > MeshWarp.CLOSEST)) {
                 handles.add(new Handle(start, end));
             }
         }
@@ -61,7 +63,8 @@ record OutlinePull(List<Handle> handles, float[] mask, Box box) {
             Point to = followed(from, warp);
             double distance = warp.distance(place[0], place[1]);
             boolean takesPart = to != from || distance >= warp.reach() && distance <= FAR * warp.reach();
-            if (takesPart && handles.stream().allMatch(h -> h.from().distanceTo(from) > spacing / 2 && h.to().distanceTo(to) > spacing / 8)) {
+            if (takesPart && handles.stream().allMatch(h -> h.from().distanceTo(from) > spacing / 2
+                    && h.to().distanceTo(to) > spacing / 8)) {
                 handles.add(new Handle(from, to));
             }
         }

@@ -8,6 +8,7 @@
  * <p>Words: <i>position</i> = fraction of the raster's height from its top left corner, see {@link org.wispwright.warp.matte.Point};
  * <i>coverage</i> = how much of a brush a pixel gets, 0 to 1; <i>handle</i> = a place on the picture and where it is pulled to;
  * <i>feather</i> = width of a soft edge, fraction of the height.
- * <p>May use: render's picture; warp's matte, mesh, outline, spline and resample. Must not use: optimize, ui, javax.swing. Held by {@code WallsTest}.
+ * <p>May use: render's picture; warp's matte, mesh, outline, spline and resample. Must not use: optimize, ui, javax.swing.
+ * Held by {@code WallsTest}.
  */
 package org.wispwright.warp.retouch;

@@ -126,7 +126,8 @@ class MeshPaintingTest {
             }
             assertEquals(2, sum, 1e-9, "the grid's area in round " + round);
         }
-        assertTrue(assertThrows(IllegalArgumentException.class, () -> HandledMesh.of(grid, new double[] {2.5}, new double[] {0.5})).getMessage()
-                .contains("outside"));
+        String said = assertThrows(IllegalArgumentException.class, () -> HandledMesh.of(grid, new double[] {2.5}, new double[] {0.5}))
+                .getMessage();
+        assertTrue(said.contains("outside"), said);
     }
 }

@@ -60,8 +60,8 @@ class RasterAgreementTest {
     @ParameterizedTest
     @EnumSource(WarpKind.class)
     void anOutline(WarpKind inside) {
-        Retouch retouch = new Retouch(List.of(new OutlineWarp(0.3, List.of(new Handle(new Point(0.5, 0.3), new Point(0.57, 0.27))), 0.1, inside,
-                Optional.empty())));
+        Retouch retouch = new Retouch(List.of(new OutlineWarp(0.3, List.of(new Handle(new Point(0.5, 0.3), new Point(0.57, 0.27))), 0.1,
+                inside, Optional.empty())));
         assertAgrees("outline " + inside, retouch, AT_256, Retoucher.touched(retouch, AT_256, 0));
     }
 

@@ -182,7 +182,8 @@ class WarpKindTest {
     /** By hand: 2 x 1 cells have 3 x 2 corners; the one moved is entry 1 + 3 * 1, the others are pins. */
     @Test
     void aGridIsHandlesByHand() {
-        List<Handle> handles = new HandleGrid(2, 1, 0.1, 0.2, 0.5, 0.6, List.of(new HandleGrid.Moved(1, 1, new Point(0.35, 0.5)))).handles();
+        List<Handle> handles = new HandleGrid(2, 1, 0.1, 0.2, 0.5, 0.6, List.of(new HandleGrid.Moved(1, 1, new Point(0.35, 0.5))))
+                .handles();
         assertEquals(6, handles.size());
         assertEquals(0, handles.get(4).from().distanceTo(new Point(0.3, 0.6)), 1e-12);
         assertEquals(new Point(0.35, 0.5), handles.get(4).to());
