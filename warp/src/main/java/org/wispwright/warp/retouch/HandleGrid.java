@@ -83,7 +83,9 @@ public record HandleGrid(int columns, int rows, double left, double top, double 
         List<Handle> handles = new ArrayList<>();
         for (int row = 0; row <= rows; row++) {
             for (int column = 0; column <= columns; column++) {
-                handles.add(Handle.pin(new Point(left + (right - left) * column / columns, top + (bottom - top) * row / rows)));
+                // In this form the outermost corners are the box's own numbers.
+                handles.add(Handle.pin(new Point((left * (columns - column) + right * column) / columns,
+                        (top * (rows - row) + bottom * row) / rows)));
             }
         }
         for (Moved corner : moved) {
