@@ -6,12 +6,12 @@ import org.wispwright.warp.matte.Window;
  * Separable Gaussian blur of numbers on a raster: weights {@code exp(-k^2 / (2 sigma^2))}, |k| up to 3 sigma, scaled to sum 1.
  * Beyond the border stands the border pixel.
  */
-final class Gaussian {
+public final class Gaussian {
     private Gaussian() {
     }
 
     /** A new array: the blurred values, {@code channels} numbers a pixel. sigma in pixels, 0 or more. */
-    static float[] blurred(float[] in, int channels, int width, int height, double sigma) {
+    public static float[] blurred(float[] in, int channels, int width, int height, double sigma) {
         return blurred(in, channels, width, height, sigma, new Window(0, 0, width, height));
     }
 

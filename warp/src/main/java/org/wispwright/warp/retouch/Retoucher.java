@@ -33,6 +33,8 @@ public final class Retoucher {
                 picture = Bend.of(warp, original).applied(picture);
             } else if (operation instanceof OutlineWarp warp) {
                 picture = Bend.of(warp, original).applied(picture);
+            } else if (operation instanceof Repaint repaint) {
+                picture = repaint.applied(picture);
             }
         }
         return picture;
@@ -59,6 +61,7 @@ public final class Retoucher {
             }
             float[] one = operation instanceof MeshWarp warp ? Bend.of(warp, original).touched(feather)
                     : operation instanceof OutlineWarp outline ? Bend.of(outline, original).touched(feather)
+                    : operation instanceof Repaint repaint ? repaint.touched(original, feather)
                     : ((Stroke) operation).reach(original, feather);
             for (int p = 0; p < touched.length; p++) {
                 touched[p] = Math.max(touched[p], one[p]);

@@ -65,6 +65,13 @@ class RasterAgreementTest {
         assertAgrees("outline " + inside, retouch, AT_256, Retoucher.touched(retouch, AT_256, 0));
     }
 
+    /** A paint-over of 320 rows, finer than one raster and coarser than the others. */
+    @Test
+    void aPaintOver() {
+        Retouch retouch = new Retouch(List.of(RepaintTest.painted(320)));
+        assertAgrees("paint-over", retouch, AT_256, Retoucher.touched(retouch, AT_256, 0));
+    }
+
     private static void assertAgrees(String what, Retouch retouch, Picture without, float[] weights) {
         Picture at256 = Retoucher.wanted(retouch, AT_256);
         Picture at512 = RetoucherTest.halved(Retoucher.wanted(retouch, AT_512));
