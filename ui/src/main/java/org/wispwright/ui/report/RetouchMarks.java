@@ -26,13 +26,14 @@ import org.wispwright.warp.matte.Region;
 import org.wispwright.warp.measure.Plane;
 import org.wispwright.warp.outline.Loop;
 import org.wispwright.warp.outline.OutlineTracer;
+import org.wispwright.warp.retouch.Repaint;
 import org.wispwright.warp.retouch.Retouch;
 import org.wispwright.warp.retouch.Stroke;
 
 /**
  * A retouch drawn as lines: strokes as the outline of what they cover, with a sign (push: its line), handles as
- * arrows, pins as dots, holds and regions dashed, folds as squares with a cross at the worst. Every line has a dark rim, so it
- * shows on any picture.
+ * arrows, pins as dots, paint-overs as the outline of what they change, holds and regions dashed, folds as squares with a cross at the
+ * worst. Every line has a dark rim, so it shows on any picture.
  */
 final class RetouchMarks {
     /** What a mark's colour says. */
@@ -48,6 +49,7 @@ final class RetouchMarks {
         /** Remove brush. */ REMOVE(0x6EC1E4, "remove"),
         /** Handles of a mesh warp, drags of an outline. */ PULL(0xE58A5C, "pull"),
         /** Where a warp turns the picture over. */ FOLD(0xFF5555, "folds"),
+        /** Painted over in another program. */ PAINTED(0xE0A0F0, "painted over"),
         /** Add brush. */ ADD(0xF2C14E, "add");
 
         private final Color colour;
@@ -101,6 +103,8 @@ final class RetouchMarks {
                 warp.handles().forEach(h -> all.add(h.from().equals(h.to()) ? Meaning.KEEP : Meaning.PULL));
             } else if (operation instanceof OutlineWarp outline) {
                 outline.drags().forEach(h -> all.add(h.from().equals(h.to()) ? Meaning.KEEP : Meaning.PULL));
+            } else if (operation instanceof Repaint) {
+                all.add(Meaning.PAINTED);
             }
         }
         if (folds.cells() > 0) {
@@ -134,6 +138,8 @@ final class RetouchMarks {
                 warp.handles().forEach(this::draw);
             } else if (operation instanceof OutlineWarp outline) {
                 outline.drags().forEach(drag -> draw(outline, drag));
+            } else if (operation instanceof Repaint repaint) {
+                draw(repaint);
             }
         }
         draw(folds);
@@ -201,6 +207,24 @@ final class RetouchMarks {
                 line(new Line2D.Double(x + arm / 3, y - arm, x + arm / 3, y + arm), colour, solid(1.6f));
             }
             case RESTORE -> line(new Rectangle2D.Double(x - arm / 2, y - arm / 2, arm, arm), colour, solid(1.6f));
+        }
+    }
+
+    /** The outline of what was painted, where its mask passes a half. */
+    private void draw(Repaint repaint) {
+        float[] layers = repaint.layers();
+        double[] mask = new double[layers.length / Repaint.LAYERS];
+        for (int p = 0; p < mask.length; p++) {
+            mask[p] = layers[Repaint.LAYERS * p + 3];
+        }
+        for (Loop loop : OutlineTracer.trace(new Plane(repaint.width(), repaint.height(), mask), 0.5)) {
+            Path2D path = new Path2D.Double();
+            path.moveTo(loop.x()[0] * height, loop.y()[0] * height);
+            for (int n = 1; n < loop.size(); n++) {
+                path.lineTo(loop.x()[n] * height, loop.y()[n] * height);
+            }
+            path.closePath();
+            line(path, Meaning.PAINTED.colour(), solid(1.6f));
         }
     }
 

@@ -68,12 +68,12 @@ public final class NoteEdits {
         String file = NoteFiles.file(id);
         String before = files.need(id);
         JsonPlace top = parsed(file, before);
-        NoteReader.note(top, id + ".json");
+        NoteReader.note(top, id + ".json", folder);
         if (NoteReader.isOn(top) == on) {
             return false;
         }
         String after = NoteText.with(before, "on", String.valueOf(on));
-        NoteReader.note(parsed(file, after), id + ".json");
+        NoteReader.note(parsed(file, after), id + ".json", folder);
         change("note " + (on ? "on " : "off ") + id, file, Optional.of(before), Optional.of(after));
         return true;
     }
@@ -88,9 +88,35 @@ public final class NoteEdits {
      */
     public Note copy(String id, int frame, Optional<String> view, Optional<String> newId) {
         String to = newId.orElse(id + "-" + frame);
-        String file = NoteFiles.file(to);
         String text = files.need(id);
+        String after = NoteText.with(text, "frame", String.valueOf(frame));
+        if (view.isPresent()) {
+            after = NoteText.with(after, "view", new TextNode(view.get()).toString());
+        }
+        return make(to, after, "note copy " + id + " --frame " + frame + view.map(v -> " --view " + v).orElse("")
+                + newId.map(n -> " --id " + n).orElse(""));
+    }
+
+    /**
+     * Makes a note of a text, checked like any other and against the shot before its file appears.
+     *
+     * @param command what the person asked for, for the journal
+     * @throws ShotException if the shot or the new note is not as it must be, the name is taken, or the disk refuses
+     */
+    Note make(String id, String text, String command) {
+        requireFree(id);
+        String file = NoteFiles.file(id);
         Shot shot = ShotCheck.requireForNotes(folder);
+        JsonPlace top = parsed(file, text);
+        Note note = NoteReader.note(top, id + ".json", folder);
+        ShotCheck.requireFits(note, top.pictures(), shot);
+        change(command, file, Optional.empty(), Optional.of(text));
+        return note;
+    }
+
+    /** Refuses an id that is none, or is taken, or one note too many. */
+    void requireFree(String id) {
+        String file = NoteFiles.file(id);
         if (files.isTaken(file)) {
             throw new ShotException(Finding.of(file, "", "a note of this name already", "a name that is free", "give another with --id"));
         }
@@ -98,16 +124,6 @@ public final class NoteEdits {
             throw new ShotException(Finding.of("notes", "", NoteReader.MOST_NOTES + " notes already", "room for one more",
                     "delete one, or split the shot"));
         }
-        String after = NoteText.with(text, "frame", String.valueOf(frame));
-        if (view.isPresent()) {
-            after = NoteText.with(after, "view", new TextNode(view.get()).toString());
-        }
-        JsonPlace top = parsed(file, after);
-        Note note = NoteReader.note(top, to + ".json");
-        ShotCheck.requireFits(note, top.pictures(), shot);
-        change("note copy " + id + " --frame " + frame + view.map(v -> " --view " + v).orElse("") + newId.map(n -> " --id " + n).orElse(""),
-                file, Optional.empty(), Optional.of(after));
-        return note;
     }
 
     /**

@@ -43,7 +43,7 @@ final class NoteReader {
             String file = "notes/" + name;
             findings.check(() -> {
                 JsonPlace top = JsonDoor.read(folder, file, MOST_BYTES).with(mattes);
-                Note note = note(top, name);
+                Note note = note(top, name, folder);
                 (isOn(top) ? notes.on() : notes.off()).add(note);
             });
         }
@@ -55,8 +55,8 @@ final class NoteReader {
         return top.ask("on").map(JsonPlace::truth).orElse(true);
     }
 
-    /** The note of a file. @throws ShotException if it is not as it must be */
-    static Note note(JsonPlace top, String fileName) {
+    /** The note of a file; its paint-overs are read from the folder. @throws ShotException if it is not as it must be */
+    static Note note(JsonPlace top, String fileName, ShotFolder folder) {
         String id = fileName.substring(0, fileName.length() - ".json".length());
         if (!id.matches(ID)) {
             throw top.fault("the file name '" + fileName + "'", "letters, digits, '-' and '_' before .json, at most 64", "rename the file");
@@ -68,7 +68,7 @@ final class NoteReader {
         double weight = top.ask("weight").map(p -> p.positive(1000)).orElse(1.0);
         Optional<Matte> weighBy = top.ask("weighBy").map(MatteReader::matte);
         JsonPlace list = top.need("retouch");
-        List<Operation> operations = list.items(1, Retouch.MOST_OPERATIONS).stream().map(RetouchReader::operation).toList();
+        List<Operation> operations = list.items(1, Retouch.MOST_OPERATIONS).stream().map(place -> RetouchReader.operation(place, folder)).toList();
         List<Hold> holds = new ArrayList<>();
         if (top.has("holds")) {
             for (JsonPlace place : top.need("holds").items(0, MOST_HOLDS)) {

@@ -6,12 +6,13 @@ import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.regex.Pattern;
+import org.wispwright.render.picture.ExrFile;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.picture.PngFile;
 import org.wispwright.render.view.Raster;
 import org.wispwright.render.view.View;
 
-/** A PNG file that a shot's JSON names, read from the shot folder: a frame of the production renderer, or a matte. */
+/** A PNG or EXR file that a shot's JSON names, read from the shot folder: a frame of the production renderer, or a matte. */
 public final class RenderedFrame {
     private static final long PNG_SIGNATURE = 0x89504E470D0A1A0AL;
     private static final int IHDR = 0x49484452;
@@ -19,7 +20,7 @@ public final class RenderedFrame {
     private RenderedFrame() {
     }
 
-    /** The size that a PNG file states in its first 24 bytes (ISO/IEC 15948, 11.2.2), before any of it is decoded. */
+    /** The size that a file states, before any of it is decoded: in a PNG file in its first 24 bytes (ISO/IEC 15948, 11.2.2). */
     record StatedSize(long width, long height) {
         /** "128x96 pixels". */
         String inWords() {
@@ -44,12 +45,21 @@ public final class RenderedFrame {
      * @param json the file that names it, for complaints
      * @param pointer the value there that names it
      *
-     * @throws ShotException if there is no such file inside the folder, or it does not begin like a PNG picture
+     * @throws ShotException if there is no such file inside the folder, or it does not begin like a picture
      */
     static StatedSize statedSize(ShotFolder folder, String file, String json, String pointer) {
-        try (DataInputStream in = new DataInputStream(Files.newInputStream(named(folder, file, json, pointer)))) {
+        Path path = named(folder, file, json, pointer);
+        if (ExrFile.isOne(path)) {
+            try {
+                int[] size = ExrFile.statedSize(path);
+                return new StatedSize(size[0], size[1]);
+            } catch (IOException broken) {
+                throw unreadable(file, json, pointer, broken);
+            }
+        }
+        try (DataInputStream in = new DataInputStream(Files.newInputStream(path))) {
             if (in.readLong() != PNG_SIGNATURE || in.readInt() != 13 || in.readInt() != IHDR) {
-                throw new IOException("is not a PNG file; save the picture as PNG");
+                throw new IOException("is not a PNG or EXR file; save the picture as PNG");
             }
             return new StatedSize(in.readInt() & 0xFFFFFFFFL, in.readInt() & 0xFFFFFFFFL);
         } catch (EOFException shorter) {
@@ -65,7 +75,7 @@ public final class RenderedFrame {
      * @param file inside the folder
      * @param pointer the value of {@code shot.json} that names the file
      * @return the picture, linear and premultiplied
-     * @throws ShotException if there is no such file inside the folder, or it is not a whole PNG picture
+     * @throws ShotException if there is no such file inside the folder, or it is not a whole PNG or EXR picture
      */
     public static Picture read(ShotFolder folder, String file, String pointer) {
         return read(folder, file, "shot.json", pointer);
@@ -74,7 +84,8 @@ public final class RenderedFrame {
     /** Reads a picture that any file of the shot names; otherwise as {@link #read(ShotFolder, String, String)}. */
     static Picture read(ShotFolder folder, String file, String json, String pointer) {
         try {
-            return PngFile.read(named(folder, file, json, pointer));
+            Path path = named(folder, file, json, pointer);
+            return ExrFile.isOne(path) ? ExrFile.read(path) : PngFile.read(path);
         } catch (IOException broken) {
             throw unreadable(file, json, pointer, broken);
         }

@@ -14,17 +14,21 @@ import org.wispwright.warp.retouch.OutlineWarp;
 import org.wispwright.warp.retouch.Stroke;
 import org.wispwright.warp.retouch.WarpKind;
 
-/** Reads the operations of a retouch (format: docs/shot-folder.md). */
+/** Reads the operations of a retouch (format: docs/shot-folder.md); the layers of a paint-over are read by {@link PaintFile}. */
 final class RetouchReader {
     private RetouchReader() {
     }
 
     /** One entry of a note's list. @throws ShotException if it is not as it must be */
-    static Operation operation(JsonPlace place) {
-        place.only("stroke", "meshWarp", "outline");
+    static Operation operation(JsonPlace place, ShotFolder folder) {
+        place.only("stroke", "meshWarp", "outline", "paintOver");
         if (place.keys().size() != 1) {
-            throw place.fault(place.keys().size() + " operations in one entry", "one: stroke, meshWarp or outline",
+            throw place.fault(place.keys().size() + " operations in one entry", "one: stroke, meshWarp, outline or paintOver",
                     "give each an entry of its own");
+        }
+        if (place.has("paintOver")) {
+            JsonPlace paintOver = place.need("paintOver").only("layers");
+            return PaintFile.read(folder, paintOver.need("layers"));
         }
         return place.has("stroke") ? stroke(place.need("stroke")) : place.has("outline") ? outline(place.need("outline"))
                 : meshWarp(place.need("meshWarp"));
