@@ -37,8 +37,8 @@ public final class ExrFile {
     /**
      * Reads a picture. Everything that the file states is checked before memory is taken.
      *
-     * @throws PictureFileException if the file is missing, not an EXR, damaged, cut short, larger or of another kind than is read, or holds a
-     *         number that is not finite
+     * @throws PictureFileException if the file is missing, not an EXR, damaged, cut short, larger or of another kind than is read, or
+     *         holds a number that is not finite
      * @throws IOException if it is closed to us, or this machine cannot load the decoder
      */
     public static Picture read(Path path) throws IOException {
@@ -107,7 +107,8 @@ public final class ExrFile {
         try {
             memory = MemoryUtil.memAlloc(bytes.length);
         } catch (LinkageError noNatives) {
-            throw new IOException("this machine cannot load the EXR decoder (" + noNatives.getMessage() + "); save the picture as 16-bit PNG",
+            throw new IOException("this machine cannot load the EXR decoder (" + noNatives.getMessage()
+                    + "); save the picture as 16-bit PNG",
                     noNatives);
         }
         try {

@@ -10,8 +10,9 @@ import java.util.List;
 import java.util.Map;
 
 /**
- * What an EXR file states of itself, read and checked before anything is decoded: first bytes, attributes, channels, windows, and that every
- * block of rows lies inside the file. Layout: "OpenEXR File Layout", published by its maintainers. Read are single flat images in rows.
+ * What an EXR file states of itself, read and checked before anything is decoded: first bytes, attributes, channels, windows, and that
+ * every block of rows lies inside the file. Layout: "OpenEXR File Layout", published by its maintainers. Read are single flat images in
+ * rows.
  *
  * @param left    first column of the stored pixels in the picture; may be negative
  * @param top     first row of the stored pixels in the picture
@@ -70,7 +71,8 @@ record ExrHeader(int left, int top, Size stored, Size picture, List<String> chan
             channels(attributes.get("channels"));
             int compression = attribute("compression", 1).get() & 0xFF;
             if (compression >= ROWS.length) {
-                throw wrong("is compressed with " + (compression < COMPRESSIONS.length ? COMPRESSIONS[compression] : "method " + compression)
+                throw wrong("is compressed with " + (compression < COMPRESSIONS.length ? COMPRESSIONS[compression] : "method "
+                        + compression)
                         + ", which is not read; save it with ZIP, ZIPS, PIZ, RLE or without compression");
             }
             int lineOrder = attribute("lineOrder", 1).get();
@@ -83,7 +85,8 @@ record ExrHeader(int left, int top, Size stored, Size picture, List<String> chan
             Size picture = size("displayWindow", display);
             long decoded = 4L * stored.width() * stored.height() * channels.size();
             if (decoded > MOST_DECODED) {
-                throw wrong("has " + channels.size() + " channels of " + stored.width() + "x" + stored.height() + " pixels, which take " + decoded
+                throw wrong("has " + channels.size() + " channels of " + stored.width() + "x" + stored.height() + " pixels, which take "
+                        + decoded
                         + " bytes, needs at most " + MOST_DECODED + "; save red, green, blue and alpha alone");
             }
             primaries();
@@ -128,7 +131,8 @@ record ExrHeader(int left, int top, Size stored, Size picture, List<String> chan
                     throw wrong("has whole numbers in channel '" + name + "', needs half or float; save it so");
                 }
                 if (channels.size() >= MOST_CHANNELS || channels.contains(name)) {
-                    throw wrong("has more than " + MOST_CHANNELS + " channels, or '" + name + "' twice; save red, green, blue and alpha alone");
+                    throw wrong("has more than " + MOST_CHANNELS + " channels, or '" + name
+                            + "' twice; save red, green, blue and alpha alone");
                 }
                 channels.add(name);
             }
@@ -142,12 +146,14 @@ record ExrHeader(int left, int top, Size stored, Size picture, List<String> chan
         private Size size(String name, int[] box) throws PictureFileException {
             long width = (long) box[2] - box[0] + 1;
             long height = (long) box[3] - box[1] + 1;
-            if (width < 1 || height < 1 || width > Picture.LONGEST_SIDE || height > Picture.LONGEST_SIDE || width * height > PngCheck.MOST_PIXELS) {
+            if (width < 1 || height < 1 || width > Picture.LONGEST_SIDE || height > Picture.LONGEST_SIDE
+                    || width * height > PngCheck.MOST_PIXELS) {
                 throw wrong("states " + width + "x" + height + " pixels as its " + name + ", needs sides of 1 to " + Picture.LONGEST_SIDE
                         + " and at most " + PngCheck.MOST_PIXELS + " pixels; save a smaller one");
             }
             if (Math.abs((long) box[0]) > Picture.LONGEST_SIDE || Math.abs((long) box[1]) > Picture.LONGEST_SIDE) {
-                throw wrong("has a " + name + " that begins at (" + box[0] + ", " + box[1] + "), farther away than any picture; save it again");
+                throw wrong("has a " + name + " that begins at (" + box[0] + ", " + box[1]
+                        + "), farther away than any picture; save it again");
             }
             return new Size((int) width, (int) height);
         }

@@ -48,8 +48,10 @@ public final class ExrWriting {
     public static void write(Picture picture, Path path, Depth depth) throws IOException {
         for (int n = 0; n < picture.rgba().length; n++) {
             if (!Float.isFinite(picture.rgba()[n])) {
-                throw new IllegalArgumentException("picture for " + path + ": pixel (" + n / 4 % picture.width() + ", " + n / 4 / picture.width()
-                        + ") holds " + picture.rgba()[n] + ", needs finite numbers; look for the first bad value where the picture was made");
+                throw new IllegalArgumentException("picture for " + path + ": pixel (" + n / 4 % picture.width() + ", "
+                        + n / 4 / picture.width()
+                        + ") holds " + picture.rgba()[n]
+                        + ", needs finite numbers; look for the first bad value where the picture was made");
             }
         }
         ByteArrayOutputStream head = header(picture, depth);

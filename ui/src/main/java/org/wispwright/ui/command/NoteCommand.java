@@ -8,7 +8,8 @@ import picocli.CommandLine.Spec;
 
 /** {@code note WHAT SHOT}: works on the notes of a shot without a screen; each WHAT is a command of its own. */
 @Command(name = "note", sortOptions = false, synopsisSubcommandLabel = "WHAT",
-        description = "List the notes of a shot, set them aside, copy and delete them, make them of painted frames; every change can be taken back.",
+        description = "List the notes of a shot, set them aside, copy and delete them, make them of painted frames; every change can be"
+                + " taken back.",
         subcommands = {NoteListCommand.class, NoteOffCommand.class, NoteOnCommand.class, NoteCopyCommand.class,
                 NotePaintOverCommand.class, NoteSilhouetteCommand.class, NoteDeleteCommand.class, NoteUndoCommand.class},
         footer = {"", "Examples:",

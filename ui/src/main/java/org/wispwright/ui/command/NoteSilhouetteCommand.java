@@ -9,7 +9,8 @@ import picocli.CommandLine.Option;
 
 /** {@code note silhouette SHOT --id ID --frame F --view V --matte M --words WORDS}. */
 @Command(name = "silhouette", sortOptions = false,
-        description = "Make a note of a silhouette: a picture that is white where smoke is wanted and black where none is. Inside, smoke that"
+        description =
+                "Make a note of a silhouette: a picture that is white where smoke is wanted and black where none is. Inside, smoke that"
                 + " is there stays and gaps are filled to the level near them. Take 0 must be there.",
         footer = {"", "Examples:",
             "  java -jar wispwright.jar note silhouette samples/kiln-yard --id shape --frame 1030 --view front --matte shape.png"
@@ -26,7 +27,8 @@ final class NoteSilhouetteCommand implements Callable<Integer> {
 
     @Override
     public Integer call() {
-        return note.make("silhouette", manner, (place, lanes) -> PaintOverWork.silhouette(place.shot(), place.choice().takes(), place.frame(),
+        return note.make("silhouette", manner, (place, lanes) -> PaintOverWork.silhouette(place.shot(), place.choice().takes(),
+                place.frame(),
                 place.camera(), matte, lanes));
     }
 }

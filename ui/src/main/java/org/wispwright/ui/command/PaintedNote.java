@@ -50,7 +50,8 @@ final class PaintedNote {
                 .put("share", painted.share()).put("massBefore", painted.massBefore()).put("massAfter", painted.massAfter())
                 .put("confidence", painted.confidence()).put("noise", painted.noise());
         if (painted.isNothing()) {
-            manner.say(String.format(Locale.ROOT, "Nothing changed beyond noise (%.2f codes of 255), so no note was made.", 255 * painted.noise()),
+            manner.say(String.format(Locale.ROOT, "Nothing changed beyond noise (%.2f codes of 255), so no note was made.",
+                    255 * painted.noise()),
                     object);
             return ExitCodes.OK;
         }

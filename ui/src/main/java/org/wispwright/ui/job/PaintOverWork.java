@@ -26,8 +26,8 @@ public final class PaintOverWork {
      *
      * @param before the frame as it was rendered, PNG or EXR, anywhere on disk
      * @param after  the same, painted over
-     * @throws ShotException if a file is not a whole picture, the pictures do not fit each other or the view, take 0 is missing or of another
-     *         set-up, or it shows no smoke there
+     * @throws ShotException if a file is not a whole picture, the pictures do not fit each other or the view, take 0 is missing or of
+     *         another set-up, or it shows no smoke there
      */
     public static Painted read(Shot shot, Takes takes, int frame, View view, Path before, Path after, Lanes lanes) {
         Picture first = picture(before);
@@ -58,7 +58,8 @@ public final class PaintOverWork {
         try {
             return ExrFile.isOne(file) ? ExrFile.read(file) : PngFile.read(file);
         } catch (IOException broken) {
-            String reason = String.valueOf(broken.getMessage()).replaceAll("(?s)^picture file .*" + Pattern.quote(String.valueOf(file.getFileName()))
+            String reason = String.valueOf(broken.getMessage()).replaceAll("(?s)^picture file .*"
+                    + Pattern.quote(String.valueOf(file.getFileName()))
                     + ": ", "").replaceAll("\\s+", " ").replaceAll("\\.$", "");
             throw new ShotException(new Finding(file.toString(), "", "the picture " + reason + "."), broken);
         }
@@ -68,7 +69,8 @@ public final class PaintOverWork {
         try {
             return reading.get();
         } catch (IllegalArgumentException refused) {
-            throw new ShotException(new Finding(file.toString(), "", refused.getMessage().replaceAll("^(paint-over|silhouette): ", "") + "."),
+            throw new ShotException(new Finding(file.toString(), "", refused.getMessage().replaceAll("^(paint-over|silhouette): ", "")
+                    + "."),
                     refused);
         }
     }

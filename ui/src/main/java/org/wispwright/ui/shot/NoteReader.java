@@ -68,7 +68,8 @@ final class NoteReader {
         double weight = top.ask("weight").map(p -> p.positive(1000)).orElse(1.0);
         Optional<Matte> weighBy = top.ask("weighBy").map(MatteReader::matte);
         JsonPlace list = top.need("retouch");
-        List<Operation> operations = list.items(1, Retouch.MOST_OPERATIONS).stream().map(place -> RetouchReader.operation(place, folder)).toList();
+        List<Operation> operations = list.items(1, Retouch.MOST_OPERATIONS).stream().map(place -> RetouchReader.operation(place, folder))
+                .toList();
         List<Hold> holds = new ArrayList<>();
         if (top.has("holds")) {
             for (JsonPlace place : top.need("holds").items(0, MOST_HOLDS)) {

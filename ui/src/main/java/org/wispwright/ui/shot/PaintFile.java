@@ -37,7 +37,8 @@ final class PaintFile {
             Path path = folder.file(file);
             long size = Files.size(path);
             if (size > MOST_BYTES) {
-                throw place.fault("file '" + file + "' of " + size + " bytes", "at most " + MOST_BYTES + " bytes", "check that it is the right file");
+                throw place.fault("file '" + file + "' of " + size + " bytes", "at most " + MOST_BYTES + " bytes",
+                        "check that it is the right file");
             }
             NpyFile.Contents contents = NpyFile.read(path);
             int[] shape = contents.shape();
@@ -75,10 +76,14 @@ final class PaintFile {
 
     /** True if the file is there already. */
     static boolean isThere(ShotFolder folder, String id, Repaint repaint) {
-        return Files.exists(folder.inside("notes/" + id + ".paint/" + digest(repaint, repaint.layers()) + ".npy"), LinkOption.NOFOLLOW_LINKS);
+        return Files.exists(folder.inside("notes/" + id + ".paint/" + digest(repaint, repaint.layers()) + ".npy"),
+                LinkOption.NOFOLLOW_LINKS);
     }
 
-    /** Removes a file that no note came to name, and its folder if that is empty. What cannot be removed stays: it is whole and named nowhere. */
+    /**
+     * Removes a file that no note came to name, and its folder if that is empty. What cannot be removed stays: it is whole and named
+     * nowhere.
+     */
     static void remove(ShotFolder folder, String file) {
         try {
             Path path = folder.inside(file);

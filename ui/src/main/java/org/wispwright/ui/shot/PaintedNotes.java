@@ -34,7 +34,8 @@ public final class PaintedNotes {
         edits.requireFree(id);
         boolean wasThere = PaintFile.isThere(folder, id, repaint);
         String file = PaintFile.write(folder, id, repaint);
-        ObjectNode note = JSON.createObjectNode().put("wispwright", SetupReader.FORMAT).put("words", words).put("frame", frame).put("view", view);
+        ObjectNode note = JSON.createObjectNode().put("wispwright", SetupReader.FORMAT).put("words", words).put("frame", frame)
+                .put("view", view);
         note.putArray("retouch").addObject().putObject("paintOver").put("layers", file);
         try {
             return edits.make(id, JSON.writeValueAsString(note) + "\n", command);

@@ -10,11 +10,13 @@ import com.fasterxml.jackson.databind.ObjectMapper;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.nio.file.StandardCopyOption;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.SortedMap;
 import java.util.stream.Stream;
+import org.junit.jupiter.api.BeforeAll;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -35,19 +37,34 @@ class NotePaintOverTest {
     }
 
     @TempDir
+    private static Path made;
+    @TempDir
     private Path place;
     private SmallShot shot;
 
-    @BeforeEach
-    void aShotWithItsOriginal() throws IOException {
-        shot = SmallShot.in(place.resolve("yard"));
-        assertEquals(0, Run.of("simulate", shot.folder().toString()).code());
-        Run drawn = Run.of("picture", shot.folder().toString(), "--take", "0", "--frame", "1006", "--view", "front", "--out",
-                place.resolve("before.png").toString());
+    /** One shot with its original, a frame of it, and the frame painted over; every test works on a copy. */
+    @BeforeAll
+    static void aShotWithItsOriginal() throws IOException {
+        SmallShot yard = SmallShot.in(made.resolve("yard"));
+        assertEquals(0, Run.of("simulate", yard.folder().toString()).code());
+        Run drawn = Run.of("picture", yard.folder().toString(), "--take", "0", "--frame", "1006", "--view", "front", "--out",
+                made.resolve("before.png").toString());
         assertEquals(0, drawn.code(), drawn.err());
-        Picture painted = PngFile.read(place.resolve("before.png"));
+        Picture painted = PngFile.read(made.resolve("before.png"));
         paint(painted);
-        PngFile.write(painted, place.resolve("after.png"), PngFile.Depth.EIGHT);
+        PngFile.write(painted, made.resolve("after.png"), PngFile.Depth.EIGHT);
+    }
+
+    @BeforeEach
+    void aCopyOfIt() throws IOException {
+        try (Stream<Path> all = Files.walk(made)) {
+            for (Path path : all.filter(Files::isRegularFile).toList()) {
+                Path copy = place.resolve(made.relativize(path).toString());
+                Files.createDirectories(copy.getParent());
+                Files.copy(path, copy, StandardCopyOption.REPLACE_EXISTING);
+            }
+        }
+        shot = SmallShot.in(place.resolve("yard"));
     }
 
     /** The left half of the picture painted with the shot's background: the smoke there is gone. */

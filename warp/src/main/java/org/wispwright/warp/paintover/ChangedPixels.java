@@ -9,8 +9,8 @@ import org.wispwright.warp.retouch.Gaussian;
  * Which pixels a person changed between two frames, and which merely differ because a file was saved again.
  * <p>The difference d is taken in sRGB codes (alpha: as it is), where rounding is even. Its noise is measured channel by channel on the
  * diagonal detail {@code h = (d00 - d01 - d10 + d11) / 2} of neighbouring pixels, which smooth changes leave out:
- * {@code s = median |h| / 0.6745} (Donoho and Johnstone 1994, Biometrika 81(3), 425-455). Blurred with a Gaussian of one pixel noise shrinks
- * to {@code s / (2 sqrt(pi))}; a pixel has changed where the blurred |d| passes {@code T = max(1 / 255, 5 s / (2 sqrt(pi)))} in a
+ * {@code s = median |h| / 0.6745} (Donoho and Johnstone 1994, Biometrika 81(3), 425-455). Blurred with a Gaussian of one pixel noise
+ * shrinks to {@code s / (2 sqrt(pi))}; a pixel has changed where the blurred |d| passes {@code T = max(1 / 255, 5 s / (2 sqrt(pi)))} in a
  * channel, 1/255 being the most by which rounding twice to 8 bits can shift a mean; a patch of such pixels counts if one of them passes 2 T
  * (hysteresis, Canny 1986, IEEE PAMI 8(6), 679-698) and it has at least {@value #SPECKLE} pixels (area opening, Vincent 1993).
  */

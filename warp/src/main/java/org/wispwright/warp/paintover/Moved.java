@@ -9,8 +9,8 @@ import org.wispwright.warp.retouch.Gaussian;
 
 /**
  * Where a person moved smoke rather than added or removed it. Patches of changed opacity that lie near each other form a region; in each
- * the {@link OpticalFlow} between the opacities is tried. A change of opacity explains any painted frame, so what is asked is whether moving
- * alone explains this one: a region counts as moved if
+ * the {@link OpticalFlow} between the opacities is tried. A change of opacity explains any painted frame, so what is asked is whether
+ * moving alone explains this one: a region counts as moved if
  * <ul>
  * <li>the frame before, moved, leaves at most {@value #LEFT} of the squared difference between the frames, in their own colours,
  * <li>smoke was neither made nor lost: {@code |gained - lost| <= } {@value #UNEVEN} {@code (gained + lost)}, sums of opacity, and

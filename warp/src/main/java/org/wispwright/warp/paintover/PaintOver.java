@@ -176,7 +176,8 @@ public final class PaintOver {
         for (int n = 0; n < picture.rgba().length; n++) {
             if (!Float.isFinite(picture.rgba()[n])) {
                 int p = n / 4;
-                throw new IllegalArgumentException("paint-over: pixel (" + p % picture.width() + ", " + p / picture.width() + ") of '" + what
+                throw new IllegalArgumentException("paint-over: pixel (" + p % picture.width() + ", " + p / picture.width() + ") of '"
+                        + what
                         + "' is " + picture.rgba()[n] + ", needs finite numbers; save it again");
             }
         }

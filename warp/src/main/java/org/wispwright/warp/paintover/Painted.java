@@ -49,7 +49,8 @@ public record Painted(Repaint repaint, Way way, double share, double massBefore,
         for (int p = 0; p < pixels; p++) {
             mass += original.rgba()[4 * p + 3] / (double) pixels;
         }
-        return new Painted(new Repaint(original.width(), original.height(), new float[Repaint.LAYERS * pixels]), Way.NOTHING, 0, mass, mass, 0,
+        return new Painted(new Repaint(original.width(), original.height(), new float[Repaint.LAYERS * pixels]), Way.NOTHING, 0, mass,
+                mass, 0,
                 noise);
     }
 }

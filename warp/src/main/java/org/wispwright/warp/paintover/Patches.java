@@ -2,7 +2,10 @@ package org.wispwright.warp.paintover;
 
 import java.util.Arrays;
 
-/** Connected patches of a raster: pixels that are in, joined over all eight neighbours. Source: Rosenfeld and Pfaltz (1966), JACM 13(4), 471-494. */
+/**
+ * Connected patches of a raster: pixels that are in, joined over all eight neighbours. Source: Rosenfeld and Pfaltz (1966), JACM 13(4),
+ * 471-494.
+ */
 final class Patches {
     private final int[] label;
     private final int count;

@@ -22,8 +22,10 @@ public final class Resized {
      */
     public static float[] values(float[] in, int channels, int width, int height, int newWidth, int newHeight) {
         if (channels < 1 || width < 1 || height < 1 || newWidth < 1 || newHeight < 1 || in.length != (long) channels * width * height) {
-            throw new IllegalArgumentException("resized: got " + in.length + " values for " + channels + " channels of " + width + "x" + height
-                    + " pixels to bring to " + newWidth + "x" + newHeight + ", needs sizes of at least 1 and one value a channel and pixel");
+            throw new IllegalArgumentException("resized: got " + in.length + " values for " + channels + " channels of " + width + "x"
+                    + height
+                    + " pixels to bring to " + newWidth + "x" + newHeight
+                    + ", needs sizes of at least 1 and one value a channel and pixel");
         }
         float[] across = newWidth == width ? in : new float[channels * newWidth * height];
         if (newWidth != width) {

@@ -40,7 +40,7 @@ public final class Repaint implements Operation {
      *
      * @param width  pixels along a row
      * @param height rows
-     * @param layers read: {@value #LAYERS} numbers a pixel, index {@code 4 (x + width y) + layer}, in the order and ranges of {@link #LAYERS}
+     * @param layers read: {@value #LAYERS} numbers a pixel, index {@code 4 (x + width y) + layer}; order and ranges: {@link #LAYERS}
      * @throws IllegalArgumentException if the raster is too large, the count differs, or a number is out of its range or not finite
      */
     public Repaint(int width, int height, float[] layers) {

@@ -14,15 +14,18 @@ import org.wispwright.render.picture.Srgb;
 /** The parts that a paint-over is read with, each against a result by hand. */
 class PaintOverPartsTest {
     /**
-     * Pooling by hand: 3, 1 become 2, 2; then 2, 2, 1 with weights 1, 1, 2 become (2 + 2 + 2) / 4 = 1.5. Optimality by its definition (Barlow
-     * et al. 1972): no other monotone sequence of a fine lattice is nearer.
+     * Pooling by hand: 3, 1 become 2, 2; then 2, 2, 1 with weights 1, 1, 2 become (2 + 2 + 2) / 4 = 1.5. Optimality by its definition
+     * (Barlow et al. 1972): no other monotone sequence of a fine lattice is nearer.
      */
     @Test
     void isotonicPoolsAdjacentViolators() {
-        assertArrayEquals(new double[] {1.5, 1.5, 1.5, 4, 5}, Isotonic.fit(new double[] {3, 1, 1, 4, 5}, new double[] {1, 1, 2, 1, 1}), 1e-15);
+        assertArrayEquals(new double[] {1.5, 1.5, 1.5, 4, 5}, Isotonic.fit(new double[] {3, 1, 1, 4, 5}, new double[] {1, 1, 2, 1, 1}),
+                1e-15);
         double[] values = {0.4, 0.1, 0.6, 0.3};
         double[] weights = {1, 2, 1, 3};
-        double best = distance(Isotonic.fit(values, weights), values, weights);
+        double[] fitted = Isotonic.fit(values, weights);
+        assertTrue(fitted[0] <= fitted[1] && fitted[1] <= fitted[2] && fitted[2] <= fitted[3], Arrays.toString(fitted));
+        double best = distance(fitted, values, weights);
         for (int n = 0; n < 21 * 21 * 21 * 21; n++) {
             double[] other = {n % 21 / 20.0, n / 21 % 21 / 20.0, n / 441 % 21 / 20.0, n / 9261 / 20.0};
             if (other[0] <= other[1] && other[1] <= other[2] && other[2] <= other[3]) {

@@ -13,7 +13,8 @@ class ResizedTest {
     /** By hand: 3 pixels to 2, each covers one and a half. */
     @Test
     void shrinkingTakesTheMeanOverWhatAPixelCovers() {
-        assertArrayEquals(new float[] {(1 + 0.5f * 4) / 1.5f, (0.5f * 4 + 7) / 1.5f}, Resized.values(new float[] {1, 4, 7}, 1, 3, 1, 2, 1), 1e-6f);
+        assertArrayEquals(new float[] {(1 + 0.5f * 4) / 1.5f, (0.5f * 4 + 7) / 1.5f}, Resized.values(new float[] {1, 4, 7}, 1, 3, 1, 2,
+                1), 1e-6f);
         assertArrayEquals(new float[] {2.5f, 25}, Resized.values(new float[] {1, 10, 2, 20, 3, 30, 4, 40}, 2, 2, 2, 1, 1), 1e-6f);
     }
 
