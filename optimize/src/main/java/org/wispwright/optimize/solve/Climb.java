@@ -36,6 +36,7 @@ final class Climb {
     private final List<Double> losses = new ArrayList<>();
     private final List<SolveResult.BandRun> runs = new ArrayList<>();
     private List<Double> met = List.of();
+    private List<SolveResult.NoteLoss> noteLosses = List.of();
     private Lbfgs lbfgs;
     private TermPlan plan;
     private SolveLoss loss;
@@ -75,8 +76,12 @@ final class Climb {
             ended = "the last band's loss has stopped falling";
         }
         record();
-        return new SolveResult(lbfgs.x().clone(), List.copyOf(runs), List.copyOf(losses), met, lbfgs.evaluations(), seconds(), lbfgs.quadratic(),
-                lbfgs.quadraticValue() / plan.startLoss(), snapshots, ended);
+        if (noteLosses.isEmpty()) {                                            // gone on with from a record, and ended before it moved
+            loss.forward(lbfgs.x(), new double[lbfgs.x().length]);
+            noteLosses = plan.noteLosses(loss.losses());
+        }
+        return new SolveResult(lbfgs.x().clone(), List.copyOf(runs), List.copyOf(losses), met, noteLosses, lbfgs.evaluations(),
+                seconds(), lbfgs.quadratic(), lbfgs.quadraticValue() / plan.startLoss(), snapshots, ended);
     }
 
     private void take(SolveState state) {
@@ -104,6 +109,7 @@ final class Climb {
      */
     private void climb(int number, Optional<SolveState> state) {
         rung = number;
+        noteLosses = List.of();
         GridShape grid = grids.get(rung - 1);
         if (loss != null) {
             loss.release();                                                    // the search still holds the lower rung's loss for a moment
@@ -171,6 +177,7 @@ final class Climb {
             done++;
             losses.add(share());
             met = plan.met(loss.losses());
+            noteLosses = plan.noteLosses(loss.losses());
             if ((open > 1 || rung > 1) && done % Solve.ENERGY_EVERY == 0) {
                 weighEnergy();
             }

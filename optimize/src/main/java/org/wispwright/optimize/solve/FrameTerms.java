@@ -13,7 +13,7 @@ import org.wispwright.render.picture.Picture;
 import org.wispwright.render.view.View;
 import org.wispwright.render.volume.GridShape;
 import org.wispwright.render.volume.ScalarGrid;
-import org.wispwright.warp.loss.PyramidLoss;
+import org.wispwright.warp.loss.PictureLoss;
 
 /**
  * All pictures that the loss looks at, and the terms on each: a term compares the picture of one frame in one view with one
@@ -44,7 +44,7 @@ final class FrameTerms {
     }
 
     /** One comparison; its number tells where its loss is written. */
-    private record Term(int number, PyramidLoss loss, double scale) { }
+    private record Term(int number, PictureLoss loss, double scale) { }
 
     FrameTerms(GridShape shape, List<View> views, Look look, double stepMetres, Clock clock, Lanes lanes) {
         this.look = look;
@@ -55,7 +55,7 @@ final class FrameTerms {
     }
 
     /** A new term. @return its number */
-    int add(int frame, int view, PyramidLoss loss, double scale) {
+    int add(int frame, int view, PictureLoss loss, double scale) {
         List<Shown> there = byFrame.computeIfAbsent(frame, f -> new ArrayList<>());
         Shown shown = there.stream().filter(s -> s.view == view).findFirst().orElse(null);
         if (shown == null) {

@@ -3,6 +3,7 @@ package org.wispwright.optimize.solve;
 import java.util.List;
 import org.wispwright.optimize.force.Band;
 import org.wispwright.render.volume.GridShape;
+import org.wispwright.warp.loss.LossChoice;
 
 /**
  * What a solve found.
@@ -10,7 +11,8 @@ import org.wispwright.render.volume.GridShape;
  * @param unknowns     the force: the numbers for {@code ForceBasis} with these bands
  * @param bands        each rung's and band's part of the search
  * @param losses       total loss after each iteration, as a share of the original's on that rung; each rung adds its own start first
- * @param met          of each note at the solve's raster, in the problem's order
+ * @param met          of each note at the solve's raster by the pyramid loss, in the problem's order
+ * @param noteLosses   what each note was solved with on the last rung, in the problem's order
  * @param gradients    gradients computed
  * @param seconds      wall time
  * @param energyWeight weight of the force energy at the end, {@code weight |x|^2 / 2} beside notes that weigh 1
@@ -18,8 +20,17 @@ import org.wispwright.render.volume.GridShape;
  * @param snapshots    states that were kept in a sweep of the last rung
  * @param ended        why it ended, for a person
  */
-public record SolveResult(double[] unknowns, List<BandRun> bands, List<Double> losses, List<Double> met, int gradients, double seconds,
+public record SolveResult(double[] unknowns, List<BandRun> bands, List<Double> losses, List<Double> met,
+                          List<NoteLoss> noteLosses, int gradients, double seconds,
                           double energyWeight, double energyShare, int snapshots, String ended) {
+
+    /**
+     * What a note was solved with.
+     *
+     * @param choice the losses and why
+     * @param fall   1 - (their joint value now / for the original), at the solve's raster
+     */
+    public record NoteLoss(LossChoice choice, double fall) { }
 
     /**
      * One band's part of the search on one rung. On the first rung bands open one by one; later rungs begin with all open.

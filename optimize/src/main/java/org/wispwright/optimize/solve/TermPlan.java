@@ -11,13 +11,19 @@ import org.wispwright.optimize.flow.FrameRange;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.loss.LossChoice;
+import org.wispwright.warp.loss.LossKind;
+import org.wispwright.warp.loss.PictureLoss;
 import org.wispwright.warp.loss.PyramidLoss;
 
 /**
  * Turns a problem into terms: runs the original once, draws its pictures where they are needed, applies the wishes to them.
  *
- * <p>Scales, so that every note starts at its weight: a note's term is {@code weight / (its loss for the original)}. Holds and the
- * stay term start at 0, so they are measured in R, the mean of the notes' losses for the original: a hold weighs {@value #HOLD_WEIGHT}/R,
+ * <p>Scales, so that every note starts at its weight: each loss of a note ({@link LossChoice}) has the factor
+ * {@code weight share / (its value for the original)}. Met is by the pyramid loss whatever the note is solved with; where that is not
+ * among its losses its term has the factor 0. Holds and the
+ * stay term start at 0, so they are measured in R, the mean of the notes' pyramid
+ * losses for the original: a hold weighs {@value #HOLD_WEIGHT}/R,
  * shared by the frames it is looked at (noted frames, and every third); the stay term {@value #STAY_WEIGHT}/R on every third frame
  * without a note, in each view that has one, falling to 0 within a third of the range of a noted frame. Frames after the last that anything
  * is wished of are left to themselves: no force acts there, and to pull them back would fight the note.
@@ -31,9 +37,18 @@ final class TermPlan {
     private final FrameTerms terms;
     private final boolean stay;
     private final Map<Long, Picture> originals = new HashMap<>();
-    private final int[] noteTerms;
-    private final double[] noteStarts;
+    private final List<NoteTerms> notes = new ArrayList<>();
     private final double startLoss;
+
+    /** The term that measures met, and the terms that the note is solved with; the first may be one of them. */
+    private record NoteTerms(Part met, List<Part> parts, LossChoice choice) { }
+
+    /** A term, its loss for the original, and its share of the note's loss there. */
+    private record Part(int term, double start, double share) {
+        double fallen(double[] losses) {
+            return losses[term] / start;
+        }
+    }
 
     TermPlan(SolveProblem problem, SmokeSolver solver, SmokeState start, FrameTerms terms, boolean stay, BooleanSupplier cancelled) {
         this.problem = problem;
@@ -50,10 +65,8 @@ final class TermPlan {
                 }
             }
         });
-        noteTerms = new int[problem.notes().size()];
-        noteStarts = new double[problem.notes().size()];
         startLoss = addNotes();
-        double reference = IntStream.range(0, noteStarts.length).mapToDouble(n -> noteStarts[n]).average().orElseThrow();
+        double reference = notes.stream().mapToDouble(note -> note.met.start).average().orElseThrow();
         for (SolveProblem.Hold hold : problem.holds()) {
             addHold(hold, reference);
         }
@@ -62,19 +75,39 @@ final class TermPlan {
 
     private double addNotes() {
         double sum = 0;
-        for (int n = 0; n < noteTerms.length; n++) {
-            SolveProblem.Note note = problem.notes().get(n);
+        for (SolveProblem.Note note : problem.notes()) {
             Picture original = originals.get(key(note.frame(), note.view()));
-            PyramidLoss loss = new PyramidLoss(note.wish().wanted(original), note.wish().weights(original));
-            noteStarts[n] = loss.value(original);
-            if (!(noteStarts[n] > 1e-9)) {
-                throw new IllegalArgumentException("note '" + note.id() + "': its retouch changes nothing that can be seen on frame " + note.frame()
-                        + " (loss of the original " + noteStarts[n] + "); check where its strokes and handles lie, or switch it off");
+            Picture wanted = note.wish().wanted(original);
+            float[] weights = note.wish().weights(original);
+            PyramidLoss pyramid = new PyramidLoss(wanted, weights);
+            double start = pyramid.value(original);
+            if (!(start > LossChoice.LEAST_START)) {
+                throw new IllegalArgumentException("note '" + note.id() + "': its retouch changes nothing that can be seen on frame "
+                        + note.frame() + " (loss of the original " + start
+                        + "); check where its strokes and handles lie, or switch it off");
             }
-            noteTerms[n] = terms.add(note.frame(), note.view(), loss, note.weight() / noteStarts[n]);
+            LossChoice choice = note.wish().losses(original, wanted);
+            double share = choice.share(LossKind.PYRAMID);
+            Part met = new Part(terms.add(note.frame(), note.view(), pyramid, note.weight() * share / start), start, share);
+            List<Part> parts = new ArrayList<>();
+            for (LossKind kind : choice.kinds()) {
+                parts.add(kind == LossKind.PYRAMID ? met
+                        : part(note, kind, kind.of(original, wanted, weights), original, choice.share(kind)));
+            }
+            notes.add(new NoteTerms(met, parts, choice));
             sum += note.weight();
         }
         return sum;
+    }
+
+    private Part part(SolveProblem.Note note, LossKind kind, PictureLoss loss, Picture original, double share) {
+        double start = loss.value(original);
+        if (!(start > LossChoice.LEAST_START)) {
+            throw new IllegalArgumentException("note '" + note.id() + "': its loss '" + kind.word()
+                    + "' sees nothing of its retouch on frame " + note.frame() + " (" + start
+                    + " for the original); name another, or leave the choice to the program");
+        }
+        return new Part(terms.add(note.frame(), note.view(), loss, note.weight() * share / start), start, share);
     }
 
     private void addHold(SolveProblem.Hold hold, double reference) {
@@ -147,8 +180,14 @@ final class TermPlan {
         return startLoss;
     }
 
-    /** Met of each note, from the terms' losses. */
+    /** Met of each note, from the terms' losses: by the pyramid loss, whatever the note is solved with. */
     List<Double> met(double[] losses) {
-        return IntStream.range(0, noteTerms.length).mapToObj(n -> 1 - losses[noteTerms[n]] / noteStarts[n]).toList();
+        return notes.stream().map(note -> 1 - note.met.fallen(losses)).toList();
+    }
+
+    /** What each note is solved with, and how far that has fallen. */
+    List<SolveResult.NoteLoss> noteLosses(double[] losses) {
+        return notes.stream().map(note -> new SolveResult.NoteLoss(note.choice,
+                1 - note.parts.stream().mapToDouble(part -> part.share * part.fallen(losses)).sum())).toList();
     }
 }

@@ -1,6 +1,7 @@
 package org.wispwright.optimize.solve;
 
 import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.loss.LossChoice;
 
 /**
  * What a note wants of its frame, at any raster: the retouch is applied anew to each rung's own picture of the original.
@@ -11,4 +12,9 @@ public interface Wish {
 
     /** How much each pixel of an original counts, 0..1, row 0 at the top: 1 where retouched, a smaller number elsewhere. */
     float[] weights(Picture original);
+
+    /** What the picture is compared with the wanted one by; the program's own rule unless a note says otherwise. */
+    default LossChoice losses(Picture original, Picture wanted) {
+        return LossChoice.of(original, wanted);
+    }
 }

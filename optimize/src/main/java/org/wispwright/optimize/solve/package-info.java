@@ -5,7 +5,8 @@
  * <p>Inside: {@link org.wispwright.optimize.solve.SmokeChain} (steps forwards and back under a budget of memory),
  * {@link org.wispwright.optimize.solve.FrameTerms} (what the pictures of the frames owe to the loss),
  * {@link org.wispwright.optimize.solve.SolveLoss} (both together: unknowns to loss and gradient).
- * <p>Words: <i>term</i> = one picture compared with one wanted picture; <i>met</i> = 1 - (note's loss now / for the original).
+ * <p>Words: <i>term</i> = one picture compared with one wanted picture; <i>met</i> = 1 - (note's pyramid
+ * loss now / for the original), whatever it is solved with.
  * <p>May use: render, warp.loss, optimize.flow, force, search, checkpoint. Held by {@code WallsTest}.
  */
 package org.wispwright.optimize.solve;

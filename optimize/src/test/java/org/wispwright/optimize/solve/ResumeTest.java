@@ -41,6 +41,7 @@ class ResumeTest {
                 assertArrayEquals(whole.unknowns(), rest.unknowns(), "from iteration " + states.get(n).search().iterations());
                 assertEquals(whole.losses(), rest.losses());
                 assertEquals(whole.met(), rest.met());
+                assertEquals(whole.noteLosses(), rest.noteLosses());
                 assertEquals(whole.gradients(), rest.gradients());
                 assertEquals(whole.ended(), rest.ended());
                 assertEquals(whole.energyWeight(), rest.energyWeight());

@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.List;
 import java.util.Random;
 import org.junit.jupiter.api.Nested;
 import org.junit.jupiter.api.Test;
@@ -19,7 +20,10 @@ import org.wispwright.optimize.force.ForceBasis;
 import org.wispwright.render.contract.Operator;
 import org.wispwright.render.contract.PullbackContract;
 import org.wispwright.render.lanes.Lanes;
+import org.wispwright.render.picture.Picture;
 import org.wispwright.render.volume.GridShape;
+import org.wispwright.warp.loss.LossChoice;
+import org.wispwright.warp.loss.LossKind;
 
 /**
  * Outside checks O69, O70 for the whole chain unknowns -> force -> 8 steps -> pictures -> loss; and that its gradient has the same bits
@@ -87,7 +91,10 @@ class WholeChainTest {
 
     /** 8 steps, one output: the loss. */
     private static Operator chain(boolean light, int substeps) {
-        SolveProblem problem = windy(light, substeps);
+        return chain(windy(light, substeps));
+    }
+
+    private static Operator chain(SolveProblem problem) {
         SolveLoss loss = loss(problem, wind(problem.flow()), 100, new Lanes(1));
         double[] point = unknowns(problem.flow(), 0.2, 1);
         return new Operator("whole chain", point.length, 1, false, point, unknowns(problem.flow(), 0.6, 2), (in, out) -> {
@@ -128,6 +135,49 @@ class WholeChainTest {
         @Override protected Operator operator() {
             return chain(false, 2);
         }
+    }
+
+    @Nested class WithEdges extends Chain {
+        @Override protected Operator operator() {
+            return chain(solvedWith(windy(false, 1), LossKind.EDGES));
+        }
+    }
+
+    @Nested class WithTransport extends Chain {
+        @Override protected Operator operator() {
+            return chain(solvedWith(windy(false, 1), LossKind.TRANSPORT));
+        }
+    }
+
+    @Nested class WithSilhouette extends Chain {
+        @Override protected Operator operator() {
+            return chain(solvedWith(windy(false, 1), LossKind.SILHOUETTE));
+        }
+    }
+
+    @Nested class WithAllLosses extends Chain {
+        @Override protected Operator operator() {
+            return chain(solvedWith(windy(false, 1), LossKind.values()));
+        }
+    }
+
+    private static SolveProblem solvedWith(SolveProblem problem, LossKind... kinds) {
+        LossChoice choice = new LossChoice(List.of(kinds), "asked for");
+        List<SolveProblem.Note> notes = problem.notes().stream().map(note -> new SolveProblem.Note(note.id(), note.frame(), note.view(),
+                note.weight(), new Wish() {
+                    @Override public Picture wanted(Picture original) {
+                        return note.wish().wanted(original);
+                    }
+
+                    @Override public float[] weights(Picture original) {
+                        return note.wish().weights(original);
+                    }
+
+                    @Override public LossChoice losses(Picture original, Picture wanted) {
+                        return choice;
+                    }
+                })).toList();
+        return new SolveProblem(problem.flow(), problem.views(), problem.look(), notes, problem.holds());
     }
 
     /** Same bits from any number of kept states; O59, O60: never more steps than the plan. */

@@ -29,6 +29,7 @@ import org.wispwright.ui.shot.ShotException;
 import org.wispwright.ui.shot.ShotFolder;
 import org.wispwright.ui.shot.ShotView;
 import org.wispwright.ui.shot.Takes;
+import org.wispwright.warp.loss.LossChoice;
 import org.wispwright.warp.loss.PictureMeasure;
 import org.wispwright.warp.loss.PyramidLoss;
 import org.wispwright.warp.matte.Matte;
@@ -37,9 +38,6 @@ import org.wispwright.warp.retouch.Folds;
 /** Compares takes: the pictures of every note, how far each is met, one sheet for people and one report for programs. */
 public final class CompareWork {
     private static final ObjectMapper JSON = JsonMapper.builder().enable(SerializationFeature.INDENT_OUTPUT).build();
-
-    /** A wish whose loss for the original is below this cannot be told from none. */
-    private static final double LEAST_WISH = 1e-9;
 
     private CompareWork() {
     }
@@ -88,13 +86,15 @@ public final class CompareWork {
         PyramidLoss loss = new PyramidLoss(wanted, weights);
         double start = loss.value(original);
         double startFinest = loss.finest(original);
-        if (!(start > LEAST_WISH && startFinest > 0)) {
+        if (!(start > LossChoice.LEAST_START && startFinest > 0)) {
             throw new ShotException(new Finding("notes/" + note.id() + ".json", "/retouch", "it changes nothing that can be seen on frame "
                     + note.frame()
                     + (note.weighBy().isPresent() ? ", where its weighBy counts" : "") + "; check where its strokes and handles lie."));
         }
         double met = 1 - loss.value(got) / start;
         double finest = loss.finest(got) / startFinest;
+        LossChoice choice = wish.losses(original, wanted);
+        double fall = fall(note, choice, original, wanted, weights, got);
         double change = 0;
         for (Hold hold : note.holds()) {
             if (hold.holds(note.frame())) {
@@ -103,7 +103,15 @@ public final class CompareWork {
         }
         return new Comparison.OfNote(note, original, shown, wanted, got, met, finest, change,
                 new Comparison.Mass(PictureMeasure.mass(original), PictureMeasure.mass(wanted), PictureMeasure.mass(got)),
-                Folds.of(note.retouch(), original));
+                Folds.of(note.retouch(), original), choice, fall);
+    }
+
+    private static double fall(Note note, LossChoice choice, Picture original, Picture wanted, float[] weights, Picture got) {
+        try {
+            return choice.fall(original, wanted, weights, got);
+        } catch (IllegalArgumentException refused) {
+            throw new ShotException(new Finding("notes/" + note.id() + ".json", "/loss", refused.getMessage() + "."), refused);
+        }
     }
 
     /** The sheet of a comparison. */
@@ -133,6 +141,7 @@ public final class CompareWork {
             ObjectNode one = list.addObject().put("id", n.note().id()).put("frame", n.note().frame()).put("view", n.note().view())
                     .put("met", n.met()).put("finestErrorRatio", n.finestErrorRatio()).put("holdChange", n.holdChange())
                     .put("massBefore", n.mass().before()).put("massWanted", n.mass().wanted()).put("massGot", n.mass().got())
+                    .put("loss", n.loss().inWords()).put("lossWhy", n.loss().why()).put("lossFall", n.lossFall())
                     .put("foldedCells", n.folds().cells()).put("worstJacobian", n.folds().worstJacobian());
             n.folds().worst().ifPresent(p -> one.putArray("worstFold").add(p.x()).add(p.y()));
         }

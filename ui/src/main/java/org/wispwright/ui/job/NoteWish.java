@@ -5,12 +5,13 @@ import org.wispwright.optimize.solve.Wish;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.ui.shot.Hold;
 import org.wispwright.ui.shot.Note;
+import org.wispwright.warp.loss.LossChoice;
 import org.wispwright.warp.retouch.Retoucher;
 
 /**
- * A note's retouch as a wish of the solve: applied anew at any raster. A pixel weighs 1 where the retouch acts and in the note's
- * holds on its frame, {@link SolveProblem#WEIGHT_ELSEWHERE} elsewhere, with a soft edge between; all times the matte that the note
- * weighs by, if it has one.
+ * A note's retouch as a wish of the solve: applied anew at any raster, compared by the losses that the note names or
+ * by the program's choice. A pixel weighs 1 where the retouch acts and in the note's holds on its frame,
+ * {@link SolveProblem#WEIGHT_ELSEWHERE} elsewhere, with a soft edge between; all times the matte that the note weighs by, if it has one.
  */
 final class NoteWish implements Wish {
     /** Width of the soft edge around what is retouched, fraction of the height. */
@@ -25,6 +26,11 @@ final class NoteWish implements Wish {
     @Override
     public Picture wanted(Picture original) {
         return Retoucher.wanted(note.retouch(), original);
+    }
+
+    @Override
+    public LossChoice losses(Picture original, Picture wanted) {
+        return note.loss().orElseGet(() -> LossChoice.of(original, wanted));
     }
 
     @Override

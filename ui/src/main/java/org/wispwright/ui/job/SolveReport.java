@@ -21,14 +21,20 @@ public final class SolveReport {
                 .put("departureBeforeLastNote", result.departure().before()).put("gradients", solve.gradients())
                 .put("solveSeconds", solve.seconds()).put("seconds", result.seconds()).put("peakMemoryBytes", PeakMemory.bytes())
                 .put("energyShare", solve.energyShare()).put("ended", solve.ended());
+        ArrayNode losses = top.putArray("noteLosses");
+        for (int n = 0; n < solve.noteLosses().size(); n++) {
+            SolveResult.NoteLoss note = solve.noteLosses().get(n);
+            losses.addObject().put("id", result.comparison().notes().get(n).note().id()).put("loss", note.choice().inWords())
+                    .put("why", note.choice().why()).put("fall", note.fall());
+        }
         ArrayNode bands = top.putArray("bands");
         for (SolveResult.BandRun run : solve.bands()) {
             bands.addObject().put("cells", run.grid().inWords()).put("low", run.band().low()).put("high", run.band().high())
                     .put("splines", run.band().splines()).put("unknowns", run.unknowns()).put("iterations", run.iterations())
                     .put("gradients", run.gradients()).put("loss", run.loss()).put("seconds", run.seconds());
         }
-        ArrayNode losses = top.putArray("losses");
-        solve.losses().forEach(losses::add);
+        ArrayNode course = top.putArray("losses");
+        solve.losses().forEach(course::add);
         return top;
     }
 

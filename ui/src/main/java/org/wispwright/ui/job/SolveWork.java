@@ -21,6 +21,7 @@ import org.wispwright.ui.shot.ShotFolder;
 import org.wispwright.ui.shot.TakeDraft;
 import org.wispwright.ui.shot.TakeRecord;
 import org.wispwright.ui.shot.Takes;
+import org.wispwright.warp.loss.LossChoice;
 
 /** Solves a shot's notes and adds a take. Makes take 0 first if it is not there. Same bits for any number of lanes. */
 public final class SolveWork {
@@ -83,6 +84,10 @@ public final class SolveWork {
                                SolveSearch search, Lanes lanes, Progress progress, Cancel cancel, long start) {
         FlowSetup flow = shot.flow();
         Takes takes = Takes.of(folder);
+        for (int n = 0; n < solve.noteLosses().size(); n++) {
+            LossChoice choice = solve.noteLosses().get(n).choice();
+            progress.milestone("note " + shot.notes().get(n).id() + ": solved with loss " + choice.inWords() + " (" + choice.why() + ")");
+        }
         double forceRms = norm(solve.unknowns());
         try (TakeDraft draft = takes.draft()) {
             FrameWriting writing = new FrameWriting(flow, draft, "take", progress);
@@ -109,13 +114,18 @@ public final class SolveWork {
     private static TakeRecord record(Shot shot, Manner manner, SolveResult solve, double divergenceMax, double massRatio, double forceRms) {
         ObjectNode settings = TakeRecord.object().put("stay", manner.stay()).put("quality", manner.quality().name().toLowerCase(Locale.ROOT));
         settings.set("notes", notes(shot));
+        ObjectNode losses = settings.putObject("noteLosses");
         settings.put("untilLoss", manner.until().loss());
         ObjectNode figures = TakeRecord.object().put("gradients", solve.gradients()).put("forceRms", forceRms).put("massRatio", massRatio)
                 .put("divergenceMax", divergenceMax).put("energyWeight", solve.energyWeight()).put("energyShare", solve.energyShare())
                         .put("ended", solve.ended());
         ObjectNode met = figures.putObject("met");
+        ObjectNode falls = figures.putObject("lossFall");
         for (int n = 0; n < Math.min(shot.notes().size(), solve.met().size()); n++) {
-            met.put(shot.notes().get(n).id(), solve.met().get(n));
+            String id = shot.notes().get(n).id();
+            met.put(id, solve.met().get(n));
+            losses.put(id, solve.noteLosses().get(n).choice().inWords());
+            falls.put(id, solve.noteLosses().get(n).fall());
         }
         return new TakeRecord(TakeRecord.Kind.SOLVE, Build.version(), TakeRecord.digest(shot.flow()), settings, figures, solve.losses());
     }

@@ -3,6 +3,7 @@ package org.wispwright.ui.shot;
 import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
+import org.wispwright.warp.loss.LossChoice;
 import org.wispwright.warp.matte.Matte;
 import org.wispwright.warp.retouch.Retouch;
 
@@ -17,9 +18,10 @@ import org.wispwright.warp.retouch.Retouch;
  * @param weighBy how much each pixel counts, beside what the retouch and the holds say; empty for alike
  * @param retouch what makes the wanted picture of the original
  * @param holds what must stay
+ * @param loss what it is solved with, if it says so; else the program chooses
  */
 public record Note(String id, String words, int frame, String view, double weight, Optional<Matte> weighBy, Retouch retouch,
-        List<Hold> holds) {
+        List<Hold> holds, Optional<LossChoice> loss) {
     /** Checks the weight. @throws IllegalArgumentException if it is not a finite number above 0 */
     public Note {
         Objects.requireNonNull(weighBy, "note: weighBy");

@@ -3,6 +3,8 @@ package org.wispwright.ui.shot;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import org.wispwright.warp.loss.LossChoice;
+import org.wispwright.warp.loss.LossKind;
 import org.wispwright.warp.matte.Matte;
 import org.wispwright.warp.retouch.Operation;
 import org.wispwright.warp.retouch.Retouch;
@@ -61,7 +63,7 @@ final class NoteReader {
         if (!id.matches(ID)) {
             throw top.fault("the file name '" + fileName + "'", "letters, digits, '-' and '_' before .json, at most 64", "rename the file");
         }
-        top.version(SetupReader.FORMAT).only("wispwright", "on", "words", "frame", "view", "weight", "weighBy", "retouch", "holds");
+        top.version(SetupReader.FORMAT).only("wispwright", "on", "words", "frame", "view", "weight", "weighBy", "retouch", "holds", "loss");
         String words = top.need("words").text(2000);
         int frame = top.need("frame").whole(0, Integer.MAX_VALUE);
         String view = top.need("view").text(100);
@@ -76,7 +78,13 @@ final class NoteReader {
                 holds.add(hold(place, frame));
             }
         }
-        return top.make(() -> new Note(id, words, frame, view, weight, weighBy, list.make(() -> new Retouch(operations)), holds));
+        Optional<LossChoice> loss = top.ask("loss").map(NoteReader::loss);
+        return top.make(() -> new Note(id, words, frame, view, weight, weighBy, list.make(() -> new Retouch(operations)), holds, loss));
+    }
+
+    private static LossChoice loss(JsonPlace place) {
+        List<LossKind> kinds = place.items(1, LossKind.values().length).stream().map(item -> item.choice(LossKind.class)).toList();
+        return place.make(() -> new LossChoice(kinds, "as the note says"));
     }
 
     private static Hold hold(JsonPlace place, int noteFrame) {

@@ -74,7 +74,7 @@ public final class ShotCheck {
      *
      * @throws ShotException with the first finding, if there is any
      */
-    static Shot requireForNotes(ShotFolder folder) {
+    public static Shot requireForNotes(ShotFolder folder) {
         ShotCheck check = new ShotCheck(folder, Long.MAX_VALUE);
         Result result = check.run(false);
         check.findings.throwFirst();

@@ -138,6 +138,7 @@ class CommandsTest {
         for (JsonNode note : notes) {
             assertEquals(0.0, note.get("met").doubleValue(), note.toString());
             assertEquals(1.0, note.get("finestErrorRatio").doubleValue(), note.toString());
+            assertEquals(0.0, note.get("lossFall").doubleValue(), 1e-12, note.toString());
             assertEquals(0.0, note.get("holdChange").doubleValue(), note.toString());
         }
         assertEquals(48, ImageIO.read(out.resolve("lean.difference.png").toFile()).getWidth());

@@ -87,6 +87,30 @@ class FaultsTest {
     }
 
     @Test
+    void unknownLoss() {
+        shot.swap("notes/lean.json", "\"weight\"", "\"loss\": [\"pyramid\", \"outline\"], \"weight\"");
+        refused("notes/lean.json at /loss/1", "\"outline\"", "\"pyramid\" or \"edges\" or \"transport\" or \"silhouette\"");
+    }
+
+    @Test
+    void lossNamedTwice() {
+        shot.swap("notes/lean.json", "\"weight\"", "\"loss\": [\"edges\", \"edges\"], \"weight\"");
+        refused("notes/lean.json at /loss", "none twice");
+    }
+
+    @Test
+    void noLoss() {
+        shot.swap("notes/lean.json", "\"weight\"", "\"loss\": [], \"weight\"");
+        refused("notes/lean.json at /loss", "1 to 4");
+    }
+
+    @Test
+    void lossThatIsNoList() {
+        shot.swap("notes/lean.json", "\"weight\"", "\"loss\": \"pyramid\", \"weight\"");
+        refused("notes/lean.json at /loss", "list");
+    }
+
+    @Test
     void newerVersion() {
         shot.swap("shot.json", "\"wispwright\": 1", "\"wispwright\": 2, \"clouds\": []");
         refused("shot.json at /wispwright", "format 2", "newer");

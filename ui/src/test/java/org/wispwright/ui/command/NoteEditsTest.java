@@ -53,7 +53,7 @@ class NoteEditsTest {
     void offIsOffForTheOtherCommands() {
         note("off", "lean");
         assertTrue(Run.of("check", shot.folder().toString()).out().contains("notes 2 (1 off)"));
-        assertTrue(note("list").out().contains("weight 1  off  Lean"));
+        assertTrue(note("list").out().contains("weight 1  loss auto  off  Lean"));
     }
 
     @Test

@@ -27,16 +27,33 @@ class NoteListTest {
     @Test
     void listsEveryNote() throws IOException {
         shot.swap("notes/lean.json", "\"wispwright\": 1,", "\"wispwright\": 1, \"on\": false,");
+        shot.swap("notes/open.json", "\"wispwright\": 1,", "\"wispwright\": 1, \"loss\": [\"silhouette\", \"transport\"],");
         SortedMap<String, String> before = SmallShot.listing(place);
         Run run = Run.of("note", "list", shot.folder().toString());
         assertEquals(0, run.code(), run.err());
-        assertEquals("lean  frame 1004  view front  weight 1  off  Lean the head to the left.\n"
-                + "open  frame 1006  view side  weight 1  on   Open a gap.\n", run.out().replace("\r\n", "\n"));
+        assertEquals("lean  frame 1004  view front  weight 1  loss auto  off  Lean the head to the left.\n"
+                + "open  frame 1006  view side  weight 1  loss silhouette+transport  on   Open a gap.\n", run.out().replace("\r\n", "\n"));
         JsonNode notes = new ObjectMapper().readTree(Run.of("note", "list", shot.folder().toString(), "--json").out()).get("notes");
         assertFalse(notes.get(0).get("on").booleanValue());
         assertTrue(notes.get(1).get("on").booleanValue());
+        assertEquals("auto", notes.get(0).get("loss").textValue());
+        assertEquals("silhouette+transport", notes.get(1).get("loss").textValue());
         assertEquals("side", notes.get(1).get("view").textValue());
         assertEquals(before, SmallShot.listing(place));
+    }
+
+    /** With take 0 there the program's choice is told; a small lean is within the pyramid's sight. A take of another set-up is none. */
+    @Test
+    void tellsTheProgramsChoiceOnceTakeZeroIsThere() throws IOException {
+        assertEquals(0, Run.of("simulate", shot.folder().toString()).code());
+        shot.swap("notes/open.json", "\"wispwright\": 1,", "\"wispwright\": 1, \"loss\": [\"edges\"],");
+        String told = Run.of("note", "list", shot.folder().toString()).out();
+        assertTrue(told.contains("loss auto (pyramid)  on ") && told.contains("loss edges  on "), told);
+        JsonNode notes = new ObjectMapper().readTree(Run.of("note", "list", shot.folder().toString(), "--json").out()).get("notes");
+        assertEquals("pyramid", notes.get(0).get("lossChosen").textValue());
+        assertEquals("as the note says", notes.get(1).get("lossWhy").textValue());
+        shot.swap("shot.json", "\"buoyancy\": 3.0", "\"buoyancy\": 2.5");
+        assertTrue(Run.of("note", "list", shot.folder().toString()).out().contains("loss auto  on "));
     }
 
     @Test

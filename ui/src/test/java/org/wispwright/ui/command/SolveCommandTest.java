@@ -47,6 +47,27 @@ class SolveCommandTest {
         assertTrue(Files.isRegularFile(shot.folder().resolve("takes/001/velocity-z.1006.npy")));
     }
 
+    /** What a note is solved with is told, kept with the take, and can be asked for; met stays the pyramid loss's. */
+    @Test
+    void tellsWhatNotesAreSolvedWith() throws IOException {
+        SmallShot shot = SmallShot.in(place.resolve("yard"));
+        shot.swap("notes/open.json", "\"wispwright\": 1,", "\"wispwright\": 1, \"loss\": [\"edges\", \"silhouette\"],");
+        Run run = Run.of("solve", shot.folder().toString(), "--until", "iterations=3", "--json");
+        assertEquals(0, run.code(), run.err());
+        assertTrue(run.err().contains("note open: solved with loss edges+silhouette (as the note says)"), run.err());
+        JsonNode figures = new ObjectMapper().readTree(run.out());
+        assertEquals("edges+silhouette", figures.get("noteLosses").get(1).get("loss").textValue());
+        assertEquals("pyramid", figures.get("notes").get(0).get("loss").textValue());
+        JsonNode lean = figures.get("notes").get(0);
+        assertEquals(lean.get("met").doubleValue(), lean.get("lossFall").doubleValue(), 1e-12);
+        JsonNode take = new ObjectMapper().readTree(shot.folder().resolve("takes/001/take.json").toFile());
+        assertEquals("edges+silhouette", take.get("settings").get("noteLosses").get("open").textValue());
+        assertEquals(figures.get("noteLosses").get(1).get("fall").doubleValue(),
+                take.get("figures").get("lossFall").get("open").doubleValue());
+        String said = Run.of("compare", shot.folder().toString(), "--takes", "0,1", "--out", place.resolve("out").toString()).out();
+        assertTrue(said.contains("(loss pyramid)") && said.contains("(loss edges+silhouette)"), said);
+    }
+
     /** Every file of both takes, take.json and force.npy included. */
     @Test
     void sameBytesFromOneAndTwoThreadsAndFromTwoRuns() {

@@ -23,7 +23,7 @@ class NoteWishTest {
     private static float[] weights(Optional<Matte> weighBy) {
         Retouch retouch = new Retouch(List.of(new Stroke(Brush.ADD, 0.1, 1, 0, List.of(new Point(0.5, 0.5)), Optional.empty())));
         Hold hold = new Hold(new Region.Rectangle(0, 0.8, 1, 1, 0), 3, 3);
-        return new NoteWish(new Note("a", "words", 3, "front", 1, weighBy, retouch, List.of(hold))).weights(ORIGINAL);
+        return new NoteWish(new Note("a", "words", 3, "front", 1, weighBy, retouch, List.of(hold), Optional.empty())).weights(ORIGINAL);
     }
 
     /** By hand: 1 where retouched and held, 1/2 elsewhere; a matte of 1/4 on the left and 1 on the right makes a quarter of the left. */
