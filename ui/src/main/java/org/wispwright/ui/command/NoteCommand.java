@@ -8,10 +8,12 @@ import picocli.CommandLine.Spec;
 
 /** {@code note WHAT SHOT}: works on the notes of a shot without a screen; each WHAT is a command of its own. */
 @Command(name = "note", sortOptions = false, synopsisSubcommandLabel = "WHAT",
-        description = "List the notes of a shot, set them aside, copy and delete them, make them of painted frames; every change can be"
-                + " taken back.",
-        subcommands = {NoteListCommand.class, NoteOffCommand.class, NoteOnCommand.class, NoteCopyCommand.class,
-                NotePaintOverCommand.class, NoteSilhouetteCommand.class, NoteDeleteCommand.class, NoteUndoCommand.class},
+        description = "List the notes of a shot, make and change them, set them aside, carry them to other frames, make them of painted "
+                + "frames; every change can be taken back.",
+        subcommands = {NoteListCommand.class, NoteAddCommand.class, NoteSetCommand.class, NoteOffCommand.class,
+                NoteOnCommand.class, NoteCopyCommand.class, NoteCarryCommand.class, NoteBetweenCommand.class,
+                NotePaintOverCommand.class, NoteSilhouetteCommand.class, NoteDeleteCommand.class, NoteUndoCommand.class,
+                NoteRedoCommand.class},
         footer = {"", "Examples:",
             "  java -jar wispwright.jar note list samples/kiln-yard",
             "  java -jar wispwright.jar note off samples/kiln-yard open-a-gap",

@@ -13,7 +13,7 @@ import picocli.CommandLine.Parameters;
 
 /** Which shot a command works on. Mixed into the commands that run something. */
 final class ShotChoice {
-    @Parameters(paramLabel = "SHOT", description = "The shot folder.")
+    @Parameters(index = "0", paramLabel = "SHOT", description = "The shot folder.")
     private Path folder;
 
     @Mixin

@@ -20,11 +20,16 @@ public final class PictureFile {
      * @throws ShotException if the place cannot be written to
      */
     public static void write(Picture picture, Path out) {
+        write(picture, out, PngFile.Depth.EIGHT);
+    }
+
+    /** The same with more bits, or as many. @throws ShotException if the place cannot be written to */
+    public static void write(Picture picture, Path out, PngFile.Depth depth) {
         try {
             if (Files.isDirectory(out)) {
                 throw new IOException("it is a folder");
             }
-            PngFile.write(picture, out, PngFile.Depth.EIGHT);
+            PngFile.write(picture, out, depth);
         } catch (IOException refused) {
             throw cannotWrite(out, refused);
         }

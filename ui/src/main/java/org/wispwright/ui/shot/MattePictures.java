@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.view.View;
 import org.wispwright.warp.matte.ImageMatte;
@@ -56,7 +57,7 @@ final class MattePictures {
             read.put(channel + " " + file, plain);
             keptPixels += pixels.length;
         }
-        return new ImageMatte(plain.width(), plain.height(), plain.pixels(), feather);
+        return new ImageMatte(plain.width(), plain.height(), plain.pixels(), feather, Optional.of(new ImageMatte.Source(file, channel)));
     }
 
     private void requireRoom(JsonPlace place, String file, RenderedFrame.StatedSize size) {

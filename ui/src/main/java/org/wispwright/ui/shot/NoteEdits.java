@@ -1,11 +1,17 @@
 package org.wispwright.ui.shot;
 
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.node.JsonNodeFactory;
+import com.fasterxml.jackson.databind.node.ObjectNode;
 import com.fasterxml.jackson.databind.node.TextNode;
 import java.nio.charset.StandardCharsets;
+import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
 import java.util.stream.Stream;
+import org.wispwright.ui.shot.NoteJournal.FileChange;
 
 /**
  * What a person does to the notes of a shot without a screen. Every change is in the journal before it is made, so that
@@ -14,12 +20,12 @@ import java.util.stream.Stream;
 public final class NoteEdits {
     private final ShotFolder folder;
     private final NoteFiles files;
-    private final NoteJournal journal;
+    private final NoteChanges changes;
 
     private NoteEdits(ShotFolder folder) {
         this.folder = folder;
         this.files = new NoteFiles(folder);
-        this.journal = new NoteJournal(folder);
+        this.changes = new NoteChanges(folder);
     }
 
     /** The notes of a shot folder. */
@@ -37,18 +43,30 @@ public final class NoteEdits {
     }
 
     /**
-     * What was taken back.
+     * A file after a change was taken back or made again.
      *
-     * @param command the change, such as {@code note off lean}
-     * @param file the note's file
+     * @param file such as {@code notes/lean.json}
      * @param there whether there is such a file now
-     * @param changed false if the file was back already, by hand or because the change was cut short
      */
-    public record Undone(String command, String file, boolean there, boolean changed) {
+    public record FileNow(String file, boolean there) {
     }
 
     /**
-     * All notes in the order of their ids. Reads the set-up and the notes with their mattes, no rendered frame.
+     * What was taken back or made again.
+     *
+     * @param command the change, such as {@code note off lean}
+     * @param files its files
+     * @param changed false if all of them were so already, by hand or because the change was cut short
+     */
+    public record Moved(String command, List<FileNow> files, boolean changed) {
+        /** Keeps a copy. */
+        public Moved {
+            files = List.copyOf(files);
+        }
+    }
+
+    /**
+     * All notes in the order of their ids. Reads the set-up and the notes, no picture.
      *
      * @throws ShotException with the first thing that is wrong with them
      */
@@ -74,12 +92,14 @@ public final class NoteEdits {
         }
         String after = NoteText.with(before, "on", String.valueOf(on));
         NoteReader.note(parsed(file, after), id + ".json", folder);
-        change("note " + (on ? "on " : "off ") + id, file, Optional.of(before), Optional.of(after));
+        changes.make("note " + (on ? "on " : "off ") + id,
+                List.of(new FileChange(file, Optional.of(FileBytes.of(before)), Optional.of(FileBytes.of(after)))));
         return true;
     }
 
     /**
-     * Makes a note with the same retouch, words and holds on another frame. Of the text only {@code frame} and {@code view} differ.
+     * Makes a note with the same retouch, words and holds on another frame. Of the text only {@code frame} and {@code view} differ;
+     * files beside the note are copied under the new id.
      *
      * @param view another view; empty for the same
      * @param newId its id; empty for the old one with {@code -frame} behind it
@@ -88,13 +108,43 @@ public final class NoteEdits {
      */
     public Note copy(String id, int frame, Optional<String> view, Optional<String> newId) {
         String to = newId.orElse(id + "-" + frame);
+        String file = NoteFiles.file(to);
         String text = files.need(id);
+        Shot shot = ShotCheck.requireForNotes(folder);
+        requireFree(file);
+        requireRoom(1);
         String after = NoteText.with(text, "frame", String.valueOf(frame));
         if (view.isPresent()) {
             after = NoteText.with(after, "view", new TextNode(view.get()).toString());
         }
-        return make(to, after, "note copy " + id + " --frame " + frame + view.map(v -> " --view " + v).orElse("")
-                + newId.map(n -> " --id " + n).orElse(""));
+        Note note = fitting(file, after, to, shot);
+        List<FileChange> all = new ArrayList<>();
+        all.add(new FileChange(file, Optional.empty(), Optional.of(FileBytes.of(after))));
+        all.addAll(copiesOfBeside(id, to));
+        changes.make("note copy " + id + " --frame " + frame + view.map(v -> " --view " + v).orElse("")
+                + newId.map(n -> " --id " + n).orElse(""), all);
+        return note;
+    }
+
+    /**
+     * Makes a note from values.
+     *
+     * @param values words, frame, view and retouch must be there
+     * @return the new note
+     * @throws ShotException if the shot or the new note is not as it must be, the name is taken, or the disk refuses
+     */
+    public Note add(String id, NoteValues values) {
+        String file = NoteFiles.file(id);
+        Shot shot = ShotCheck.requireForNotes(folder);
+        requireFree(file);
+        requireRoom(1);
+        ObjectNode object = JsonNodeFactory.instance.objectNode().put("wispwright", SetupReader.FORMAT);
+        object.setAll(values.values());
+        String text = NoteText.of(object);
+        Note note = fitting(file, text, id, shot);
+        changes.make("note add --id " + id + values.inWords(), List.of(new FileChange(file, Optional.empty(),
+                Optional.of(FileBytes.of(text)))));
+        return note;
     }
 
     /**
@@ -104,76 +154,141 @@ public final class NoteEdits {
      * @throws ShotException if the shot or the new note is not as it must be, the name is taken, or the disk refuses
      */
     Note make(String id, String text, String command) {
-        requireFree(id);
+        requireNew(id);
         String file = NoteFiles.file(id);
-        Shot shot = ShotCheck.requireForNotes(folder);
-        JsonPlace top = parsed(file, text);
-        Note note = NoteReader.note(top, id + ".json", folder);
-        ShotCheck.requireFits(note, top.pictures(), shot);
-        change(command, file, Optional.empty(), Optional.of(text));
+        Note note = fitting(file, text, id, ShotCheck.requireForNotes(folder));
+        changes.make(command, List.of(new FileChange(file, Optional.empty(), Optional.of(FileBytes.of(text)))));
         return note;
     }
 
     /** Refuses an id that is none, or is taken, or one note too many. */
-    void requireFree(String id) {
-        String file = NoteFiles.file(id);
-        if (files.isTaken(file)) {
-            throw new ShotException(Finding.of(file, "", "a note of this name already", "a name that is free", "give another with --id"));
-        }
-        if (files.ids().size() >= NoteReader.MOST_NOTES) {
-            throw new ShotException(Finding.of("notes", "", NoteReader.MOST_NOTES + " notes already", "room for one more",
-                    "delete one, or split the shot"));
-        }
+    void requireNew(String id) {
+        requireFree(NoteFiles.file(id));
+        requireRoom(1);
     }
 
     /**
-     * Removes a note's file. It need not be in order, but must be UTF-8 text so that it can be put back.
+     * Gives a note other values; every other character of its file stays.
+     *
+     * @return false if the note has these values already, written alike; then nothing is written
+     * @throws ShotException if there is no such note, the shot or the changed note is not as it must be, or the disk refuses
+     */
+    public boolean set(String id, NoteValues values) {
+        String file = NoteFiles.file(id);
+        String before = files.need(id);
+        Shot shot = ShotCheck.requireForNotes(folder);
+        String after = before;
+        for (Map.Entry<String, JsonNode> value : values.values().entrySet()) {
+            after = NoteText.with(after, value.getKey(), NoteText.value(value.getValue()));
+        }
+        fitting(file, after, id, shot);
+        return changes.make("note set " + id + values.inWords(), List.of(new FileChange(file, Optional.of(FileBytes.of(before)),
+                Optional.of(FileBytes.of(after)))));
+    }
+
+    /**
+     * Makes several notes at once; one change, taken back as one. Each takes the files that lie beside the note it was made from.
+     *
+     * @param command what the person asked for
+     * @param from the note they were made from
+     * @param notes their ids differ
+     * @param on whether they take part
+     * @throws ShotException if the shot or a new note is not as it must be, a name is taken, or the disk refuses; then there is none
+     */
+    public void addAll(String command, String from, List<Note> notes, boolean on) {
+        requireFit(notes);
+        List<FileChange> all = new ArrayList<>();
+        for (Note note : notes) {
+            String file = NoteFiles.file(note.id());
+            String text = NoteText.of(RetouchWriter.note(note, on));
+            NoteReader.note(parsed(file, text), note.id() + ".json", folder);
+            all.add(new FileChange(file, Optional.empty(), Optional.of(FileBytes.of(text))));
+            all.addAll(copiesOfBeside(from, note.id()));
+        }
+        changes.make(command, all);
+    }
+
+    /** Refuses notes that could not be added: of frames or a view that the shot does not have, of names that are taken, or too many. */
+    public void requireFit(List<Note> notes) {
+        Shot shot = ShotCheck.requireForNotes(folder);
+        for (Note note : notes) {
+            requireFree(NoteFiles.file(note.id()));
+            ShotCheck.requireFits(note, new MattePictures(folder, Long.MAX_VALUE), shot);
+        }
+        requireRoom(notes.size());
+    }
+
+    /** A note and whether it takes part. @throws ShotException if there is none of that id, or the notes are not in order */
+    public Listed need(String id) {
+        files.need(id);
+        return list().stream().filter(listed -> listed.note().id().equals(id)).findFirst().orElseThrow();
+    }
+
+    /**
+     * Removes a note's file and what lies beside it. It need not be in order, but must be UTF-8 text.
      *
      * @throws ShotException if there is no such note, or the disk refuses
      */
     public void delete(String id) {
-        String file = NoteFiles.file(id);
-        change("note delete " + id, file, Optional.of(files.need(id)), Optional.empty());
+        List<FileChange> all = new ArrayList<>();
+        all.add(new FileChange(NoteFiles.file(id), Optional.of(FileBytes.of(files.need(id))), Optional.empty()));
+        for (String file : files.beside(id)) {
+            all.add(new FileChange(file, files.bytes(file), Optional.empty()));
+        }
+        changes.make("note delete " + id, all);
     }
 
     /**
      * Takes back the last change that was not taken back yet.
      *
-     * @throws ShotException if there is none, the file has been changed by hand since, or the disk refuses
+     * @throws ShotException if there is none, a file has been changed by hand since, or the disk refuses
      */
-    public Undone undo() {
-        NoteJournal.Entry last = journal.last().orElseThrow(() -> new ShotException(Finding.of(NoteJournal.FILE, "", "no change",
-                "a change made by 'note' to take back", "there is nothing to do")));
-        Optional<String> now = files.text(last.file());
-        boolean changed = now.equals(last.after());
-        if (changed) {
-            files.put(last.file(), last.before());
-        } else if (!now.equals(last.before())) {
-            throw new ShotException(Finding.of(last.file(), "", now.isEmpty() ? "no file" : "text that was changed by hand",
-                    last.after().isEmpty() ? "no file there, as '" + last.command() + "' left it"
-                            : "the text that '" + last.command() + "' left",
-                    "put that back, or remove the last line of " + NoteJournal.FILE + " to keep what is there"));
+    public Moved undo() {
+        return changes.undo();
+    }
+
+    /**
+     * Makes again the change that was taken back last, if no other was made since.
+     *
+     * @throws ShotException if there is none, a file has been changed by hand since, or the disk refuses
+     */
+    public Moved redo() {
+        return changes.redo();
+    }
+
+    private List<FileChange> copiesOfBeside(String id, String to) {
+        List<FileChange> copies = new ArrayList<>();
+        for (String beside : files.beside(id)) {
+            String copied = "notes/" + to + beside.substring(("notes/" + id).length());
+            requireFree(copied);
+            copies.add(new FileChange(copied, Optional.empty(), files.bytes(beside)));
         }
-        journal.removeLast();
-        return new Undone(last.command(), last.file(), last.before().isPresent(), changed);
+        return copies;
+    }
+
+    private void requireRoom(int more) {
+        int there = files.ids().size();
+        if (there + more > NoteReader.MOST_NOTES) {
+            throw new ShotException(Finding.of("notes", "", there + " notes and " + more + " to come", "at most " + NoteReader.MOST_NOTES,
+                    "make fewer, delete some, or split the shot"));
+        }
+    }
+
+    private void requireFree(String file) {
+        if (files.isTaken(file)) {
+            throw new ShotException(Finding.of(file, "", (file.endsWith(".json") ? "a note" : "a file") + " of this name already", "a name that is free", "give another with --id"));
+        }
+    }
+
+    /** The note of a text, refused if it does not fit the shot. */
+    private Note fitting(String file, String text, String id, Shot shot) {
+        JsonPlace top = parsed(file, text);
+        Note note = NoteReader.note(top, id + ".json", folder);
+        ShotCheck.requireFits(note, top.pictures(), shot);
+        return note;
     }
 
     private JsonPlace parsed(String file, String text) {
         return JsonDoor.parse(file, text.getBytes(StandardCharsets.UTF_8)).with(new MattePictures(folder, Long.MAX_VALUE));
-    }
-
-    private void change(String command, String file, Optional<String> before, Optional<String> after) {
-        long bytes = after.map(text -> (long) text.getBytes(StandardCharsets.UTF_8).length).orElse(0L);
-        if (bytes > NoteReader.MOST_BYTES) {
-            throw new ShotException(Finding.of(file, "", bytes + " bytes with this change", "at most " + NoteReader.MOST_BYTES + " bytes",
-                    "shorten the note"));
-        }
-        journal.add(new NoteJournal.Entry(command, file, before, after));
-        try {
-            files.put(file, after);
-        } catch (ShotException refused) {
-            journal.removeLast();
-            throw refused;
-        }
     }
 }

@@ -1,9 +1,6 @@
 package org.wispwright.ui.shot;
 
 import java.io.IOException;
-import java.nio.ByteBuffer;
-import java.nio.charset.CharacterCodingException;
-import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.LinkOption;
 import java.nio.file.Path;
@@ -11,8 +8,18 @@ import java.util.List;
 import java.util.Optional;
 import org.wispwright.render.files.WholeFile;
 
-/** The note files of a shot as texts, to the byte: what is read and written again is the same file. */
+/**
+ * The files of a shot's notes, to the byte: what is read and written again is the same file. A note is {@code notes/ID.json} and
+ * whatever lies beside it under a name that begins with {@code ID.}, such as {@code notes/ID.sky.png}: ids have no dot, so every
+ * file belongs to one note, and goes where its note goes.
+ */
 final class NoteFiles {
+    /** The most a file beside a note may weigh: 64 MiB. */
+    static final long MOST_BYTES_BESIDE = 64L << 20;
+    /** What a file of a note is called. */
+    static final String FILE = "notes/" + NoteReader.ID + "(\\.[A-Za-z0-9_-]{1,64}){1,3}";
+    private static final int MOST_FILES = 100_000;
+
     private final ShotFolder folder;
 
     NoteFiles(ShotFolder folder) {
@@ -34,23 +41,39 @@ final class NoteFiles {
                 .map(name -> name.substring(0, name.length() - ".json".length())).toList();
     }
 
+    /** Files that lie beside a note's own, sorted; folders, such as a paint-over's, stay where they are. @throws ShotException if one has a name that no file of a note may have */
+    List<String> beside(String id) {
+        List<String> files = folder.names("notes", "", MOST_FILES).stream().filter(name -> name.startsWith(id + "."))
+                .map(name -> "notes/" + name).filter(file -> !file.equals(file(id)))
+                .filter(file -> !Files.isDirectory(folder.inside(file), LinkOption.NOFOLLOW_LINKS)).toList();
+        for (String file : files) {
+            if (!file.matches(FILE)) {
+                throw new ShotException(Finding.of(file.replaceAll("\\p{Cntrl}", " "), "", "a name that no file of note '" + id
+                        + "' may have", "letters, digits, '-' and '_' between at most three dots", "rename it or move it away"));
+            }
+        }
+        return files;
+    }
+
     /** Something has this name, be it a file or not. */
     boolean isTaken(String file) {
         return Files.exists(folder.inside(file), LinkOption.NOFOLLOW_LINKS);
     }
 
-    /** The text of a note that must be there. @throws ShotException if it is not, or is no text that can be put back */
+    /** The text of a note that must be there. @throws ShotException if it is not, or is no text */
     String need(String id) {
         String file = file(id);
-        return text(file).orElseThrow(() -> {
+        FileBytes bytes = bytes(file).orElseThrow(() -> {
             List<String> ids = ids();
             return new ShotException(Finding.of(file, "", "no such note", ids.isEmpty() ? "a note of the shot" : "one of "
                     + String.join(", ", ids), NearestWord.to(id, ids).map(near -> "did you mean '" + near + "'").orElse("correct the id")));
         });
+        return bytes.text().orElseThrow(() -> new ShotException(Finding.of(file, "", "bytes that are not UTF-8", "text in UTF-8",
+                "save it as UTF-8 in a text editor")));
     }
 
-    /** The whole text of a file; empty if there is none. @throws ShotException if it cannot be read as text */
-    Optional<String> text(String file) {
+    /** A file's content; empty if there is none. @throws ShotException if it is a link, too large or cannot be read */
+    Optional<FileBytes> bytes(String file) {
         if (!isTaken(file)) {
             return Optional.empty();
         }
@@ -58,31 +81,25 @@ final class NoteFiles {
             throw new ShotException(Finding.of(file, "", "a link", "a file that can be changed and put back",
                     "copy the file into the folder in its place"));
         }
-        return Optional.of(decoded(file, folder.bytes(file, NoteReader.MOST_BYTES)));
+        return Optional.of(new FileBytes(folder.bytes(file, mostBytes(file))));
     }
 
-    /** Puts a text in a file, whole or not at all, or removes the file. @throws ShotException if the disk refuses */
-    void put(String file, Optional<String> text) {
+    /** The most that a file of a note may weigh. */
+    static long mostBytes(String file) {
+        return file.endsWith(".json") ? NoteReader.MOST_BYTES : MOST_BYTES_BESIDE;
+    }
+
+    /** Puts a content in a file, whole or not at all, or removes the file if it is there. @throws ShotException if the disk refuses */
+    void put(String file, Optional<FileBytes> content) {
         Path path = folder.inside(file);
         try {
-            if (text.isEmpty()) {
-                Files.delete(path);
+            if (content.isEmpty()) {
+                Files.deleteIfExists(path);
                 return;
             }
-            byte[] bytes = text.get().getBytes(StandardCharsets.UTF_8);
-            WholeFile.write(path, out -> out.write(bytes));
+            WholeFile.write(path, out -> out.write(content.get().bytes()));
         } catch (IOException refused) {
             throw cannotWrite(file, refused);
-        }
-    }
-
-    /** UTF-8, strictly, a byte order mark kept, so that the same bytes come out again. */
-    static String decoded(String file, byte[] bytes) {
-        try {
-            return StandardCharsets.UTF_8.newDecoder().decode(ByteBuffer.wrap(bytes)).toString();
-        } catch (CharacterCodingException notUtf8) {
-            throw new ShotException(Finding.of(file, "", "bytes that are not UTF-8", "text in UTF-8", "save it as UTF-8 in a text editor"),
-                    notUtf8);
         }
     }
 

@@ -69,17 +69,24 @@ final class NoteReader {
         String view = top.need("view").text(100);
         double weight = top.ask("weight").map(p -> p.positive(1000)).orElse(1.0);
         Optional<Matte> weighBy = top.ask("weighBy").map(MatteReader::matte);
+        Retouch retouch = retouch(top, folder);
+        List<Hold> holds = holds(top, frame);
+        Optional<LossChoice> loss = top.ask("loss").map(NoteReader::loss);
+        return top.make(() -> new Note(id, words, frame, view, weight, weighBy, retouch, holds, loss));
+    }
+
+    /** The list of operations. @throws ShotException if it is not as it must be */
+    static Retouch retouch(JsonPlace top, ShotFolder folder) {
         JsonPlace list = top.need("retouch");
         List<Operation> operations = list.items(1, Retouch.MOST_OPERATIONS).stream().map(place -> RetouchReader.operation(place, folder))
                 .toList();
-        List<Hold> holds = new ArrayList<>();
-        if (top.has("holds")) {
-            for (JsonPlace place : top.need("holds").items(0, MOST_HOLDS)) {
-                holds.add(hold(place, frame));
-            }
-        }
-        Optional<LossChoice> loss = top.ask("loss").map(NoteReader::loss);
-        return top.make(() -> new Note(id, words, frame, view, weight, weighBy, list.make(() -> new Retouch(operations)), holds, loss));
+        return list.make(() -> new Retouch(operations));
+    }
+
+    /** The holds; none if the key is not there. @throws ShotException if one is not as it must be */
+    static List<Hold> holds(JsonPlace top, int noteFrame) {
+        return top.ask("holds").map(list -> list.items(0, MOST_HOLDS).stream().map(place -> hold(place, noteFrame)).toList())
+                .orElse(List.of());
     }
 
     private static LossChoice loss(JsonPlace place) {

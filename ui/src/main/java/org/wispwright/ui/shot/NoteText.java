@@ -3,10 +3,15 @@ package org.wispwright.ui.shot;
 import com.fasterxml.jackson.core.JsonFactory;
 import com.fasterxml.jackson.core.JsonParser;
 import com.fasterxml.jackson.core.JsonToken;
+import com.fasterxml.jackson.databind.JsonNode;
+import com.fasterxml.jackson.databind.node.ObjectNode;
+import com.fasterxml.jackson.databind.node.TextNode;
 import java.io.IOException;
+import java.util.Map;
+import java.util.StringJoiner;
 
 /**
- * Changes one plain value at the top of a note's JSON text and leaves every other character as the person wrote it: order,
+ * Notes as JSON text. Changes one value at the top of a text and leaves every other character as the person wrote it: order,
  * spaces, line ends, a byte order mark. The text must have been read by {@link JsonDoor} before.
  */
 final class NoteText {
@@ -15,12 +20,33 @@ final class NoteText {
     private NoteText() {
     }
 
+    /** A new note's text: keys a line each, and of a list every entry a line. */
+    static String of(ObjectNode note) {
+        StringBuilder text = new StringBuilder("{");
+        String comma = "\n  ";
+        for (Map.Entry<String, JsonNode> entry : note.properties()) {
+            text.append(comma).append(new TextNode(entry.getKey())).append(": ").append(value(entry.getValue()));
+            comma = ",\n  ";
+        }
+        return text.append("\n}\n").toString();
+    }
+
+    /** A value that stands at the top of a note: a list with every entry a line, anything else on one line. */
+    static String value(JsonNode value) {
+        if (!value.isArray() || value.isEmpty()) {
+            return value.toString();
+        }
+        StringJoiner entries = new StringJoiner(",\n    ", "[\n    ", "\n  ]");
+        value.forEach(entry -> entries.add(entry.toString()));
+        return entries.toString();
+    }
+
     /**
      * The text with {@code key} set to {@code value}. A key that is not there is written before the first one, set off by the
      * space that stands before that one.
      *
      * @param value as it is to be written, such as {@code false} or {@code "front"} with its quotes
-     * @throws IllegalArgumentException if the text is not an object with a key, or the key's value is a list or an object
+     * @throws IllegalArgumentException if the text is not an object with a key
      */
     static String with(String text, String key, String value) {
         int mark = text.startsWith("\uFEFF") ? 1 : 0;
@@ -35,12 +61,12 @@ final class NoteText {
                 boolean here = key.equals(parser.currentName());
                 JsonToken token = parser.nextToken();
                 if (here) {
-                    if (!token.isScalarValue()) {
-                        throw new IllegalArgumentException("'" + key + "' is no plain value");
-                    }
                     parser.finishToken();
                     int from = mark + (int) parser.currentTokenLocation().getCharOffset();
-                    return text.substring(0, from) + value + text.substring(endOfValue(text, from));
+                    parser.skipChildren();
+                    int end = token.isScalarValue() ? endOfValue(text, from)
+                            : mark + (int) parser.currentTokenLocation().getCharOffset() + 1;
+                    return text.substring(0, from) + value + text.substring(end);
                 }
                 parser.skipChildren();
             }

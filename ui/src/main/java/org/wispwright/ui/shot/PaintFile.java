@@ -10,6 +10,7 @@ import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
 import java.util.Arrays;
 import java.util.HexFormat;
+import java.util.Optional;
 import org.wispwright.render.volume.NpyFile;
 import org.wispwright.warp.retouch.Repaint;
 
@@ -46,7 +47,7 @@ final class PaintFile {
                 throw place.fault("file '" + file + "' of shape " + Arrays.toString(shape), "(rows, columns, " + Repaint.LAYERS + ")",
                         "name the file that 'note paint-over' wrote");
             }
-            return place.make(() -> new Repaint(shape[1], shape[0], contents.values()));
+            return place.make(() -> new Repaint(shape[1], shape[0], contents.values(), Optional.of(file)));
         } catch (ShotException fault) {
             throw fault.finding().file().equals(place.file()) ? fault
                     : new ShotException(new Finding(place.file(), place.pointer(), "'" + file + "': " + fault.finding().sentence()), fault);

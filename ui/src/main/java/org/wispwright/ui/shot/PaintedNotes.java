@@ -20,7 +20,7 @@ public final class PaintedNotes {
      * @throws ShotException if the id is none or is taken
      */
     public static void requireFree(ShotFolder folder, String id) {
-        NoteEdits.of(folder).requireFree(id);
+        NoteEdits.of(folder).requireNew(id);
     }
 
     /**
@@ -31,7 +31,7 @@ public final class PaintedNotes {
      */
     public static Note make(ShotFolder folder, String id, String words, int frame, String view, Repaint repaint, String command) {
         NoteEdits edits = NoteEdits.of(folder);
-        edits.requireFree(id);
+        edits.requireNew(id);
         boolean wasThere = PaintFile.isThere(folder, id, repaint);
         String file = PaintFile.write(folder, id, repaint);
         ObjectNode note = JSON.createObjectNode().put("wispwright", SetupReader.FORMAT).put("words", words).put("frame", frame)

@@ -1,5 +1,6 @@
 package org.wispwright.ui.command;
 
+import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
@@ -25,6 +26,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 /** {@code note off}, {@code on}, {@code copy}, {@code delete} and {@code undo}: what they change on disk, and what they refuse. */
 class NoteEditsTest {
     private static final String JOURNAL = "notes/.journal.jsonl";
+    private static final String AGAIN = "notes/.taken-back.jsonl";
 
     @TempDir
     private Path place;
@@ -117,7 +119,7 @@ class NoteEditsTest {
         shot.write("notes/lean.json", SmallShot.LEAN);
         Run first = note("undo");
         assertEquals(0, first.code(), first.err());
-        assertTrue(first.out().contains("as before already"), first.out());
+        assertTrue(first.out().contains("was so already"), first.out());
         assertTrue(note("undo").out().contains("note off open"));
         assertEquals(SmallShot.OPEN, text("notes/open.json"));
     }
@@ -152,13 +154,91 @@ class NoteEditsTest {
     void aDamagedJournalIsRefusedAndStopsEveryChange() throws IOException {
         note("off", "lean");
         String whole = text(JOURNAL);
-        for (String bad : new String[] {whole.substring(0, whole.length() / 2), "[]\n", "{}\n",
+        for (String bad : new String[] {whole.substring(0, whole.length() / 2) + "\n", "[]\n", "{}\n", "\n",
                 whole.replace("\"wispwright\":1", "\"wispwright\":9"), whole.replace("notes/lean.json", "../shot.json"),
-                whole.replace("\"before\"", "\"befour\"")}) {
+                whole.replace("\"before\"", "\"befour\""), whole.replaceAll("\"files\":.*", "\"files\":[]}")}) {
             shot.write(JOURNAL, bad);
             refused(new String[] {"undo"}, JOURNAL);
             refused(new String[] {"delete", "open"}, JOURNAL);
         }
+    }
+
+    /** A crash while a line was being written: no file had been touched yet, so the piece of a line means nothing. */
+    @Test
+    void aLineThatWasCutShortIsLeftOut() throws IOException {
+        note("off", "lean");
+        String one = text(JOURNAL);
+        note("off", "open");
+        String both = text(JOURNAL);
+        for (int cut : new int[] {one.length() + 1, one.length() + 40, both.length() - 2}) {
+            shot.write(JOURNAL, both.substring(0, cut));
+            shot.write("notes/open.json", SmallShot.OPEN);
+            assertEquals(0, note("delete", "open").code());
+            assertTrue(text(JOURNAL).startsWith(one) && text(JOURNAL).lines().count() == 2, text(JOURNAL));
+            assertEquals(0, note("undo").code());
+            assertEquals(one, text(JOURNAL));
+            assertEquals(SmallShot.OPEN, text("notes/open.json"));
+        }
+        shot.write(JOURNAL, one.stripTrailing());
+        note("off", "open");
+        assertEquals(both, text(JOURNAL));
+    }
+
+    /** What undo and redo do on disk, cut short between any two of their steps: the next one goes on from there. */
+    @Test
+    void aMoveThatWasCutShortIsEnded() throws IOException {
+        note("off", "lean");
+        String off = text("notes/lean.json");
+        String line = text(JOURNAL);
+        shot.write("notes/lean.json", SmallShot.LEAN);
+        shot.write(AGAIN, line);
+        assertTrue(note("undo").err().contains("found no change"));
+        assertEquals("", text(JOURNAL));
+        assertEquals(0, note("redo").code());
+        assertEquals(off, text("notes/lean.json"));
+        shot.write(AGAIN, line);
+        assertEquals(0, note("undo").code());
+        assertEquals(SmallShot.LEAN, text("notes/lean.json"));
+        assertEquals(line, text(AGAIN));
+        shot.write("notes/lean.json", off);
+        assertTrue(note("redo").out().contains("was so already"));
+        assertEquals(line, text(JOURNAL));
+    }
+
+    @Test
+    void filesBesideANoteGoWhereItGoes() throws IOException {
+        byte[] odd = {(byte) 0x89, 'P', 'N', 'G', 0, (byte) 0xFF, '\n'};
+        shot.write("notes/lean.sky.png", odd);
+        shot.write("notes/lean2.sky.png", new byte[] {1});
+        assertEquals(0, note("copy", "lean", "--frame", "1005", "--id", "two").code());
+        assertArrayEquals(odd, Files.readAllBytes(shot.folder().resolve("notes/two.sky.png")));
+        SortedMap<String, String> whole = all();
+        assertEquals(0, note("delete", "lean").code());
+        assertFalse(Files.exists(shot.folder().resolve("notes/lean.sky.png")));
+        SortedMap<String, String> less = all();
+        assertTrue(note("undo").out().contains("notes/lean.json, notes/lean.sky.png are as before"));
+        assertEquals(whole, all());
+        assertEquals(0, note("redo").code());
+        assertEquals(less, all());
+        note("undo");
+        shot.write("notes/lean.sky.png", new byte[] {2});
+        refused(new String[] {"redo"}, "notes/lean.sky.png", "changed by hand");
+        shot.write("notes/three.sky.png", odd);
+        refused(new String[] {"copy", "lean", "--frame", "1005", "--id", "three"}, "notes/three.sky.png", "already");
+        shot.write("notes/lean.a b.png", odd);
+        refused(new String[] {"delete", "lean"}, "notes/lean.a b.png", "rename it");
+    }
+
+    @Test
+    void redoIsGoneAfterAnotherChange() throws IOException {
+        refused(new String[] {"redo"}, AGAIN, "found no change");
+        note("off", "lean");
+        note("undo");
+        assertEquals(0, note("on", "open").code());
+        assertEquals(0, note("redo").code(), "'on' changed nothing");
+        note("undo");
+        note("off", "open");
+        refused(new String[] {"redo"}, "found no change");
     }
 
     @Test
@@ -230,6 +310,13 @@ class NoteEditsTest {
 
     private String text(String file) throws IOException {
         return Files.readString(shot.folder().resolve(file));
+    }
+
+    /** Every file in the notes folder but the journal, hidden ones too. */
+    private SortedMap<String, String> all() {
+        SortedMap<String, String> all = SmallShot.listing(shot.folder().resolve("notes"));
+        all.keySet().removeIf(name -> name.endsWith(".jsonl"));
+        return all;
     }
 
     /** Every note file by id, its bytes as Latin-1 so that none is lost. */

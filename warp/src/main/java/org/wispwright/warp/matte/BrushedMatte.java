@@ -1,6 +1,7 @@
 package org.wispwright.warp.matte;
 
 import java.util.List;
+import java.util.function.UnaryOperator;
 import org.wispwright.render.picture.Picture;
 
 /**
@@ -45,6 +46,11 @@ public record BrushedMatte(List<Dab> dabs) implements Matte {
         if (dabs.get(0).way() == Way.TAKE) {
             throw new IllegalArgumentException("brushed matte: its first sweep takes away, and there is nothing yet; begin with one that adds");
         }
+    }
+
+    @Override
+    public BrushedMatte moved(UnaryOperator<Point> map) {
+        return new BrushedMatte(dabs.stream().map(dab -> new Dab(dab.way(), dab.sweep().moved(map))).toList());
     }
 
     @Override

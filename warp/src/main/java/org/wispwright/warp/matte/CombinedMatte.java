@@ -1,6 +1,7 @@
 package org.wispwright.warp.matte;
 
 import java.util.List;
+import java.util.function.UnaryOperator;
 import org.wispwright.render.picture.Picture;
 
 /**
@@ -48,6 +49,11 @@ public record CombinedMatte(Way way, List<Matte> parts) implements Matte {
 
     private static int depth(Matte matte) {
         return matte instanceof CombinedMatte combined ? 1 + combined.parts.stream().mapToInt(CombinedMatte::depth).max().orElse(0) : 0;
+    }
+
+    @Override
+    public CombinedMatte moved(UnaryOperator<Point> map) {
+        return new CombinedMatte(way, parts.stream().map(part -> part.moved(map)).toList());
     }
 
     @Override

@@ -1,5 +1,6 @@
 package org.wispwright.warp.matte;
 
+import java.util.function.UnaryOperator;
 import org.wispwright.render.picture.Picture;
 
 /**
@@ -37,6 +38,12 @@ public record DensityRange(double from, double to, double soft, double feather) 
     @Override
     public float[] values(Picture original, Window window) {
         return Feather.applied(feather, original, window, w -> plain(original, w));
+    }
+
+    /** Has no position of its own: it goes where the smoke goes. */
+    @Override
+    public DensityRange moved(UnaryOperator<Point> map) {
+        return this;
     }
 
     private float[] plain(Picture original, Window window) {

@@ -1,6 +1,8 @@
 package org.wispwright.warp.matte;
 
 import java.util.Arrays;
+import java.util.Optional;
+import java.util.function.UnaryOperator;
 import org.wispwright.render.picture.Luminance;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.picture.Srgb;
@@ -14,12 +16,26 @@ import org.wispwright.render.picture.Srgb;
  * @param height  rows, 1 or more
  * @param pixels  kept, not copied: 0 to 1, {@code pixels[x + width * y]}, row 0 at the top
  * @param feather width of the soft edge, laid on afterwards, fraction of the height, 0 or more
+ * @param source  where the pixels are from, if they are from a file
  */
-public record ImageMatte(int width, int height, float[] pixels, double feather) implements Matte {
+public record ImageMatte(int width, int height, float[] pixels, double feather, Optional<Source> source) implements Matte {
     /** Which numbers of a picture are the matte. */
     public enum Channel {
         /** How bright it looks over black: luminance, coded by the curve of sRGB, so that code 128 of 255 counts 128/255. */ GREY,
         /** Its opacity. */ ALPHA
+    }
+
+    /**
+     * A picture file.
+     *
+     * @param file    its path inside the shot folder
+     * @param channel the numbers that were taken
+     */
+    public record Source(String file, Channel channel) { }
+
+    /** A matte of pixels that are from no file. @throws IllegalArgumentException as below */
+    public ImageMatte(int width, int height, float[] pixels, double feather) {
+        this(width, height, pixels, feather, Optional.empty());
     }
 
     /**
@@ -55,6 +71,13 @@ public record ImageMatte(int width, int height, float[] pixels, double feather) 
             pixels[p] = (float) Math.min(1, Math.max(0, value));
         }
         return pixels;
+    }
+
+    /** Pixels have no position that could be taken along. @throws IllegalArgumentException always */
+    @Override
+    public ImageMatte moved(UnaryOperator<Point> map) {
+        throw new IllegalArgumentException("image matte" + source.map(s -> " '" + s.file() + "'").orElse("")
+                + ": its pixels cannot be carried along; draw it as a region or with a brush");
     }
 
     @Override

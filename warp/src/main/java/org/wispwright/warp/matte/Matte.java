@@ -1,5 +1,6 @@
 package org.wispwright.warp.matte;
 
+import java.util.function.UnaryOperator;
 import org.wispwright.render.picture.Picture;
 
 /**
@@ -25,6 +26,13 @@ public sealed interface Matte permits Region, DensityRange, BrushedMatte, Combin
     default float[] reach(Picture original, Window window, double feather) {
         return Reach.around(this, original, window, feather);
     }
+
+    /**
+     * The matte with every position of its own taken to another place; widths of edges stay.
+     *
+     * @throws IllegalArgumentException if what comes out is no such matte, as where all positions fall together
+     */
+    Matte moved(UnaryOperator<Point> map);
 
     /** The matte's values at every pixel of the picture. */
     default float[] values(Picture original) {

@@ -2,6 +2,7 @@ package org.wispwright.warp.matte;
 
 import java.util.Arrays;
 import java.util.List;
+import java.util.function.UnaryOperator;
 import org.wispwright.render.picture.Picture;
 
 /**
@@ -127,6 +128,17 @@ public sealed interface Region extends Matte permits Region.Rectangle, Region.El
             double dy = Math.max(top - y, y - bottom);
             return dx > 0 && dy > 0 ? Math.hypot(dx, dy) : Math.max(dx, dy);
         }
+
+        /** A rectangle if its corners still are those of an upright one, else the polygon of the four. */
+        @Override
+        public Region moved(UnaryOperator<Point> map) {
+            Point a = map.apply(new Point(left, top));
+            Point b = map.apply(new Point(right, top));
+            Point c = map.apply(new Point(right, bottom));
+            Point d = map.apply(new Point(left, bottom));
+            boolean upright = a.y() == b.y() && c.y() == d.y() && a.x() == d.x() && b.x() == c.x() && a.x() < b.x() && a.y() < d.y();
+            return upright ? new Rectangle(a.x(), a.y(), c.x(), c.y(), feather) : new Polygon(List.of(a, b, c, d), feather);
+        }
     }
 
     /**
@@ -183,6 +195,17 @@ public sealed interface Region extends Matte permits Region.Rectangle, Region.El
             double gx = px / radiusX;
             double gy = py / radiusY;
             return Math.max(k * (k - 1) / Math.sqrt(gx * gx + gy * gy), -Math.min(radiusX, radiusY));
+        }
+
+        /** Stays upright: each radius becomes half the distance between the moved ends of its axis, so it is stretched but not turned. */
+        @Override
+        public Region moved(UnaryOperator<Point> map) {
+            return new Ellipse(map.apply(centre), half(map, radiusX, 0), half(map, 0, radiusY), feather);
+        }
+
+        private double half(UnaryOperator<Point> map, double dx, double dy) {
+            return map.apply(new Point(centre.x() - dx, centre.y() - dy)).distanceTo(map.apply(new Point(centre.x() + dx, centre.y()
+                    + dy))) / 2;
         }
     }
 
@@ -288,6 +311,11 @@ public sealed interface Region extends Matte permits Region.Rectangle, Region.El
                 n++;
             }
             return n;
+        }
+
+        @Override
+        public Region moved(UnaryOperator<Point> map) {
+            return new Polygon(outline.stream().map(map).toList(), feather);
         }
     }
 }

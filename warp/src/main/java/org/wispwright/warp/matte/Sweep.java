@@ -1,6 +1,7 @@
 package org.wispwright.warp.matte;
 
 import java.util.List;
+import java.util.function.UnaryOperator;
 
 /**
  * A brush drawn along a polyline, and how much of it each pixel gets. With d the distance of the pixel's centre to the whole line, r
@@ -31,6 +32,11 @@ public record Sweep(double radius, double strength, double softEdge, List<Point>
         Needs.share("stroke", "strength", strength);
         Needs.share("stroke", "softEdge", softEdge);
         line = Needs.points("stroke", "line", line, 1, MOST_POINTS);
+    }
+
+    /** The same brush along a line whose points are taken to other places. */
+    public Sweep moved(UnaryOperator<Point> map) {
+        return new Sweep(radius, strength, softEdge, line.stream().map(map).toList());
     }
 
     /**

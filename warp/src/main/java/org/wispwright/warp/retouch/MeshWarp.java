@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.Function;
+import java.util.function.UnaryOperator;
 import org.wispwright.warp.matte.Matte;
 import org.wispwright.warp.matte.Needs;
 import org.wispwright.warp.matte.Point;
@@ -86,6 +87,12 @@ public record MeshWarp(WarpKind kind, List<Handle> handles, Cells cells, Optiona
                 }
             }
         }
+    }
+
+    @Override
+    public MeshWarp moved(UnaryOperator<Point> map) {
+        return new MeshWarp(kind, handles.stream().map(handle -> new Handle(map.apply(handle.from()), map.apply(handle.to()))).toList(),
+                cells, within.map(matte -> matte.moved(map)));
     }
 
     private static void requireSpread(List<Handle> handles, Function<Handle, Point> end, String name) {

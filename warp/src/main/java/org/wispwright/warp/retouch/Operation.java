@@ -1,7 +1,9 @@
 package org.wispwright.warp.retouch;
 
 import java.util.Optional;
+import java.util.function.UnaryOperator;
 import org.wispwright.warp.matte.Matte;
+import org.wispwright.warp.matte.Point;
 
 /** One step of a {@link Retouch}. It changes nothing itself; {@code Retoucher} applies it to a picture. */
 public sealed interface Operation permits Stroke, MeshWarp, OutlineWarp, Repaint {
@@ -10,4 +12,12 @@ public sealed interface Operation permits Stroke, MeshWarp, OutlineWarp, Repaint
 
     /** True if the operation leaves every picture as it is, bit for bit. */
     boolean changesNothing();
+
+    /**
+     * The operation with every position of its own, and of its matte, taken to another place; radii and strengths stay. The one place
+     * that knows all positions of a kind.
+     *
+     * @throws IllegalArgumentException if what comes out is no such operation, as where all positions fall together
+     */
+    Operation moved(UnaryOperator<Point> map);
 }

@@ -2,6 +2,7 @@ package org.wispwright.warp.retouch;
 
 import java.util.List;
 import java.util.Optional;
+import java.util.function.UnaryOperator;
 import org.wispwright.warp.matte.Matte;
 import org.wispwright.warp.matte.Needs;
 import org.wispwright.warp.matte.Point;
@@ -51,6 +52,12 @@ public record OutlineWarp(double level, List<Handle> drags, double reach, WarpKi
     @Override
     public boolean changesNothing() {
         return drags.stream().allMatch(drag -> drag.from().equals(drag.to()));
+    }
+
+    @Override
+    public OutlineWarp moved(UnaryOperator<Point> map) {
+        return new OutlineWarp(level, drags.stream().map(drag -> new Handle(map.apply(drag.from()), map.apply(drag.to()))).toList(), reach,
+                inside, within.map(matte -> matte.moved(map)));
     }
 
     /** The least distance of a place from what the drags sweep, in heights. */

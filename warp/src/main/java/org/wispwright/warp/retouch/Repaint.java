@@ -1,8 +1,10 @@
 package org.wispwright.warp.retouch;
 
 import java.util.Optional;
+import java.util.function.UnaryOperator;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.matte.Matte;
+import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.resample.Kernel;
 import org.wispwright.warp.resample.Resampling;
 import org.wispwright.warp.resample.Resized;
@@ -34,6 +36,12 @@ public final class Repaint implements Operation {
     private final float[] layers;
     private final boolean moves;
     private final boolean changes;
+    private final Optional<String> file;
+
+    /** Layers that are from no file. @throws IllegalArgumentException as below */
+    public Repaint(int width, int height, float[] layers) {
+        this(width, height, layers, Optional.empty());
+    }
 
     /**
      * Checks and copies.
@@ -41,9 +49,10 @@ public final class Repaint implements Operation {
      * @param width  pixels along a row
      * @param height rows
      * @param layers read: {@value #LAYERS} numbers a pixel, index {@code 4 (x + width y) + layer}; order and ranges: {@link #LAYERS}
+     * @param file   path inside the shot folder that the layers are from, if any
      * @throws IllegalArgumentException if the raster is too large, the count differs, or a number is out of its range or not finite
      */
-    public Repaint(int width, int height, float[] layers) {
+    public Repaint(int width, int height, float[] layers, Optional<String> file) {
         if (width < 1 || height < 1 || (long) width * height > MOST_PIXELS) {
             throw new IllegalArgumentException("paint-over: got " + width + "x" + height + " pixels, needs sides of at least 1 and at most "
                     + MOST_PIXELS + " pixels");
@@ -69,6 +78,7 @@ public final class Repaint implements Operation {
         this.layers = layers.clone();
         this.moves = anyMove;
         this.changes = anyChange;
+        this.file = file;
     }
 
     /** Pixels along a row of its own raster. */
@@ -84,6 +94,17 @@ public final class Repaint implements Operation {
     /** A copy of the numbers, laid out as in the constructor. */
     public float[] layers() {
         return layers.clone();
+    }
+
+    /** Path inside the shot folder that the layers are from, if any. */
+    public Optional<String> file() {
+        return file;
+    }
+
+    /** Painted pixels have no position that could be taken along. @throws IllegalArgumentException always */
+    @Override
+    public Repaint moved(UnaryOperator<Point> map) {
+        throw new IllegalArgumentException("paint-over: painted pixels cannot be carried along; paint the other frame too, or use brushes");
     }
 
     /** True if it moves smoke somewhere. */

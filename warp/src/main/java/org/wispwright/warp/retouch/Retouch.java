@@ -1,7 +1,10 @@
 package org.wispwright.warp.retouch;
 
+import java.util.ArrayList;
 import java.util.List;
+import java.util.function.UnaryOperator;
 import org.wispwright.warp.matte.Needs;
+import org.wispwright.warp.matte.Point;
 
 /**
  * The ordered, non-destructive list of operations of a note. Order matters: each operation works on what the one before it left.
@@ -32,5 +35,22 @@ public record Retouch(List<Operation> operations) {
     /** True if no operation changes anything; the wanted picture then has the original's bits. */
     public boolean changesNothing() {
         return operations.stream().allMatch(Operation::changesNothing);
+    }
+
+    /**
+     * The retouch with all its positions taken to other places, see {@link Operation#moved}.
+     *
+     * @throws IllegalArgumentException if an operation does not stand it, with its number
+     */
+    public Retouch moved(UnaryOperator<Point> map) {
+        List<Operation> moved = new ArrayList<>();
+        for (int n = 0; n < operations.size(); n++) {
+            try {
+                moved.add(operations.get(n).moved(map));
+            } catch (IllegalArgumentException refused) {
+                throw new IllegalArgumentException("operation " + (n + 1) + " of the retouch, moved: " + refused.getMessage(), refused);
+            }
+        }
+        return new Retouch(moved);
     }
 }

@@ -2,6 +2,7 @@ package org.wispwright.warp.retouch;
 
 import java.util.List;
 import java.util.Optional;
+import java.util.function.UnaryOperator;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.matte.Matte;
 import org.wispwright.warp.matte.Needs;
@@ -50,6 +51,11 @@ public record Stroke(Brush brush, Sweep sweep, Optional<Matte> within) implement
     @Override
     public boolean changesNothing() {
         return sweep.strength() == 0 || brush == Brush.PUSH && line().stream().allMatch(line().get(0)::equals);
+    }
+
+    @Override
+    public Stroke moved(UnaryOperator<Point> map) {
+        return new Stroke(brush, sweep.moved(map), within.map(matte -> matte.moved(map)));
     }
 
     /** Coverage of every pixel of a picture, the matte taken in; {@code original} is the picture before the retouch. */
