@@ -7,6 +7,7 @@ import org.wispwright.warp.matte.DensityRange;
 import org.wispwright.warp.matte.ImageMatte;
 import org.wispwright.warp.matte.Matte;
 import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Pressure;
 import org.wispwright.warp.matte.Region;
 import org.wispwright.warp.matte.Sweep;
 
@@ -61,7 +62,7 @@ final class MatteReader {
 
     private static Matte brushed(JsonPlace place) {
         List<BrushedMatte.Dab> dabs = place.items(1, BrushedMatte.MOST_DABS).stream().map(entry -> {
-            entry.only("brush", "radius", "strength", "softEdge", "line");
+            entry.only("brush", "radius", "strength", "softEdge", "line", "pressure", "pressureOn", "spacing");
             return new BrushedMatte.Dab(entry.need("brush").choice(BrushedMatte.Way.class), sweep(entry));
         }).toList();
         return place.make(() -> new BrushedMatte(dabs));
@@ -78,13 +79,31 @@ final class MatteReader {
         return place.make(() -> new CombinedMatte(way, parts));
     }
 
-    /** A brush's width, strength, edge and line; the keys beside them are the caller's. */
+    /** A brush's width, strength, edge, line, pressure and spacing; the keys beside them are the caller's. */
     static Sweep sweep(JsonPlace place) {
         double radius = place.need("radius").positive(1);
         double strength = place.ask("strength").map(p -> p.number(0, 1)).orElse(1.0);
         double softEdge = place.ask("softEdge").map(p -> p.number(0, 1)).orElse(0.5);
         List<Point> line = place.need("line").items(1, Sweep.MOST_POINTS).stream().map(MatteReader::point).toList();
-        return place.make(() -> new Sweep(radius, strength, softEdge, line));
+        Pressure pressure = pressure(place, line.size());
+        double spacing = place.ask("spacing").map(p -> p.number(0, Sweep.MOST_SPACING)).orElse(0.0);
+        return place.make(() -> new Sweep(radius, strength, softEdge, line, pressure, spacing));
+    }
+
+    private static Pressure pressure(JsonPlace place, int points) {
+        if (!place.has("pressure")) {
+            if (place.has("pressureOn")) {
+                throw place.fault("'pressureOn' without 'pressure'", "both or neither", "give 'pressure' a number for each point of 'line'");
+            }
+            return Pressure.FULL;
+        }
+        List<Double> values = place.need("pressure").items(1, Sweep.MOST_POINTS).stream().map(p -> p.number(0, 1)).toList();
+        if (values.size() != points) {
+            throw place.need("pressure").fault(values.size() + " numbers for " + points + " points", "one for each point of 'line'",
+                    "add or remove some");
+        }
+        Pressure.On on = place.ask("pressureOn").map(p -> p.choice(Pressure.On.class)).orElse(Pressure.FULL.on());
+        return place.make(() -> new Pressure(on, values));
     }
 
     /** Left, top, right, bottom. */

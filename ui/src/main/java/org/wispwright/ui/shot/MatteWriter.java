@@ -53,11 +53,19 @@ final class MatteWriter {
         return object.put("feather", ((Region) matte).feather());
     }
 
-    /** A brush's width, strength, edge and line. */
+    /** A brush's width, strength, edge, line, pressure and spacing. */
     static void sweep(Sweep sweep, ObjectNode into) {
         into.put("radius", sweep.radius()).put("strength", sweep.strength()).put("softEdge", sweep.softEdge());
         ArrayNode line = into.putArray("line");
         sweep.line().forEach(point -> line.add(point(point)));
+        if (!sweep.pressure().values().isEmpty()) {
+            ArrayNode pressure = into.putArray("pressure");
+            sweep.pressure().values().forEach(pressure::add);
+            into.put("pressureOn", JsonPlace.word(sweep.pressure().on()));
+        }
+        if (sweep.spacing() > 0) {
+            into.put("spacing", sweep.spacing());
+        }
     }
 
     static ArrayNode point(Point point) {

@@ -35,7 +35,7 @@ final class RetouchReader {
     }
 
     private static Operation stroke(JsonPlace place) {
-        place.only("brush", "radius", "strength", "softEdge", "line", "within");
+        place.only("brush", "radius", "strength", "softEdge", "line", "pressure", "pressureOn", "spacing", "within");
         Brush brush = place.need("brush").choice(Brush.class);
         Sweep sweep = MatteReader.sweep(place);
         Optional<Matte> within = place.ask("within").map(MatteReader::matte);

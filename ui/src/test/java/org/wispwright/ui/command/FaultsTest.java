@@ -153,6 +153,42 @@ class FaultsTest {
     }
 
     @Test
+    void pressureThatDoesNotFitTheLine() {
+        shot.swap("notes/open.json", "\"strength\": 0.9", "\"pressure\": [0.5, 0.7, 1]");
+        refused("notes/open.json at /retouch/0/stroke/pressure", "3 numbers for 2 points", "one for each point");
+    }
+
+    @Test
+    void pressureBeyondFull() {
+        shot.swap("notes/open.json", "\"strength\": 0.9", "\"pressure\": [0.5, 1.5]");
+        refused("notes/open.json at /retouch/0/stroke/pressure/1", "1.5", "0 to 1");
+    }
+
+    @Test
+    void pressureOnNothingKnown() {
+        shot.swap("notes/open.json", "\"strength\": 0.9", "\"pressure\": [0.5, 1], \"pressureOn\": \"colour\"");
+        refused("notes/open.json at /retouch/0/stroke/pressureOn", "\"colour\"", "\"strength\"");
+    }
+
+    @Test
+    void pressureOnWithoutPressure() {
+        shot.swap("notes/open.json", "\"strength\": 0.9", "\"pressureOn\": \"radius\"");
+        refused("notes/open.json at /retouch/0/stroke", "'pressureOn' without 'pressure'", "both or neither");
+    }
+
+    @Test
+    void spacingTooClose() {
+        shot.swap("notes/open.json", "\"strength\": 0.9", "\"spacing\": 0.01");
+        refused("notes/open.json at /retouch/0/stroke", "spacing 0.01", "0.05 to 20");
+    }
+
+    @Test
+    void spacingBelowNothing() {
+        shot.swap("notes/open.json", "\"strength\": 0.9", "\"spacing\": -1");
+        refused("notes/open.json at /retouch/0/stroke/spacing", "-1", "0 to 20");
+    }
+
+    @Test
     void numberWrittenAsText() {
         shot.swap("shot.json", "\"perSecond\": 24", "\"perSecond\": \"24\"");
         refused("shot.json at /frames/perSecond", "the text \"24\"", "without quotes");

@@ -13,7 +13,9 @@ import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.wispwright.warp.matte.Point;
+import org.wispwright.warp.matte.Pressure;
 import org.wispwright.warp.matte.Region;
+import org.wispwright.warp.matte.Sweep;
 import org.wispwright.warp.retouch.Brush;
 import org.wispwright.warp.retouch.Cells;
 import org.wispwright.warp.retouch.Handle;
@@ -87,13 +89,34 @@ class NoteReaderTest {
         return notes.get(0).retouch().operations().get(0);
     }
 
+    @Test
+    void pressureAndSpacing() throws IOException {
+        List<Point> line = List.of(new Point(0.3, 0.8), new Point(0.4, 0.7));
+        for (Pressure.On on : Pressure.On.values()) {
+            String word = ", \"pressureOn\": \"" + JsonPlace.word(on) + "\"";
+            assertStroke(new Sweep(0.1, 1, 0.5, line, new Pressure(on, List.of(0.25, 1.0)), 0.75),
+                    ", \"pressure\": [0.25, 1], \"spacing\": 0.75" + word);
+        }
+        assertStroke(new Sweep(0.1, 1, 0.5, line, new Pressure(Pressure.On.STRENGTH, List.of(0.25, 1.0)), 0), ", \"pressure\": [0.25, 1]");
+    }
+
+    private void assertStroke(Sweep sweep, String more) throws IOException {
+        List<Note> notes = read("add", more);
+        assertEquals(List.of(), findings.all());
+        assertEquals(new Stroke(Brush.ADD, sweep, Optional.empty()), notes.get(0).retouch().operations().get(0));
+    }
+
     private List<Note> read(String brush) throws IOException {
+        return read(brush, "");
+    }
+
+    private List<Note> read(String brush, String more) throws IOException {
         Files.createDirectories(folder.resolve("notes"));
         Files.writeString(folder.resolve("shot.json"), "{}");
         Files.writeString(folder.resolve("notes/a.json"), """
                 {"wispwright": 1, "words": "As drawn.", "frame": 3, "view": "front",
-                 "retouch": [{"stroke": {"brush": "%s", "radius": 0.1, "line": [[0.3, 0.8], [0.4, 0.7]]}}]}
-                """.formatted(brush));
+                 "retouch": [{"stroke": {"brush": "%s", "radius": 0.1, "line": [[0.3, 0.8], [0.4, 0.7]]%s}}]}
+                """.formatted(brush, more));
         ShotFolder shot = ShotFolder.open(folder);
         return new NoteReader(shot, new MattePictures(shot, 1L << 30), findings).read().on();
     }

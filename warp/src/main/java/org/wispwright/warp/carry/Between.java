@@ -7,6 +7,7 @@ import java.util.Optional;
 import org.wispwright.warp.matte.CombinedMatte;
 import org.wispwright.warp.matte.DensityRange;
 import org.wispwright.warp.matte.Matte;
+import org.wispwright.warp.matte.Pressure;
 import org.wispwright.warp.matte.Region;
 import org.wispwright.warp.matte.Sweep;
 import org.wispwright.warp.retouch.Handle;
@@ -95,7 +96,7 @@ public final class Between {
 
     private static Operation operation(String where, Operation a, Operation b, double share) {
         if (a instanceof Stroke p && b instanceof Stroke q && p.brush() == q.brush()) {
-            return new Stroke(p.brush(), sweep(p.sweep(), q.sweep(), share), within(where, p, q, share));
+            return new Stroke(p.brush(), sweep(where, p.sweep(), q.sweep(), share), within(where, p, q, share));
         }
         if (a instanceof MeshWarp p && b instanceof MeshWarp q) {
             if (p.handles().size() != q.handles().size()) {
@@ -125,9 +126,18 @@ public final class Between {
         throw new Unlike(where, named(a), named(b), "the same kind of operation, with lines or handles that can go from one to the other");
     }
 
-    private static Sweep sweep(Sweep a, Sweep b, double share) {
+    private static Sweep sweep(String where, Sweep a, Sweep b, double share) {
+        boolean pressed = !a.pressure().values().isEmpty() || !b.pressure().values().isEmpty();
+        if (pressed || a.spacing() > 0 != b.spacing() > 0) {
+            throw new Unlike(where, "drawn with " + drawn(a), "with " + drawn(b), "even pressure, and a spacing in both or in neither,");
+        }
         return new Sweep(number(a.radius(), b.radius(), share), number(a.strength(), b.strength(), share),
-                number(a.softEdge(), b.softEdge(), share), Line.between(a.line(), b.line(), share, false, Sweep.MOST_POINTS));
+                number(a.softEdge(), b.softEdge(), share), Line.between(a.line(), b.line(), share, false, Sweep.MOST_POINTS),
+                Pressure.FULL, number(a.spacing(), b.spacing(), share));
+    }
+
+    private static String drawn(Sweep sweep) {
+        return (sweep.pressure().values().isEmpty() ? "even pressure" : "changing pressure") + (sweep.spacing() > 0 ? " and a spacing" : "");
     }
 
     private static Optional<Matte> within(String where, Operation a, Operation b, double share) {

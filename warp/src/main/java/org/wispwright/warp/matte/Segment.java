@@ -1,8 +1,5 @@
 package org.wispwright.warp.matte;
 
-import java.util.Arrays;
-import java.util.List;
-
 /** Distances to straight pieces of line, and to lines made of them. */
 public final class Segment {
     private Segment() {
@@ -18,29 +15,6 @@ public final class Segment {
         double dx = x - (ax + t * abx);
         double dy = y - (ay + t * aby);
         return dx * dx + dy * dy;
-    }
-
-    /** Squared distance of pixel centres to a polyline of one or more points, in squared heights; infinite where it is surely beyond reach. */
-    static double[] squaredDistances(List<Point> line, Window window, int height, double reach) {
-        double[] squared = new double[window.pixels()];
-        Arrays.fill(squared, Double.POSITIVE_INFINITY);
-        Point a = line.get(0);
-        for (int n = line.size() == 1 ? 0 : 1; n < line.size(); n++) {
-            Point b = line.get(n);
-            int left = pixel(Math.min(a.x(), b.x()) - reach, height, window.left(), window.width());
-            int right = pixel(Math.max(a.x(), b.x()) + reach, height, window.left(), window.width());
-            int top = pixel(Math.min(a.y(), b.y()) - reach, height, window.top(), window.height());
-            int bottom = pixel(Math.max(a.y(), b.y()) + reach, height, window.top(), window.height());
-            for (int j = top; j <= bottom; j++) {
-                for (int i = left; i <= right; i++) {
-                    double d = squaredDistance((window.left() + i + 0.5) / height, (window.top() + j + 0.5) / height, a.x(), a.y(),
-                            b.x(), b.y());
-                    squared[i + window.width() * j] = Math.min(squared[i + window.width() * j], d);
-                }
-            }
-            a = b;
-        }
-        return squared;
     }
 
     /** The pixel of a window nearest to a position along one axis, counted from the window's first. */

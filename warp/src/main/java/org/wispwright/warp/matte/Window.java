@@ -26,4 +26,11 @@ public record Window(int left, int top, int width, int height) {
     public int pixels() {
         return width * height;
     }
+
+    /** The smallest window around this one and another. */
+    public Window around(Window other) {
+        int l = Math.min(left, other.left);
+        int t = Math.min(top, other.top);
+        return new Window(l, t, Math.max(left + width, other.left + other.width) - l, Math.max(top + height, other.top + other.height) - t);
+    }
 }

@@ -3,7 +3,7 @@ package org.wispwright.warp.paintover;
 import java.util.Arrays;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.picture.Srgb;
-import org.wispwright.warp.retouch.Gaussian;
+import org.wispwright.warp.resample.Blur;
 
 /**
  * Which pixels a person changed between two frames, and which merely differ because a file was saved again.
@@ -51,7 +51,7 @@ final class ChangedPixels {
             noise = Math.max(noise, s);
             threshold[c] = Math.max(QUANTUM, DEVIATIONS * s * 0.5 / Math.sqrt(Math.PI) / BLUR);
         }
-        float[] blurred = Gaussian.blurred(d, 4, width, height, BLUR);
+        float[] blurred = Blur.gaussian(d, 4, width, height, BLUR);
         double[] passes = new double[width * height];
         boolean[] weak = new boolean[passes.length];
         for (int p = 0; p < passes.length; p++) {
@@ -108,7 +108,7 @@ final class ChangedPixels {
     }
 
     private static float[] softened(float[] mask, int width, int height) {
-        float[] wide = Gaussian.blurred(mask, 1, width, height, Math.max(0.75, EDGE * height));
+        float[] wide = Blur.gaussian(mask, 1, width, height, Math.max(0.75, EDGE * height));
         for (int p = 0; p < mask.length; p++) {
             wide[p] = Math.max(mask[p], Math.min(1f, 2 * wide[p]));
         }

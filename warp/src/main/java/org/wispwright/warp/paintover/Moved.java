@@ -2,10 +2,10 @@ package org.wispwright.warp.paintover;
 
 import java.util.Arrays;
 import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.resample.Blur;
 import org.wispwright.warp.resample.Kernel;
 import org.wispwright.warp.resample.Resampling;
 import org.wispwright.warp.resample.Resized;
-import org.wispwright.warp.retouch.Gaussian;
 
 /**
  * Where a person moved smoke rather than added or removed it. Patches of changed opacity that lie near each other form a region; in each
@@ -64,7 +64,7 @@ final class Moved {
         for (int p = 0; p < changed.length; p++) {
             changed[p] = Math.abs(a1[p] - a0[p]) > SEEN ? 1 : 0;
         }
-        float[] near = Gaussian.blurred(Resized.values(changed, 1, width, height, columns, rows), 1, columns, rows, JOIN * rows);
+        float[] near = Blur.gaussian(Resized.values(changed, 1, width, height, columns, rows), 1, columns, rows, JOIN * rows);
         boolean[] in = new boolean[near.length];
         for (int p = 0; p < in.length; p++) {
             in[p] = near[p] > JOINED;
@@ -83,7 +83,7 @@ final class Moved {
         for (boolean one : moved) {
             count += one ? 1 : 0;
         }
-        float[] soft = Resized.values(Gaussian.blurred(region, 1, columns, rows, 1), 1, columns, rows, width, height);
+        float[] soft = Resized.values(Blur.gaussian(region, 1, columns, rows, 1), 1, columns, rows, width, height);
         for (int p = 0; p < soft.length; p++) {
             soft[p] = Math.min(1f, Math.max(0f, soft[p]));
             float ux = fine[2 * p] * soft[p] / height;

@@ -1,7 +1,7 @@
 package org.wispwright.warp.paintover;
 
+import org.wispwright.warp.resample.Blur;
 import org.wispwright.warp.resample.Resized;
-import org.wispwright.warp.retouch.Gaussian;
 
 /**
  * Mean of numbers near each place, also where there are none: normalised convolution {@code (K * w v) / (K * w)} with the kernel
@@ -33,8 +33,8 @@ final class NearbyMean {
         double factor = 1;
         double widest = Math.max(columns, rows) / 2.0;
         for (double s = Math.max(0.75, sigma * rows); s < widest; s *= 2) {
-            add(top, factor, Gaussian.blurred(v, channels, columns, rows, s));
-            add(bottom, factor, Gaussian.blurred(w, 1, columns, rows, s));
+            add(top, factor, Blur.gaussian(v, channels, columns, rows, s));
+            add(bottom, factor, Blur.gaussian(w, 1, columns, rows, s));
             factor *= WIDER;
         }
         double[] mean = new double[channels];

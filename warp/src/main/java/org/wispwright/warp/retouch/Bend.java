@@ -154,7 +154,7 @@ final class Bend {
                 }
             }
         }
-        float[] wide = Gaussian.blurred(touched, 1, width, height, Math.max(0.5, feather * height / 2));
+        float[] wide = Gaussian.blurred(touched, width, height, Math.max(0.5, feather * height / 2));
         for (int p = 0; p < touched.length; p++) {
             touched[p] = Math.max(touched[p], Math.min(1f, 2 * wide[p]));
         }

@@ -1,6 +1,5 @@
 package org.wispwright.warp.retouch;
 
-import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.matte.Window;
 
 /**
@@ -20,42 +19,36 @@ final class LocalContrast {
     }
 
     /**
-     * Changes the pixels with coverage m, all inside {@code window}.
+     * Changes the pixels of a part of a tile.
      *
+     * @param coverage  one a pixel of the part
+     * @param mean      opacity's, one a pixel of the tile
+     * @param colour    of the smoke near, three a pixel of the tile
      * @param direction gain is {@code 1 + direction m}: -1 evens out, 1 lifts
+     * @param out       RGBA of the part: changed
      */
-    static void apply(Picture picture, float[] coverage, Window window, double radius, int direction) {
-        int width = picture.width();
-        float[] rgba = picture.rgba();
-        float[] opacity = new float[width * picture.height()];
-        for (int p = 0; p < opacity.length; p++) {
-            opacity[p] = rgba[4 * p + 3];
-        }
-        ColourNearby colour = new ColourNearby(picture, Brushwork.COLOUR_SIGMA * radius);
-        float[] mean = Gaussian.blurred(opacity, 1, width, picture.height(), MEAN_SIGMA * radius * picture.height(), window);
-        for (int n = 0; n < mean.length; n++) {
-            int x = window.left() + n % window.width();
-            int y = window.top() + n / window.width();
-            int p = x + width * y;
-            if (coverage[p] == 0) {
-                continue;
-            }
-            double was = opacity[p];
-            float becomes = (float) Math.min(1, Math.max(0, was + direction * coverage[p] * (was - mean[n])));
-            if (becomes < was) {
-                scale(rgba, 4 * p, becomes / was);
-            } else if (becomes > was) {
-                for (int c = 0; c < 3; c++) {
-                    rgba[4 * p + c] += (becomes - was) * (rgba[4 * p + c] + FAINT * colour.at(x, y, c)) / (was + FAINT);
+    static void apply(Window part, float[] coverage, float[] mean, float[] colour, int direction, float[] out) {
+        for (int j = 0, n = 0; j < part.height(); j++) {
+            int at = Brushwork.inTile(part, j);
+            for (int i = 0; i < part.width(); i++, n++, at++) {
+                if (coverage[n] == 0) {
+                    continue;
                 }
+                float was = out[4 * n + 3];
+                float becomes = Math.min(1f, Math.max(0f, was + direction * coverage[n] * (was - mean[at])));
+                if (becomes < was) {
+                    double factor = (double) becomes / was;
+                    out[4 * n] *= factor;
+                    out[4 * n + 1] *= factor;
+                    out[4 * n + 2] *= factor;
+                } else if (becomes > was) {
+                    double factor = ((double) becomes - was) / (was + FAINT);
+                    for (int c = 0; c < 3; c++) {
+                        out[4 * n + c] += factor * (out[4 * n + c] + FAINT * colour[3 * at + c]);
+                    }
+                }
+                out[4 * n + 3] = becomes;
             }
-            rgba[4 * p + 3] = becomes;
-        }
-    }
-
-    private static void scale(float[] rgba, int at, double factor) {
-        for (int c = 0; c < 3; c++) {
-            rgba[at + c] *= factor;
         }
     }
 }

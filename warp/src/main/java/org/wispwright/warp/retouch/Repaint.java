@@ -140,7 +140,7 @@ public final class Repaint implements Operation {
             mask[p] = Math.min(1f, Math.max(0f, own[LAYERS * p + 3]));
         }
         if (feather > 0) {
-            float[] wide = Gaussian.blurred(mask, 1, original.width(), original.height(), Math.max(0.5, feather * original.height() / 2));
+            float[] wide = Gaussian.blurred(mask, original.width(), original.height(), Math.max(0.5, feather * original.height() / 2));
             for (int p = 0; p < mask.length; p++) {
                 mask[p] = Math.max(mask[p], Math.min(1f, 2 * wide[p]));
             }
@@ -170,7 +170,7 @@ public final class Repaint implements Operation {
     }
 
     private static void change(Picture picture, float[] own) {
-        ColourNearby near = new ColourNearby(picture, COLOUR_SIGMA);
+        float[] near = new ColourNearby(new Blocks(picture), picture, COLOUR_SIGMA * picture.height()).all();
         float[] rgba = picture.rgba();
         for (int p = 0; p < picture.width() * picture.height(); p++) {
             double was = rgba[4 * p + 3];
@@ -181,8 +181,8 @@ public final class Repaint implements Operation {
                 }
             } else if (becomes > was) {
                 for (int c = 0; c < 3; c++) {
-                    float colour = near.at(p % picture.width(), p / picture.width(), c);
-                    rgba[4 * p + c] += (becomes - was) * (rgba[4 * p + c] + LocalContrast.FAINT * colour) / (was + LocalContrast.FAINT);
+                    rgba[4 * p + c] += (becomes - was) * (rgba[4 * p + c] + LocalContrast.FAINT * near[3 * p + c])
+                            / (was + LocalContrast.FAINT);
                 }
             }
             rgba[4 * p + 3] = becomes;

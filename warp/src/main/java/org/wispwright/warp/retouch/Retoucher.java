@@ -22,22 +22,9 @@ public final class Retoucher {
      * @return a new picture of the same raster
      */
     public static Picture wanted(Retouch retouch, Picture original) {
-        Picture picture = original.copy();
-        for (Operation operation : retouch.operations()) {
-            if (operation.changesNothing()) {
-                continue;
-            }
-            if (operation instanceof Stroke stroke) {
-                Brushwork.apply(stroke, picture, original);
-            } else if (operation instanceof MeshWarp warp) {
-                picture = Bend.of(warp, original).applied(picture);
-            } else if (operation instanceof OutlineWarp warp) {
-                picture = Bend.of(warp, original).applied(picture);
-            } else if (operation instanceof Repaint repaint) {
-                picture = repaint.applied(picture);
-            }
-        }
-        return picture;
+        Canvas canvas = new Canvas(original);
+        retouch.operations().forEach(canvas::apply);
+        return canvas.picture();
     }
 
     /**

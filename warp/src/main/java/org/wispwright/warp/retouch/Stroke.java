@@ -50,19 +50,13 @@ public record Stroke(Brush brush, Sweep sweep, Optional<Matte> within) implement
 
     @Override
     public boolean changesNothing() {
-        return sweep.strength() == 0 || brush == Brush.PUSH && line().stream().allMatch(line().get(0)::equals);
+        return sweep.strength() == 0 || !sweep.pressure().values().isEmpty() && sweep.pressure().values().stream().allMatch(p -> p == 0)
+                || brush == Brush.PUSH && line().stream().allMatch(line().get(0)::equals);
     }
 
     @Override
     public Stroke moved(UnaryOperator<Point> map) {
         return new Stroke(brush, sweep.moved(map), within.map(matte -> matte.moved(map)));
-    }
-
-    /** Coverage of every pixel of a picture, the matte taken in; {@code original} is the picture before the retouch. */
-    float[] coverage(Picture original) {
-        float[] coverage = sweep.coverage(Window.all(original.width(), original.height()), original.height());
-        within.ifPresent(matte -> times(coverage, matte.values(original)));
-        return coverage;
     }
 
     /** Where the stroke reaches, the matte taken in. */

@@ -16,7 +16,6 @@ import org.junit.jupiter.params.provider.ValueSource;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.matte.Segment;
-import org.wispwright.warp.matte.Window;
 
 /** The push brush: how far by hand, the same however the line is sampled, no holes, no folds, nothing beyond its reach. */
 class PushTest {
@@ -80,8 +79,11 @@ class PushTest {
     @Test
     void travelEqualsPlain() {
         Point[] line = {new Point(0.2, 0.3), new Point(0.45, 0.25), new Point(0.4, 0.6), new Point(0.35, 0.62)};
-        Window window = new Window(5, 3, 23, 31);
-        double[] travel = Push.travel(push(0.15, 1, 1, line), 40, window);
+        Push push = new Push(push(0.15, 1, 1, line).sweep(), new Picture(28, 40));
+        for (int n = 1; n < line.length; n++) {
+            push.extend(line[n - 1], 1, line[n], 1);
+        }
+        double[] travel = new double[2];
         double longest = 0;
         for (int p = 0; p < 23 * 31; p++) {
             double x = (5 + p % 23 + 0.5) / 40;
@@ -99,8 +101,9 @@ class PushTest {
                 }
             }
             double shorter = 0.15 / Math.max(0.15, Math.hypot(plain[0], plain[1]));
-            assertEquals(shorter * plain[0], travel[2 * p], 1e-8);
-            assertEquals(shorter * plain[1], travel[2 * p + 1], 1e-8);
+            push.travel(5 + p % 23, 3 + p / 23, travel);
+            assertEquals(shorter * plain[0], travel[0], 1e-8);
+            assertEquals(shorter * plain[1], travel[1], 1e-8);
             longest = Math.max(longest, Math.hypot(plain[0], plain[1]));
         }
         assertTrue(longest > 0.12, "travels at most " + longest);

@@ -1,0 +1,124 @@
+package org.wispwright.warp.retouch;
+
+import java.util.Arrays;
+import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.matte.Window;
+
+/**
+ * A picture being retouched: operations change it one after the other, and a stroke may be drawn on it point by point
+ * ({@link LiveStroke}). What brushes must know of the picture's wide surroundings is kept beside it and made anew only where it changed, so
+ * that the next stroke starts quickly. Not for several threads at once.
+ * <p>Holds two copies of the picture once a stroke was begun, one before: 16 bytes a pixel each, 5 more for the surroundings, 4 for coverage.
+ */
+public final class Canvas {
+    private final Picture original;
+    private Picture picture;
+    private final Blocks blocks;
+    private Picture before;
+    private float[] coverage;
+    private LiveStroke live;
+
+    /** The picture as it is before any operation. @param original read; never changed */
+    public Canvas(Picture original) {
+        this.original = original;
+        picture = original.copy();
+        blocks = new Blocks(picture);
+    }
+
+    /** The picture as the operations so far leave it; this canvas keeps changing it. */
+    public Picture picture() {
+        return picture;
+    }
+
+    /**
+     * Applies an operation to what those before left.
+     *
+     * @throws IllegalStateException if a stroke is being drawn
+     */
+    public void apply(Operation operation) {
+        requireNoLive();
+        if (operation.changesNothing()) {
+            return;
+        }
+        if (operation instanceof Stroke stroke) {
+            stroke(stroke);
+        } else if (operation instanceof MeshWarp warp) {
+            swap(Bend.of(warp, original).applied(picture));
+        } else if (operation instanceof OutlineWarp warp) {
+            swap(Bend.of(warp, original).applied(picture));
+        } else if (operation instanceof Repaint repaint) {
+            swap(repaint.applied(picture));
+        }
+    }
+
+    private void swap(Picture changed) {
+        picture = changed;
+        blocks.from(picture);
+        blocks.forget();
+        before = null;
+    }
+
+    private void stroke(Stroke stroke) {
+        Window window = Brushwork.reached(stroke.line(), stroke.radius(), picture.width(), picture.height());
+        if (window == null) {
+            return;
+        }
+        Brushwork work = new Brushwork(stroke, original, picture, blocks, window, new float[window.pixels()]);
+        for (int n = 0; n < stroke.line().size(); n++) {
+            work.extend(stroke.line().get(n), stroke.sweep().pressure().at(n));
+        }
+        work.refresh(window, picture);
+        blocks.changed(window);
+        if (before != null) {
+            copy(picture, before, window);
+        }
+    }
+
+    /**
+     * Begins to draw a stroke, with the points that it has so far. The first stroke on a canvas copies the picture.
+     *
+     * @throws IllegalStateException if another is being drawn
+     */
+    public LiveStroke begin(Stroke start) {
+        requireNoLive();
+        if (before == null) {
+            before = picture.copy();
+        }
+        if (coverage == null) {
+            coverage = new float[picture.width() * picture.height()];
+        }
+        blocks.from(before);
+        live = new LiveStroke(this, start, new Brushwork(start, original, before, blocks, Window.all(picture.width(), picture.height()),
+                coverage));
+        return live;
+    }
+
+    private void requireNoLive() {
+        if (live != null) {
+            throw new IllegalStateException("canvas: a stroke is being drawn; end or cancel it first");
+        }
+    }
+
+    /** The stroke being drawn is over; all it changed lies in {@code window}, null for nothing. */
+    void over(Window window, boolean kept) {
+        live = null;
+        if (window != null) {
+            copy(kept ? picture : before, kept ? before : picture, window);
+            for (int y = window.top(); y < window.top() + window.height(); y++) {
+                int at = window.left() + picture.width() * y;
+                Arrays.fill(coverage, at, at + window.width(), 0f);
+            }
+            if (kept) {
+                blocks.changed(window);
+            }
+        }
+        blocks.from(picture);
+    }
+
+    private static void copy(Picture from, Picture to, Window window) {
+        for (int y = window.top(); y < window.top() + window.height(); y++) {
+            int at = 4 * (window.left() + from.width() * y);
+            System.arraycopy(from.rgba(), at, to.rgba(), at, 4 * window.width());
+        }
+    }
+}
