@@ -81,7 +81,7 @@ class MatteFaultsTest {
         "{'image': {'file': '/etc/hostname'}} | /weighBy/image/file | leaves the shot folder",
         "{'image': {'file': 'mattes/none.png'}} | /weighBy/image/file | no such file",
         "{'image': {'file': 'mattes'}} | /weighBy/image/file | a folder",
-        "{'image': {'file': 'shot.json'}} | /weighBy/image/file | is not a PNG file",
+        "{'image': {'file': 'shot.json'}} | /weighBy/image/file | is not a PNG or EXR file",
         "{'image': {'file': 'mattes/head.png', 'channel': 'red'}} | /weighBy/image/channel | \"grey\" or \"alpha\"",
         "{'image': {'file': 'mattes/head.png', 'channel': 'alpha'}} | /weighBy/image/file | opaque everywhere",
         "{'image': {'file': 'mattes/wide.png'}} | /weighBy/image/file | 128x96 pixels",

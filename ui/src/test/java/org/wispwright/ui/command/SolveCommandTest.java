@@ -65,7 +65,7 @@ class SolveCommandTest {
         assertEquals(figures.get("noteLosses").get(1).get("fall").doubleValue(),
                 take.get("figures").get("lossFall").get("open").doubleValue());
         String said = Run.of("compare", shot.folder().toString(), "--takes", "0,1", "--out", place.resolve("out").toString()).out();
-        assertTrue(said.contains("(loss pyramid)") && said.contains("(loss edges+silhouette)"), said);
+        assertTrue(said.contains("(loss pyramid,") && said.contains("(loss edges+silhouette,"), said);
     }
 
     /** Every file of both takes, take.json and force.npy included. */
