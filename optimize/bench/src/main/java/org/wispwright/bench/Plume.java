@@ -10,6 +10,7 @@ import org.wispwright.optimize.flow.Sides;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.flow.Source;
+import org.wispwright.optimize.flow.Substep;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.volume.GridShape;
 import org.wispwright.render.volume.MacVelocity;
@@ -45,7 +46,7 @@ final class Plume {
         SmokeState now = new SmokeState(flow.grid());
         SmokeState next = new SmokeState(flow.grid());
         for (int n = 1; n <= GROWN; n++) {
-            solver.step(now, null, flow.frames().first() + n, n > 1, next);
+            solver.step(now, null, new Substep(flow.frames().first() + n, 0, 1), n > 1, next);
             SmokeState swap = now;
             now = next;
             next = swap;

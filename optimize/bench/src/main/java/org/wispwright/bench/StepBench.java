@@ -18,6 +18,7 @@ import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.Interpolation;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
+import org.wispwright.optimize.flow.Substep;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.volume.MacVelocity;
 
@@ -35,7 +36,7 @@ import org.wispwright.render.volume.MacVelocity;
 @Measurement(iterations = 5, time = 1)
 public class StepBench {
     private static final int CHAIN = 8;
-    private static final int FRAME = 1001 + Plume.GROWN + 1;
+    private static final Substep AT = new Substep(1001 + Plume.GROWN + 1, 0, 1);
 
     /** Cells each way. */
     @Param({"32", "64", "128"})
@@ -74,18 +75,18 @@ public class StepBench {
         chain[0] = Plume.grown(flow, ours);
         for (int s = 0; s < CHAIN; s++) {
             chain[s + 1] = new SmokeState(flow.grid());
-            solver.step(chain[s], force, FRAME, s > 0, chain[s + 1]);
+            solver.step(chain[s], force, AT, s > 0, chain[s + 1]);
         }
         bar.set(endBar);
-        solver.pullback(chain[CHAIN - 1], chain[CHAIN].velocity(), true, bar, forceBar);
+        solver.pullback(chain[CHAIN - 1], chain[CHAIN].velocity(), AT, true, bar, forceBar);
         try (Lanes theirs = new Lanes(3 - lanes)) {
             SmokeSolver other = new SmokeSolver(flow, theirs);
             SmokeState out = new SmokeState(flow.grid());
-            other.step(chain[CHAIN - 1], force, FRAME, false, out);
+            other.step(chain[CHAIN - 1], force, AT, false, out);
             Same.bits("substep, 1 and 2 lanes", out, chain[CHAIN]);
             out.set(endBar);
             MacVelocity otherForceBar = new MacVelocity(flow.grid());
-            other.pullback(chain[CHAIN - 1], chain[CHAIN].velocity(), false, out, otherForceBar);
+            other.pullback(chain[CHAIN - 1], chain[CHAIN].velocity(), AT, false, out, otherForceBar);
             Same.bits("pullback of a substep, 1 and 2 lanes", out, bar);
             Same.close("pullback to the force, 1 and 2 lanes", otherForceBar.y(), forceBar.y(), 0);
         }
@@ -104,7 +105,7 @@ public class StepBench {
     public SmokeState step() {
         int s = forwards;
         forwards = (s + 1) % CHAIN;
-        solver.step(chain[s], force, FRAME, s > 0, chain[s + 1]);
+        solver.step(chain[s], force, AT, s > 0, chain[s + 1]);
         return chain[s + 1];
     }
 
@@ -117,7 +118,7 @@ public class StepBench {
             bar.set(endBar);
             forceBar.fill(0);
         }
-        solver.pullback(chain[s], chain[s + 1].velocity(), s < CHAIN - 1, bar, forceBar);
+        solver.pullback(chain[s], chain[s + 1].velocity(), AT, s < CHAIN - 1, bar, forceBar);
         return bar;
     }
 }

@@ -9,6 +9,7 @@ public final class Clock {
 
     /** What time is spent on; a pullback has its own line. */
     public enum Part {
+        /** Laying out solids. */ SOLIDS,
         /** Departure points. */ TRACE,
         /** Carrying the velocity. */ CARRY_VELOCITY,
         /** Carrying the density, with decay and sources. */ CARRY_DENSITY,

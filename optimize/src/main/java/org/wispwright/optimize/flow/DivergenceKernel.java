@@ -1,5 +1,6 @@
 package org.wispwright.optimize.flow;
 
+import java.util.function.IntConsumer;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.volume.GridShape;
 import org.wispwright.render.volume.MacVelocity;
@@ -31,10 +32,18 @@ final class DivergenceKernel {
         }
     }
 
-    /** Largest |div u| h / largest |u component|; 0 for still air. */
-    static double relativeMax(MacVelocity u, float[] scratch, Lanes lanes) {
+    /**
+     * Largest |div u| h / largest |u component|; 0 for still air.
+     *
+     * @param scratch   overwritten with the divergence
+     * @param clearSlab overwrites with 0 what does not count of a slab of scratch
+     */
+    static double relativeMax(MacVelocity u, float[] scratch, IntConsumer clearSlab, Lanes lanes) {
         GridShape shape = u.shape();
-        lanes.forEach(shape.nz(), k -> slab(shape, u.x(), u.y(), u.z(), scratch, k));
+        lanes.forEach(shape.nz(), k -> {
+            slab(shape, u.x(), u.y(), u.z(), scratch, k);
+            clearSlab.accept(k);
+        });
         float most = largest(scratch);
         float fastest = Math.max(largest(u.x()), Math.max(largest(u.y()), largest(u.z())));
         return fastest == 0 ? 0 : most / (double) fastest;

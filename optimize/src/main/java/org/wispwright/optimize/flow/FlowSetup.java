@@ -1,6 +1,7 @@
 package org.wispwright.optimize.flow;
 
 import java.util.List;
+import org.wispwright.optimize.solid.Obstacle;
 import org.wispwright.render.volume.GridShape;
 
 /**
@@ -9,21 +10,23 @@ import org.wispwright.render.volume.GridShape;
  *
  * @param grid        the box
  * @param frames      the frame range
- * @param substeps    solver steps from one frame to the next, 1 to 64
+ * @param substeps    solver steps from one frame to the next
  * @param velocity    interpolation of the velocity that carries itself
  * @param density     interpolation of the density
  * @param sides       walls and open sides
  * @param buoyancy    upward acceleration of smoke of density 1, m/s2, finite
  * @param dissipation density's rate of decay, 1/s, 0 or more
  * @param sources     where smoke comes from
+ * @param obstacles   solid things, at most {@link Obstacle#MOST}
  */
-public record FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpolation velocity, Interpolation density, Sides sides,
-                        double buoyancy, double dissipation, List<Source> sources) {
+public record FlowSetup(GridShape grid, FrameRange frames, Substeps substeps, Interpolation velocity, Interpolation density, Sides sides,
+                        double buoyancy, double dissipation, List<Source> sources, List<Obstacle> obstacles) {
 
     /** Checks the numbers. @throws IllegalArgumentException saying what is off */
     public FlowSetup {
-        if (substeps < 1 || substeps > 64) {
-            throw new IllegalArgumentException("flow: got " + substeps + " substeps a frame, needs 1 to 64");
+        if (!substeps.counts().isEmpty() && substeps.counts().size() != frames.count() - 1) {
+            throw new IllegalArgumentException("flow: got numbers of substeps for " + substeps.counts().size() + " frames, needs one for each of "
+                    + (frames.count() - 1));
         }
         if (!Double.isFinite(buoyancy)) {
             throw new IllegalArgumentException("flow: got a buoyancy of " + buoyancy + " m/s2, needs a finite number");
@@ -32,15 +35,40 @@ public record FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpo
             throw new IllegalArgumentException("flow: got a dissipation of " + dissipation + " 1/s, needs a finite number from 0");
         }
         sources = List.copyOf(sources);
+        obstacles = List.copyOf(obstacles);
+        if (obstacles.size() > Obstacle.MOST) {
+            throw new IllegalArgumentException("flow: got " + obstacles.size() + " obstacles, needs at most " + Obstacle.MOST);
+        }
     }
 
-    /** Seconds of one substep. */
-    public double stepSeconds() {
-        return frames.secondsPerFrame() / substeps;
+    /** Plain smoke: sources and buoyancy alone, the same number of substeps for every frame. */
+    public FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpolation velocity, Interpolation density, Sides sides,
+                     double buoyancy, double dissipation, List<Source> sources) {
+        this(grid, frames, Substeps.each(substeps), velocity, density, sides, buoyancy, dissipation, sources, List.of());
     }
 
-    /** The same shot on another grid. */
+    /** The same shot on another grid of its box. */
     public FlowSetup on(GridShape other) {
-        return new FlowSetup(other, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources);
+        return new FlowSetup(other, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles);
+    }
+
+    /** The same shot with these things in its box. */
+    public FlowSetup withObstacles(List<Obstacle> things) {
+        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, things);
+    }
+
+    /** Step n of a run, from 0. */
+    public Substep step(int n) {
+        return substeps.at(n, frames.first());
+    }
+
+    /** Steps of a run from the first frame to this one. */
+    public int stepsTo(int frame) {
+        return substeps.upTo(frame - frames.first());
+    }
+
+    /** Seconds of a substep. */
+    public double seconds(Substep substep) {
+        return frames.secondsPerFrame() / substep.count();
     }
 }

@@ -14,63 +14,22 @@ import org.wispwright.render.volume.MacVelocity;
  *
  * <p>Pullback: P is symmetric, so {@code uBar := P uBar}. The same method serves both; {@code FlowPullbackTest} proves it.
  *
- * <p>D G is solved directly: {@link AxisTransform} along x and z, then for each pair of modes the tridiagonal system
- * {@code p[j-1] - (2 + lambda) p[j] + p[j+1] = d[j]} along y by the Thomas algorithm, with any mix of wall and open at floor
- * and top. In a closed box the constant mode has no solution unless the divergence sums to 0, which walls see to; its
- * pressure is fixed by {@code p[top] = 0}.
+ * <p>{@link BoxPressure} solves for p. In a closed box that asks for a divergence that sums to 0, which walls see to.
  *
- * <p>Wall faces are set to 0 on the way in. Source of the fast solver: Swarztrauber (1977), SIAM Review 19(3), 490-501.
+ * <p>Wall faces are set to 0 on the way in. With solids in the box: {@link SolidProjection}.
  */
 public final class Projection {
-    /** Columns of a plane that one piece of the z transforms takes. */
-    private static final int COLUMNS = 512;
-
     private final GridShape shape;
     private final Sides sides;
-    private final Lanes lanes;
-    private final AxisTransform alongX;
-    private final AxisTransform alongZ;
-    /** Inverse pivots of the Thomas algorithm, at the index of mode (l, j, n). */
-    private final float[] inversePivots;
+    private final BoxPressure box;
     private final float[] a;
-    private final float[] b;
 
     /** Prepares the solve for one box: 12 bytes a cell are kept. */
     public Projection(GridShape shape, Sides sides, Lanes lanes) {
         this.shape = shape;
         this.sides = sides;
-        this.lanes = lanes;
-        alongX = new AxisTransform(shape.nx(), sides.left(), sides.right());
-        alongZ = shape.isPlane() ? new AxisTransform(1, Side.WALL, Side.WALL) : new AxisTransform(shape.nz(), sides.back(), sides.front());
-        inversePivots = new float[shape.cells()];
+        box = new BoxPressure(shape, sides, lanes);
         a = new float[shape.cells()];
-        b = new float[shape.cells()];
-        lanes.forEach(shape.nz(), this::preparePivots);
-    }
-
-    private void preparePivots(int n) {
-        for (int l = 0; l < shape.nx(); l++) {
-            double lambda = alongX.eigenvalue(l) + alongZ.eigenvalue(n);
-            double previous = 0;
-            for (int j = 0; j < shape.ny(); j++) {
-                double pivot = diagonal(j, lambda) - previous;
-                // The constant mode of a closed box is singular in its last row: that pivot is 0 and its pressure is set to 0.
-                boolean singular = j == shape.ny() - 1 && lambda < 1e-12 && sides.floor() == Side.WALL && sides.top() == Side.WALL;
-                previous = singular ? 0 : 1 / pivot;
-                inversePivots[shape.cell(l, j, n)] = (float) previous;
-            }
-        }
-    }
-
-    private double diagonal(int j, double lambda) {
-        int neighbours = 2;
-        if (j == 0 && sides.floor() == Side.WALL) {
-            neighbours--;
-        }
-        if (j == shape.ny() - 1 && sides.top() == Side.WALL) {
-            neighbours--;
-        }
-        return -(neighbours + lambda);
     }
 
     /**
@@ -83,23 +42,14 @@ public final class Projection {
         if (!u.shape().equals(shape)) {
             throw new IllegalArgumentException("projection: the velocity is " + u.shape().inWords() + ", the solver " + shape.inWords());
         }
-        int plane = shape.nx() * shape.ny();
-        int nz = shape.nz();
-        int pieces = (plane + COLUMNS - 1) / COLUMNS;
-        lanes.forEach(nz, k -> {
-            closeWalls(u, k);
+        box.solve(a, k -> {
+            closeWalls(shape, sides, u, k);
             DivergenceKernel.slab(shape, u.x(), u.y(), u.z(), a, k);
-            alongX.rowsToModes(a, b, k * plane, shape.ny());
-        });
-        lanes.forEach(pieces, c -> alongZ.columnsToModes(a, b, plane, c * COLUMNS, Math.min(COLUMNS, plane - c * COLUMNS)));
-        lanes.forEach(nz, this::solveAlongY);
-        lanes.forEach(pieces, c -> alongZ.columnsToCells(a, b, plane, c * COLUMNS, Math.min(COLUMNS, plane - c * COLUMNS)));
-        lanes.forEach(nz, k -> alongX.rowsToCells(a, b, k * plane, shape.ny()));
-        lanes.forEach(nz, k -> subtractGradient(u, k));
+        }, k -> subtractGradient(u, k));
     }
 
     /** Sets wall faces of slab k to 0. The faces between slabs k-1 and k belong to slab k; the last front face to the last slab. */
-    private void closeWalls(MacVelocity u, int k) {
+    static void closeWalls(GridShape shape, Sides sides, MacVelocity u, int k) {
         int nx = shape.nx();
         int ny = shape.ny();
         for (int j = 0; j < ny; j++) {
@@ -124,27 +74,6 @@ public final class Projection {
         if (k == shape.nz() - 1 && (sides.front() == Side.WALL || shape.isPlane())) {
             int start = shape.zFace(0, 0, shape.nz());
             java.util.Arrays.fill(u.z(), start, start + nx * ny, 0f);
-        }
-    }
-
-    private void solveAlongY(int n) {
-        int nx = shape.nx();
-        int ny = shape.ny();
-        int first = shape.cell(0, 0, n);
-        for (int l = 0; l < nx; l++) {
-            a[first + l] *= inversePivots[first + l];
-        }
-        for (int j = 1; j < ny; j++) {
-            int row = first + j * nx;
-            for (int l = 0; l < nx; l++) {
-                a[row + l] = (a[row + l] - a[row - nx + l]) * inversePivots[row + l];
-            }
-        }
-        for (int j = ny - 2; j >= 0; j--) {
-            int row = first + j * nx;
-            for (int l = 0; l < nx; l++) {
-                a[row + l] -= inversePivots[row + l] * a[row + nx + l];
-            }
         }
     }
 

@@ -11,10 +11,10 @@ import org.wispwright.render.volume.MacVelocity;
  * u1 = carry(u, trace(u))
  * u2 = u1 + dt (f + buoyancy(density))
  * u' = project(u2)
- * density' = exp(-dissipation dt) carry(density, trace(u')) + dt sources
+ * density' = exp(-dissipation dt) carry(density, trace(u')) + dt sources, 0 in solids
  * </pre>
  * Only carrying is not linear, and it needs u, density and u' alone; so the pullback needs the state before the step and the
- * velocity after it, and runs no step again. A solver owns about 100 bytes a cell of workspace; one caller at a time.
+ * velocity after it, and runs no step again. A solver owns about 100 bytes a cell of workspace, 40 more with solids; one caller at a time.
  */
 public final class SmokeSolver {
     /** Pieces of a plain loop over one array. */
@@ -23,20 +23,15 @@ public final class SmokeSolver {
     private final FlowSetup setup;
     private final GridShape shape;
     private final Lanes lanes;
-    private final double seconds;
-    private final float keep;
     private final Trace trace;
-    private final Carry carryX;
-    private final Carry carryY;
-    private final Carry carryZ;
-    private final Carry carryDensity;
+    private final Medium medium;
     private final Buoyancy buoyancy;
-    private final Projection projection;
     private final List<SourceCells> sources;
     private final Displacement displacement;
     private final Clock clock = new Clock();
     private final float[] mostPerSlab;
-    private final float[] scratch;
+    /** The span that {@link #displacement} was traced for last. */
+    private double traced;
     private Displacement displacementBar;
     private SmokeState inBar;
 
@@ -68,20 +63,12 @@ public final class SmokeSolver {
         this.setup = setup;
         this.lanes = lanes;
         shape = setup.grid();
-        seconds = setup.stepSeconds();
-        keep = (float) Math.exp(-setup.dissipation() * seconds);
-        Sides sides = setup.sides();
         trace = new Trace(shape, lanes);
-        carryX = Carry.ofFaces(shape, Lattice.Axis.X_FACES, setup.velocity(), sides.left(), sides.right(), lanes);
-        carryY = Carry.ofFaces(shape, Lattice.Axis.Y_FACES, setup.velocity(), sides.floor(), sides.top(), lanes);
-        carryZ = Carry.ofFaces(shape, Lattice.Axis.Z_FACES, setup.velocity(), sides.back(), sides.front(), lanes);
-        carryDensity = Carry.ofCells(shape, setup.density(), lanes);
-        buoyancy = new Buoyancy(shape, sides, lanes);
-        projection = new Projection(shape, sides, lanes);
+        medium = setup.obstacles().isEmpty() ? new EmptyBox(setup, lanes) : new BoxWithSolids(setup, lanes);
+        buoyancy = new Buoyancy(shape, setup.sides(), lanes);
         sources = setup.sources().stream().map(source -> SourceCells.of(source, shape)).toList();
         displacement = new Displacement(shape);
         mostPerSlab = new float[shape.nz()];
-        scratch = new float[shape.cells()];
     }
 
     /** What is simulated. */
@@ -94,34 +81,36 @@ public final class SmokeSolver {
      *
      * @param in    read
      * @param force read: acceleration on faces, m/s2; null for none
-     * @param frame the frame that this substep leads to; says which sources feed it
+     * @param at    the substep: says how long it is, which sources feed it and where the solids are
      * @param follows true if {@code in} is, unchanged, what the last call of this solver wrote to {@code out}: its departures are known
      * @param out   overwritten; must not be in
      */
-    public void step(SmokeState in, MacVelocity force, int frame, boolean follows, SmokeState out) {
+    public void step(SmokeState in, MacVelocity force, Substep at, boolean follows, SmokeState out) {
         MacVelocity u = in.velocity();
         MacVelocity next = out.velocity();
+        double seconds = setup.seconds(at);
         long since = System.nanoTime();
-        if (!follows) {
-            trace.forward(u, seconds, displacement);
+        medium.ready(at);
+        since = clock.lap(Clock.Part.SOLIDS, since);
+        if (!follows || traced != seconds) {
+            trace(u, seconds);
         }
         since = clock.lap(Clock.Part.TRACE, since);
-        carryX.forward(u.x(), displacement, next.x());
-        carryY.forward(u.y(), displacement, next.y());
-        carryZ.forward(u.z(), displacement, next.z());
+        medium.carryFaces(u, displacement, next);
         since = clock.lap(Clock.Part.CARRY_VELOCITY, since);
         if (force != null) {
             addScaled(next, force, (float) seconds);
         }
         buoyancy.forward(in.density().values(), seconds * setup.buoyancy(), next.y());
         since = clock.lap(Clock.Part.PUSH, since);
-        projection.apply(next);
+        medium.project(next);
         since = clock.lap(Clock.Part.PROJECTION, since);
-        trace.forward(next, seconds, displacement);
+        trace(next, seconds);
         since = clock.lap(Clock.Part.TRACE, since);
-        carryDensity.forward(in.density().values(), displacement, out.density().values());
-        fade(out.density().values(), keep);
-        feed(out.density().values(), frame);
+        medium.carryCells(in.density().values(), displacement, out.density().values());
+        fade(out.density().values(), keep(seconds));
+        feed(out.density().values(), at.frame(), seconds);
+        medium.clearSolids(out.density().values());
         clock.lap(Clock.Part.CARRY_DENSITY, since);
     }
 
@@ -130,32 +119,37 @@ public final class SmokeSolver {
      *
      * @param in       read: the state before the substep
      * @param outVelocity read: the velocity after it
+     * @param at          the substep
      * @param follows     true if outVelocity is, unchanged, what the last call of this solver traced last: the velocity of a step's
      *                    {@code out} or of a pullback's {@code in}
      * @param bar      on entry the derivative by the state after the substep, on exit by the state before it
      * @param forceBar added to: the derivative by the force; null if not wanted
      */
-    public void pullback(SmokeState in, MacVelocity outVelocity, boolean follows, SmokeState bar, MacVelocity forceBar) {
+    public void pullback(SmokeState in, MacVelocity outVelocity, Substep at, boolean follows, SmokeState bar, MacVelocity forceBar) {
         if (inBar == null) {
             inBar = new SmokeState(shape);
             displacementBar = new Displacement(shape);
         }
+        double seconds = setup.seconds(at);
         clear(inBar);
         lanes.forEach(shape.nz(), displacementBar::clearSlab);
         float[] density = in.density().values();
         long since = System.nanoTime();
-        fade(bar.density().values(), keep);
-        if (!follows) {
-            trace.forward(outVelocity, seconds, displacement);
+        medium.ready(at);
+        since = clock.lap(Clock.Part.SOLIDS, since);
+        medium.clearSolids(bar.density().values());
+        fade(bar.density().values(), keep(seconds));
+        if (!follows || traced != seconds) {
+            trace(outVelocity, seconds);
         }
         since = clock.lap(Clock.Part.TRACE, since);
         int reach = displacement.reachInZ(lanes, mostPerSlab);
-        carryDensity.pullback(density, displacement, reach, bar.density().values(), inBar.density().values(), displacementBar);
+        medium.carryCellsBack(density, displacement, reach, bar.density().values(), inBar.density().values(), displacementBar);
         since = clock.lap(Clock.Part.CARRY_DENSITY_BACK, since);
         trace.pullback(outVelocity, seconds, displacementBar, bar.velocity());
         since = clock.lap(Clock.Part.TRACE_BACK, since);
 
-        projection.apply(bar.velocity());
+        medium.projectBack(bar.velocity());
         since = clock.lap(Clock.Part.PROJECTION_BACK, since);
         if (forceBar != null) {
             addScaled(forceBar, bar.velocity(), (float) seconds);
@@ -166,16 +160,23 @@ public final class SmokeSolver {
         MacVelocity u = in.velocity();
         MacVelocity uBar = inBar.velocity();
         lanes.forEach(shape.nz(), displacementBar::clearSlab);
-        trace.forward(u, seconds, displacement);
+        trace(u, seconds);
         since = clock.lap(Clock.Part.TRACE, since);
         reach = displacement.reachInZ(lanes, mostPerSlab);
-        carryX.pullback(u.x(), displacement, reach, bar.velocity().x(), uBar.x(), displacementBar);
-        carryY.pullback(u.y(), displacement, reach, bar.velocity().y(), uBar.y(), displacementBar);
-        carryZ.pullback(u.z(), displacement, reach, bar.velocity().z(), uBar.z(), displacementBar);
+        medium.carryFacesBack(u, displacement, reach, bar.velocity(), uBar, displacementBar);
         since = clock.lap(Clock.Part.CARRY_VELOCITY_BACK, since);
         trace.pullback(u, seconds, displacementBar, uBar);
         bar.set(inBar);
         clock.lap(Clock.Part.TRACE_BACK, since);
+    }
+
+    private void trace(MacVelocity u, double seconds) {
+        trace.forward(u, seconds, displacement);
+        traced = seconds;
+    }
+
+    private float keep(double seconds) {
+        return (float) Math.exp(-setup.dissipation() * seconds);
     }
 
     /** Where this solver's time went; whoever drives it may add parts of its own. */
@@ -183,9 +184,12 @@ public final class SmokeSolver {
         return clock;
     }
 
-    /** Largest |div u| h / |u| of a velocity: 0 for a field free of divergence, about 1 for one that is not. */
+    /**
+     * Largest |div u| h / |u| of a velocity: 0 for a field free of divergence, about 1 for one that is not. With solids: of the fluid
+     * around them where the last step saw them.
+     */
     public double relativeDivergence(MacVelocity u) {
-        return DivergenceKernel.relativeMax(u, scratch, lanes);
+        return medium.relativeDivergence(u);
     }
 
     private void addScaled(MacVelocity to, MacVelocity from, float by) {
@@ -224,7 +228,7 @@ public final class SmokeSolver {
         return (int) ((long) length * chunk / CHUNKS);
     }
 
-    private void feed(float[] density, int frame) {
+    private void feed(float[] density, int frame, double seconds) {
         for (SourceCells fed : sources) {
             if (fed.source().feeds(frame)) {
                 for (int n = 0; n < fed.cells().length; n++) {

@@ -122,7 +122,7 @@ final class Climb {
         SmokeState start = new SmokeState(grid);
         plan = new TermPlan(here, solver, start, terms, stay, cancelled);
         int lastFrame = here.lastFrame();
-        int steps = (lastFrame - flow.frames().first()) * flow.substeps();
+        int steps = flow.stepsTo(lastFrame);
         snapshots = new Budget(memoryBytes, SmokeState.bytes(grid)).snapshots(steps);
         ForceBasis basis = new ForceBasis(grid, flow.frames().count() - 1, bands, lanes);
         loss = new SolveLoss(solver, basis, terms, start, lastFrame, snapshots, cancelled);

@@ -124,7 +124,7 @@ public record Measurement(GridShape grid, int frames, int threads, double stepNa
         int grow = 12;
         for (int n = 0; n < grow + 5; n++) {
             long since = System.nanoTime();
-            solver.step(now, null, solver.setup().frames().first() + 1, n > 0, next);
+            solver.step(now, null, solver.setup().step(0), n > 0, next);
             double nanos = (double) (System.nanoTime() - since) / solver.setup().grid().cells();
             SmokeState swap = now;
             now = next;

@@ -5,8 +5,10 @@ import java.util.List;
 import java.util.function.BooleanSupplier;
 import org.wispwright.optimize.checkpoint.ReversibleChain;
 import org.wispwright.optimize.flow.Clock;
+import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
+import org.wispwright.optimize.flow.Substep;
 import org.wispwright.optimize.force.ForceBasis;
 import org.wispwright.render.volume.GridShape;
 import org.wispwright.render.volume.MacVelocity;
@@ -25,8 +27,7 @@ final class SmokeChain implements ReversibleChain {
     private final BooleanSupplier cancelled;
     private final Owed owed;
     private final SmokeState start;
-    private final int substeps;
-    private final int firstFrame;
+    private final FlowSetup flow;
     private final List<SmokeState> slots = new ArrayList<>();
     private final SmokeState bar;
     private final MacVelocity force;
@@ -58,9 +59,8 @@ final class SmokeChain implements ReversibleChain {
         this.cancelled = cancelled;
         this.owed = owed;
         this.start = start;
-        substeps = solver.setup().substeps();
-        firstFrame = solver.setup().frames().first();
-        GridShape shape = solver.setup().grid();
+        flow = solver.setup();
+        GridShape shape = flow.grid();
         bar = new SmokeState(shape);
         force = new MacVelocity(shape);
         forceBar = new MacVelocity(shape);
@@ -135,15 +135,16 @@ final class SmokeChain implements ReversibleChain {
     public void pull(int step) {
         checkCancelled();
         owed.addTo(step + 1, current.density(), bar.density());
-        int at = step / substeps;
+        Substep substep = flow.step(step);
+        int at = frameStep(substep);
         if (at != barStep) {
             forceBar.fill(0);
             barStep = at;
         }
-        solver.pullback(before, current.velocity(), follows, bar, forceBar);
+        solver.pullback(before, current.velocity(), substep, follows, bar, forceBar);
         follows = false;
         undisturbed = true;
-        if (step % substeps == 0) {
+        if (substep.number() == 0) {
             long since = System.nanoTime();
             basis.pullback(forceBar, at, xBar);
             solver.clock().lap(Clock.Part.FORCE_BACK, since);
@@ -153,16 +154,22 @@ final class SmokeChain implements ReversibleChain {
 
     private void run(int step) {
         checkCancelled();
-        int at = step / substeps;
+        Substep substep = flow.step(step);
+        int at = frameStep(substep);
         if (at != forceStep) {
             long since = System.nanoTime();
             basis.force(x, at, force);
             forceStep = at;
             solver.clock().lap(Clock.Part.FORCE, since);
         }
-        solver.step(current, force, firstFrame + at + 1, follows, spare);
+        solver.step(current, force, substep, follows, spare);
         follows = true;
         undisturbed = false;
+    }
+
+    /** Number of the force that a substep runs under, from 0. */
+    private int frameStep(Substep substep) {
+        return substep.frame() - flow.frames().first() - 1;
     }
 
     private void checkCancelled() {

@@ -3,8 +3,10 @@ package org.wispwright.optimize.solve;
 import java.util.Arrays;
 import java.util.function.BooleanSupplier;
 import org.wispwright.optimize.checkpoint.Reversal;
+import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
+import org.wispwright.optimize.flow.Substep;
 import org.wispwright.optimize.force.ForceBasis;
 import org.wispwright.optimize.search.Objective;
 
@@ -16,8 +18,7 @@ final class SolveLoss implements Objective {
     private final FrameTerms terms;
     private final SmokeChain chain;
     private final Reversal reversal;
-    private final int substeps;
-    private final int firstFrame;
+    private final FlowSetup flow;
     private final double[] losses;
 
     /**
@@ -28,15 +29,16 @@ final class SolveLoss implements Objective {
     SolveLoss(SmokeSolver solver, ForceBasis basis, FrameTerms terms, SmokeState start, int lastFrame, int snapshots,
               BooleanSupplier cancelled) {
         this.terms = terms;
-        substeps = solver.setup().substeps();
-        firstFrame = solver.setup().frames().first();
+        FlowSetup flow = solver.setup();
         losses = new double[terms.count()];
         chain = new SmokeChain(solver, basis, start, cancelled, (n, density, densityBar) -> {
-            if (n % substeps == 0) {
-                terms.pullback(firstFrame + n / substeps, density, densityBar);
+            int frame = frameOf(flow, n);
+            if (frame >= 0) {
+                terms.pullback(frame, density, densityBar);
             }
         });
-        reversal = new Reversal(chain, (lastFrame - firstFrame) * substeps, snapshots);
+        reversal = new Reversal(chain, flow.stepsTo(lastFrame), snapshots);
+        this.flow = flow;
     }
 
     @Override
@@ -52,11 +54,21 @@ final class SolveLoss implements Objective {
         double[] sum = new double[1];
         chain.begin(x, gradient);
         reversal.forward(n -> {
-            if (n % substeps == 0) {
-                sum[0] += terms.forward(firstFrame + n / substeps, chain.current().density(), losses);
+            int frame = frameOf(flow, n);
+            if (frame >= 0) {
+                sum[0] += terms.forward(frame, chain.current().density(), losses);
             }
         });
         return sum[0];
+    }
+
+    /** The frame whose state is the one after n substeps; -1 if it lies between two. */
+    private static int frameOf(FlowSetup flow, int n) {
+        if (n == 0) {
+            return flow.frames().first();
+        }
+        Substep last = flow.step(n - 1);
+        return last.number() == last.count() - 1 ? last.frame() : -1;
     }
 
     /** Lets go of the kept states; an evaluation after this makes new ones. */

@@ -35,7 +35,7 @@ class FirstStepTest {
             }
         }
         SmokeState next = new SmokeState(shape);
-        solver(shape, 0.8, 1).step(rest, null, 2, false, next);
+        solver(shape, 0.8, 1).step(rest, null, new Substep(2, 0, 1), false, next);
         float[] v = next.velocity().y();
         int c = n / 2;
         int k = shape.isPlane() ? 0 : c;
@@ -98,7 +98,7 @@ class FirstStepTest {
             layered.density().values()[n] = 1 + 0.3f * (float) Math.sin(n / 4 % 8);
         }
         SmokeState next = new SmokeState(shape);
-        solver(shape, 9.81, 1 / seconds).step(layered, null, 2, false, next);
+        solver(shape, 9.81, 1 / seconds).step(layered, null, new Substep(2, 0, 1), false, next);
         double push = seconds * 9.81;
         for (float v : FlowOperators.all(next.velocity())) {
             assertEquals(0, v, 1e-6 * push, "a velocity of float rounding at the most");

@@ -55,7 +55,7 @@ class WholeChainTest {
 
     private static SmokeState wind(FlowSetup flow) {
         GridShape shape = flow.grid();
-        float cellAStep = (float) (shape.cellMetres() / flow.stepSeconds());
+        float cellAStep = (float) (shape.cellMetres() / flow.seconds(flow.step(0)));
         SmokeState state = new SmokeState(shape);
         for (int k = 0; k <= shape.nz(); k++) {
             for (int j = 0; j <= shape.ny(); j++) {

@@ -13,6 +13,7 @@ import org.wispwright.optimize.flow.Interpolation;
 import org.wispwright.optimize.flow.Side;
 import org.wispwright.optimize.flow.Sides;
 import org.wispwright.optimize.flow.Source;
+import org.wispwright.optimize.solid.Obstacle;
 import org.wispwright.render.march.Light;
 import org.wispwright.render.march.Look;
 import org.wispwright.render.picture.Picture;
@@ -56,12 +57,14 @@ final class SetupReader {
             return Optional.empty();
         }
         JsonPlace top = file.get();
-        findings.check(() -> top.only("wispwright", "name", "grid", "frames", "flow", "sources", "look", "background", "views"));
+        findings.check(() -> top.only("wispwright", "name", "grid", "frames", "flow", "sources", "obstacles", "look", "background", "views"));
         Optional<String> name = findings.attempt(() -> top.need("name").text(200));
         Optional<FrameRange> frames = findings.attempt(() -> frames(top.need("frames")));
         Optional<GridShape> grid = findings.attempt(() -> grid(top.need("grid"), steps(top, frames)));
         List<Source> sources = sources(top, frames);
-        Optional<FlowSetup> flow = findings.attempt(() -> flow(top.ask("flow"), top, grid, frames, sources)).flatMap(f -> f);
+        List<Obstacle> obstacles = new ObstacleReader(findings, new VolumeReader(folder, memoryBytes)).read(top);
+        Optional<FlowSetup> flow = findings.attempt(() -> flow(top.ask("flow"), top, grid, frames, sources)).flatMap(f -> f)
+                .map(f -> f.withObstacles(obstacles));
         Optional<Look> look = findings.attempt(() -> look(top.need("look")));
         Optional<Rgb> background = findings.attempt(() -> top.ask("background").map(SetupReader::rgb).orElse(Rgb.BLACK));
         List<ShotView> views = views(top, frames);

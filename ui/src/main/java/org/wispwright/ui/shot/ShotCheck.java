@@ -1,13 +1,17 @@
 package org.wispwright.ui.shot;
 
 import java.nio.file.Path;
+import java.util.DoubleSummaryStatistics;
 import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Optional;
+import java.util.function.ToDoubleFunction;
 import org.wispwright.optimize.flow.FrameRange;
 import org.wispwright.optimize.flow.Source;
+import org.wispwright.optimize.solid.Obstacle;
 import org.wispwright.render.view.Raster;
+import org.wispwright.render.view.Vec3;
 import org.wispwright.render.view.View;
 import org.wispwright.render.volume.GridShape;
 
@@ -94,6 +98,7 @@ public final class ShotCheck {
         NoteReader.Notes notes = new NoteReader(folder, mattes, findings).read();
         setup.ifPresent(shot -> {
             checkSources(shot);
+            checkObstacles(shot);
             if (pictures) {
                 checkViews(shot);
             }
@@ -119,6 +124,28 @@ public final class ShotCheck {
                         "move it to within " + middle(box)));
             }
         }
+    }
+
+    private void checkObstacles(Shot shot) {
+        GridShape box = shot.flow().grid();
+        List<Obstacle> obstacles = shot.flow().obstacles();
+        for (int n = 0; n < obstacles.size(); n++) {
+            Obstacle o = obstacles.get(n);
+            double reach = o.solid().reach(box.cellMetres());
+            // Its middle lies within the box of its keys (the curve swings past none), so no frame brings it nearer than that.
+            boolean meets = meets(o, Vec3::x, box.originX(), box.nx() * box.cellMetres(), reach)
+                    && meets(o, Vec3::y, box.originY(), box.ny() * box.cellMetres(), reach)
+                    && (box.isPlane() || meets(o, Vec3::z, box.originZ(), box.nz() * box.cellMetres(), reach));
+            if (!meets) {
+                findings.add(Finding.of("shot.json", "/obstacles/" + n, "obstacle '" + o.name() + "' outside the box at every frame",
+                        "a thing that reaches into it", "move it to within " + middle(box)));
+            }
+        }
+    }
+
+    private static boolean meets(Obstacle o, ToDoubleFunction<Vec3> axis, double low, double length, double reach) {
+        DoubleSummaryStatistics along = o.position().values().stream().mapToDouble(axis).summaryStatistics();
+        return along.getMin() - reach <= low + length && along.getMax() + reach >= low;
     }
 
     private static double outside(double at, double low, double length) {

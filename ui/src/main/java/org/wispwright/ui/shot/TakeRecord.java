@@ -7,15 +7,8 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import com.fasterxml.jackson.core.JsonProcessingException;
 import com.fasterxml.jackson.databind.SerializationFeature;
 import java.nio.charset.StandardCharsets;
-import java.security.MessageDigest;
-import java.security.NoSuchAlgorithmException;
-import java.util.HexFormat;
 import java.util.List;
 import org.wispwright.optimize.flow.FlowSetup;
-import org.wispwright.optimize.flow.FrameRange;
-import org.wispwright.optimize.flow.Sides;
-import org.wispwright.optimize.flow.Source;
-import org.wispwright.render.volume.GridShape;
 
 /**
  * Where a take comes from, as {@code take.json} says it.
@@ -58,36 +51,9 @@ public record TakeRecord(Kind kind, String tool, String setupSha256, ObjectNode 
         return JsonNodeFactory.instance.objectNode();
     }
 
-    /**
-     * SHA-256 over the set-up's values, one line a part, in a fixed order; the same set-up has the same digest on every machine.
-     * Names of sources do not count. A part that a later format adds must add no line while it has its default.
-     */
+    /** See {@link SetupDigest}. */
     public static String digest(FlowSetup flow) {
-        GridShape g = flow.grid();
-        FrameRange f = flow.frames();
-        Sides s = flow.sides();
-        StringBuilder lines = new StringBuilder();
-        line(lines, "grid", g.nx(), g.ny(), g.nz(), g.cellMetres(), g.originX(), g.originY(), g.originZ());
-        line(lines, "frames", f.first(), f.last(), f.perSecond());
-        line(lines, "flow", flow.substeps(), flow.velocity(), flow.density(), flow.buoyancy(), flow.dissipation());
-        line(lines, "sides", s.left(), s.right(), s.floor(), s.top(), s.back(), s.front());
-        for (Source source : flow.sources()) {
-            line(lines, "source", source.centreX(), source.centreY(), source.centreZ(), source.radiusMetres(), source.edgeMetres(),
-                    source.ratePerSecond(), source.firstFrame(), source.lastFrame());
-        }
-        try {
-            return HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(lines.toString().getBytes(StandardCharsets.UTF_8)));
-        } catch (NoSuchAlgorithmException impossible) {
-            throw new IllegalStateException(impossible);
-        }
-    }
-
-    private static void line(StringBuilder lines, String part, Object... values) {
-        lines.append(part);
-        for (Object value : values) {
-            lines.append(' ').append(value);
-        }
-        lines.append('\n');
+        return SetupDigest.of(flow);
     }
 
     /** True if the take was made with this set-up. */

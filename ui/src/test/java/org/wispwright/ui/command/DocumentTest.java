@@ -26,12 +26,13 @@ class DocumentTest {
         while (blocks.find()) {
             json.add(blocks.group(1));
         }
-        assertEquals(3, json.size(), "shot.json, a note and take.json");
+        assertEquals(4, json.size(), "shot.json, further keys of it, a note and take.json");
         SmallShot shot = SmallShot.in(place.resolve("yard"));
         shot.delete("notes/open.json");
         shot.delete("notes/lean.json");
-        shot.write("shot.json", json.get(0));
-        shot.write("notes/lean-head.json", json.get(1));
+        String further = json.get(1).strip();
+        shot.write("shot.json", json.get(0).replace("\"sources\":", further.substring(1, further.length() - 1) + ", \"sources\":"));
+        shot.write("notes/lean-head.json", json.get(2));
         shot.writePng("frames/front.1036.png", 360, 480);
         Run run = Run.of("check", shot.folder().toString());
         assertEquals(0, run.code(), run.err());

@@ -1,17 +1,14 @@
 package org.wispwright.ui.command;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
-import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
 import java.nio.ByteBuffer;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
-import java.util.SortedMap;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -439,24 +436,10 @@ class FaultsTest {
     }
 
     private void refused(List<String> options, String... phrases) {
-        for (List<String> command : ShotCommands.on(shot.folder(), place.resolve("out"))) {
-            SortedMap<String, String> before = SmallShot.listing(place);
-            List<String> args = new ArrayList<>(command);
-            args.addAll(options);
-            Run run = Run.of(args.toArray(new String[0]));
-            assertEquals(ExitCodes.BAD_INPUT, run.code(), args + ": " + run.err());
-            assertOneSentence(run.err(), phrases);
-            assertEquals(before, SmallShot.listing(place), args + " changed something on disk");
-        }
+        Refused.byAll(shot, place, options, phrases);
     }
 
     private static void assertOneSentence(String err, String... phrases) {
-        String line = err.strip();
-        assertEquals(1, line.lines().count(), err);
-        assertTrue(line.startsWith("wispwright: ") && line.endsWith("."), err);
-        assertFalse(line.contains("Exception") || line.contains("\tat ") || line.contains("java."), err);
-        for (String phrase : phrases) {
-            assertTrue(line.contains(phrase), "'" + phrase + "' is not in: " + err);
-        }
+        Refused.assertOneSentence(err, phrases);
     }
 }

@@ -1,0 +1,94 @@
+package org.wispwright.ui.shot;
+
+import java.nio.ByteBuffer;
+import java.nio.ByteOrder;
+import java.nio.charset.StandardCharsets;
+import java.security.MessageDigest;
+import java.security.NoSuchAlgorithmException;
+import java.util.HexFormat;
+import org.wispwright.optimize.flow.FlowSetup;
+import org.wispwright.optimize.flow.FrameRange;
+import org.wispwright.optimize.flow.Sides;
+import org.wispwright.optimize.flow.Source;
+import org.wispwright.optimize.motion.Curve;
+import org.wispwright.optimize.solid.Obstacle;
+import org.wispwright.optimize.solid.Solid;
+import org.wispwright.render.view.Vec3;
+import org.wispwright.render.volume.GridShape;
+
+/**
+ * SHA-256 over a set-up's values, one line a part, in a fixed order; the same set-up has the same digest on every machine. Names do not
+ * count, the values of volumes do. A part that a later format adds must add no line while it has its default.
+ */
+final class SetupDigest {
+    private final StringBuilder lines = new StringBuilder();
+
+    private SetupDigest() {
+    }
+
+    static String of(FlowSetup flow) {
+        SetupDigest digest = new SetupDigest();
+        digest.plain(flow);
+        flow.obstacles().forEach(digest::obstacle);
+        return sha256(digest.lines.toString().getBytes(StandardCharsets.UTF_8));
+    }
+
+    private void plain(FlowSetup flow) {
+        GridShape g = flow.grid();
+        FrameRange f = flow.frames();
+        Sides s = flow.sides();
+        line("grid", g.nx(), g.ny(), g.nz(), g.cellMetres(), g.originX(), g.originY(), g.originZ());
+        line("frames", f.first(), f.last(), f.perSecond());
+        line("flow", flow.substeps().every(), flow.velocity(), flow.density(), flow.buoyancy(), flow.dissipation());
+        line("sides", s.left(), s.right(), s.floor(), s.top(), s.back(), s.front());
+        for (Source source : flow.sources()) {
+            line("source", source.centreX(), source.centreY(), source.centreZ(), source.radiusMetres(), source.edgeMetres(),
+                    source.ratePerSecond(), source.firstFrame(), source.lastFrame());
+        }
+    }
+
+    private void obstacle(Obstacle obstacle) {
+        Solid solid = obstacle.solid();
+        if (solid instanceof Solid.Box box) {
+            line("obstacle box", box.half().x(), box.half().y(), box.half().z());
+        } else if (solid instanceof Solid.Ball ball) {
+            line("obstacle ball", ball.radius());
+        } else if (solid instanceof Solid.Cylinder cylinder) {
+            line("obstacle cylinder", cylinder.radius(), cylinder.halfLength());
+        } else if (solid instanceof Solid.Volume volume) {
+            line("obstacle volume", volume.kind(), volume.shape().nx(), volume.shape().ny(), volume.shape().nz(), volume.shape().cellMetres(),
+                    values(volume.values()));
+        }
+        curve("position", obstacle.position());
+        curve("rotation", obstacle.rotation());
+    }
+
+    private void curve(String what, Curve curve) {
+        for (int n = 0; n < curve.frames().size(); n++) {
+            Vec3 v = curve.values().get(n);
+            line(what, curve.frames().get(n), v.x(), v.y(), v.z());
+        }
+    }
+
+    private void line(String part, Object... values) {
+        lines.append(part);
+        for (Object value : values) {
+            lines.append(' ').append(value);
+        }
+        lines.append('\n');
+    }
+
+    private static String values(float[] values) {
+        ByteBuffer bytes = ByteBuffer.allocate(4 * values.length).order(ByteOrder.LITTLE_ENDIAN);
+        bytes.asFloatBuffer().put(values);
+        return sha256(bytes.array());
+    }
+
+    private static String sha256(byte[] bytes) {
+        try {
+            return HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(bytes));
+        } catch (NoSuchAlgorithmException impossible) {
+            throw new IllegalStateException(impossible);
+        }
+    }
+}

@@ -1,0 +1,122 @@
+package org.wispwright.ui.command;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertNotEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.io.IOException;
+import java.nio.file.Path;
+import java.util.Arrays;
+import java.util.List;
+import org.junit.jupiter.api.BeforeEach;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
+import org.wispwright.optimize.flow.FlowSetup;
+import org.wispwright.render.volume.NpyFile;
+import org.wispwright.ui.shot.ShotCheck;
+import org.wispwright.ui.shot.TakeRecord;
+
+/** Keys of shot.json that say what the air does beside plain smoke: read right, refused right, no part of a digest while they are not there. */
+class FlowKeysTest {
+    /** What the set-up of {@link SmallShot} had for a digest before any of these keys: its takes must stay its takes. By hand: sha256sum of its five lines. */
+    private static final String PLAIN = "f82a2c27d5489166661af0bb3ad4833916ce8ce455de6901add59e95b91dfcf6";
+
+    @TempDir
+    private Path place;
+    private SmallShot shot;
+
+    @BeforeEach
+    void aGoodShot() {
+        shot = SmallShot.in(place.resolve("yard"));
+    }
+
+    private FlowSetup flow() {
+        return ShotCheck.require(shot.folder(), 1L << 30).flow();
+    }
+
+    private String digest() {
+        return TakeRecord.digest(flow());
+    }
+
+    private void volume(String file, int[] shape, float value) throws IOException {
+        float[] values = new float[Arrays.stream(shape).reduce(1, (a, b) -> a * b)];
+        Arrays.fill(values, value);
+        java.nio.file.Files.createDirectories(shot.folder().resolve(file).getParent());
+        NpyFile.write(shot.folder().resolve(file), shape, values);
+    }
+
+    /** Adds a key beside the sources. */
+    private void add(String json) {
+        shot.swap("shot.json", "\"sources\":", json + ",\n  \"sources\":");
+    }
+
+    private void refused(String... phrases) {
+        Refused.by(place, List.of("check", shot.folder().toString()), phrases);
+        Refused.by(place, List.of("simulate", shot.folder().toString()), phrases);
+    }
+
+    @Test void withoutThemTheDigestIsTheOldOne() {
+        assertEquals(PLAIN, digest());
+    }
+
+    @Test void everyFormOfObstacleCounts() throws IOException {
+        volume("solids/rock.npy", new int[] {4, 5, 6}, -0.1f);
+        add("""
+            "obstacles": [
+              {"name": "shelf", "box": {"sizeMetres": [1, 0.1, 1]}, "positionMetres": [1, 2, 1], "rotationRadians": [0, 0, 0.3]},
+              {"name": "pipe", "cylinder": {"radiusMetres": 0.2, "lengthMetres": 2}, "positionMetres": [0.5, 1, 1]},
+              {"name": "rock", "volume": {"file": "solids/rock.npy", "holds": "distance", "cellMetres": 0.1}, "positionMetres": [1.5, 1, 1]},
+              {"name": "drum", "ball": {"radiusMetres": 0.3}, "keys": [
+                {"frame": 1001, "positionMetres": [0.5, 3, 1]}, {"frame": 1006, "positionMetres": [1.5, 3, 1], "rotationRadians": [0, 1, 0]}]}
+            ]""");
+        FlowSetup flow = flow();
+        assertEquals(4, flow.obstacles().size());
+        assertEquals(1.0, flow.obstacles().get(3).position().at(1003.5).x(), 1e-12);
+        String first = digest();
+        assertNotEquals(PLAIN, first);
+        shot.swap("shot.json", "\"name\": \"shelf\"", "\"name\": \"board\"");
+        assertEquals(first, digest());
+        shot.swap("shot.json", "[0, 1, 0]", "[0, 1.5, 0]");
+        assertNotEquals(first, digest());
+        shot.swap("shot.json", "[0, 1.5, 0]", "[0, 1, 0]");
+        volume("solids/rock.npy", new int[] {4, 5, 6}, -0.2f);
+        assertNotEquals(first, digest(), "the volume's values count");
+        Run run = Run.of("simulate", shot.folder().toString());
+        assertEquals(0, run.code(), run.err());
+    }
+
+    @ParameterizedTest
+    @CsvSource(delimiter = '|', quoteCharacter = '~', value = {
+        "{'name': 'a', 'positionMetres': [1,1,1]}                                                     | /obstacles/0 | no form",
+        "{'name': 'a', 'ball': {'radiusMetres': 1}, 'box': {'sizeMetres': [1,1,1]}, 'positionMetres': [1,1,1]} | /obstacles/0 | more than one form",
+        "{'name': 'a', 'ball': {'radiusMetres': -1}, 'positionMetres': [1,1,1]}                       | /obstacles/0/ball/radiusMetres | above 0",
+        "{'name': 'a', 'ball': {'radius': 1}, 'positionMetres': [1,1,1]}                              | /obstacles/0/ball/radius | unknown key",
+        "{'name': 'a', 'box': {'sizeMetres': [1,0,1]}, 'positionMetres': [1,1,1]}                     | /obstacles/0/box/sizeMetres/1 | above 0",
+        "{'name': 'a', 'ball': {'radiusMetres': 0.1}}                                                 | /obstacles/0 | neither",
+        "{'name': 'a', 'ball': {'radiusMetres': 0.1}, 'positionMetres': [1,1,1], 'keys': []}          | /obstacles/0 | both",
+        "{'name': 'a', 'ball': {'radiusMetres': 0.1}, 'keys': []}                                     | /obstacles/0/keys | a list of 0 values",
+        "{'name': 'a', 'ball': {'radiusMetres': 0.1}, 'keys': [{'frame': 1001}]}                      | /obstacles/0/keys/0 | no 'positionMetres'",
+        "{'name': 'a', 'ball': {'radiusMetres': 0.1}, 'keys': [{'frame': 1002, 'positionMetres': [1,1,1]}, {'frame': 1002, 'positionMetres': [1,1,1]}]} | /obstacles/0/keys/1/frame | rise",
+        "{'name': 'a', 'ball': {'radiusMetres': 0.1}, 'positionMetres': [90,1,1]}                     | /obstacles/0 | outside the box",
+        "{'name': 'a', 'volume': {'file': 'none.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | /obstacles/0/volume/file | missing",
+        "{'name': 'a', 'volume': {'file': '../x.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | /obstacles/0/volume/file | leaves the shot folder",
+        "{'name': 'a', 'volume': {'file': 'solids/flat.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | /obstacles/0/volume/file | three sizes",
+        "{'name': 'a', 'volume': {'file': 'solids/loud.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | /obstacles/0/volume/file | values from 0 to 1",
+        "{'name': 'a', 'volume': {'file': 'solids/text.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | /obstacles/0/volume/file | not an NPY file",
+        "{'name': 'a', 'volume': {'file': 'solids/loud.npy', 'holds': 'smoke', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | /obstacles/0/volume/holds | distance"})
+    void obstaclesThatAreRefused(String obstacle, String pointer, String phrase) throws IOException {
+        volume("solids/flat.npy", new int[] {4, 5}, 0);
+        volume("solids/loud.npy", new int[] {2, 2, 2}, 7);
+        shot.write("solids/text.npy", "no volume");
+        add("\"obstacles\": [" + obstacle.replace('\'', '"') + "]");
+        refused("shot.json at " + pointer, phrase);
+    }
+
+    @Test void twoObstaclesOfOneName() {
+        String ball = "{\"name\": \"a\", \"ball\": {\"radiusMetres\": 0.1}, \"positionMetres\": [1, 1, 1]}";
+        add("\"obstacles\": [" + ball + ", " + ball + "]");
+        refused("shot.json at /obstacles/1/name", "second time");
+    }
+}
