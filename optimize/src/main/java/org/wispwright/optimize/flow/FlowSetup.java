@@ -2,11 +2,12 @@ package org.wispwright.optimize.flow;
 
 import java.util.List;
 import org.wispwright.optimize.solid.Obstacle;
+import org.wispwright.optimize.solid.SolidCells;
+import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.volume.GridShape;
 
 /**
- * Everything that the simulation of a shot depends on, apart from the extra force. The first frame's state is empty,
- * still air.
+ * Everything that the simulation of a shot depends on, apart from the extra force.
  *
  * @param grid        the box
  * @param frames      the frame range
@@ -18,9 +19,11 @@ import org.wispwright.render.volume.GridShape;
  * @param dissipation density's rate of decay, 1/s, 0 or more
  * @param sources     where smoke comes from
  * @param obstacles   solid things, at most {@link Obstacle#MOST}
+ * @param wind        what pushes all air alike
+ * @param start       what is in the box on the first frame
  */
 public record FlowSetup(GridShape grid, FrameRange frames, Substeps substeps, Interpolation velocity, Interpolation density, Sides sides,
-                        double buoyancy, double dissipation, List<Source> sources, List<Obstacle> obstacles) {
+                        double buoyancy, double dissipation, List<Source> sources, List<Obstacle> obstacles, Wind wind, Start start) {
 
     /** Checks the numbers. @throws IllegalArgumentException saying what is off */
     public FlowSetup {
@@ -44,17 +47,40 @@ public record FlowSetup(GridShape grid, FrameRange frames, Substeps substeps, In
     /** Plain smoke: sources and buoyancy alone, the same number of substeps for every frame. */
     public FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpolation velocity, Interpolation density, Sides sides,
                      double buoyancy, double dissipation, List<Source> sources) {
-        this(grid, frames, Substeps.each(substeps), velocity, density, sides, buoyancy, dissipation, sources, List.of());
+        this(grid, frames, Substeps.each(substeps), velocity, density, sides, buoyancy, dissipation, sources, List.of(), Wind.NONE, Start.EMPTY);
     }
 
     /** The same shot on another grid of its box. */
     public FlowSetup on(GridShape other) {
-        return new FlowSetup(other, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles);
+        return new FlowSetup(other, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, wind,
+                start);
     }
 
     /** The same shot with these things in its box. */
     public FlowSetup withObstacles(List<Obstacle> things) {
-        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, things);
+        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, things, wind, start);
+    }
+
+    /** The same shot in another wind. */
+    public FlowSetup withWind(Wind other) {
+        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, other, start);
+    }
+
+    /** The same shot with something in its box on the first frame. */
+    public FlowSetup withStart(Start other) {
+        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, wind, other);
+    }
+
+    /** A new state as on the first frame; solids hold no smoke. */
+    public SmokeState startState() {
+        SmokeState state = start.on(grid);
+        if (!obstacles.isEmpty()) {
+            SolidCells solids = new SolidCells(grid, obstacles, frames.first(), frames.first(), frames.perSecond(), new Lanes(1));
+            for (int k = 0; k < grid.nz(); k++) {
+                solids.clear(state.density().values(), k);
+            }
+        }
+        return state;
     }
 
     /** Step n of a run, from 0. */

@@ -9,7 +9,7 @@ import org.wispwright.render.volume.MacVelocity;
  * One substep of smoke in a box, and its pullback. Stable Fluids (Stam 1999, SIGGRAPH 99, 121-128) on a MAC grid:
  * <pre>
  * u1 = carry(u, trace(u))
- * u2 = u1 + dt (f + buoyancy(density))
+ * u2 = wind(u1 + dt (f + buoyancy(density)))
  * u' = project(u2)
  * density' = exp(-dissipation dt) carry(density, trace(u')) + dt sources, 0 in solids
  * </pre>
@@ -35,29 +35,6 @@ public final class SmokeSolver {
     private Displacement displacementBar;
     private SmokeState inBar;
 
-    /** The cells that one source feeds, and how much of its rate each gets. */
-    private record SourceCells(Source source, int[] cells, float[] ratePerSecond) {
-        static SourceCells of(Source source, GridShape shape) {
-            double h = shape.cellMetres();
-            int[] cells = new int[shape.cells()];
-            float[] rates = new float[shape.cells()];
-            int found = 0;
-            for (int k = 0; k < shape.nz(); k++) {
-                double z = shape.isPlane() ? source.centreZ() : shape.originZ() + (k + 0.5) * h;
-                for (int j = 0; j < shape.ny(); j++) {
-                    for (int i = 0; i < shape.nx(); i++) {
-                        double share = source.shareAt(shape.originX() + (i + 0.5) * h, shape.originY() + (j + 0.5) * h, z);
-                        if (share > 0) {
-                            cells[found] = shape.cell(i, j, k);
-                            rates[found++] = (float) (share * source.ratePerSecond());
-                        }
-                    }
-                }
-            }
-            return new SourceCells(source, java.util.Arrays.copyOf(cells, found), java.util.Arrays.copyOf(rates, found));
-        }
-    }
-
     /** Prepares a solver; lanes stay the caller's. */
     public SmokeSolver(FlowSetup setup, Lanes lanes) {
         this.setup = setup;
@@ -66,7 +43,7 @@ public final class SmokeSolver {
         trace = new Trace(shape, lanes);
         medium = setup.obstacles().isEmpty() ? new EmptyBox(setup, lanes) : new BoxWithSolids(setup, lanes);
         buoyancy = new Buoyancy(shape, setup.sides(), lanes);
-        sources = setup.sources().stream().map(source -> SourceCells.of(source, shape)).toList();
+        sources = setup.sources().stream().map(source -> new SourceCells(source, shape)).toList();
         displacement = new Displacement(shape);
         mostPerSlab = new float[shape.nz()];
     }
@@ -102,6 +79,7 @@ public final class SmokeSolver {
             addScaled(next, force, (float) seconds);
         }
         buoyancy.forward(in.density().values(), seconds * setup.buoyancy(), next.y());
+        setup.wind().forward(next, at, seconds, lanes);
         since = clock.lap(Clock.Part.PUSH, since);
         medium.project(next);
         since = clock.lap(Clock.Part.PROJECTION, since);
@@ -109,7 +87,7 @@ public final class SmokeSolver {
         since = clock.lap(Clock.Part.TRACE, since);
         medium.carryCells(in.density().values(), displacement, out.density().values());
         fade(out.density().values(), keep(seconds));
-        feed(out.density().values(), at.frame(), seconds);
+        sources.forEach(source -> source.feed(out.density().values(), at, seconds));
         medium.clearSolids(out.density().values());
         clock.lap(Clock.Part.CARRY_DENSITY, since);
     }
@@ -151,6 +129,7 @@ public final class SmokeSolver {
 
         medium.projectBack(bar.velocity());
         since = clock.lap(Clock.Part.PROJECTION_BACK, since);
+        setup.wind().pullback(bar.velocity(), seconds, lanes);
         if (forceBar != null) {
             addScaled(forceBar, bar.velocity(), (float) seconds);
         }
@@ -226,15 +205,5 @@ public final class SmokeSolver {
 
     private static int chunkStart(int length, int chunk) {
         return (int) ((long) length * chunk / CHUNKS);
-    }
-
-    private void feed(float[] density, int frame, double seconds) {
-        for (SourceCells fed : sources) {
-            if (fed.source().feeds(frame)) {
-                for (int n = 0; n < fed.cells().length; n++) {
-                    density[fed.cells()[n]] += (float) seconds * fed.ratePerSecond()[n];
-                }
-            }
-        }
     }
 }

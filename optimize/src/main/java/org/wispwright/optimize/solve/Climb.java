@@ -119,7 +119,7 @@ final class Climb {
         SmokeSolver solver = new SmokeSolver(flow, lanes);
         List<View> views = here.views().stream().map(view -> Solve.proxy(view, grid.cellMetres())).toList();
         FrameTerms terms = new FrameTerms(grid, views, here.look(), grid.cellMetres(), solver.clock(), lanes);
-        SmokeState start = new SmokeState(grid);
+        SmokeState start = flow.startState();
         plan = new TermPlan(here, solver, start, terms, stay, cancelled);
         int lastFrame = here.lastFrame();
         int steps = flow.stepsTo(lastFrame);

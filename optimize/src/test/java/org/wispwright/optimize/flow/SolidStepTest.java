@@ -112,8 +112,8 @@ class SolidStepTest {
         Obstacle wall = new Obstacle("wall", new Solid.Box(new Vec3(0.06, 9, 9)), way, Curve.still(new Vec3(0, 0, 0)));
         Sides open = new Sides(Side.OPEN, Side.OPEN, Side.WALL, Side.WALL, Side.WALL, Side.WALL);
         FlowSetup closed = flow(BOX, Interpolation.LINEAR, new Source("pot", 1.5, 0.5, 0.6, 0.3, 0.1, 5, 1, 40), wall);
-        FlowSetup setup = new FlowSetup(BOX, closed.frames(), closed.substeps(), closed.velocity(), closed.density(), open, 0, 0, closed.sources(),
-                closed.obstacles());
+        FlowSetup setup = new FlowSetup(BOX, closed.frames(), 1, closed.velocity(), closed.density(), open, 0, 0, closed.sources())
+                .withObstacles(closed.obstacles());
         SmokeState end = run(setup, 0, 29, FlowOperators.ONE);
         assertEquals(0, most(end, x -> x < 1.2));
         assertTrue(most(end, x -> x > 1.4) > 0.3);
@@ -162,8 +162,8 @@ class SolidStepTest {
         Obstacle wall = new Obstacle("wall", new Solid.Box(new Vec3(0.05, 0.5, 9)), Curve.still(new Vec3(1, 0.2, 0.6)), Curve.still(new Vec3(0, 0, 0)));
         Sides tunnel = new Sides(Side.OPEN, Side.OPEN, Side.WALL, Side.WALL, Side.WALL, Side.WALL);
         FlowSetup closed = flow(BOX, Interpolation.LINEAR, pot(0.4), wall);
-        FlowSetup setup = new FlowSetup(BOX, closed.frames(), closed.substeps(), closed.velocity(), closed.density(), tunnel, 0, 0, List.of(),
-                closed.obstacles());
+        FlowSetup setup = new FlowSetup(BOX, closed.frames(), 1, closed.velocity(), closed.density(), tunnel, 0, 0, List.of())
+                .withObstacles(closed.obstacles());
         SmokeSolver solver = new SmokeSolver(setup, FlowOperators.ONE);
         SmokeState start = new SmokeState(BOX);
         java.util.Arrays.fill(start.velocity().x(), 0.5f);

@@ -2,7 +2,6 @@ package org.wispwright.ui.job;
 
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
-import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.solve.Simulation;
 import org.wispwright.optimize.solve.SolveCancelled;
 import org.wispwright.render.lanes.Lanes;
@@ -47,7 +46,7 @@ public final class SimulateWork {
         try (TakeDraft draft = takes.draft()) {
             FrameWriting writing = new FrameWriting(flow, draft, "simulate", progress);
             SmokeSolver solver = new SmokeSolver(flow, lanes);
-            Simulation.run(solver, new SmokeState(flow.grid()), null, null, flow.frames().last(), cancel::wished,
+            Simulation.run(solver, flow.startState(), null, null, flow.frames().last(), cancel::wished,
                     (frame, state, force) -> writing.frame(frame, state, solver));
             cancel.stopIfWished();
             if (takes.has(0)) {

@@ -5,7 +5,6 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.util.Locale;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
-import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.force.ForceBasis;
 import org.wispwright.optimize.solve.Simulation;
 import org.wispwright.optimize.solve.Solve;
@@ -93,7 +92,7 @@ public final class SolveWork {
             FrameWriting writing = new FrameWriting(flow, draft, "take", progress);
             SmokeSolver solver = new SmokeSolver(flow, lanes);
             ForceBasis basis = Solve.basis(flow, lanes);
-            Simulation.run(solver, new SmokeState(flow.grid()), basis, solve.unknowns(), flow.frames().last(), cancel::wished,
+            Simulation.run(solver, flow.startState(), basis, solve.unknowns(), flow.frames().last(), cancel::wished,
                     (frame, state, force) -> writing.frame(frame, state, solver));
             draft.writeForce(solve.unknowns());
             draft.writeSearch(search.end());

@@ -70,7 +70,7 @@ public record StayTrade(GridShape grid, Side with, Side without) {
         Map<Integer, ScalarGrid> kept = new HashMap<>();
         Set<Integer> wanted = Arrays.stream(Departure.frames(shot)).boxed().collect(Collectors.toSet());
         ForceBasis basis = unknowns == null ? null : Solve.basis(flow, lanes);
-        Simulation.run(new SmokeSolver(flow, lanes), new SmokeState(flow.grid()), basis, unknowns, flow.frames().last(), cancel::wished,
+        Simulation.run(new SmokeSolver(flow, lanes), flow.startState(), basis, unknowns, flow.frames().last(), cancel::wished,
                 (frame, state, force) -> {
             if (wanted.contains(frame)) {
                 kept.put(frame, state.density().copy());

@@ -10,6 +10,8 @@ import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.FrameRange;
 import org.wispwright.optimize.flow.Sides;
 import org.wispwright.optimize.flow.Source;
+import org.wispwright.optimize.flow.Start;
+import org.wispwright.optimize.flow.Wind;
 import org.wispwright.optimize.motion.Curve;
 import org.wispwright.optimize.solid.Obstacle;
 import org.wispwright.optimize.solid.Solid;
@@ -30,6 +32,8 @@ final class SetupDigest {
         SetupDigest digest = new SetupDigest();
         digest.plain(flow);
         flow.obstacles().forEach(digest::obstacle);
+        digest.wind(flow.wind());
+        digest.start(flow.start());
         return sha256(digest.lines.toString().getBytes(StandardCharsets.UTF_8));
     }
 
@@ -41,10 +45,32 @@ final class SetupDigest {
         line("frames", f.first(), f.last(), f.perSecond());
         line("flow", flow.substeps().every(), flow.velocity(), flow.density(), flow.buoyancy(), flow.dissipation());
         line("sides", s.left(), s.right(), s.floor(), s.top(), s.back(), s.front());
-        for (Source source : flow.sources()) {
-            line("source", source.centreX(), source.centreY(), source.centreZ(), source.radiusMetres(), source.edgeMetres(),
-                    source.ratePerSecond(), source.firstFrame(), source.lastFrame());
+        flow.sources().forEach(this::source);
+    }
+
+    private void source(Source source) {
+        Vec3 at = source.centre().values().get(0);
+        Vec3 half = source.form().half();
+        line("source", at.x(), at.y(), at.z(), half.x(), source.edgeMetres(), source.ratePerSecond(), source.firstFrame(), source.lastFrame());
+        if (!source.form().round()) {
+            line("source box", half.y(), half.z());
         }
+        if (!source.centre().isStill()) {
+            curve("source at", source.centre());
+        }
+    }
+
+    private void wind(Wind wind) {
+        if (!wind.isNone()) {
+            line("wind", wind.dragPerSecond());
+            curve("wind velocity", wind.velocity());
+            curve("wind push", wind.acceleration());
+        }
+    }
+
+    private void start(Start start) {
+        start.density().ifPresent(density -> line("start density", values(density.values())));
+        start.velocity().ifPresent(u -> line("start velocity", values(u.x()), values(u.y()), values(u.z())));
     }
 
     private void obstacle(Obstacle obstacle) {

@@ -13,6 +13,8 @@ import org.wispwright.optimize.flow.Interpolation;
 import org.wispwright.optimize.flow.Side;
 import org.wispwright.optimize.flow.Sides;
 import org.wispwright.optimize.flow.Source;
+import org.wispwright.optimize.flow.Start;
+import org.wispwright.optimize.flow.Wind;
 import org.wispwright.optimize.solid.Obstacle;
 import org.wispwright.render.march.Light;
 import org.wispwright.render.march.Look;
@@ -33,10 +35,9 @@ import org.wispwright.render.volume.GridShape;
 final class SetupReader {
     /** The format that this program reads and writes. */
     static final int FORMAT = 1;
-    private static final double FAR = 1e6;
+    static final double FAR = 1e6;
     private static final int MOST_CELLS_A_SIDE = 8192;
     private static final int MOST_SUBSTEPS = 64;
-    private static final int MOST_SOURCES = 256;
     private static final int MOST_VIEWS = 64;
 
     private final ShotFolder folder;
@@ -57,14 +58,16 @@ final class SetupReader {
             return Optional.empty();
         }
         JsonPlace top = file.get();
-        findings.check(() -> top.only("wispwright", "name", "grid", "frames", "flow", "sources", "obstacles", "look", "background", "views"));
+        findings.check(() -> top.only("wispwright", "name", "grid", "frames", "flow", "sources", "obstacles", "start", "look", "background", "views"));
         Optional<String> name = findings.attempt(() -> top.need("name").text(200));
         Optional<FrameRange> frames = findings.attempt(() -> frames(top.need("frames")));
         Optional<GridShape> grid = findings.attempt(() -> grid(top.need("grid"), steps(top, frames)));
-        List<Source> sources = sources(top, frames);
-        List<Obstacle> obstacles = new ObstacleReader(findings, new VolumeReader(folder, memoryBytes)).read(top);
+        List<Source> sources = new SourceReader(findings, frames).read(top);
+        VolumeReader volumes = new VolumeReader(folder, memoryBytes);
+        List<Obstacle> obstacles = new ObstacleReader(findings, volumes).read(top);
+        Optional<Start> start = findings.attempt(() -> AirReader.start(top.ask("start"), grid, volumes));
         Optional<FlowSetup> flow = findings.attempt(() -> flow(top.ask("flow"), top, grid, frames, sources)).flatMap(f -> f)
-                .map(f -> f.withObstacles(obstacles));
+                .map(f -> f.withObstacles(obstacles).withStart(start.orElse(Start.EMPTY)));
         Optional<Look> look = findings.attempt(() -> look(top.need("look")));
         Optional<Rgb> background = findings.attempt(() -> top.ask("background").map(SetupReader::rgb).orElse(Rgb.BLACK));
         List<ShotView> views = views(top, frames);
@@ -100,7 +103,7 @@ final class SetupReader {
 
     private Optional<FlowSetup> flow(Optional<JsonPlace> given, JsonPlace top, Optional<GridShape> grid, Optional<FrameRange> frames,
             List<Source> sources) {
-        given.ifPresent(p -> p.only("substeps", "velocityInterpolation", "densityInterpolation", "sides", "buoyancy", "dissipation"));
+        given.ifPresent(p -> p.only("substeps", "velocityInterpolation", "densityInterpolation", "sides", "buoyancy", "dissipation", "wind"));
         int substeps = given.flatMap(p -> p.ask("substeps")).map(p -> p.whole(1, MOST_SUBSTEPS)).orElse(1);
         Interpolation velocity = given.flatMap(p -> p.ask("velocityInterpolation")).map(p -> p.choice(Interpolation.class))
                 .orElse(Interpolation.LINEAR);
@@ -109,12 +112,13 @@ final class SetupReader {
         Sides sides = given.flatMap(p -> p.ask("sides")).map(SetupReader::sides).orElse(Sides.CLOSED);
         double buoyancy = given.flatMap(p -> p.ask("buoyancy")).map(p -> p.number(-1000, 1000)).orElse(0.0);
         double dissipation = given.flatMap(p -> p.ask("dissipation")).map(p -> p.number(0, 1000)).orElse(0.0);
+        Wind wind = given.flatMap(p -> p.ask("wind")).map(AirReader::wind).orElse(Wind.NONE);
         if (grid.isEmpty() || frames.isEmpty()) {
             return Optional.empty();
         }
         JsonPlace place = given.orElse(top);
         return Optional.of(place.make(() -> new FlowSetup(grid.get(), frames.get(), substeps, velocity, density, sides, buoyancy,
-                dissipation, sources)));
+                dissipation, sources).withWind(wind)));
     }
 
     private static Sides sides(JsonPlace place) {
@@ -125,34 +129,6 @@ final class SetupReader {
 
     private static Side side(JsonPlace place, String key) {
         return place.need(key).choice(Side.class);
-    }
-
-    private List<Source> sources(JsonPlace top, Optional<FrameRange> frames) {
-        List<Source> sources = new ArrayList<>();
-        Set<String> names = new HashSet<>();
-        List<JsonPlace> places = findings.attempt(() -> top.need("sources").items(0, MOST_SOURCES)).orElse(List.of());
-        for (JsonPlace place : places) {
-            findings.attempt(() -> source(place, frames)).ifPresent(source -> {
-                if (!names.add(source.name())) {
-                    findings.add(place.at("name").fault("the name '" + source.name() + "' a second time",
-                            "a name of its own for every source", "rename one").finding());
-                }
-                sources.add(source);
-            });
-        }
-        return sources;
-    }
-
-    private static Source source(JsonPlace place, Optional<FrameRange> range) {
-        place.only("name", "centreMetres", "radiusMetres", "edgeMetres", "ratePerSecond", "frames");
-        String name = place.need("name").text(100);
-        Vec3 centre = vec3(place.need("centreMetres"));
-        double radius = place.need("radiusMetres").positive(FAR);
-        double edge = place.ask("edgeMetres").map(p -> p.number(0, radius)).orElse(radius / 2);
-        double rate = place.need("ratePerSecond").number(0, 1e6);
-        int[] frames = place.ask("frames").map(SetupReader::span)
-                .orElseGet(() -> range.map(r -> new int[] {r.first(), r.last()}).orElse(new int[] {0, 0}));
-        return place.make(() -> new Source(name, centre.x(), centre.y(), centre.z(), radius, edge, rate, frames[0], frames[1]));
     }
 
     private static Look look(JsonPlace place) {

@@ -9,6 +9,7 @@ import java.util.Optional;
 import java.util.function.ToDoubleFunction;
 import org.wispwright.optimize.flow.FrameRange;
 import org.wispwright.optimize.flow.Source;
+import org.wispwright.optimize.motion.Curve;
 import org.wispwright.optimize.solid.Obstacle;
 import org.wispwright.render.view.Raster;
 import org.wispwright.render.view.Vec3;
@@ -115,13 +116,13 @@ public final class ShotCheck {
         List<Source> sources = shot.flow().sources();
         for (int n = 0; n < sources.size(); n++) {
             Source s = sources.get(n);
-            double across = Math.max(outside(s.centreX(), box.originX(), box.nx() * box.cellMetres()),
-                    outside(s.centreY(), box.originY(), box.ny() * box.cellMetres()));
-            double reach = box.isPlane() ? across : Math.max(across, outside(s.centreZ(), box.originZ(), box.nz() * box.cellMetres()));
-            if (reach >= s.radiusMetres()) {
+            Vec3 half = s.form().half();
+            boolean reaches = reaches(s.centre(), Vec3::x, box.originX(), box.nx() * box.cellMetres(), half.x())
+                    && reaches(s.centre(), Vec3::y, box.originY(), box.ny() * box.cellMetres(), half.y())
+                    && (box.isPlane() || reaches(s.centre(), Vec3::z, box.originZ(), box.nz() * box.cellMetres(), half.z()));
+            if (!reaches) {
                 findings.add(Finding.of("shot.json", "/sources/" + n, "source '" + s.name() + "' outside the box",
-                        "a ball that reaches into it",
-                        "move it to within " + middle(box)));
+                        "a source that reaches into it", "move it to within " + middle(box)));
             }
         }
     }
@@ -132,10 +133,9 @@ public final class ShotCheck {
         for (int n = 0; n < obstacles.size(); n++) {
             Obstacle o = obstacles.get(n);
             double reach = o.solid().reach(box.cellMetres());
-            // Its middle lies within the box of its keys (the curve swings past none), so no frame brings it nearer than that.
-            boolean meets = meets(o, Vec3::x, box.originX(), box.nx() * box.cellMetres(), reach)
-                    && meets(o, Vec3::y, box.originY(), box.ny() * box.cellMetres(), reach)
-                    && (box.isPlane() || meets(o, Vec3::z, box.originZ(), box.nz() * box.cellMetres(), reach));
+            boolean meets = reaches(o.position(), Vec3::x, box.originX(), box.nx() * box.cellMetres(), reach)
+                    && reaches(o.position(), Vec3::y, box.originY(), box.ny() * box.cellMetres(), reach)
+                    && (box.isPlane() || reaches(o.position(), Vec3::z, box.originZ(), box.nz() * box.cellMetres(), reach));
             if (!meets) {
                 findings.add(Finding.of("shot.json", "/obstacles/" + n, "obstacle '" + o.name() + "' outside the box at every frame",
                         "a thing that reaches into it", "move it to within " + middle(box)));
@@ -143,13 +143,10 @@ public final class ShotCheck {
         }
     }
 
-    private static boolean meets(Obstacle o, ToDoubleFunction<Vec3> axis, double low, double length, double reach) {
-        DoubleSummaryStatistics along = o.position().values().stream().mapToDouble(axis).summaryStatistics();
-        return along.getMin() - reach <= low + length && along.getMax() + reach >= low;
-    }
-
-    private static double outside(double at, double low, double length) {
-        return Math.max(low - at, at - low - length);
+    /** True unless something of that reach about a moving place stays outside the box: between keys the place swings past none. */
+    private static boolean reaches(Curve place, ToDoubleFunction<Vec3> axis, double low, double length, double reach) {
+        DoubleSummaryStatistics along = place.values().stream().mapToDouble(axis).summaryStatistics();
+        return along.getMin() - reach < low + length && along.getMax() + reach > low;
     }
 
     private static String middle(GridShape box) {

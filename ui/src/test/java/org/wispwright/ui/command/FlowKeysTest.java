@@ -2,7 +2,6 @@ package org.wispwright.ui.command;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertNotEquals;
-import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
 import java.nio.file.Path;
@@ -118,5 +117,73 @@ class FlowKeysTest {
         String ball = "{\"name\": \"a\", \"ball\": {\"radiusMetres\": 0.1}, \"positionMetres\": [1, 1, 1]}";
         add("\"obstacles\": [" + ball + ", " + ball + "]");
         refused("shot.json at /obstacles/1/name", "second time");
+    }
+
+    @Test void windSourcesAndStartCount() throws IOException {
+        String first = digest();
+        shot.swap("shot.json", "\"buoyancy\": 3.0,", "\"buoyancy\": 3.0, \"wind\": {\"dragPerSecond\": 2, \"metresPerSecond\": [1, 0, 0]},");
+        String windy = digest();
+        assertNotEquals(first, windy);
+        assertEquals(1, flow().wind().velocity().at(1003).x());
+        shot.swap("shot.json", "\"metresPerSecond\": [1, 0, 0]",
+                "\"keys\": [{\"frame\": 1001, \"metresPerSecond\": [0, 0, 0]}, {\"frame\": 1005, \"metresPerSecond\": [2, 0, 0], \"metresPerSecond2\": [0, 1, 0]}]");
+        assertEquals(0.5, flow().wind().acceleration().at(1003).y(), 1e-12);
+        assertNotEquals(windy, digest());
+        String before = digest();
+        shot.swap("shot.json", "\"centreMetres\": [1, 0.6, 1], \"radiusMetres\": 0.5, \"edgeMetres\": 0.25",
+                "\"keys\": [{\"frame\": 1001, \"centreMetres\": [0.5, 0.6, 1]}, {\"frame\": 1006, \"centreMetres\": [1.5, 0.6, 1]}], \"boxMetres\": [1, 0.5, 1]");
+        assertEquals(1, flow().sources().get(0).centre().at(1003.5).x(), 1e-12);
+        assertEquals(0.125, flow().sources().get(0).edgeMetres());
+        assertNotEquals(before, digest());
+        before = digest();
+        volume("start/density.npy", new int[] {8, 16, 8}, 0.25f);
+        volume("start/x.npy", new int[] {8, 16, 9}, 0.5f);
+        volume("start/y.npy", new int[] {8, 17, 8}, 0);
+        volume("start/z.npy", new int[] {9, 16, 8}, 0);
+        add("\"start\": {\"density\": \"start/density.npy\", \"velocityX\": \"start/x.npy\", \"velocityY\": \"start/y.npy\", \"velocityZ\": \"start/z.npy\"}");
+        assertEquals(0.25f, flow().startState().density().at(3, 3, 3));
+        assertNotEquals(before, digest());
+        Run run = Run.of("simulate", shot.folder().toString());
+        assertEquals(0, run.code(), run.err());
+        assertEquals(0.25f, NpyFile.read(shot.folder().resolve("takes/000/density.1001.npy")).values()[0]);
+    }
+
+    @ParameterizedTest
+    @CsvSource(delimiter = '|', quoteCharacter = '~', value = {
+        "{'metresPerSecond': [1,0,0]}                                                | /flow/wind | without a drag",
+        "{'metresPerSecond': [1,0], 'dragPerSecond': 1}                              | /flow/wind/metresPerSecond | exactly 3",
+        "{'dragPerSecond': -1}                                                       | /flow/wind/dragPerSecond | found -1",
+        "{'speed': 1}                                                                | /flow/wind/speed | unknown key",
+        "{'dragPerSecond': 1, 'metresPerSecond': [1,0,0], 'keys': [{'frame': 1001}]} | /flow/wind/keys | keys beside",
+        "{'dragPerSecond': 1, 'keys': [{'frame': 1001, 'speed': 1}]}                 | /flow/wind/keys/0/speed | unknown key"})
+    void windsThatAreRefused(String wind, String pointer, String phrase) {
+        shot.swap("shot.json", "\"buoyancy\": 3.0,", "\"buoyancy\": 3.0, \"wind\": " + wind.replace('\'', '"') + ",");
+        refused("shot.json at " + pointer, phrase);
+    }
+
+    @ParameterizedTest
+    @CsvSource(delimiter = '|', quoteCharacter = '~', value = {
+        "{'density': 'start/none.npy'}                                       | /start/density | missing",
+        "{'density': 'start/small.npy'}                                      | /start/density | (nz, ny, nx) = [8, 16, 8]",
+        "{'density': 'start/below.npy'}                                      | /start/density | values from 0",
+        "{'velocityX': 'start/small.npy'}                                    | /start | no 'velocityY'",
+        "{'heat': 'start/small.npy'}                                         | /start/heat | unknown key"})
+    void startsThatAreRefused(String start, String pointer, String phrase) throws IOException {
+        volume("start/small.npy", new int[] {4, 8, 4}, 1);
+        volume("start/below.npy", new int[] {8, 16, 8}, -1);
+        add("\"start\": " + start.replace('\'', '"'));
+        refused("shot.json at " + pointer, phrase);
+    }
+
+    @ParameterizedTest
+    @CsvSource(delimiter = '|', quoteCharacter = '~', value = {
+        "'boxMetres': [1,1,1], 'radiusMetres': 0.5, 'centreMetres': [1,1,1] | /sources/0 | both 'radiusMetres' and 'boxMetres'",
+        "'boxMetres': [1,0,1], 'centreMetres': [1,1,1]                      | /sources/0/boxMetres/1 | above 0",
+        "'boxMetres': [1,1,1], 'centreMetres': [1,1,1], 'keys': []          | /sources/0 | both 'centreMetres' and 'keys'",
+        "'boxMetres': [1,1,1], 'centreMetres': [1,-9,1]                     | /sources/0 | outside the box",
+        "'boxMetres': [1,1,1], 'keys': [{'frame': 1, 'at': [1,1,1]}]        | /sources/0/keys/0/at | unknown key"})
+    void sourcesThatAreRefused(String what, String pointer, String phrase) {
+        shot.swap("shot.json", "\"centreMetres\": [1, 0.6, 1], \"radiusMetres\": 0.5, \"edgeMetres\": 0.25", what.replace('\'', '"'));
+        refused("shot.json at " + pointer, phrase);
     }
 }

@@ -11,7 +11,6 @@ import java.util.List;
 import java.util.Optional;
 import java.util.Random;
 import org.wispwright.optimize.flow.SmokeSolver;
-import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.solve.Simulation;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.march.Light;
@@ -48,7 +47,7 @@ public final class PaintKilnYardFrames {
         View view = shot.view("front").orElseThrow().view().withRaster(RASTER);
         try (Lanes lanes = new Lanes(2)) {
             RayMarcher marcher = new RayMarcher(shot.flow().grid(), view, shot.flow().grid().cellMetres() / 4, lanes);
-            Simulation.run(new SmokeSolver(shot.flow(), lanes), new SmokeState(shot.flow().grid()), null, null, frames.get(frames.size() - 1),
+            Simulation.run(new SmokeSolver(shot.flow(), lanes), shot.flow().startState(), null, null, frames.get(frames.size() - 1),
                     () -> false, (frame, state, force) -> {
                 if (frames.contains(frame)) {
                     Picture smoke = RASTER.picture();

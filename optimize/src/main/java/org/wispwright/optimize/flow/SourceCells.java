@@ -1,0 +1,68 @@
+package org.wispwright.optimize.flow;
+
+import java.util.Arrays;
+import org.wispwright.render.view.Vec3;
+import org.wispwright.render.volume.GridShape;
+
+/** The cells that one source feeds, and how much of its rate each gets. Laid out once for a source that stays, else at every substep. */
+final class SourceCells {
+    private final Source source;
+    private final GridShape shape;
+    private int[] cells;
+    private float[] ratePerSecond;
+
+    SourceCells(Source source, GridShape shape) {
+        this.source = source;
+        this.shape = shape;
+    }
+
+    /** Adds what the source gives in a substep; constant, so nothing is pulled back. */
+    void feed(float[] density, Substep at, double seconds) {
+        if (!source.feeds(at.frame())) {
+            return;
+        }
+        if (cells == null || !source.centre().isStill()) {
+            layOut(source.centre().at(at.to()));
+        }
+        for (int n = 0; n < cells.length; n++) {
+            density[cells[n]] += (float) seconds * ratePerSecond[n];
+        }
+    }
+
+    private void layOut(Vec3 centre) {
+        double h = shape.cellMetres();
+        Vec3 half = source.form().half();
+        int i0 = low(centre.x() - half.x(), shape.originX());
+        int j0 = low(centre.y() - half.y(), shape.originY());
+        int k0 = shape.isPlane() ? 0 : low(centre.z() - half.z(), shape.originZ());
+        int i1 = high(centre.x() + half.x(), shape.originX(), shape.nx());
+        int j1 = high(centre.y() + half.y(), shape.originY(), shape.ny());
+        int k1 = shape.isPlane() ? 1 : high(centre.z() + half.z(), shape.originZ(), shape.nz());
+        int room = Math.max(0, i1 - i0) * Math.max(0, j1 - j0) * Math.max(0, k1 - k0);
+        cells = new int[room];
+        ratePerSecond = new float[room];
+        int found = 0;
+        for (int k = k0; k < k1; k++) {
+            double z = shape.isPlane() ? 0 : shape.originZ() + (k + 0.5) * h - centre.z();
+            for (int j = j0; j < j1; j++) {
+                for (int i = i0; i < i1; i++) {
+                    double share = source.shareAt(shape.originX() + (i + 0.5) * h - centre.x(), shape.originY() + (j + 0.5) * h - centre.y(), z);
+                    if (share > 0) {
+                        cells[found] = shape.cell(i, j, k);
+                        ratePerSecond[found++] = (float) (share * source.ratePerSecond());
+                    }
+                }
+            }
+        }
+        cells = Arrays.copyOf(cells, found);
+        ratePerSecond = Arrays.copyOf(ratePerSecond, found);
+    }
+
+    private int low(double metres, double origin) {
+        return (int) Math.max(0, Math.floor((metres - origin) / shape.cellMetres()));
+    }
+
+    private int high(double metres, double origin, int count) {
+        return (int) Math.max(0, Math.min(count, Math.ceil((metres - origin) / shape.cellMetres())));
+    }
+}
