@@ -11,7 +11,7 @@ import org.wispwright.render.volume.GridShape;
  *
  * @param grid        the box
  * @param frames      the frame range
- * @param substeps    solver steps from one frame to the next
+ * @param substeps    solver steps from one frame to the next, 1 to 64
  * @param velocity    interpolation of the velocity that carries itself
  * @param density     interpolation of the density
  * @param sides       walls and open sides
@@ -22,14 +22,13 @@ import org.wispwright.render.volume.GridShape;
  * @param wind        what pushes all air alike
  * @param start       what is in the box on the first frame
  */
-public record FlowSetup(GridShape grid, FrameRange frames, Substeps substeps, Interpolation velocity, Interpolation density, Sides sides,
+public record FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpolation velocity, Interpolation density, Sides sides,
                         double buoyancy, double dissipation, List<Source> sources, List<Obstacle> obstacles, Wind wind, Start start) {
 
     /** Checks the numbers. @throws IllegalArgumentException saying what is off */
     public FlowSetup {
-        if (!substeps.counts().isEmpty() && substeps.counts().size() != frames.count() - 1) {
-            throw new IllegalArgumentException("flow: got numbers of substeps for " + substeps.counts().size() + " frames, needs one for each of "
-                    + (frames.count() - 1));
+        if (substeps < 1 || substeps > 64) {
+            throw new IllegalArgumentException("flow: got " + substeps + " substeps a frame, needs 1 to 64");
         }
         if (!Double.isFinite(buoyancy)) {
             throw new IllegalArgumentException("flow: got a buoyancy of " + buoyancy + " m/s2, needs a finite number");
@@ -44,10 +43,10 @@ public record FlowSetup(GridShape grid, FrameRange frames, Substeps substeps, In
         }
     }
 
-    /** Plain smoke: sources and buoyancy alone, the same number of substeps for every frame. */
+    /** Plain smoke: sources and buoyancy alone. */
     public FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpolation velocity, Interpolation density, Sides sides,
                      double buoyancy, double dissipation, List<Source> sources) {
-        this(grid, frames, Substeps.each(substeps), velocity, density, sides, buoyancy, dissipation, sources, List.of(), Wind.NONE, Start.EMPTY);
+        this(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, List.of(), Wind.NONE, Start.EMPTY);
     }
 
     /** The same shot on another grid of its box. */
@@ -85,12 +84,12 @@ public record FlowSetup(GridShape grid, FrameRange frames, Substeps substeps, In
 
     /** Step n of a run, from 0. */
     public Substep step(int n) {
-        return substeps.at(n, frames.first());
+        return new Substep(frames.first() + 1 + n / substeps, n % substeps, substeps);
     }
 
     /** Steps of a run from the first frame to this one. */
     public int stepsTo(int frame) {
-        return substeps.upTo(frame - frames.first());
+        return substeps * (frame - frames.first());
     }
 
     /** Seconds of a substep. */

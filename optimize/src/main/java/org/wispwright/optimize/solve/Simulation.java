@@ -4,7 +4,6 @@ import java.util.function.BooleanSupplier;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.flow.Substep;
-import org.wispwright.optimize.flow.Substeps;
 import org.wispwright.optimize.force.ForceBasis;
 import org.wispwright.render.volume.MacVelocity;
 
@@ -39,7 +38,7 @@ public final class Simulation {
     public static void run(SmokeSolver solver, SmokeState start, ForceBasis basis, double[] x, int lastFrame,
                            BooleanSupplier cancelled, EachFrame each) {
         int first = solver.setup().frames().first();
-        Substeps substeps = solver.setup().substeps();
+        int substeps = solver.setup().substeps();
         SmokeState now = start.copy();
         SmokeState next = new SmokeState(solver.setup().grid());
         MacVelocity force = x == null ? null : new MacVelocity(solver.setup().grid());
@@ -49,12 +48,11 @@ public final class Simulation {
             if (force != null) {
                 basis.force(x, frame - first - 1, force);
             }
-            int count = substeps.to(frame - first);
-            for (int n = 0; n < count; n++) {
+            for (int n = 0; n < substeps; n++) {
                 if (cancelled.getAsBoolean()) {
                     throw new SolveCancelled();
                 }
-                solver.step(now, force, new Substep(frame, n, count), follows, next);
+                solver.step(now, force, new Substep(frame, n, substeps), follows, next);
                 follows = true;
                 SmokeState swap = now;
                 now = next;

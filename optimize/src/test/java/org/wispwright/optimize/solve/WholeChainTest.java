@@ -17,10 +17,14 @@ import org.wispwright.optimize.flow.Sides;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.force.ForceBasis;
+import org.wispwright.optimize.motion.Curve;
+import org.wispwright.optimize.solid.Obstacle;
+import org.wispwright.optimize.solid.Solid;
 import org.wispwright.render.contract.Operator;
 import org.wispwright.render.contract.PullbackContract;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.picture.Picture;
+import org.wispwright.render.view.Vec3;
 import org.wispwright.render.volume.GridShape;
 import org.wispwright.warp.loss.LossChoice;
 import org.wispwright.warp.loss.LossKind;
@@ -180,6 +184,20 @@ class WholeChainTest {
         return new SolveProblem(problem.flow(), problem.views(), problem.look(), notes, problem.holds());
     }
 
+    /** A thing beside the smoke that moves along: the pressure and what flows past it know it in every step. */
+    @Nested class BesideAThing extends Chain {
+        @Override protected Operator operator() {
+            SolveProblem problem = windy(false, 1);
+            return chain(new SolveProblem(problem.flow().withObstacles(List.of(thing())), problem.views(), problem.look(), problem.notes(),
+                    problem.holds()));
+        }
+    }
+
+    private static Obstacle thing() {
+        Curve way = new Curve(List.of(1001.0, 1009.0), List.of(new Vec3(1.6, 0.4, 1), new Vec3(1.65, 0.45, 1)));
+        return new Obstacle("stone", new Solid.Ball(0.2), way, Curve.still(new Vec3(0, 0, 0)));
+    }
+
     /** Same bits from any number of kept states; O59, O60: never more steps than the plan. */
     @ParameterizedTest @ValueSource(ints = {1, 2, 3, 5, 7}) void anyMemoryGivesTheSameBits(int snapshots) {
         SolveProblem problem = SolveScene.problem(12, 1009, 1, true);
@@ -191,6 +209,19 @@ class WholeChainTest {
         assertEquals(a, b);
         assertArrayEquals(all, few);
         assertTrue(BinomialPlan.leastSteps(8, snapshots) >= 7);
+    }
+
+    /** Things that move stand where the step says, whichever way the sweep comes to it. */
+    @Test void anyMemoryGivesTheSameBitsAmongMovingThings() {
+        SolveProblem plain = SolveScene.problem(12, 1007, 2, false);
+        Curve way = new Curve(List.of(1001.0, 1007.0), List.of(new Vec3(0.6, 0.9, 1), new Vec3(1.4, 0.9, 1)));
+        Obstacle drum = new Obstacle("drum", new Solid.Cylinder(0.2, 0.4), way, Curve.still(new Vec3(0.3, 0, 0.2)));
+        SolveProblem problem = new SolveProblem(plain.flow().withObstacles(List.of(drum)), plain.views(), plain.look(), plain.notes(), plain.holds());
+        double[] x = unknowns(problem.flow(), 1.5, 1);
+        double[] all = new double[x.length];
+        double[] few = new double[x.length];
+        assertEquals(loss(problem, 100, new Lanes(1)).evaluate(x, all), loss(problem, 2, new Lanes(1)).evaluate(x, few));
+        assertArrayEquals(all, few);
     }
 
     @ParameterizedTest @ValueSource(ints = {2, 3, 5}) void anyThreadCountGivesTheSameBits(int threads) {

@@ -23,6 +23,9 @@ public final class MemoryNeed {
     /** Bytes a pixel of a picture that is drawn: 16 for its values, 60 for its rays, and its file. */
     static final long PIXEL = 80;
 
+    /** Bytes a cell of what solids add: their cells, links and pockets, and the search for their pressure. */
+    static final long SOLIDS = 40;
+
     private MemoryNeed() {
     }
 
@@ -45,6 +48,11 @@ public final class MemoryNeed {
     /** Bytes that a gradient takes beside the states it keeps. */
     public static long besidesStates(GridShape grid) {
         return BASE + grid.cells() * STEP;
+    }
+
+    /** What solids take beside all that, if there are any. */
+    public static long ofSolids(long cells, boolean any) {
+        return any ? SOLIDS * cells : 0;
     }
 
     /** Least bytes to hold one picture of so many pixels, draw it and write it: 80 bytes a pixel. */

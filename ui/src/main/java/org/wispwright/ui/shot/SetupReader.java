@@ -61,7 +61,7 @@ final class SetupReader {
         findings.check(() -> top.only("wispwright", "name", "grid", "frames", "flow", "sources", "obstacles", "start", "look", "background", "views"));
         Optional<String> name = findings.attempt(() -> top.need("name").text(200));
         Optional<FrameRange> frames = findings.attempt(() -> frames(top.need("frames")));
-        Optional<GridShape> grid = findings.attempt(() -> grid(top.need("grid"), steps(top, frames)));
+        Optional<GridShape> grid = findings.attempt(() -> grid(top.need("grid"), steps(top, frames), top.has("obstacles")));
         List<Source> sources = new SourceReader(findings, frames).read(top);
         VolumeReader volumes = new VolumeReader(folder, memoryBytes);
         List<Obstacle> obstacles = new ObstacleReader(findings, volumes).read(top);
@@ -84,12 +84,13 @@ final class SetupReader {
         return frames.map(f -> (long) f.count() * substeps).orElse(1L);
     }
 
-    private GridShape grid(JsonPlace place, long steps) {
+    private GridShape grid(JsonPlace place, long steps, boolean solids) {
         place.only("cells", "cellMetres", "originMetres");
         int[] cells = place.need("cells").items(3, 3).stream().mapToInt(c -> c.whole(1, MOST_CELLS_A_SIDE)).toArray();
         double cellMetres = place.need("cellMetres").positive(FAR);
         Vec3 origin = place.ask("originMetres").map(SetupReader::vec3).orElse(new Vec3(0, 0, 0));
-        MemoryNeed.require(place.need("cells"), cells, cellMetres, steps, memoryBytes);
+        MemoryNeed.require(place.need("cells"), cells, cellMetres, steps,
+                memoryBytes - MemoryNeed.ofSolids((long) cells[0] * cells[1] * cells[2], solids));
         return place.make(() -> new GridShape(cells[0], cells[1], cells[2], cellMetres, origin.x(), origin.y(), origin.z()));
     }
 
