@@ -34,8 +34,8 @@ final class CarryAround {
 
     /** For values at cell centres. */
     static CarryAround ofCells(GridShape shape, Interpolation interpolation, Lanes lanes) {
-        return new CarryAround(Carry.ofCells(shape, interpolation, lanes), Lattice.of(shape, Lattice.Axis.CENTRES), interpolation, true, true,
-                lanes);
+        return new CarryAround(Carry.ofCells(shape, interpolation, lanes), Lattice.of(shape, Lattice.Axis.CENTRES), interpolation, true,
+                true, lanes);
     }
 
     /** For the component on faces square to an axis; {@code lowest}, {@code highest}: the side it meets there. */

@@ -176,7 +176,8 @@ final class Departure {
     }
 
     private boolean fluidCell(int i, int j, int k) {
-        return i >= 0 && j >= 0 && k >= 0 && i <= mostCell[0] && j <= mostCell[1] && k <= mostCell[2] && !solids.isSolid(shape.cell(i, j, k));
+        return i >= 0 && j >= 0 && k >= 0 && i <= mostCell[0] && j <= mostCell[1] && k <= mostCell[2]
+                && !solids.isSolid(shape.cell(i, j, k));
     }
 
     /** The value at the end of the path. */

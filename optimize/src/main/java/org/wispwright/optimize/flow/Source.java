@@ -60,7 +60,8 @@ public record Source(String name, Form form, Curve centre, double edgeMetres, do
         }
         double least = Math.min(form.half().x(), Math.min(form.half().y(), form.half().z()));
         if (!(edgeMetres >= 0 && edgeMetres <= least)) {
-            throw new IllegalArgumentException("source '" + name + "': got an edge of " + edgeMetres + " m, needs 0 to its least half width, "
+            throw new IllegalArgumentException("source '" + name + "': got an edge of " + edgeMetres
+                    + " m, needs 0 to its least half width, "
                     + least + " m");
         }
         if (!(ratePerSecond >= 0) || Double.isInfinite(ratePerSecond)) {

@@ -46,7 +46,8 @@ final class SourceCells {
             double z = shape.isPlane() ? 0 : shape.originZ() + (k + 0.5) * h - centre.z();
             for (int j = j0; j < j1; j++) {
                 for (int i = i0; i < i1; i++) {
-                    double share = source.shareAt(shape.originX() + (i + 0.5) * h - centre.x(), shape.originY() + (j + 0.5) * h - centre.y(), z);
+                    double x = shape.originX() + (i + 0.5) * h - centre.x();
+                    double share = source.shareAt(x, shape.originY() + (j + 0.5) * h - centre.y(), z);
                     if (share > 0) {
                         cells[found] = shape.cell(i, j, k);
                         ratePerSecond[found++] = (float) (share * source.ratePerSecond());

@@ -9,6 +9,8 @@ import java.util.Optional;
 import org.junit.jupiter.api.Nested;
 import org.junit.jupiter.api.Test;
 import org.wispwright.optimize.motion.Curve;
+import org.wispwright.optimize.solid.Obstacle;
+import org.wispwright.optimize.solid.Solid;
 import org.wispwright.render.contract.Operator;
 import org.wispwright.render.contract.PullbackContract;
 import org.wispwright.render.view.Vec3;
@@ -20,7 +22,8 @@ import org.wispwright.render.volume.ScalarGrid;
 class AirTest {
     private static final GridShape BOX = new GridShape(10, 8, 6, 0.5);
     private static final Vec3 ZERO = new Vec3(0, 0, 0);
-    private static final Wind BREEZE = new Wind(new Curve(List.of(1.0, 3.0), List.of(ZERO, new Vec3(0, -4, 1))), Curve.still(new Vec3(3, 0, 0)), 0.7);
+    private static final Wind BREEZE = new Wind(new Curve(List.of(1.0, 3.0), List.of(ZERO, new Vec3(0, -4, 1))), Curve.still(new Vec3(3,
+            0, 0)), 0.7);
 
     private static FlowSetup flow(Sides sides, Source... sources) {
         return new FlowSetup(BOX, new FrameRange(1, 9, 2), 1, Interpolation.LINEAR, Interpolation.LINEAR, sides, 0, 0, List.of(sources));
@@ -62,7 +65,8 @@ class AirTest {
         @Override protected Operator operator() {
             GridShape box = new GridShape(7, 6, 9, 0.5);
             Wind light = new Wind(Curve.still(new Vec3(0.02, 0.01, 0.03)), Curve.still(new Vec3(0.2, 0.2, 0.2)), 0.4);
-            return FlowOperators.step(FlowOperators.setup(box, Interpolation.LINEAR, Interpolation.LINEAR, FlowOperators.OPEN, 1).withWind(light));
+            return FlowOperators.step(FlowOperators.setup(box, Interpolation.LINEAR, Interpolation.LINEAR, FlowOperators.OPEN,
+                    1).withWind(light));
         }
     }
 
@@ -116,6 +120,16 @@ class AirTest {
             flux += u.x()[BOX.xFace(4, 2 + n % 2, 4 + n / 2)] / 4;
         }
         assertEquals(flux, coarse.velocity().x()[half.xFace(2, 1, 2)], 1e-6);
+    }
+
+    /** Smoke that the volumes put where a thing stands is not there on the first frame. */
+    @Test void aStartLeavesSolidsEmpty() {
+        ScalarGrid full = new ScalarGrid(BOX);
+        full.fill(1);
+        Obstacle ball = new Obstacle("ball", new Solid.Ball(0.8), Curve.still(new Vec3(2.25, 2.25, 1.25)), Curve.still(ZERO));
+        SmokeState start = flow(Sides.CLOSED).withStart(new Start(Optional.of(full), Optional.empty())).withObstacles(List.of(ball)).startState();
+        assertEquals(0, start.density().at(4, 4, 2));
+        assertEquals(1, start.density().at(0, 4, 2));
     }
 
     /** Thirds: the mean over a cell of one and a half cells counts the second by half. */

@@ -211,7 +211,8 @@ final class FlowOperators {
         Curve ball = new Curve(List.of(0.0, 4.0), List.of(middle, middle.plus(new Vec3(0.4 * h, 0.2 * h, 0))));
         Curve turn = new Curve(List.of(0.0, 4.0), List.of(new Vec3(0, 0, 0.4), new Vec3(0, 0, 0.5)));
         return List.of(new Obstacle("ball", new Solid.Ball(1.4 * h), ball, Curve.still(new Vec3(0, 0, 0))),
-                new Obstacle("plate", new Solid.Box(new Vec3(0.2 * h, 1.6 * h, 9 * h)), Curve.still(new Vec3(1.6 * h, 2.5 * h, 2 * h)), turn));
+                new Obstacle("plate", new Solid.Box(new Vec3(0.2 * h, 1.6 * h, 9 * h)), Curve.still(new Vec3(1.6 * h, 2.5 * h, 2 * h)),
+                        turn));
     }
 
     static SolidCells solids(GridShape shape) {
@@ -262,7 +263,8 @@ final class FlowOperators {
                     : 0.3 * i + 0.05 * j * j + 0.13 * k - 2 + 0.1 * Math.sin(i + 2.0 * j + 3.0 * k));
         }
         boolean plane = shape.isPlane();
-        double[] point = pack(q, noise(cells, low + 0.03, 0.02, 22), noise(cells, low + 0.18, 0.02, 25), noise(cells, plane ? 0 : low + 0.33,
+        double[] point = pack(q, noise(cells, low + 0.03, 0.02, 22), noise(cells, low + 0.18, 0.02, 25), noise(cells, plane ? 0 : low
+                + 0.33,
                 plane ? 0 : 0.02, 26));
         double[] way = pack(noise(count, 0, 0.05, 23), noise(2 * cells, 0, 0.02, 24), noise(cells, 0, plane ? 0 : 0.02, 27));
         return new Operator("carry around solids " + axis + " " + interpolation + " " + low, count + 3 * cells, count, false, point, way,

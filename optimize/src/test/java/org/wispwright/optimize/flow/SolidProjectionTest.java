@@ -146,7 +146,8 @@ class SolidProjectionTest {
         GridShape shape = new GridShape(8, 8, 8, 1);
         double w = 0.1;
         Curve turn = new Curve(List.of(0.0, 10.0), List.of(new Vec3(0, 0, 0), new Vec3(0, 10 * w, 0)));
-        SolidCells solids = new SolidCells(shape, List.of(new Obstacle("fan", new Solid.Box(new Vec3(2.2, 1.2, 2.2)), Curve.still(new Vec3(4, 4, 4)),
+        SolidCells solids = new SolidCells(shape, List.of(new Obstacle("fan", new Solid.Box(new Vec3(2.2, 1.2, 2.2)),
+                Curve.still(new Vec3(4, 4, 4)),
                 turn)), 4, 5, 24, ONE);
         MacVelocity u = noise(shape);
         for (int k = 0; k < 8; k++) {
@@ -160,11 +161,14 @@ class SolidProjectionTest {
         assertTrue(Math.abs(u.x()[shape.xFace(0, 0, 0)]) > 0.01, "faces of fluid stay");
     }
 
-    /** A piston in a sealed chamber: what it squeezes out has nowhere to go. Its divergence is spread evenly, and the rest is free of any. */
+    /**
+     * A piston in a sealed chamber: what it squeezes out has nowhere to go. Its divergence is spread evenly, and the rest is free of any.
+     */
     @Test void aSqueezedPocketIsCompressedEvenly() {
         GridShape shape = new GridShape(10, 6, 5, 1);
         Curve way = new Curve(List.of(0.0, 10.0), List.of(new Vec3(4.5, 3, 2.5), new Vec3(5.5, 3, 2.5)));
-        SolidCells solids = new SolidCells(shape, List.of(new Obstacle("piston", new Solid.Box(new Vec3(0.5, 9, 9)), way, Curve.still(new Vec3(0, 0, 0)))),
+        SolidCells solids = new SolidCells(shape, List.of(new Obstacle("piston", new Solid.Box(new Vec3(0.5, 9, 9)), way,
+                Curve.still(new Vec3(0, 0, 0)))),
                 0, 1, 1, ONE);
         Sides sides = new Sides(Side.OPEN, Side.WALL, Side.WALL, Side.WALL, Side.WALL, Side.WALL);
         PressureLinks links = new PressureLinks(shape, sides, solids, ONE);
@@ -194,7 +198,8 @@ class SolidProjectionTest {
         float[] shell = new float[27];
         java.util.Arrays.fill(shell, 1f);
         shell[13] = 0;
-        SolidCells solids = still(shape, new Solid.Volume(new GridShape(3, 3, 3, 1), shell, Solid.Volume.Kind.MASK), new Vec3(3.5, 3.5, 3.5),
+        SolidCells solids = still(shape, new Solid.Volume(new GridShape(3, 3, 3, 1), shell, Solid.Volume.Kind.MASK), new Vec3(3.5, 3.5,
+                3.5),
                 new Vec3(0, 0, 0));
         assertTrue(!solids.isSolid(shape.cell(3, 3, 3)) && solids.isSolid(shape.cell(2, 3, 3)));
         PressureLinks links = new PressureLinks(shape, FlowOperators.OPEN, solids, ONE);

@@ -125,10 +125,13 @@ class SolidStepTest {
         assertEquals(0, most(run(flow(BOX, Interpolation.CUBIC, pot(0.5), lid), 0, 5, FlowOperators.ONE), x -> true));
     }
 
-    /** A ball far from all smoke and wind changes nothing but the rounding of the pressure: the plain path serves where no solid is near. */
+    /**
+     * A ball far from all smoke and wind changes nothing but the rounding of the pressure: the plain path serves where no solid is near.
+     */
     @Test void farFromSolidsTheSameSmoke() {
         GridShape box = new GridShape(40, 14, 12, 0.1);
-        Obstacle pebble = new Obstacle("pebble", new Solid.Ball(0.06), Curve.still(new Vec3(3.55, 0.75, 0.65)), Curve.still(new Vec3(0, 0, 0)));
+        Obstacle pebble = new Obstacle("pebble", new Solid.Ball(0.06), Curve.still(new Vec3(3.55, 0.75, 0.65)), Curve.still(new Vec3(0, 0,
+                0)));
         float[] with = run(flow(box, Interpolation.CUBIC, pot(0.5), pebble), 0, 8, FlowOperators.ONE).density().values();
         float[] without = run(flow(box, Interpolation.CUBIC, pot(0.5)), 0, 8, FlowOperators.ONE).density().values();
         assertArrayEquals(without, with, 2e-3f);
@@ -159,7 +162,8 @@ class SolidStepTest {
 
     /** Flow through the gap of a half-closed wall stays free of divergence to rounding, and goes faster there (continuity). */
     @Test void throughAGapItGoesFaster() {
-        Obstacle wall = new Obstacle("wall", new Solid.Box(new Vec3(0.05, 0.5, 9)), Curve.still(new Vec3(1, 0.2, 0.6)), Curve.still(new Vec3(0, 0, 0)));
+        Obstacle wall = new Obstacle("wall", new Solid.Box(new Vec3(0.05, 0.5, 9)), Curve.still(new Vec3(1, 0.2, 0.6)),
+                Curve.still(new Vec3(0, 0, 0)));
         Sides tunnel = new Sides(Side.OPEN, Side.OPEN, Side.WALL, Side.WALL, Side.WALL, Side.WALL);
         FlowSetup closed = flow(BOX, Interpolation.LINEAR, pot(0.4), wall);
         FlowSetup setup = new FlowSetup(BOX, closed.frames(), 1, closed.velocity(), closed.density(), tunnel, 0, 0, List.of())

@@ -13,7 +13,8 @@ class MotionTest {
     private static final Vec3 ZERO = new Vec3(0, 0, 0);
 
     private static Curve curve(double[] frames, double[] xs) {
-        return new Curve(java.util.Arrays.stream(frames).boxed().toList(), java.util.Arrays.stream(xs).mapToObj(x -> new Vec3(x, -x, 0)).toList());
+        return new Curve(java.util.Arrays.stream(frames).boxed().toList(), java.util.Arrays.stream(xs).mapToObj(x -> new Vec3(x, -x,
+                0)).toList());
     }
 
     @Test void twoKeysAreAStraightLine() {
@@ -36,7 +37,10 @@ class MotionTest {
         assertEquals(2 - 1 / 12.0, bend.at(1.5).x(), 1e-14);
     }
 
-    /** Fritsch and Carlson (1980), SIAM J. Numer. Anal. 17, 238-246, table of RPN 14: monotone data, so a monotone curve; and rest between equal keys. */
+    /**
+     * Fritsch and Carlson (1980), SIAM J. Numer. Anal. 17, 238-246, table of RPN 14: monotone data, so a monotone curve; and rest between
+     * equal keys.
+     */
     @Test void nothingSwingsPastAKey() {
         double[] xs = {7.99, 8.09, 8.19, 8.7, 9.2, 10, 12, 15, 20};
         double[] ys = {0, 2.76429e-5, 4.37498e-2, 0.169183, 0.469428, 0.943740, 0.998636, 0.999919, 0.999994};

@@ -33,9 +33,12 @@ class SolidCellsTest {
         return sum;
     }
 
-    /** Volumes: ball 4/3 pi r^3, cylinder 2 pi r^2 l, box 8 abc (textbook), however turned; counting centres errs by the surface's share. */
+    /**
+     * Volumes: ball 4/3 pi r^3, cylinder 2 pi r^2 l, box 8 abc (textbook), however turned; counting centres errs by the surface's share.
+     */
     @Test void volumes() {
-        assertEquals(4 / 3.0 * Math.PI * Math.pow(0.72, 3), 1e-3 * count(cells(BOX, new Solid.Ball(0.72), MIDDLE, new Vec3(0, 0, 0))), 0.02);
+        assertEquals(4 / 3.0 * Math.PI * Math.pow(0.72, 3), 1e-3 * count(cells(BOX, new Solid.Ball(0.72), MIDDLE, new Vec3(0, 0, 0))),
+                0.02);
         Vec3 turned = new Vec3(0.3, -0.4, 0.5);
         assertEquals(2 * Math.PI * 0.5 * 0.5 * 0.6, 1e-3 * count(cells(BOX, new Solid.Cylinder(0.5, 0.6), MIDDLE, turned)), 0.02);
         assertEquals(8 * 0.4 * 0.5 * 0.6, 1e-3 * count(cells(BOX, new Solid.Box(new Vec3(0.4, 0.5, 0.6)), MIDDLE, turned)), 0.02);
@@ -48,7 +51,10 @@ class SolidCellsTest {
         assertFalse(lying.isSolid(BOX.cell(12, 10 + 4, 11)));
     }
 
-    /** Cohen-Or and Kaufman (1995): a plate of half a cell to each side parts the cells. Thin plates, any way round: no way through by faces. */
+    /**
+     * Cohen-Or and Kaufman (1995): a plate of half a cell to each side parts the cells. Thin plates, any way round: no way through by
+     * faces.
+     */
     @ParameterizedTest
     @CsvSource({"0,0,0,0.05", "0,0,0,0.0", "0.3,0.2,0.1,0.013", "0.615,0,0,0.03", "0,0.785398,0,0.02", "0.6,0.5,-0.4,0.07", "0,0.78,0.6,0.04"})
     void aThinPlateParts(double rx, double ry, double rz, double shift) {
@@ -88,7 +94,10 @@ class SolidCellsTest {
         return plate.pose(1, 2, 24).toLocal(new Vec3(-1 + (c % 24 + 0.5) * 0.1, (c / 24 % 20 + 0.5) * 0.1, 3 + (c / 480 + 0.5) * 0.1)).x();
     }
 
-    /** A ball from a volume of distances, sampled twice and half as finely as the cells, and from a mask: the ball's own cells, but for its skin. */
+    /**
+     * A ball from a volume of distances, sampled twice and half as finely as the cells, and from a mask: the ball's own cells, but for
+     * its skin.
+     */
     @ParameterizedTest @ValueSource(doubles = {0.05, 0.2}) void aBallFromAVolume(double h) {
         int n = (int) Math.round(2 / h);
         GridShape fine = new GridShape(n, n, n, h);
@@ -104,7 +113,8 @@ class SolidCellsTest {
         int ball = count(cells(BOX, new Solid.Ball(0.7), MIDDLE, new Vec3(0, 0, 0)));
         Vec3 turned = new Vec3(0.4, 0.3, 0.2);
         assertEquals(ball, count(cells(BOX, new Solid.Volume(fine, distance, Solid.Volume.Kind.DISTANCE), MIDDLE, turned)), 0.08 * ball);
-        assertEquals(ball, count(cells(BOX, new Solid.Volume(fine, mask, Solid.Volume.Kind.MASK), MIDDLE, turned)), (h < 0.1 ? 0.08 : 0.2) * ball);
+        assertEquals(ball, count(cells(BOX, new Solid.Volume(fine, mask, Solid.Volume.Kind.MASK), MIDDLE, turned)),
+                (h < 0.1 ? 0.08 : 0.2) * ball);
     }
 
     /** Clearance by its definition: the largest index difference to the nearest solid cell. */
@@ -115,7 +125,8 @@ class SolidCellsTest {
             int least = SolidCells.FAR;
             for (int s = 0; s < box.cells(); s++) {
                 if (cells.isSolid(s)) {
-                    int away = Math.max(Math.abs(c % 13 - s % 13), Math.max(Math.abs(c / 13 % 11 - s / 13 % 11), Math.abs(c / 143 - s / 143)));
+                    int away = Math.max(Math.abs(c % 13 - s % 13), Math.max(Math.abs(c / 13 % 11 - s / 13 % 11),
+                            Math.abs(c / 143 - s / 143)));
                     least = Math.min(least, away);
                 }
             }

@@ -216,7 +216,8 @@ class WholeChainTest {
         SolveProblem plain = SolveScene.problem(12, 1007, 2, false);
         Curve way = new Curve(List.of(1001.0, 1007.0), List.of(new Vec3(0.6, 0.9, 1), new Vec3(1.4, 0.9, 1)));
         Obstacle drum = new Obstacle("drum", new Solid.Cylinder(0.2, 0.4), way, Curve.still(new Vec3(0.3, 0, 0.2)));
-        SolveProblem problem = new SolveProblem(plain.flow().withObstacles(List.of(drum)), plain.views(), plain.look(), plain.notes(), plain.holds());
+        SolveProblem problem = new SolveProblem(plain.flow().withObstacles(List.of(drum)), plain.views(), plain.look(), plain.notes(),
+                plain.holds());
         double[] x = unknowns(problem.flow(), 1.5, 1);
         double[] all = new double[x.length];
         double[] few = new double[x.length];

@@ -68,7 +68,8 @@ final class AirReader {
             return Start.EMPTY;
         }
         GridShape g = grid.get();
-        Optional<ScalarGrid> density = place.ask("density").map(p -> new ScalarGrid(g, fromZero(p, volumes.read(p, g.nz(), g.ny(), g.nx()))));
+        Optional<ScalarGrid> density = place.ask("density").map(p -> new ScalarGrid(g, fromZero(p, volumes.read(p, g.nz(), g.ny(),
+                g.nx()))));
         Optional<MacVelocity> velocity = Optional.empty();
         if (moves) {
             velocity = Optional.of(new MacVelocity(g, volumes.read(place.need("velocityX"), g.nz(), g.ny(), g.nx() + 1),

@@ -26,7 +26,8 @@ final class MotionReader {
         for (JsonPlace key : keys.items(1, Curve.MOST_KEYS)) {
             double frame = key.need("frame").number(-1e6, 1e9);
             if (!frames.isEmpty() && !(frame > frames.get(frames.size() - 1))) {
-                throw key.at("frame").fault("frame " + frame + " after frame " + frames.get(frames.size() - 1), "frames that rise from key to key",
+                throw key.at("frame").fault("frame " + frame + " after frame " + frames.get(frames.size() - 1),
+                        "frames that rise from key to key",
                         "sort the keys");
             }
             frames.add(frame);

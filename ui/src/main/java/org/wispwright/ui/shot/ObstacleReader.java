@@ -95,7 +95,8 @@ final class ObstacleReader {
                 return form.make(() -> new Solid.Ball(form.need("radiusMetres").positive(FAR)));
             case "cylinder":
                 form.only("radiusMetres", "lengthMetres");
-                return form.make(() -> new Solid.Cylinder(form.need("radiusMetres").positive(FAR), form.need("lengthMetres").positive(FAR) / 2));
+                return form.make(() -> new Solid.Cylinder(form.need("radiusMetres").positive(FAR),
+                        form.need("lengthMetres").positive(FAR) / 2));
             default:
                 return volume(form);
         }
@@ -110,7 +111,8 @@ final class ObstacleReader {
         if (kind == Solid.Volume.Kind.MASK) {
             for (float value : contents.values()) {
                 if (!(value >= 0 && value <= 1)) {
-                    throw form.at("file").fault("a mask with the value " + value, "values from 0 to 1", "write the share of solid of each cell");
+                    throw form.at("file").fault("a mask with the value " + value, "values from 0 to 1",
+                            "write the share of solid of each cell");
                 }
             }
         }

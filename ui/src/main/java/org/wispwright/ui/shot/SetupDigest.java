@@ -51,7 +51,8 @@ final class SetupDigest {
     private void source(Source source) {
         Vec3 at = source.centre().values().get(0);
         Vec3 half = source.form().half();
-        line("source", at.x(), at.y(), at.z(), half.x(), source.edgeMetres(), source.ratePerSecond(), source.firstFrame(), source.lastFrame());
+        line("source", at.x(), at.y(), at.z(), half.x(), source.edgeMetres(), source.ratePerSecond(), source.firstFrame(),
+                source.lastFrame());
         if (!source.form().round()) {
             line("source box", half.y(), half.z());
         }
@@ -82,7 +83,8 @@ final class SetupDigest {
         } else if (solid instanceof Solid.Cylinder cylinder) {
             line("obstacle cylinder", cylinder.radius(), cylinder.halfLength());
         } else if (solid instanceof Solid.Volume volume) {
-            line("obstacle volume", volume.kind(), volume.shape().nx(), volume.shape().ny(), volume.shape().nz(), volume.shape().cellMetres(),
+            line("obstacle volume", volume.kind(), volume.shape().nx(), volume.shape().ny(), volume.shape().nz(),
+                    volume.shape().cellMetres(),
                     values(volume.values()));
         }
         curve("position", obstacle.position());

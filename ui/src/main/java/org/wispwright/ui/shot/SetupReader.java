@@ -58,7 +58,8 @@ final class SetupReader {
             return Optional.empty();
         }
         JsonPlace top = file.get();
-        findings.check(() -> top.only("wispwright", "name", "grid", "frames", "flow", "sources", "obstacles", "start", "look", "background", "views"));
+        findings.check(() -> top.only("wispwright", "name", "grid", "frames", "flow", "sources", "obstacles", "start", "look",
+                "background", "views"));
         Optional<String> name = findings.attempt(() -> top.need("name").text(200));
         Optional<FrameRange> frames = findings.attempt(() -> frames(top.need("frames")));
         Optional<GridShape> grid = findings.attempt(() -> grid(top.need("grid"), steps(top, frames), top.has("obstacles")));
@@ -104,7 +105,8 @@ final class SetupReader {
 
     private Optional<FlowSetup> flow(Optional<JsonPlace> given, JsonPlace top, Optional<GridShape> grid, Optional<FrameRange> frames,
             List<Source> sources) {
-        given.ifPresent(p -> p.only("substeps", "velocityInterpolation", "densityInterpolation", "sides", "buoyancy", "dissipation", "wind"));
+        given.ifPresent(p -> p.only("substeps", "velocityInterpolation", "densityInterpolation", "sides", "buoyancy", "dissipation",
+                "wind"));
         int substeps = given.flatMap(p -> p.ask("substeps")).map(p -> p.whole(1, MOST_SUBSTEPS)).orElse(1);
         Interpolation velocity = given.flatMap(p -> p.ask("velocityInterpolation")).map(p -> p.choice(Interpolation.class))
                 .orElse(Interpolation.LINEAR);

@@ -38,7 +38,8 @@ final class VolumeReader {
         } catch (IOException broken) {
             String reason = String.valueOf(broken.getMessage())
                     .replaceAll("(?s)^volume file .*" + Pattern.quote(Path.of(name).getFileName().toString()) + ": ", "");
-            throw new ShotException(new Finding(place.file(), place.pointer(), "the volume '" + name + "' " + reason.replaceAll("\\.$", "") + "."),
+            throw new ShotException(new Finding(place.file(), place.pointer(), "the volume '" + name + "' " + reason.replaceAll("\\.$",
+                    "") + "."),
                     broken);
         }
         if (contents.shape().length != 3) {

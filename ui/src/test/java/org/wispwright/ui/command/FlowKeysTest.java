@@ -17,9 +17,15 @@ import org.wispwright.render.volume.NpyFile;
 import org.wispwright.ui.shot.ShotCheck;
 import org.wispwright.ui.shot.TakeRecord;
 
-/** Keys of shot.json that say what the air does beside plain smoke: read right, refused right, no part of a digest while they are not there. */
+/**
+ * Keys of shot.json that say what the air does beside plain smoke: read right, refused right, no part of a digest while they are not
+ * there.
+ */
 class FlowKeysTest {
-    /** What the set-up of {@link SmallShot} had for a digest before any of these keys: its takes must stay its takes. By hand: sha256sum of its five lines. */
+    /**
+     * What the set-up of {@link SmallShot} had for a digest before any of these keys: its takes must stay its takes. By hand: sha256sum
+     * of its five lines.
+     */
     private static final String PLAIN = "f82a2c27d5489166661af0bb3ad4833916ce8ce455de6901add59e95b91dfcf6";
 
     @TempDir
@@ -121,7 +127,8 @@ class FlowKeysTest {
 
     @Test void windSourcesAndStartCount() throws IOException {
         String first = digest();
-        shot.swap("shot.json", "\"buoyancy\": 3.0,", "\"buoyancy\": 3.0, \"wind\": {\"dragPerSecond\": 2, \"metresPerSecond\": [1, 0, 0]},");
+        shot.swap("shot.json", "\"buoyancy\": 3.0,",
+                "\"buoyancy\": 3.0, \"wind\": {\"dragPerSecond\": 2, \"metresPerSecond\": [1, 0, 0]},");
         String windy = digest();
         assertNotEquals(first, windy);
         assertEquals(1, flow().wind().velocity().at(1003).x());

@@ -88,7 +88,8 @@ public final class SolidFigures {
         double f = forth[STEPS / 2];
         double b = back[STEPS / 2];
         System.out.printf("%s | %d, %d, %d | %.0f (worst %.0f) | %.0f (worst %.0f) | %.1f | %.1e%n", name, first,
-                iterations(flow, now, GROWN + STEPS, lanes), iterations(flow, bar, GROWN + STEPS, lanes), f, forth[STEPS - 1], b, back[STEPS - 1],
+                iterations(flow, now, GROWN + STEPS, lanes), iterations(flow, bar, GROWN + STEPS, lanes), f, forth[STEPS - 1], b,
+                        back[STEPS - 1],
                 b / f, solver.relativeDivergence(now.velocity()));
     }
 
