@@ -19,11 +19,13 @@ import org.wispwright.render.volume.GridShape;
  * @param dissipation density's rate of decay, 1/s, 0 or more
  * @param sources     where smoke comes from
  * @param obstacles   solid things, at most {@link Obstacle#MOST}
+ * @param heat        how warm smoke rises
  * @param wind        what pushes all air alike
  * @param start       what is in the box on the first frame
  */
 public record FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpolation velocity, Interpolation density, Sides sides,
-                        double buoyancy, double dissipation, List<Source> sources, List<Obstacle> obstacles, Wind wind, Start start) {
+                        double buoyancy, double dissipation, List<Source> sources, List<Obstacle> obstacles, Heat heat,
+                        Wind wind, Start start) {
 
     /** Checks the numbers. @throws IllegalArgumentException saying what is off */
     public FlowSetup {
@@ -38,6 +40,9 @@ public record FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpo
         }
         sources = List.copyOf(sources);
         obstacles = List.copyOf(obstacles);
+        if (!heat.isCarried() && (sources.stream().anyMatch(s -> s.kelvinPerSecond() != 0) || start.temperature().isPresent())) {
+            throw new IllegalArgumentException("flow: a source or the start gives a temperature, needs a lift other than 0 that it acts by");
+        }
         if (obstacles.size() > Obstacle.MOST) {
             throw new IllegalArgumentException("flow: got " + obstacles.size() + " obstacles, needs at most " + Obstacle.MOST);
         }
@@ -46,37 +51,54 @@ public record FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpo
     /** Plain smoke: sources and buoyancy alone. */
     public FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpolation velocity, Interpolation density, Sides sides,
                      double buoyancy, double dissipation, List<Source> sources) {
-        this(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, List.of(), Wind.NONE, Start.EMPTY);
+        this(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, List.of(), Heat.NONE, Wind.NONE,
+                Start.EMPTY);
     }
 
     /** The same shot on another grid of its box. */
     public FlowSetup on(GridShape other) {
-        return new FlowSetup(other, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, wind,
-                start);
+        return new FlowSetup(other, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, heat,
+                wind, start);
     }
 
     /** The same shot with these things in its box. */
     public FlowSetup withObstacles(List<Obstacle> things) {
-        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, things, wind, start);
+        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, things, heat, wind, start);
+    }
+
+    /** The same shot with other sources. */
+    public FlowSetup withSources(List<Source> other) {
+        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, other, obstacles, heat, wind, start);
+    }
+
+    /** The same shot with a temperature. */
+    public FlowSetup withHeat(Heat other) {
+        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, other, wind,
+                start);
     }
 
     /** The same shot in another wind. */
     public FlowSetup withWind(Wind other) {
-        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, other, start);
+        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, heat, other,
+                start);
     }
 
     /** The same shot with something in its box on the first frame. */
     public FlowSetup withStart(Start other) {
-        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, wind, other);
+        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, heat, wind,
+                other);
     }
 
     /** A new state as on the first frame; solids hold no smoke. */
     public SmokeState startState() {
-        SmokeState state = start.on(grid);
+        SmokeState state = start.on(this);
         if (!obstacles.isEmpty()) {
             SolidCells solids = new SolidCells(grid, obstacles, frames.first(), frames.first(), frames.perSecond(), new Lanes(1));
             for (int k = 0; k < grid.nz(); k++) {
                 solids.clear(state.density().values(), k);
+                if (state.temperature() != null) {
+                    solids.clear(state.temperature().values(), k);
+                }
             }
         }
         return state;

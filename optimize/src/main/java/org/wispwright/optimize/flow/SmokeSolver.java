@@ -4,14 +4,15 @@ import java.util.List;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.volume.GridShape;
 import org.wispwright.render.volume.MacVelocity;
+import org.wispwright.render.volume.ScalarGrid;
 
 /**
  * One substep of smoke in a box, and its pullback. Stable Fluids (Stam 1999, SIGGRAPH 99, 121-128) on a MAC grid:
  * <pre>
  * u1 = carry(u, trace(u))
- * u2 = wind(u1 + dt (f + buoyancy(density)))
+ * u2 = wind(u1 + dt (f + buoyancy(density) + lift(temperature)))
  * u' = project(u2)
- * density' = exp(-dissipation dt) carry(density, trace(u')) + dt sources, 0 in solids
+ * density' = exp(-dissipation dt) carry(density, trace(u')) + dt sources, 0 in solids; temperature' likewise
  * </pre>
  * Only carrying is not linear, and it needs u, density and u' alone; so the pullback needs the state before the step and the
  * velocity after it, and runs no step again. A solver owns about 100 bytes a cell of workspace, 40 more with solids; one caller at a time.
@@ -30,8 +31,6 @@ public final class SmokeSolver {
     private final Displacement displacement;
     private final Clock clock = new Clock();
     private final float[] mostPerSlab;
-    /** The span that {@link #displacement} was traced for last. */
-    private double traced;
     private Displacement displacementBar;
     private SmokeState inBar;
 
@@ -68,9 +67,11 @@ public final class SmokeSolver {
         double seconds = setup.seconds(at);
         long since = System.nanoTime();
         medium.ready(at);
-        since = clock.lap(Clock.Part.SOLIDS, since);
-        if (!follows || traced != seconds) {
-            trace(u, seconds);
+        if (!setup.obstacles().isEmpty()) {
+            since = clock.lap(Clock.Part.SOLIDS, since);
+        }
+        if (!follows) {
+            trace.forward(u, seconds, displacement);
         }
         since = clock.lap(Clock.Part.TRACE, since);
         medium.carryFaces(u, displacement, next);
@@ -79,16 +80,24 @@ public final class SmokeSolver {
             addScaled(next, force, (float) seconds);
         }
         buoyancy.forward(in.density().values(), seconds * setup.buoyancy(), next.y());
+        if (setup.heat().isCarried()) {
+            buoyancy.forward(in.temperature().values(), seconds * setup.heat().lift(), next.y());
+        }
         setup.wind().forward(next, at, seconds, lanes);
         since = clock.lap(Clock.Part.PUSH, since);
         medium.project(next);
         since = clock.lap(Clock.Part.PROJECTION, since);
-        trace(next, seconds);
+        trace.forward(next, seconds, displacement);
         since = clock.lap(Clock.Part.TRACE, since);
-        medium.carryCells(in.density().values(), displacement, out.density().values());
-        fade(out.density().values(), keep(seconds));
-        sources.forEach(source -> source.feed(out.density().values(), at, seconds));
+        carryForward(in.density(), out.density(), setup.dissipation(), seconds);
+        if (setup.heat().isCarried()) {
+            carryForward(in.temperature(), out.temperature(), setup.heat().cooling(), seconds);
+        }
+        sources.forEach(source -> source.feed(out, at, seconds));
         medium.clearSolids(out.density().values());
+        if (setup.heat().isCarried()) {
+            medium.clearSolids(out.temperature().values());
+        }
         clock.lap(Clock.Part.CARRY_DENSITY, since);
     }
 
@@ -105,24 +114,26 @@ public final class SmokeSolver {
      */
     public void pullback(SmokeState in, MacVelocity outVelocity, Substep at, boolean follows, SmokeState bar, MacVelocity forceBar) {
         if (inBar == null) {
-            inBar = new SmokeState(shape);
+            inBar = SmokeState.of(setup);
             displacementBar = new Displacement(shape);
         }
         double seconds = setup.seconds(at);
         clear(inBar);
         lanes.forEach(shape.nz(), displacementBar::clearSlab);
-        float[] density = in.density().values();
         long since = System.nanoTime();
         medium.ready(at);
-        since = clock.lap(Clock.Part.SOLIDS, since);
-        medium.clearSolids(bar.density().values());
-        fade(bar.density().values(), keep(seconds));
-        if (!follows || traced != seconds) {
-            trace(outVelocity, seconds);
+        if (!setup.obstacles().isEmpty()) {
+            since = clock.lap(Clock.Part.SOLIDS, since);
+        }
+        if (!follows) {
+            trace.forward(outVelocity, seconds, displacement);
         }
         since = clock.lap(Clock.Part.TRACE, since);
         int reach = displacement.reachInZ(lanes, mostPerSlab);
-        medium.carryCellsBack(density, displacement, reach, bar.density().values(), inBar.density().values(), displacementBar);
+        carryBack(in.density(), bar.density(), inBar.density(), setup.dissipation(), seconds, reach);
+        if (setup.heat().isCarried()) {
+            carryBack(in.temperature(), bar.temperature(), inBar.temperature(), setup.heat().cooling(), seconds, reach);
+        }
         since = clock.lap(Clock.Part.CARRY_DENSITY_BACK, since);
         trace.pullback(outVelocity, seconds, displacementBar, bar.velocity());
         since = clock.lap(Clock.Part.TRACE_BACK, since);
@@ -134,12 +145,15 @@ public final class SmokeSolver {
             addScaled(forceBar, bar.velocity(), (float) seconds);
         }
         buoyancy.pullback(bar.velocity().y(), seconds * setup.buoyancy(), inBar.density().values());
+        if (setup.heat().isCarried()) {
+            buoyancy.pullback(bar.velocity().y(), seconds * setup.heat().lift(), inBar.temperature().values());
+        }
         since = clock.lap(Clock.Part.PUSH_BACK, since);
 
         MacVelocity u = in.velocity();
         MacVelocity uBar = inBar.velocity();
         lanes.forEach(shape.nz(), displacementBar::clearSlab);
-        trace(u, seconds);
+        trace.forward(u, seconds, displacement);
         since = clock.lap(Clock.Part.TRACE, since);
         reach = displacement.reachInZ(lanes, mostPerSlab);
         medium.carryFacesBack(u, displacement, reach, bar.velocity(), uBar, displacementBar);
@@ -149,13 +163,16 @@ public final class SmokeSolver {
         clock.lap(Clock.Part.TRACE_BACK, since);
     }
 
-    private void trace(MacVelocity u, double seconds) {
-        trace.forward(u, seconds, displacement);
-        traced = seconds;
+    /** A cell value's step when its departures are traced. */
+    private void carryForward(ScalarGrid in, ScalarGrid out, double decay, double seconds) {
+        medium.carryCells(in.values(), displacement, out.values());
+        fade(out.values(), (float) Math.exp(-decay * seconds));
     }
 
-    private float keep(double seconds) {
-        return (float) Math.exp(-setup.dissipation() * seconds);
+    /** What solids hold is 0 whatever came before: the medium's pullback takes nothing from there. */
+    private void carryBack(ScalarGrid in, ScalarGrid outBar, ScalarGrid valueBar, double decay, double seconds, int reach) {
+        fade(outBar.values(), (float) Math.exp(-decay * seconds));
+        medium.carryCellsBack(in.values(), displacement, reach, outBar.values(), valueBar.values(), displacementBar);
     }
 
     /** Where this solver's time went; whoever drives it may add parts of its own. */
@@ -185,10 +202,10 @@ public final class SmokeSolver {
     }
 
     private void clear(SmokeState state) {
-        lanes.forEach(4, part -> {
-            MacVelocity u = state.velocity();
-            java.util.Arrays.fill(part == 0 ? u.x() : part == 1 ? u.y() : part == 2 ? u.z() : state.density().values(), 0f);
-        });
+        MacVelocity u = state.velocity();
+        float[] temperature = state.temperature() == null ? new float[0] : state.temperature().values();
+        float[][] parts = {u.x(), u.y(), u.z(), state.density().values(), temperature};
+        lanes.forEach(parts.length, part -> java.util.Arrays.fill(parts[part], 0f));
     }
 
     private void fade(float[] density, float by) {

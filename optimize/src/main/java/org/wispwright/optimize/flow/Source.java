@@ -12,10 +12,12 @@ import org.wispwright.render.view.Vec3;
  * @param centre        of it over the frames, metres; in the plane case only x and y count
  * @param edgeMetres    width of the soft rim, 0 to the form's least half width
  * @param ratePerSecond density added a second at the core, 0 or more
+ * @param kelvinPerSecond temperature added a second at the core, finite
  * @param firstFrame    first frame whose state it has already fed
  * @param lastFrame     last frame that it feeds, not before firstFrame
  */
-public record Source(String name, Form form, Curve centre, double edgeMetres, double ratePerSecond, int firstFrame, int lastFrame) {
+public record Source(String name, Form form, Curve centre, double edgeMetres, double ratePerSecond, double kelvinPerSecond, int firstFrame,
+                     int lastFrame) {
 
     /**
      * Half its widths along x, y and z, metres, each above 0.
@@ -67,16 +69,20 @@ public record Source(String name, Form form, Curve centre, double edgeMetres, do
         if (!(ratePerSecond >= 0) || Double.isInfinite(ratePerSecond)) {
             throw new IllegalArgumentException("source '" + name + "': got a rate of " + ratePerSecond + " a second, needs a finite number from 0");
         }
+        if (!Double.isFinite(kelvinPerSecond)) {
+            throw new IllegalArgumentException("source '" + name + "': got " + kelvinPerSecond + " kelvin a second, needs a finite number");
+        }
         if (lastFrame < firstFrame) {
             throw new IllegalArgumentException("source '" + name + "': got frames " + firstFrame + " to " + lastFrame
                     + ", needs the last not before the first");
         }
     }
 
-    /** A ball that stays. */
+    /** A ball that stays and gives no warmth. */
     public Source(String name, double x, double y, double z, double radiusMetres, double edgeMetres, double ratePerSecond, int firstFrame,
                   int lastFrame) {
-        this(name, Form.ball(radiusMetres), Curve.still(new Vec3(x, y, z)), edgeMetres, ratePerSecond, firstFrame, lastFrame);
+        this(name, Form.ball(radiusMetres), Curve.still(new Vec3(x, y, z)), edgeMetres, ratePerSecond, 0, firstFrame,
+                lastFrame);
     }
 
     /** The rate's share at a place, metres from the centre: 1 in the core, 0 outside. */

@@ -4,28 +4,38 @@ import java.util.Arrays;
 import org.wispwright.render.view.Vec3;
 import org.wispwright.render.volume.GridShape;
 
-/** The cells that one source feeds, and how much of its rate each gets. Laid out once for a source that stays, else at every substep. */
+/**
+ * The cells that one source feeds, and the share of its rates that each gets. Laid out once for a source that stays, else at every
+ * substep.
+ */
 final class SourceCells {
     private final Source source;
     private final GridShape shape;
     private int[] cells;
-    private float[] ratePerSecond;
+    private double[] shares;
 
     SourceCells(Source source, GridShape shape) {
         this.source = source;
         this.shape = shape;
     }
 
-    /** Adds what the source gives in a substep; constant, so nothing is pulled back. */
-    void feed(float[] density, Substep at, double seconds) {
+    /** Adds what the source gives in a substep; constant, so nothing is pulled back. The temperature may be null. */
+    void feed(SmokeState to, Substep at, double seconds) {
         if (!source.feeds(at.frame())) {
             return;
         }
         if (cells == null || !source.centre().isStill()) {
             layOut(source.centre().at(at.to()));
         }
+        add(to.density().values(), source.ratePerSecond(), seconds);
+        if (to.temperature() != null) {
+            add(to.temperature().values(), source.kelvinPerSecond(), seconds);
+        }
+    }
+
+    private void add(float[] values, double rate, double seconds) {
         for (int n = 0; n < cells.length; n++) {
-            density[cells[n]] += (float) seconds * ratePerSecond[n];
+            values[cells[n]] += (float) seconds * (float) (shares[n] * rate);
         }
     }
 
@@ -40,7 +50,7 @@ final class SourceCells {
         int k1 = shape.isPlane() ? 1 : high(centre.z() + half.z(), shape.originZ(), shape.nz());
         int room = Math.max(0, i1 - i0) * Math.max(0, j1 - j0) * Math.max(0, k1 - k0);
         cells = new int[room];
-        ratePerSecond = new float[room];
+        shares = new double[room];
         int found = 0;
         for (int k = k0; k < k1; k++) {
             double z = shape.isPlane() ? 0 : shape.originZ() + (k + 0.5) * h - centre.z();
@@ -50,13 +60,13 @@ final class SourceCells {
                     double share = source.shareAt(x, shape.originY() + (j + 0.5) * h - centre.y(), z);
                     if (share > 0) {
                         cells[found] = shape.cell(i, j, k);
-                        ratePerSecond[found++] = (float) (share * source.ratePerSecond());
+                        shares[found++] = share;
                     }
                 }
             }
         }
         cells = Arrays.copyOf(cells, found);
-        ratePerSecond = Arrays.copyOf(ratePerSecond, found);
+        shares = Arrays.copyOf(shares, found);
     }
 
     private int low(double metres, double origin) {

@@ -9,24 +9,19 @@ import org.wispwright.render.volume.ScalarGrid;
  * What is in the box on the first frame. Velocity may hold divergence; the first step takes it away.
  *
  * @param density  unitless, if there is any; read, not copied
+ * @param temperature above the air around, kelvin, if there is any; read, not copied
  * @param velocity m/s, if the air moves; read, not copied
  */
-public record Start(Optional<ScalarGrid> density, Optional<MacVelocity> velocity) {
+public record Start(Optional<ScalarGrid> density, Optional<ScalarGrid> temperature, Optional<MacVelocity> velocity) {
     /** Empty, still air. */
-    public static final Start EMPTY = new Start(Optional.empty(), Optional.empty());
+    public static final Start EMPTY = new Start(Optional.empty(), Optional.empty(), Optional.empty());
 
-    /** True if the air is empty and still. */
-    public boolean isEmpty() {
-        return density.isEmpty() && velocity.isEmpty();
-    }
-
-    /** A new state of a box of the same extent, whatever its cells: see {@link Averages}. */
-    SmokeState on(GridShape shape) {
-        SmokeState state = new SmokeState(shape);
-        density.ifPresent(given -> {
-            GridShape from = given.shape();
-            Averages.resample(given.values(), sizes(from, 0, 0, 0), state.density().values(), sizes(shape, 0, 0, 0), -1);
-        });
+    /** A new state of a shot's grid, whatever its cells: see {@link Averages}. */
+    SmokeState on(FlowSetup flow) {
+        GridShape shape = flow.grid();
+        SmokeState state = SmokeState.of(flow);
+        density.ifPresent(given -> resample(given, state.density()));
+        temperature.ifPresent(given -> resample(given, state.temperature()));
         velocity.ifPresent(given -> {
             GridShape from = given.shape();
             Averages.resample(given.x(), sizes(from, 1, 0, 0), state.velocity().x(), sizes(shape, 1, 0, 0), 0);
@@ -34,6 +29,10 @@ public record Start(Optional<ScalarGrid> density, Optional<MacVelocity> velocity
             Averages.resample(given.z(), sizes(from, 0, 0, 1), state.velocity().z(), sizes(shape, 0, 0, 1), 2);
         });
         return state;
+    }
+
+    private static void resample(ScalarGrid from, ScalarGrid to) {
+        Averages.resample(from.values(), sizes(from.shape(), 0, 0, 0), to.values(), sizes(to.shape(), 0, 0, 0), -1);
     }
 
     private static int[] sizes(GridShape s, int x, int y, int z) {

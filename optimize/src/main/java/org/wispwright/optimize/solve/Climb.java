@@ -123,7 +123,7 @@ final class Climb {
         plan = new TermPlan(here, solver, start, terms, stay, cancelled);
         int lastFrame = here.lastFrame();
         int steps = flow.stepsTo(lastFrame);
-        snapshots = new Budget(memoryBytes, SmokeState.bytes(grid)).snapshots(steps);
+        snapshots = new Budget(memoryBytes, SmokeState.bytes(flow)).snapshots(steps);
         ForceBasis basis = new ForceBasis(grid, flow.frames().count() - 1, bands, lanes);
         loss = new SolveLoss(solver, basis, terms, start, lastFrame, snapshots, cancelled);
         if (state.isPresent()) {

@@ -40,7 +40,7 @@ public final class Simulation {
         int first = solver.setup().frames().first();
         int substeps = solver.setup().substeps();
         SmokeState now = start.copy();
-        SmokeState next = new SmokeState(solver.setup().grid());
+        SmokeState next = SmokeState.of(solver.setup());
         MacVelocity force = x == null ? null : new MacVelocity(solver.setup().grid());
         boolean follows = false;
         each.frame(first, now, null);

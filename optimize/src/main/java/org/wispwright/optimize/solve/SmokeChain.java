@@ -61,12 +61,12 @@ final class SmokeChain implements ReversibleChain {
         this.start = start;
         flow = solver.setup();
         GridShape shape = flow.grid();
-        bar = new SmokeState(shape);
+        bar = SmokeState.of(flow);
         force = new MacVelocity(shape);
         forceBar = new MacVelocity(shape);
-        current = new SmokeState(shape);
-        before = new SmokeState(shape);
-        spare = new SmokeState(shape);
+        current = SmokeState.of(flow);
+        before = SmokeState.of(flow);
+        spare = SmokeState.of(flow);
     }
 
     /** Readies a sweep: unknowns to read, their gradient to add to, state 0 current, the adjoint 0. */
@@ -94,7 +94,7 @@ final class SmokeChain implements ReversibleChain {
     @Override
     public void save(int slot) {
         if (slot == slots.size()) {
-            slots.add(new SmokeState(solver.setup().grid()));
+            slots.add(SmokeState.of(flow));
         }
         slots.get(slot).set(current);
     }

@@ -41,6 +41,9 @@ class AirTest {
         for (float u : after.velocity().x()) {
             assertEquals(3 * (1 - Math.exp(-0.7 * 0.5)), u, 1e-6);
         }
+        SmokeState moving = new SmokeState(BOX);
+        java.util.Arrays.fill(moving.velocity().x(), 2f);
+        assertEquals(3 - Math.exp(-0.7 * 0.5), step(flow(FlowOperators.OPEN).withWind(BREEZE), moving, 0).velocity().x()[50], 1e-6);
         for (float v : after.velocity().y()) {
             assertEquals(-4 * 0.25 * 0.5, v, 1e-6);
         }
@@ -73,11 +76,14 @@ class AirTest {
     /** A source that goes a cell a frame feeds the cell it stands over when the frame is there, and a ball's cell is the ball's alone. */
     @Test void aSourceThatMoves() {
         Curve way = new Curve(List.of(1.0, 5.0), List.of(new Vec3(1.25, 1.25, 1.25), new Vec3(3.25, 1.25, 1.25)));
-        Source spark = new Source("spark", Source.Form.ball(0.2), way, 0, 3, 1, 9);
+        Source spark = new Source("spark", Source.Form.ball(0.2), way, 0, 3, 0, 1, 9);
         FlowSetup flow = flow(Sides.CLOSED, spark);
+        SmokeSolver solver = new SmokeSolver(flow, FlowOperators.ONE);
         SmokeState state = new SmokeState(BOX);
         for (int n = 0; n < 3; n++) {
-            state = step(flow, state, n);
+            SmokeState next = new SmokeState(BOX);
+            solver.step(state, null, flow.step(n), false, next);
+            state = next;
         }
         for (int i = 0; i < 10; i++) {
             assertEquals(i >= 3 && i <= 5 ? 3 * 0.5 : 0, state.density().at(i, 2, 2), 1e-6, "cell " + i);
@@ -87,13 +93,15 @@ class AirTest {
 
     /** A box of 1.5 x 0.5 x 1 m fills 3 x 1 x 2 cells; in its rim of a quarter of a metre the share is s(t) = 3t^2 - 2t^3. */
     @Test void aBoxGivesOffSmoke() {
-        Source hard = new Source("box", Source.Form.box(new Vec3(0.75, 0.25, 0.5)), Curve.still(new Vec3(2.25, 1.25, 1.5)), 0, 2, 1, 9);
+        Source hard = new Source("box", Source.Form.box(new Vec3(0.75, 0.25, 0.5)), Curve.still(new Vec3(2.25, 1.25, 1.5)), 0, 2, 0, 1, 9);
         assertEquals(3 * 1 * 2 * 2 * 0.5, step(flow(Sides.CLOSED, hard), new SmokeState(BOX), 0).density().sum(), 1e-5);
-        Source soft = new Source("box", Source.Form.box(new Vec3(0.75, 0.25, 0.5)), Curve.still(ZERO), 0.25, 2, 1, 9);
+        Source soft = new Source("box", Source.Form.box(new Vec3(0.75, 0.25, 0.5)), Curve.still(ZERO), 0.25, 2, 0, 1, 9);
         assertEquals(1, soft.shareAt(0.5, 0, 0.25));
         assertEquals(0.5, soft.shareAt(0.625, 0, 0), 1e-15);
         assertEquals(3 / 16.0 - 2 / 64.0, soft.shareAt(0, 0.1875, 0), 1e-15);
         assertEquals(0, soft.shareAt(0, 0.25, 0));
+        assertEquals(0.5, soft.shareAt(0, 0, 0.375), 1e-15);
+        assertEquals(0, soft.shareAt(0, 0, 0.6));
     }
 
     /** Halving: means of eight cells; faces that coarse cells keep have the mean of their four; sums and a divergence of 0 stay (Gauss). */
@@ -102,7 +110,7 @@ class AirTest {
         MacVelocity u = new MacVelocity(BOX, FlowOperators.noise(BOX.xFaces(), 0, 1, 2), FlowOperators.noise(BOX.yFaces(), 0, 1, 3),
                 FlowOperators.noise(BOX.zFaces(), 0, 1, 4));
         new Projection(BOX, Sides.CLOSED, FlowOperators.ONE).apply(u);
-        FlowSetup flow = flow(Sides.CLOSED).withStart(new Start(Optional.of(density), Optional.of(u)));
+        FlowSetup flow = flow(Sides.CLOSED).withStart(new Start(Optional.of(density), Optional.empty(), Optional.of(u)));
         assertArrayEquals(density.values(), flow.startState().density().values());
         assertArrayEquals(u.y(), flow.startState().velocity().y());
         GridShape half = new GridShape(5, 4, 3, 1);
@@ -127,7 +135,8 @@ class AirTest {
         ScalarGrid full = new ScalarGrid(BOX);
         full.fill(1);
         Obstacle ball = new Obstacle("ball", new Solid.Ball(0.8), Curve.still(new Vec3(2.25, 2.25, 1.25)), Curve.still(ZERO));
-        SmokeState start = flow(Sides.CLOSED).withStart(new Start(Optional.of(full), Optional.empty())).withObstacles(List.of(ball)).startState();
+        SmokeState start = flow(Sides.CLOSED).withStart(new Start(Optional.of(full), Optional.empty(),
+                Optional.empty())).withObstacles(List.of(ball)).startState();
         assertEquals(0, start.density().at(4, 4, 2));
         assertEquals(1, start.density().at(0, 4, 2));
     }

@@ -117,6 +117,31 @@ class SolidStepTest {
         SmokeState end = run(setup, 0, 29, FlowOperators.ONE);
         assertEquals(0, most(end, x -> x < 1.2));
         assertTrue(most(end, x -> x > 1.4) > 0.3);
+        // It has come to 1.3 m, into the source: no smoke in it.
+        assertEquals(0, end.density().at(12, 4, 6));
+        assertEquals(0, end.density().at(13, 4, 6));
+        assertTrue(end.density().at(15, 4, 6) > 0.3);
+    }
+
+    /** The carry itself leaves 0 in solids and takes no derivative from there, whatever flows. */
+    @Test void nothingIsCarriedIntoSolids() {
+        SolidCells solids = FlowOperators.solids(BOX);
+        CarryAround carry = CarryAround.ofCells(BOX, Interpolation.CUBIC, FlowOperators.ONE);
+        Displacement d = new Displacement(BOX);
+        java.util.Arrays.fill(d.x, 1.3f);
+        float[] out = FlowOperators.noise(BOX.cells(), 1, 0.5, 2);
+        carry.forward(FlowOperators.noise(BOX.cells(), 1, 0.5, 1), d, solids, out);
+        float[] bar = FlowOperators.noise(BOX.cells(), 1, 0.5, 3);
+        carry.pullback(out, d, 0, solids, bar, new float[BOX.cells()], new Displacement(BOX));
+        int inside = 0;
+        for (int c = 0; c < BOX.cells(); c++) {
+            if (solids.isSolid(c)) {
+                inside++;
+                assertEquals(0, out[c]);
+                assertEquals(0, bar[c]);
+            }
+        }
+        assertTrue(inside > 20);
     }
 
     /** A source in a solid is shut; smoke that a solid runs over is gone. */

@@ -35,6 +35,8 @@ class MotionTest {
         Curve bend = curve(new double[] {0, 1, 2}, new double[] {0, 1, 3});
         assertEquals(4 / 3.0, bend.slope(1).x(), 1e-14);
         assertEquals(2 - 1 / 12.0, bend.at(1.5).x(), 1e-14);
+        // Spans of 1 and 2 frames, slopes 1 and 2: w = 5/9, 2 / (10/9 + 4/9) = 9/7.
+        assertEquals(9 / 7.0, curve(new double[] {0, 1, 3}, new double[] {0, 1, 5}).slope(1).x(), 1e-14);
     }
 
     /**

@@ -61,7 +61,7 @@ final class CheckCommand implements Callable<Integer> {
         Shot checked = result.shot().orElseThrow();
         FlowSetup flow = checked.flow();
         long need = MemoryNeed.bytes(flow.grid(), flow.frames(), flow.substeps())
-                + MemoryNeed.ofSolids(flow.grid().cells(), !flow.obstacles().isEmpty());
+                + MemoryNeed.ofMore(flow);
         int rendered = checked.views().stream().mapToInt(v -> v.rendered().size()).sum();
         object.put("name", checked.name()).put("cells", flow.grid().cells()).put("firstFrame", flow.frames().first())
                 .put("lastFrame", flow.frames().last())

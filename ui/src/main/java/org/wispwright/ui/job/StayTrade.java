@@ -59,7 +59,7 @@ public record StayTrade(GridShape grid, Side with, Side without) {
 
     private static Side side(Shot shot, SolveProblem problem, Map<Integer, ScalarGrid> original, boolean stay, Lanes lanes, Cancel cancel) {
         // An eighth of the cells: every state of the rung together is less than what the take's own solve kept.
-        long states = SmokeState.bytes(problem.flow().grid()) * (1 + problem.flow().stepsTo(problem.flow().frames().last()));
+        long states = SmokeState.bytes(problem.flow()) * (1 + problem.flow().stepsTo(problem.flow().frames().last()));
         StopRule few = new StopRule(0, Double.POSITIVE_INFINITY, ITERATIONS);
         SolveResult solve = new Solve(problem, List.of(problem.flow().grid()), stay, lanes, cancel::wished).run(states, few, now -> { });
         Map<Integer, ScalarGrid> take = densities(shot, problem.flow(), solve.unknowns(), lanes, cancel);

@@ -57,7 +57,7 @@ final class AirReader {
             return Start.EMPTY;
         }
         JsonPlace place = given.get();
-        place.only("density", "velocityX", "velocityY", "velocityZ");
+        place.only("density", "temperature", "velocityX", "velocityY", "velocityZ");
         boolean moves = place.has("velocityX") || place.has("velocityY") || place.has("velocityZ");
         if (moves) {
             place.need("velocityX");
@@ -70,13 +70,15 @@ final class AirReader {
         GridShape g = grid.get();
         Optional<ScalarGrid> density = place.ask("density").map(p -> new ScalarGrid(g, fromZero(p, volumes.read(p, g.nz(), g.ny(),
                 g.nx()))));
+        Optional<ScalarGrid> temperature = place.ask("temperature")
+                .map(p -> new ScalarGrid(g, volumes.read(p, g.nz(), g.ny(), g.nx())));
         Optional<MacVelocity> velocity = Optional.empty();
         if (moves) {
             velocity = Optional.of(new MacVelocity(g, volumes.read(place.need("velocityX"), g.nz(), g.ny(), g.nx() + 1),
                     volumes.read(place.need("velocityY"), g.nz(), g.ny() + 1, g.nx()),
                     volumes.read(place.need("velocityZ"), g.nz() + 1, g.ny(), g.nx())));
         }
-        return new Start(density, velocity);
+        return new Start(density, temperature, velocity);
     }
 
     private static float[] fromZero(JsonPlace place, float[] density) {

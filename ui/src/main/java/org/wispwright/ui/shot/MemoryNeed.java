@@ -2,6 +2,7 @@ package org.wispwright.ui.shot;
 
 import java.util.Locale;
 import java.util.Optional;
+import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.FrameRange;
 import org.wispwright.render.volume.GridShape;
 
@@ -50,9 +51,21 @@ public final class MemoryNeed {
         return BASE + grid.cells() * STEP;
     }
 
+    /** What a temperature takes beside all that, if there is one: a field in every state, and four at once. */
+    static long ofTemperature(long cells, long steps, boolean any) {
+        return any ? cells * (bytesACell(steps) - STEP + 4 * STATE) / 4 : 0;
+    }
+
     /** What solids take beside all that, if there are any. */
-    public static long ofSolids(long cells, boolean any) {
+    static long ofSolids(long cells, boolean any) {
         return any ? SOLIDS * cells : 0;
+    }
+
+    /** What a shot's solids and temperature take beside all that. */
+    public static long ofMore(FlowSetup flow) {
+        long cells = flow.grid().cells();
+        return ofSolids(cells, !flow.obstacles().isEmpty())
+                + ofTemperature(cells, (long) flow.frames().count() * flow.substeps(), flow.heat().isCarried());
     }
 
     /** Least bytes to hold one picture of so many pixels, draw it and write it: 80 bytes a pixel. */

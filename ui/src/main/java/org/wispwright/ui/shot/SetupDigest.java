@@ -32,6 +32,9 @@ final class SetupDigest {
         SetupDigest digest = new SetupDigest();
         digest.plain(flow);
         flow.obstacles().forEach(digest::obstacle);
+        if (flow.heat().isCarried()) {
+            digest.line("heat", flow.heat().lift(), flow.heat().cooling());
+        }
         digest.wind(flow.wind());
         digest.start(flow.start());
         return sha256(digest.lines.toString().getBytes(StandardCharsets.UTF_8));
@@ -56,6 +59,9 @@ final class SetupDigest {
         if (!source.form().round()) {
             line("source box", half.y(), half.z());
         }
+        if (source.kelvinPerSecond() != 0) {
+            line("source warmth", source.kelvinPerSecond());
+        }
         if (!source.centre().isStill()) {
             curve("source at", source.centre());
         }
@@ -71,6 +77,7 @@ final class SetupDigest {
 
     private void start(Start start) {
         start.density().ifPresent(density -> line("start density", values(density.values())));
+        start.temperature().ifPresent(temperature -> line("start temperature", values(temperature.values())));
         start.velocity().ifPresent(u -> line("start velocity", values(u.x()), values(u.y()), values(u.z())));
     }
 

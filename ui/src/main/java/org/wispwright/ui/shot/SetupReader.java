@@ -9,6 +9,7 @@ import java.util.SortedMap;
 import java.util.TreeMap;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.FrameRange;
+import org.wispwright.optimize.flow.Heat;
 import org.wispwright.optimize.flow.Interpolation;
 import org.wispwright.optimize.flow.Side;
 import org.wispwright.optimize.flow.Sides;
@@ -62,13 +63,14 @@ final class SetupReader {
                 "background", "views"));
         Optional<String> name = findings.attempt(() -> top.need("name").text(200));
         Optional<FrameRange> frames = findings.attempt(() -> frames(top.need("frames")));
-        Optional<GridShape> grid = findings.attempt(() -> grid(top.need("grid"), steps(top, frames), top.has("obstacles")));
+        Optional<GridShape> grid = findings.attempt(() -> grid(top, steps(top, frames)));
         List<Source> sources = new SourceReader(findings, frames).read(top);
         VolumeReader volumes = new VolumeReader(folder, memoryBytes);
         List<Obstacle> obstacles = new ObstacleReader(findings, volumes).read(top);
         Optional<Start> start = findings.attempt(() -> AirReader.start(top.ask("start"), grid, volumes));
         Optional<FlowSetup> flow = findings.attempt(() -> flow(top.ask("flow"), top, grid, frames, sources)).flatMap(f -> f)
-                .map(f -> f.withObstacles(obstacles).withStart(start.orElse(Start.EMPTY)));
+                .map(f -> f.withObstacles(obstacles))
+                .flatMap(f -> findings.attempt(() -> top.at("start").make(() -> f.withStart(start.orElse(Start.EMPTY)))));
         Optional<Look> look = findings.attempt(() -> look(top.need("look")));
         Optional<Rgb> background = findings.attempt(() -> top.ask("background").map(SetupReader::rgb).orElse(Rgb.BLACK));
         List<ShotView> views = views(top, frames);
@@ -85,13 +87,16 @@ final class SetupReader {
         return frames.map(f -> (long) f.count() * substeps).orElse(1L);
     }
 
-    private GridShape grid(JsonPlace place, long steps, boolean solids) {
+    private GridShape grid(JsonPlace top, long steps) {
+        JsonPlace place = top.need("grid");
         place.only("cells", "cellMetres", "originMetres");
         int[] cells = place.need("cells").items(3, 3).stream().mapToInt(c -> c.whole(1, MOST_CELLS_A_SIDE)).toArray();
         double cellMetres = place.need("cellMetres").positive(FAR);
         Vec3 origin = place.ask("originMetres").map(SetupReader::vec3).orElse(new Vec3(0, 0, 0));
-        MemoryNeed.require(place.need("cells"), cells, cellMetres, steps,
-                memoryBytes - MemoryNeed.ofSolids((long) cells[0] * cells[1] * cells[2], solids));
+        long count = (long) cells[0] * cells[1] * cells[2];
+        boolean warm = new Findings().attempt(() -> top.need("flow").has("lift")).orElse(false);
+        long more = MemoryNeed.ofSolids(count, top.has("obstacles")) + MemoryNeed.ofTemperature(count, steps, warm);
+        MemoryNeed.require(place.need("cells"), cells, cellMetres, steps, memoryBytes - more);
         return place.make(() -> new GridShape(cells[0], cells[1], cells[2], cellMetres, origin.x(), origin.y(), origin.z()));
     }
 
@@ -106,7 +111,7 @@ final class SetupReader {
     private Optional<FlowSetup> flow(Optional<JsonPlace> given, JsonPlace top, Optional<GridShape> grid, Optional<FrameRange> frames,
             List<Source> sources) {
         given.ifPresent(p -> p.only("substeps", "velocityInterpolation", "densityInterpolation", "sides", "buoyancy", "dissipation",
-                "wind"));
+                "lift", "cooling", "wind"));
         int substeps = given.flatMap(p -> p.ask("substeps")).map(p -> p.whole(1, MOST_SUBSTEPS)).orElse(1);
         Interpolation velocity = given.flatMap(p -> p.ask("velocityInterpolation")).map(p -> p.choice(Interpolation.class))
                 .orElse(Interpolation.LINEAR);
@@ -115,13 +120,17 @@ final class SetupReader {
         Sides sides = given.flatMap(p -> p.ask("sides")).map(SetupReader::sides).orElse(Sides.CLOSED);
         double buoyancy = given.flatMap(p -> p.ask("buoyancy")).map(p -> p.number(-1000, 1000)).orElse(0.0);
         double dissipation = given.flatMap(p -> p.ask("dissipation")).map(p -> p.number(0, 1000)).orElse(0.0);
+        double lift = given.flatMap(p -> p.ask("lift")).map(p -> p.number(-1000, 1000)).orElse(0.0);
+        double cooling = given.flatMap(p -> p.ask("cooling")).map(p -> p.number(0, 1000)).orElse(0.0);
         Wind wind = given.flatMap(p -> p.ask("wind")).map(AirReader::wind).orElse(Wind.NONE);
         if (grid.isEmpty() || frames.isEmpty()) {
             return Optional.empty();
         }
         JsonPlace place = given.orElse(top);
-        return Optional.of(place.make(() -> new FlowSetup(grid.get(), frames.get(), substeps, velocity, density, sides, buoyancy,
-                dissipation, sources).withWind(wind)));
+        // The sources come last: whether they may give warmth is for the whole to say.
+        FlowSetup plain = place.make(() -> new FlowSetup(grid.get(), frames.get(), substeps, velocity, density, sides, buoyancy, dissipation,
+                List.of()));
+        return Optional.of(place.make(() -> plain.withHeat(new Heat(lift, cooling)).withWind(wind).withSources(sources)));
     }
 
     private static Sides sides(JsonPlace place) {

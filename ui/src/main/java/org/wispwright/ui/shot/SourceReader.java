@@ -40,7 +40,8 @@ final class SourceReader {
     }
 
     private Source source(JsonPlace place) {
-        place.only("name", "centreMetres", "keys", "radiusMetres", "boxMetres", "edgeMetres", "ratePerSecond", "frames");
+        place.only("name", "centreMetres", "keys", "radiusMetres", "boxMetres", "edgeMetres", "ratePerSecond", "kelvinPerSecond",
+                "frames");
         String name = place.need("name").text(100);
         if (place.has("radiusMetres") && place.has("boxMetres")) {
             throw place.fault("both 'radiusMetres' and 'boxMetres'", "a ball or a box", "remove one of them");
@@ -56,9 +57,10 @@ final class SourceReader {
         double least = Math.min(form.half().x(), Math.min(form.half().y(), form.half().z()));
         double edge = place.ask("edgeMetres").map(p -> p.number(0, least)).orElse(least / 2);
         double rate = place.need("ratePerSecond").number(0, 1e6);
+        double kelvin = place.ask("kelvinPerSecond").map(p -> p.number(-1e5, 1e5)).orElse(0.0);
         int[] frames = place.ask("frames").map(SetupReader::span)
                 .orElseGet(() -> range.map(r -> new int[] {r.first(), r.last()}).orElse(new int[] {0, 0}));
-        return place.make(() -> new Source(name, form, centre, edge, rate, frames[0], frames[1]));
+        return place.make(() -> new Source(name, form, centre, edge, rate, kelvin, frames[0], frames[1]));
     }
 
     private static Curve centre(JsonPlace place) {

@@ -25,6 +25,9 @@ final class TakeVolumes {
         GridShape g = state.density().shape();
         MacVelocity u = state.velocity();
         NpyFile.write(take.resolve(file("density", frame)), state.density());
+        if (state.temperature() != null) {
+            NpyFile.write(take.resolve(file("temperature", frame)), state.temperature());
+        }
         NpyFile.write(take.resolve(file("velocity-x", frame)), new int[] {g.nz(), g.ny(), g.nx() + 1}, u.x());
         NpyFile.write(take.resolve(file("velocity-y", frame)), new int[] {g.nz(), g.ny() + 1, g.nx()}, u.y());
         NpyFile.write(take.resolve(file("velocity-z", frame)), new int[] {g.nz() + 1, g.ny(), g.nx()}, u.z());

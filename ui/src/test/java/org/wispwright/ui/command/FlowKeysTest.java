@@ -174,7 +174,8 @@ class FlowKeysTest {
         "{'density': 'start/small.npy'}                                      | /start/density | (nz, ny, nx) = [8, 16, 8]",
         "{'density': 'start/below.npy'}                                      | /start/density | values from 0",
         "{'velocityX': 'start/small.npy'}                                    | /start | no 'velocityY'",
-        "{'heat': 'start/small.npy'}                                         | /start/heat | unknown key"})
+        "{'heat': 'start/small.npy'}                                         | /start/heat | unknown key",
+        "{'temperature': 'start/below.npy'}                                  | /start | needs a lift"})
     void startsThatAreRefused(String start, String pointer, String phrase) throws IOException {
         volume("start/small.npy", new int[] {4, 8, 4}, 1);
         volume("start/below.npy", new int[] {8, 16, 8}, -1);
@@ -192,5 +193,29 @@ class FlowKeysTest {
     void sourcesThatAreRefused(String what, String pointer, String phrase) {
         shot.swap("shot.json", "\"centreMetres\": [1, 0.6, 1], \"radiusMetres\": 0.5, \"edgeMetres\": 0.25", what.replace('\'', '"'));
         refused("shot.json at " + pointer, phrase);
+    }
+
+    @Test void warmthCounts() throws IOException {
+        String first = digest();
+        shot.swap("shot.json", "\"buoyancy\": 3.0,", "\"buoyancy\": 3.0, \"lift\": 0.03, \"cooling\": 0.5,");
+        assertEquals(0.03, flow().heat().lift());
+        assertNotEquals(first, digest());
+        String lifted = digest();
+        shot.swap("shot.json", "\"ratePerSecond\": 6", "\"ratePerSecond\": 6, \"kelvinPerSecond\": 200");
+        assertEquals(200, flow().sources().get(0).kelvinPerSecond());
+        assertNotEquals(lifted, digest());
+        Run run = Run.of("simulate", shot.folder().toString());
+        assertEquals(0, run.code(), run.err());
+        assertEquals(3, NpyFile.read(shot.folder().resolve("takes/000/temperature.1006.npy")).shape().length);
+    }
+
+    @Test void warmthWithoutALift() {
+        shot.swap("shot.json", "\"ratePerSecond\": 6", "\"ratePerSecond\": 6, \"kelvinPerSecond\": 200");
+        refused("shot.json at /flow", "needs a lift");
+    }
+
+    @Test void coolingBelowZero() {
+        shot.swap("shot.json", "\"buoyancy\": 3.0,", "\"buoyancy\": 3.0, \"lift\": 0.03, \"cooling\": -0.5,");
+        refused("shot.json at /flow/cooling", "found -0.5");
     }
 }
