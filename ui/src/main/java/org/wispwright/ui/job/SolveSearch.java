@@ -77,7 +77,8 @@ final class SolveSearch implements AutoCloseable {
     SolveResult run(Lanes lanes, Cancel cancel) {
         try {
             FlowSetup flow = problem.flow();
-            long forStates = MemoryNeed.forStates(flow.grid(), flow.frames(), flow.substeps(), manner.memoryBytes());
+            long forStates = MemoryNeed.forStates(flow.grid(), flow.frames(), flow.substeps(),
+                    manner.memoryBytes() - MemoryNeed.ofMore(flow));
             return new Solve(problem, manner.quality().rungs(flow.grid()), manner.stay(), lanes, cancel::wished)
                     .run(forStates, manner.until(), this::tell, digest, from, this::record);
         } catch (SolveCancelled asked) {
