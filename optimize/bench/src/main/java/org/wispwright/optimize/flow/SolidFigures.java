@@ -31,11 +31,13 @@ public final class SolidFigures {
         int n = Integer.parseInt(args[0]);
         GridShape box = new GridShape(n, n, n, 4.0 / n);
         Lanes lanes = new Lanes(1);
-        System.out.println("scene | iterations: first step, grown, back | step, ns a cell | back, ns a cell | back / step | left |div u| h / |u|");
+        System.out.println("scene | iterations: first step, grown, back | step, ns a cell | back, ns a cell | back / step"
+                + " | left |div u| h / |u|");
         scenes().forEach((name, things) -> row(name, flow(box, things), lanes));
     }
 
-    private static Map<String, List<Obstacle>> scenes() {
+    /** What stands in the box, by name; nothing first. */
+    public static Map<String, List<Obstacle>> scenes() {
         Vec3 over = new Vec3(2, 1.6, 2);
         Map<String, List<Obstacle>> scenes = new LinkedHashMap<>();
         scenes.put("nothing", List.of());
@@ -52,7 +54,8 @@ public final class SolidFigures {
         return new Obstacle("thing", solid, Curve.still(at), Curve.still(rotation));
     }
 
-    private static FlowSetup flow(GridShape box, List<Obstacle> things) {
+    /** A plume in a box of 4 m with these things. */
+    public static FlowSetup flow(GridShape box, List<Obstacle> things) {
         Sides sides = new Sides(Side.OPEN, Side.OPEN, Side.WALL, Side.OPEN, Side.OPEN, Side.OPEN);
         return new FlowSetup(box, new FrameRange(1001, 1041, 24), 1, Interpolation.LINEAR, Interpolation.LINEAR, sides, 8, 0.1,
                 List.of(new Source("pot", 2, 0.5, 2, 0.5, 0.3, 6, 1001, 1041))).withObstacles(things);
