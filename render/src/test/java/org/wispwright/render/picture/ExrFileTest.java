@@ -24,7 +24,7 @@ import org.junit.jupiter.params.provider.EnumSource;
 
 /** EXR files against the printed sample of their layout's description and IEEE 754-2008 binary16; and what must be refused. */
 class ExrFileTest {
-    /** "OpenEXR File Layout", the sample file: 4 x 3 pixels, G half and Z float, no compression; 415 bytes. */
+    /** U60: "OpenEXR File Layout", the sample file: 4 x 3 pixels, G half and Z float, no compression; 415 bytes. */
     private static final String SAMPLE =
             "762f3101020000006368616e6e656c730063686c69737400250000004700010000000000000001000000010000005a0002000000"
             + "00000000010000000100000000636f6d7072657373696f6e00636f6d7072657373696f6e000100000000646174615769"
@@ -54,7 +54,7 @@ class ExrFileTest {
         assertRefused(file(bytes), "has the channels G, Z, needs R, G and B");
     }
 
-    /** IEEE 754-2008: value, bits, value back; the way back is the decoder's, which is not ours. */
+    /** R40 to R46, IEEE 754-2008: value, bits, value back; the way back is the decoder's, which is not ours. */
     @ParameterizedTest
     @CsvSource({"0, 0000, 0", "-0.0, 8000, -0.0", "1, 3C00, 1", "-2, C000, -2", "0.5, 3800, 0.5", "0.1, 2E66, 0.0999755859375",
         "0.18, 31C3, 0.1800537109375", "0.33333334, 3555, 0.333251953125", "0.2126, 32CE, 0.212646484375", "1.001, 3C01, 1.0009765625",
@@ -77,7 +77,7 @@ class ExrFileTest {
         assertEquals(0x7E00, HalfFloat.bits(Float.NaN) & 0x7E00);
     }
 
-    /** First bytes, required attributes, alphabetical channels, blocks of 16 rows: from the layout's description. */
+    /** U56 to U59: first bytes, required attributes, alphabetical channels, blocks of 16 rows: from the layout's description. */
     @Test
     void whatIsWrittenIsLaidOutAsDescribed() throws IOException {
         Picture picture = noise(5, 35);
@@ -179,7 +179,7 @@ class ExrFileTest {
         assertFalse(Files.exists(place.resolve("nan.exr")));
     }
 
-    /** Rec.2020's red instead of Rec.709's, Rec. ITU-R BT.2020: 0.708, 0.292. */
+    /** U61: colours are Rec.709's unless the file says otherwise. Rec.2020's red instead of Rec.709's, Rec. ITU-R BT.2020: 0.708, 0.292. */
     @Test
     void otherPrimariesAreRefused() throws IOException {
         byte[] bytes = written(noise(4, 3));
