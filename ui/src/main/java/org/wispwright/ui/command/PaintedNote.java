@@ -70,7 +70,7 @@ final class PaintedNote {
             case BOTH -> "Smoke was moved, and added or removed";
         };
         double change = painted.massBefore() > 0 ? 100 * (painted.massAfter() / painted.massBefore() - 1) : 0;
-        return String.format(Locale.ROOT, "%s on %.1f %% of the frame; mean opacity %.4f to %.4f (%+.1f %%); confidence %.2f%s.", what,
+        return String.format(Locale.ROOT, "%s on %.1f %% of the frame; mass %.4f to %.4f (%+.1f %%); confidence %.2f%s.", what,
                 100 * painted.share(), painted.massBefore(), painted.massAfter(), change, painted.confidence(),
                 painted.confidence() < SURE ? ", which is low: look at the wanted picture ('compare') before a solve" : "");
     }

@@ -116,7 +116,7 @@ final class RetouchCommand implements Callable<Integer> {
                 .put("height", wanted.height()).put("massBefore", result.massBefore()).put("massAfter", result.massAfter());
         String change = result.massBefore() > 0
                 ? String.format(Locale.ROOT, " (%+.1f %%)", 100 * (result.massAfter() / result.massBefore() - 1)) : "";
-        manner.say(String.format(Locale.ROOT, "Wrote %s (%dx%d pixels). Opacity in all: %.1f pixels before, %.1f after%s.", out,
+        manner.say(String.format(Locale.ROOT, "Wrote %s (%dx%d pixels). Mass %.4f before, %.4f after%s.", out,
                 wanted.width(), wanted.height(), result.massBefore(), result.massAfter(), change), object);
     }
 

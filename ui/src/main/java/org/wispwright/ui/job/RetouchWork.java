@@ -7,6 +7,7 @@ import org.wispwright.render.picture.Picture;
 import org.wispwright.render.picture.PngFile;
 import org.wispwright.ui.shot.Finding;
 import org.wispwright.ui.shot.ShotException;
+import org.wispwright.warp.loss.PictureMeasure;
 import org.wispwright.warp.retouch.Retouch;
 import org.wispwright.warp.retouch.Retoucher;
 
@@ -19,7 +20,7 @@ public final class RetouchWork {
      * What came out.
      *
      * @param wanted the wanted picture
-     * @param massBefore sum of opacity over all pixels of the picture, in pixels
+     * @param massBefore opacity summed over the picture, in squared heights ({@link PictureMeasure#mass})
      * @param massAfter the same of the wanted picture
      */
     public record Result(Picture wanted, double massBefore, double massAfter) {
@@ -28,7 +29,7 @@ public final class RetouchWork {
     /** The wanted picture of a picture; that stays as it is. */
     public static Result of(Retouch retouch, Picture original) {
         Picture wanted = Retoucher.wanted(retouch, original);
-        return new Result(wanted, mass(original), mass(wanted));
+        return new Result(wanted, PictureMeasure.mass(original), PictureMeasure.mass(wanted));
     }
 
     /**
@@ -46,14 +47,5 @@ public final class RetouchWork {
             throw new ShotException(new Finding(file.toString(), "", "the picture " + reason + (reason.contains(";") ? "."
                     : "; give another or write it again.")), broken);
         }
-    }
-
-    /** Sum of opacity over all pixels. */
-    private static double mass(Picture picture) {
-        double sum = 0;
-        for (int n = 3; n < picture.rgba().length; n += 4) {
-            sum += picture.rgba()[n];
-        }
-        return sum;
     }
 }

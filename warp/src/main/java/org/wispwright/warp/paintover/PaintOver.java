@@ -4,6 +4,7 @@ import java.util.List;
 import org.wispwright.render.picture.Luminance;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.picture.Srgb;
+import org.wispwright.warp.loss.PictureMeasure;
 import org.wispwright.warp.resample.Resized;
 import org.wispwright.warp.retouch.Repaint;
 import org.wispwright.warp.retouch.Retouch;
@@ -125,7 +126,6 @@ public final class PaintOver {
                 from[p] = there.rgba()[4 * p + 3];
             }
         }
-        double before = 0;
         double after = 0;
         double share = 0;
         boolean changes = false;
@@ -133,13 +133,13 @@ public final class PaintOver {
             float change = layers[Repaint.LAYERS * p + 3] > 0 ? wanted[p] - from[p] : 0;
             layers[Repaint.LAYERS * p] = Math.abs(change) < LEAST ? 0 : Math.min(1f, Math.max(-1f, change));
             changes |= Math.abs(change) >= LEAST;
-            before += own.rgba()[4 * p + 3] / (double) pixels;
-            after += (layers[Repaint.LAYERS * p + 3] > 0 ? wanted[p] : own.rgba()[4 * p + 3]) / (double) pixels;
+            after += (layers[Repaint.LAYERS * p + 3] > 0 ? wanted[p] : own.rgba()[4 * p + 3]) / ((double) own.height() * own.height());
             share += mask[p] / (double) pixels;
         }
         Painted.Way way = !anyMove && !changes ? Painted.Way.NOTHING : !anyMove ? Painted.Way.OPACITY
                 : moved.movedRegions() == moved.regions() ? Painted.Way.MOVED : Painted.Way.BOTH;
-        return new Painted(new Repaint(own.width(), own.height(), layers), way, share, before, after, confidence, noise);
+        return new Painted(new Repaint(own.width(), own.height(), layers), way, share, PictureMeasure.mass(own), after,
+                confidence, noise);
     }
 
     /** Share of the squared difference between the frames, where masked, that our model of the painted frame accounts for: 0 to 1. */

@@ -1,6 +1,7 @@
 package org.wispwright.warp.paintover;
 
 import org.wispwright.render.picture.Picture;
+import org.wispwright.warp.loss.PictureMeasure;
 import org.wispwright.warp.matte.Needs;
 import org.wispwright.warp.retouch.Repaint;
 
@@ -10,7 +11,7 @@ import org.wispwright.warp.retouch.Repaint;
  * @param repaint    the same as an operation on our own picture; {@link Repaint#layers} has the opacity change, the displacement, the mask
  * @param way        how the change was explained
  * @param share      how much of the frame changed: the mask's mean, 0 to 1
- * @param massBefore our original's mean opacity over the frame
+ * @param massBefore mass of our original, in squared heights ({@link PictureMeasure#mass})
  * @param massAfter  the wanted picture's
  * @param confidence 0 to 1: the share of our opacity's variance that the unpainted frame's colours explain, times the share of the
  *                   squared difference between the frames that the model of the painted one accounts for. Near 1: the frame shows our
@@ -44,13 +45,8 @@ public record Painted(Repaint repaint, Way way, double share, double massBefore,
     }
 
     static Painted nothing(Picture original, double noise) {
-        double mass = 0;
-        int pixels = original.width() * original.height();
-        for (int p = 0; p < pixels; p++) {
-            mass += original.rgba()[4 * p + 3] / (double) pixels;
-        }
-        return new Painted(new Repaint(original.width(), original.height(), new float[Repaint.LAYERS * pixels]), Way.NOTHING, 0, mass,
-                mass, 0,
-                noise);
+        double mass = PictureMeasure.mass(original);
+        Repaint none = new Repaint(original.width(), original.height(), new float[Repaint.LAYERS * original.width() * original.height()]);
+        return new Painted(none, Way.NOTHING, 0, mass, mass, 0, noise);
     }
 }
