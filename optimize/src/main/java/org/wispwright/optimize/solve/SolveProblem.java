@@ -6,6 +6,8 @@ import org.wispwright.render.march.Look;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.view.View;
 import org.wispwright.render.volume.GridShape;
+import org.wispwright.warp.loss.LossKind;
+import org.wispwright.warp.loss.PictureLoss;
 
 /**
  * What is wished of a shot.
@@ -14,7 +16,7 @@ import org.wispwright.render.volume.GridShape;
  * @param views the cameras that notes and holds speak of
  * @param look  how density shows
  * @param notes at least one
- * @param holds regions of pictures that must stay as in the original
+ * @param holds what must stay as in the original
  */
 public record SolveProblem(FlowSetup flow, List<View> views, Look look, List<Note> notes, List<Hold> holds) {
 
@@ -40,15 +42,64 @@ public record SolveProblem(FlowSetup flow, List<View> views, Look look, List<Not
     }
 
     /**
-     * A region that must stay as in the original.
+     * What must stay as in the original: a part of a view's pictures, or all of it, over spans of frames. Any view may be held,
+     * whether or not a note was drawn in it.
      *
-     * @param id         for messages
-     * @param view       index in the problem's views
-     * @param firstFrame first frame held
-     * @param lastFrame  last frame held, not before the first
-     * @param weights    1 in the region, 0 elsewhere, feathered
+     * @param id      for messages
+     * @param view    index in the problem's views
+     * @param spans   at least one
+     * @param held    what of the picture stays
+     * @param weight  above 0; 1 is usual
+     * @param weights 1 in the region, 0 elsewhere, feathered
      */
-    public record Hold(String id, int view, int firstFrame, int lastFrame, PixelWeights weights) {
+    public record Hold(String id, int view, List<Span> spans, Held held, double weight, PixelWeights weights) {
+        /** Copies the list and checks the weight. @throws IllegalArgumentException naming the hold */
+        public Hold {
+            spans = List.copyOf(spans);
+            if (spans.isEmpty() || !(weight > 0) || Double.isInfinite(weight)) {
+                throw new IllegalArgumentException("hold '" + id + "': got " + spans.size() + " spans of frames and a weight of " + weight
+                        + ", needs at least one and a finite number above 0");
+            }
+        }
+    }
+
+    /**
+     * Frames one after the other.
+     *
+     * @param first first frame
+     * @param last  last frame, not before the first
+     */
+    public record Span(int first, int last) {
+        /** Checks the order. @throws IllegalArgumentException if the last comes before the first */
+        public Span {
+            if (last < first) {
+                throw new IllegalArgumentException("hold: got frames " + first + " to " + last + ", needs the last not before the first");
+            }
+        }
+
+        /** True if the frame is in it. */
+        public boolean contains(int frame) {
+            return frame >= first && frame <= last;
+        }
+    }
+
+    /** What of a picture a hold keeps, and the loss by which it is kept against the original's picture. */
+    public enum Held {
+        /** Colour and opacity at all scales: {@link LossKind#PYRAMID}. */
+        PICTURE(LossKind.PYRAMID),
+        /** The outline alone, whatever happens inside it: {@link LossKind#SILHOUETTE}. */
+        SILHOUETTE(LossKind.SILHOUETTE);
+
+        private final LossKind kind;
+
+        Held(LossKind kind) {
+            this.kind = kind;
+        }
+
+        /** How far a picture is from the held one. */
+        PictureLoss loss(Picture held, float[] weights) {
+            return kind.of(held, held, weights);
+        }
     }
 
     /** Weights of an original picture's pixels, at any raster. */
@@ -76,9 +127,8 @@ public record SolveProblem(FlowSetup flow, List<View> views, Look look, List<Not
             }
         }
         for (Hold hold : holds) {
-            if (hold.view() < 0 || hold.view() >= views.size() || hold.lastFrame() < hold.firstFrame()) {
-                throw new IllegalArgumentException("hold '" + hold.id() + "': got view " + hold.view() + ", frames " + hold.firstFrame() + " to "
-                        + hold.lastFrame() + "; needs one of " + views.size() + " views and the last frame not before the first");
+            if (hold.view() < 0 || hold.view() >= views.size()) {
+                throw new IllegalArgumentException("hold '" + hold.id() + "': got view " + hold.view() + ", there are " + views.size());
             }
         }
     }
@@ -92,7 +142,9 @@ public record SolveProblem(FlowSetup flow, List<View> views, Look look, List<Not
     int lastFrame() {
         int last = notes.stream().mapToInt(Note::frame).max().orElseThrow();
         for (Hold hold : holds) {
-            last = Math.max(last, Math.min(hold.lastFrame(), flow.frames().last()));
+            for (Span span : hold.spans()) {
+                last = Math.max(last, Math.min(span.last(), flow.frames().last()));
+            }
         }
         return last;
     }

@@ -23,13 +23,17 @@ import org.wispwright.warp.loss.PyramidLoss;
  * {@code weight share / (its value for the original)}. Met is by the pyramid loss whatever the note is solved with; where that is not
  * among its losses its term has the factor 0. Holds and the
  * stay term start at 0, so they are measured in R, the mean of the notes' pyramid
- * losses for the original: a hold weighs {@value #HOLD_WEIGHT}/R,
- * shared by the frames it is looked at (noted frames, and every third); the stay term {@value #STAY_WEIGHT}/R on every third frame
+ * losses for the original: a hold of weight w weighs {@value #HOLD_WEIGHT} w/R,
+ * shared by the frames it is looked at (noted frames, and every third); one of the silhouette is measured in S instead, the mean of
+ * the notes' silhouette losses for the original, {@value #LEAST_OUTLINE} at the least, for a note may leave outlines alone; the stay term {@value #STAY_WEIGHT}/R on every third frame
  * without a note, in each view that has one, falling to 0 within a third of the range of a noted frame. Frames after the last that anything
  * is wished of are left to themselves: no force acts there, and to pull them back would fight the note.
  */
 final class TermPlan {
-    static final double HOLD_WEIGHT = 1;
+    /** Measured: at 1 a held view keeps a fifth of its change (root of squares), at 2 less, at 4 and above notes begin to pay. */
+    static final double HOLD_WEIGHT = 2;
+    /** A loss of so much overlap counts for a held silhouette at least as much as a note, however little the notes change outlines. */
+    static final double LEAST_OUTLINE = 0.02;
     static final double STAY_WEIGHT = 0.02;
     static final int EVERY = 3;
 
@@ -68,7 +72,7 @@ final class TermPlan {
         startLoss = addNotes();
         double reference = notes.stream().mapToDouble(note -> note.met.start).average().orElseThrow();
         for (SolveProblem.Hold hold : problem.holds()) {
-            addHold(hold, reference);
+            addHold(hold, hold.held() == SolveProblem.Held.SILHOUETTE ? Math.max(LEAST_OUTLINE, outlines()) : reference);
         }
         addStay(reference);
     }
@@ -115,8 +119,19 @@ final class TermPlan {
         for (int frame : frames) {
             Picture original = originals.get(key(frame, hold.view()));
             float[] weights = hold.weights().at(original);
-            terms.add(frame, hold.view(), new PyramidLoss(original, weights), HOLD_WEIGHT / (reference * frames.size()));
+            terms.add(frame, hold.view(), hold.held().loss(original, weights), HOLD_WEIGHT * hold.weight() / (reference * frames.size()));
         }
+    }
+
+    /** Mean of the notes' silhouette losses for the original: how far they change outlines. */
+    private double outlines() {
+        double sum = 0;
+        for (SolveProblem.Note note : problem.notes()) {
+            Picture original = originals.get(key(note.frame(), note.view()));
+            Picture wanted = note.wish().wanted(original);
+            sum += LossKind.SILHOUETTE.of(original, wanted, note.wish().weights(original)).value(original);
+        }
+        return sum / problem.notes().size();
     }
 
     private void addStay(double reference) {
@@ -156,17 +171,23 @@ final class TermPlan {
     }
 
     private List<Integer> framesOf(SolveProblem.Hold hold) {
+        TreeSet<Integer> frames = new TreeSet<>();
+        hold.spans().forEach(span -> frames.addAll(framesOf(span)));
+        return List.copyOf(frames);
+    }
+
+    private List<Integer> framesOf(SolveProblem.Span span) {
         FrameRange range = problem.flow().frames();
         List<Integer> frames = new ArrayList<>();
-        for (int frame = Math.max(hold.firstFrame(), range.first() + 1); frame <= Math.min(hold.lastFrame(), range.last()); frame++) {
+        for (int frame = Math.max(span.first(), range.first() + 1); frame <= Math.min(span.last(), range.last()); frame++) {
             int at = frame;
             boolean noted = problem.notes().stream().anyMatch(note -> note.frame() == at);
             if (noted || (frame - range.first()) % EVERY == 0) {
                 frames.add(frame);
             }
         }
-        if (frames.isEmpty() && hold.lastFrame() > range.first()) {
-            frames.add(Math.min(hold.lastFrame(), range.last()));              // a hold of a frame or two between those looked at
+        if (frames.isEmpty() && span.last() > range.first()) {
+            frames.add(Math.min(span.last(), range.last()));                   // a span of a frame or two between those looked at
         }
         return frames;
     }

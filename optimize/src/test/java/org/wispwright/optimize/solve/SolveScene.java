@@ -72,7 +72,7 @@ final class SolveScene {
     static SolveProblem problem(int n, int lastFrame, int substeps, boolean light) {
         return new SolveProblem(flow(n, lastFrame, substeps, Interpolation.LINEAR), List.of(FRONT, SIDE), look(light),
                 List.of(new SolveProblem.Note("lean", lastFrame - 2, 0, 1, lean(0.25))),
-                List.of(new SolveProblem.Hold("foot", 0, 1001, lastFrame, original -> {
+                List.of(new SolveProblem.Hold("foot", 0, List.of(new SolveProblem.Span(1001, lastFrame)), SolveProblem.Held.PICTURE, 1, original -> {
                     int w = original.width();
                     int h = original.height();
                     float[] weights = new float[w * h];

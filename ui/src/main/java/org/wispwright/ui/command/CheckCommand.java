@@ -62,11 +62,12 @@ final class CheckCommand implements Callable<Integer> {
         FlowSetup flow = checked.flow();
         long need = MemoryNeed.bytes(flow.grid(), flow.frames(), flow.substeps())
                 + MemoryNeed.ofMore(flow);
+        int holds = checked.holds().size() + checked.notes().stream().mapToInt(note -> note.holds().size()).sum();
         int rendered = checked.views().stream().mapToInt(v -> v.rendered().size()).sum();
         object.put("name", checked.name()).put("cells", flow.grid().cells()).put("firstFrame", flow.frames().first())
                 .put("lastFrame", flow.frames().last())
                 .put("views", checked.views().size()).put("notes", checked.notes().size() + checked.off().size())
-                        .put("notesOff", checked.off().size()).put("renderedFrames", rendered)
+                        .put("notesOff", checked.off().size()).put("holds", holds).put("renderedFrames", rendered)
                         .put("leastMemoryBytes", need);
         ArrayNode folding = object.putArray("foldingNotes");
         StringBuilder folds = new StringBuilder();
@@ -81,7 +82,7 @@ final class CheckCommand implements Callable<Integer> {
         manner.say("'" + checked.name() + "' is in order: " + flow.grid().inWords() + ", frames " + flow.frames().first() + " to "
                 + flow.frames().last()
                 + ", views " + checked.views().size() + ", notes " + (checked.notes().size() + checked.off().size())
-                + (checked.off().isEmpty() ? "" : " (" + checked.off().size() + " off)") + ", rendered frames " + rendered
+                + (checked.off().isEmpty() ? "" : " (" + checked.off().size() + " off)") + ", holds " + holds + ", rendered frames " + rendered
                 + "; a solve takes at least " + MemoryNeed.inWords(need) + "." + folds, object);
         return ExitCodes.OK;
     }

@@ -76,7 +76,7 @@ public final class CarryWork {
                 try {
                     retouch = retouch.moved(map);
                     weighBy = weighBy.map(matte -> matte.moved(map));
-                    holds = holds.stream().map(hold -> new Hold(hold.matte().moved(map), hold.firstFrame(), hold.lastFrame())).toList();
+                    holds = holds.stream().map(hold -> follows(hold, note) ? hold.in(hold.region().map(m -> m.moved(map))) : hold).toList();
                 } catch (IllegalArgumentException refused) {
                     throw new ShotException(new Finding("notes/" + note.id() + ".json", "/retouch", "carried to frame " + to + ", "
                             + refused.getMessage() + "; carry it to frames nearer to " + note.frame() + ", or do not let it follow."),
@@ -128,8 +128,7 @@ public final class CarryWork {
             try {
                 List<Hold> holds = new ArrayList<>();
                 for (int n = 0; n < ownA.size(); n++) {
-                    Matte matte = Between.matte("hold " + (n + 1), ownA.get(n).matte(), ownB.get(n).matte(), share);
-                    holds.add(new Hold(matte, frame, frame));
+                    holds.add(between("hold " + (n + 1), ownA.get(n), ownB.get(n), share).at(frame));
                 }
                 Optional<Matte> weighBy = a.weighBy().map(matte -> Between.matte("'weighBy'", matte, b.weighBy().orElseThrow(), share));
                 notes.add(with(a, prefix, frame, weighBy, Between.retouch(a.retouch(), b.retouch(), share), holds,
@@ -149,11 +148,24 @@ public final class CarryWork {
 
     /** Holds of the note's frame alone. */
     private static List<Hold> own(Note note) {
-        return note.holds().stream().filter(hold -> hold.firstFrame() == note.frame() && hold.lastFrame() == note.frame()).toList();
+        return note.holds().stream().filter(hold -> hold.isOf(note.frame())).toList();
+    }
+
+    /** A hold's region moves with the smoke of its note's view; what is held in another view stays where it is there. */
+    private static boolean follows(Hold hold, Note note) {
+        return hold.view().map(note.view()::equals).orElse(true);
+    }
+
+    private static Hold between(String name, Hold a, Hold b, double share) {
+        if (a.held() != b.held() || !a.view().equals(b.view()) || a.region().isPresent() != b.region().isPresent()) {
+            throw new IllegalArgumentException(name + " of the one and of the other do not hold the same thing of the same view");
+        }
+        Optional<Matte> region = a.region().map(matte -> Between.matte(name, matte, b.region().orElseThrow(), share));
+        return new Hold(region, a.view(), a.spans(), a.held(), a.weight() + share * (b.weight() - a.weight()));
     }
 
     private static List<Hold> at(List<Hold> holds, int frame) {
-        return holds.stream().map(hold -> new Hold(hold.matte(), frame, frame)).toList();
+        return holds.stream().map(hold -> hold.at(frame)).toList();
     }
 
     /** The smoke's motion from frame to frame, in one view. */

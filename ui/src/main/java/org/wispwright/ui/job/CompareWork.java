@@ -97,8 +97,8 @@ public final class CompareWork {
         double fall = fall(note, choice, original, wanted, weights, got);
         double change = 0;
         for (Hold hold : note.holds()) {
-            if (hold.holds(note.frame())) {
-                change = Math.max(change, meanChange(got, original, hold.matte().values(original)));
+            if (hold.isIn(note.view(), note.frame())) {
+                change = Math.max(change, meanChange(got, original, hold.values(original)));
             }
         }
         return new Comparison.OfNote(note, original, shown, wanted, got, met, finest, change,
@@ -122,7 +122,8 @@ public final class CompareWork {
             ShotView view = shot.view(note.view()).orElseThrow();
             Optional<Picture> rendered = Optional.ofNullable(view.rendered().get(note.frame()))
                     .map(file -> RenderedFrame.read(folder, file, "/views/" + shot.views().indexOf(view) + "/rendered/" + note.frame()));
-            List<Matte> holds = note.holds().stream().filter(h -> h.holds(note.frame())).map(Hold::matte).toList();
+            List<Matte> holds = note.holds().stream().filter(h -> h.isIn(note.view(), note.frame())).flatMap(h -> h.region().stream())
+                    .toList();
             rows.add(new SheetRow(note.id(), note.words(), "frame " + note.frame() + ", view " + note.view(), rendered, note.retouch(),
                     holds, note.weighBy(),
                     n.shown(), n.wanted(), n.got(), n.folds(), n.met()));

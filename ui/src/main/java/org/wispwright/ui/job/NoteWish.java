@@ -40,8 +40,8 @@ final class NoteWish implements Wish {
             weights[n] = SolveProblem.WEIGHT_ELSEWHERE + (1 - SolveProblem.WEIGHT_ELSEWHERE) * weights[n];
         }
         for (Hold hold : note.holds()) {
-            if (hold.holds(note.frame())) {
-                float[] held = hold.matte().values(original);
+            if (hold.isIn(note.view(), note.frame())) {
+                float[] held = hold.values(original);
                 for (int n = 0; n < weights.length; n++) {
                     weights[n] = Math.max(weights[n], held[n]);
                 }

@@ -55,8 +55,8 @@ public final class ReviewWork {
         without(elsewhere, retouched);
         for (int n = 0; n < note.holds().size(); n++) {
             Hold hold = note.holds().get(n);
-            if (hold.holds(note.frame())) {
-                float[] held = hold.matte().values(original);
+            if (hold.isIn(note.view(), note.frame())) {
+                float[] held = hold.values(original);
                 regions.add(region(of, "hold " + (n + 1), held));
                 without(elsewhere, held);
             }

@@ -37,11 +37,18 @@ public final class ShotProblem {
             notes.add(new SolveProblem.Note(note.id(), note.frame(), view, note.weight(), new NoteWish(note)));
             for (int n = 0; n < note.holds().size(); n++) {
                 Hold hold = note.holds().get(n);
-                holds.add(new SolveProblem.Hold(note.id() + " hold " + (n + 1), view, hold.firstFrame(), hold.lastFrame(),
-                        hold.matte()::values));
+                holds.add(hold(note.id() + " hold " + (n + 1), hold, hold.view().map(name -> index(views, name)).orElse(view)));
             }
         }
+        for (int n = 0; n < shot.holds().size(); n++) {
+            Hold hold = shot.holds().get(n);
+            holds.add(hold("hold " + (n + 1), hold, index(views, hold.view().orElseThrow())));
+        }
         return new SolveProblem(shot.flow(), views, shot.look(), notes, holds);
+    }
+
+    private static SolveProblem.Hold hold(String id, Hold hold, int view) {
+        return new SolveProblem.Hold(id, view, hold.spans(), hold.held(), hold.weight(), hold::values);
     }
 
     private static int index(List<View> views, String name) {

@@ -120,6 +120,11 @@ public final class JsonPlace {
         return keys;
     }
 
+    /** True for a list. */
+    boolean isList() {
+        return node.isArray();
+    }
+
     /** The values of a list of {@code least} to {@code most} values. */
     public List<JsonPlace> items(int least, int most) {
         String range = least == most ? "exactly " + least : least == 0 ? "at most " + most : least + " to " + most;

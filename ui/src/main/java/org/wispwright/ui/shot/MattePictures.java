@@ -5,6 +5,7 @@ import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.function.Predicate;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.view.View;
 import org.wispwright.warp.matte.ImageMatte;
@@ -81,12 +82,17 @@ final class MattePictures {
         return true;
     }
 
-    /** Refuses, by a finding each, pictures named in a note whose aspect is not that of the note's view. */
-    void requireAspect(String json, View view, Findings findings) {
+    /**
+     * Refuses, by a finding each, pictures whose aspect is not that of the view.
+     *
+     * @param json  the file that names them
+     * @param where which of its JSON pointers count
+     */
+    void requireAspect(String json, Predicate<String> where, View view, Findings findings) {
         for (Named picture : named) {
-            if (picture.json.equals(json)) {
+            if (picture.json.equals(json) && where.test(picture.pointer)) {
                 findings.check(() -> picture.size.requireAspect(view, picture.file, picture.json, picture.pointer,
-                        "draw it over a picture of this view, or correct the note's view"));
+                        "draw it over a picture of this view, or correct the view"));
             }
         }
     }

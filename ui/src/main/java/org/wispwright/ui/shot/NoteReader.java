@@ -17,7 +17,6 @@ final class NoteReader {
     static final long MOST_BYTES = 4L << 20;
     /** What the name of a note file without its ending must match. */
     static final String ID = "[A-Za-z0-9][A-Za-z0-9_-]{0,63}";
-    private static final int MOST_HOLDS = 100;
 
     private final ShotFolder folder;
     private final MattePictures mattes;
@@ -70,7 +69,7 @@ final class NoteReader {
         double weight = top.ask("weight").map(p -> p.positive(1000)).orElse(1.0);
         Optional<Matte> weighBy = top.ask("weighBy").map(MatteReader::matte);
         Retouch retouch = retouch(top, folder);
-        List<Hold> holds = holds(top, frame);
+        List<Hold> holds = HoldReader.ofNote(top, frame);
         Optional<LossChoice> loss = top.ask("loss").map(NoteReader::loss);
         return top.make(() -> new Note(id, words, frame, view, weight, weighBy, retouch, holds, loss));
     }
@@ -83,21 +82,8 @@ final class NoteReader {
         return list.make(() -> new Retouch(operations));
     }
 
-    /** The holds; none if the key is not there. @throws ShotException if one is not as it must be */
-    static List<Hold> holds(JsonPlace top, int noteFrame) {
-        return top.ask("holds").map(list -> list.items(0, MOST_HOLDS).stream().map(place -> hold(place, noteFrame)).toList())
-                .orElse(List.of());
-    }
-
     private static LossChoice loss(JsonPlace place) {
         List<LossKind> kinds = place.items(1, LossKind.values().length).stream().map(item -> item.choice(LossKind.class)).toList();
         return place.make(() -> new LossChoice(kinds, "as the note says"));
-    }
-
-    private static Hold hold(JsonPlace place, int noteFrame) {
-        place.only("region", "frames");
-        Matte matte = MatteReader.matte(place.need("region"));
-        int[] span = place.ask("frames").map(SetupReader::span).orElse(new int[] {noteFrame, noteFrame});
-        return new Hold(matte, span[0], span[1]);
     }
 }

@@ -18,7 +18,7 @@ public final class RetouchFile {
     private RetouchFile(JsonPlace top, ShotFolder shot) {
         this.top = top.version(SetupReader.FORMAT).only("wispwright", "retouch", "holds");
         this.retouch = NoteReader.retouch(top, shot);
-        NoteReader.holds(top, 0);
+        HoldReader.ofNote(top, 0);
     }
 
     /**

@@ -3,6 +3,7 @@ package org.wispwright.ui.shot;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
+import org.wispwright.optimize.solve.SolveProblem;
 import org.wispwright.warp.retouch.Handle;
 import org.wispwright.warp.retouch.MeshWarp;
 import org.wispwright.warp.retouch.Operation;
@@ -39,9 +40,17 @@ final class RetouchWriter {
 
     private static ObjectNode hold(Hold hold, int noteFrame) {
         ObjectNode object = JsonNodeFactory.instance.objectNode();
-        object.set("region", MatteWriter.matte(hold.matte()));
-        if (hold.firstFrame() != noteFrame || hold.lastFrame() != noteFrame) {
-            object.putArray("frames").add(hold.firstFrame()).add(hold.lastFrame());
+        hold.region().ifPresent(region -> object.set("region", MatteWriter.matte(region)));
+        hold.view().ifPresent(view -> object.put("view", view));
+        if (!hold.isOf(noteFrame) || hold.spans().size() > 1) {
+            ArrayNode frames = object.putArray("frames");
+            hold.spans().forEach(span -> frames.addArray().add(span.first()).add(span.last()));
+        }
+        if (hold.held() != SolveProblem.Held.PICTURE) {
+            object.put("held", JsonPlace.word(hold.held()));
+        }
+        if (hold.weight() != 1) {
+            object.put("weight", hold.weight());
         }
         return object;
     }

@@ -78,7 +78,7 @@ final class SetupReader {
             return Optional.empty();
         }
         return Optional.of(new Shot(name.orElseThrow(), flow.orElseThrow(), look.orElseThrow(), background.orElseThrow(), views,
-                List.of(), List.of()));
+                List.of(), List.of(), List.of()));
     }
 
     /** Solver steps of the shot as far as they can be read; the flow section complains about substeps itself. */

@@ -16,14 +16,16 @@ import org.wispwright.render.picture.Rgb;
  * @param views at least one, names differ
  * @param notes that take part, in the order of their ids
  * @param off notes that are off: checked like the others, but no part of a solve or a comparison
+ * @param holds what must stay whatever the notes want; each names its view
  */
 public record Shot(String name, FlowSetup flow, Look look, Rgb background, List<ShotView> views, List<Note> notes,
-        List<Note> off) {
+        List<Note> off, List<Hold> holds) {
     /** Keeps copies. */
     public Shot {
         views = List.copyOf(views);
         notes = List.copyOf(notes);
         off = List.copyOf(off);
+        holds = List.copyOf(holds);
     }
 
     /** The view of that name. */

@@ -97,6 +97,7 @@ public final class ShotCheck {
         MattePictures mattes = new MattePictures(folder, memoryBytes);
         Optional<Shot> setup = new SetupReader(folder, findings, memoryBytes).read();
         NoteReader.Notes notes = new NoteReader(folder, mattes, findings).read();
+        List<Hold> holds = findings.attempt(() -> HoldReader.ofShot(folder, mattes, setup.map(s -> s.flow().frames()))).orElse(List.of());
         setup.ifPresent(shot -> {
             checkSources(shot);
             checkObstacles(shot);
@@ -105,9 +106,10 @@ public final class ShotCheck {
             }
             notes.on().forEach(note -> checkNote(note, mattes, shot, findings));
             notes.off().forEach(note -> checkNote(note, mattes, shot, findings));
+            HoldCheck.ofShot(holds, notes.on(), mattes, shot, findings);
         });
         Optional<Shot> whole = setup.filter(s -> findings.none())
-                .map(s -> new Shot(s.name(), s.flow(), s.look(), s.background(), s.views(), notes.on(), notes.off()));
+                .map(s -> new Shot(s.name(), s.flow(), s.look(), s.background(), s.views(), notes.on(), notes.off(), holds));
         return new Result(whole, findings.all());
     }
 
@@ -207,14 +209,6 @@ public final class ShotCheck {
                     + String.join(", ", names),
                     NearestWord.to(note.view(), names).map(near -> "did you mean '" + near + "'").orElse("correct the name")));
         }
-        shot.view(note.view()).ifPresent(view -> mattes.requireAspect(file, view.view(), findings));
-        for (int n = 0; n < note.holds().size(); n++) {
-            Hold hold = note.holds().get(n);
-            boolean ownFrame = hold.firstFrame() == note.frame() && hold.lastFrame() == note.frame();
-            if (!ownFrame && (!frames.contains(hold.firstFrame()) || !frames.contains(hold.lastFrame()))) {
-                findings.add(Finding.of(file, "/holds/" + n + "/frames", "frames " + hold.firstFrame() + " to " + hold.lastFrame(),
-                        "frames of the shot, " + range, "correct the span"));
-            }
-        }
+        HoldCheck.ofNote(note, mattes, shot, findings);
     }
 }

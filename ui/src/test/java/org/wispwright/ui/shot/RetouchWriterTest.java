@@ -16,6 +16,7 @@ import java.util.stream.Collectors;
 import javax.imageio.ImageIO;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
+import org.wispwright.optimize.solve.SolveProblem;
 import org.wispwright.warp.loss.LossChoice;
 import org.wispwright.warp.loss.LossKind;
 import org.wispwright.warp.matte.BrushedMatte;
@@ -78,7 +79,9 @@ class RetouchWriterTest {
         assertEquals(Set.of(Matte.class.getPermittedSubclasses()), mattes);
         assertEquals(Set.of(Region.class.getPermittedSubclasses()),
                 MATTES.stream().filter(Region.class::isInstance).map(Object::getClass).collect(Collectors.toSet()));
-        List<Hold> holds = List.of(new Hold(MATTES.get(0), 7, 7), new Hold(MATTES.get(1), 3, 9));
+        List<Hold> holds = List.of(new Hold(MATTES.get(0), 7, 7), new Hold(MATTES.get(1), 3, 9),
+                new Hold(Optional.empty(), Optional.of("side"), List.of(new SolveProblem.Span(1, 2), new SolveProblem.Span(5, 9)),
+                        SolveProblem.Held.SILHOUETTE, 2.5));
         Note note = new Note("odd", "A \"quote\",\n\u00e9 and \uD83D\uDCA8", 7, "front", 0.1, Optional.of(MATTES.get(4)),
                 new Retouch(operations), holds, Optional.of(new LossChoice(List.of(LossKind.EDGES, LossKind.PYRAMID), "as the note says")));
         for (boolean on : new boolean[] {true, false}) {
