@@ -12,7 +12,7 @@ import org.wispwright.render.volume.ScalarGrid;
  * u1 = carry(u, trace(u))
  * u2 = wind(u1 + dt (f + buoyancy(density) + lift(temperature)))
  * u' = project(u2)
- * density' = exp(-dissipation dt) carry(density, trace(u')) + dt sources, 0 in solids; temperature' likewise
+ * density' = exp(-dissipation dt) carry(density, trace(u')) + dt strength sources, 0 in solids; temperature' likewise
  * </pre>
  * Only carrying is not linear, and it needs u, density and u' alone; so the pullback needs the state before the step and the
  * velocity after it, and runs no step again. A solver owns about 100 bytes a cell of workspace, 40 more with solids; one caller at a time.
@@ -52,16 +52,22 @@ public final class SmokeSolver {
         return setup;
     }
 
+    /** One substep with the sources as they were set up: see the other. */
+    public void step(SmokeState in, MacVelocity force, Substep at, boolean follows, SmokeState out) {
+        step(in, force, null, at, follows, out);
+    }
+
     /**
      * One substep.
      *
      * @param in    read
      * @param force read: acceleration on faces, m/s2; null for none
+     * @param strengths read: what each source's rates are multiplied by; null for 1
      * @param at    the substep: says how long it is, which sources feed it and where the solids are
      * @param follows true if {@code in} is, unchanged, what the last call of this solver wrote to {@code out}: its departures are known
      * @param out   overwritten; must not be in
      */
-    public void step(SmokeState in, MacVelocity force, Substep at, boolean follows, SmokeState out) {
+    public void step(SmokeState in, MacVelocity force, double[] strengths, Substep at, boolean follows, SmokeState out) {
         MacVelocity u = in.velocity();
         MacVelocity next = out.velocity();
         double seconds = setup.seconds(at);
@@ -93,12 +99,19 @@ public final class SmokeSolver {
         if (setup.heat().isCarried()) {
             carryForward(in.temperature(), out.temperature(), setup.heat().cooling(), seconds);
         }
-        sources.forEach(source -> source.feed(out, at, seconds));
+        for (int n = 0; n < sources.size(); n++) {
+            sources.get(n).feed(out, at, seconds, strengths == null ? 1 : strengths[n]);
+        }
         medium.clearSolids(out.density().values());
         if (setup.heat().isCarried()) {
             medium.clearSolids(out.temperature().values());
         }
         clock.lap(Clock.Part.CARRY_DENSITY, since);
+    }
+
+    /** Pulls a derivative back through one substep with the sources as they were set up: see the other. */
+    public void pullback(SmokeState in, MacVelocity outVelocity, Substep at, boolean follows, SmokeState bar, MacVelocity forceBar) {
+        pullback(in, outVelocity, at, follows, bar, forceBar, null);
     }
 
     /**
@@ -111,8 +124,10 @@ public final class SmokeSolver {
      *                    {@code out} or of a pullback's {@code in}
      * @param bar      on entry the derivative by the state after the substep, on exit by the state before it
      * @param forceBar added to: the derivative by the force; null if not wanted
+     * @param strengthBar added to: the derivative by the sources' strengths; null if not wanted
      */
-    public void pullback(SmokeState in, MacVelocity outVelocity, Substep at, boolean follows, SmokeState bar, MacVelocity forceBar) {
+    public void pullback(SmokeState in, MacVelocity outVelocity, Substep at, boolean follows, SmokeState bar, MacVelocity forceBar,
+                         double[] strengthBar) {
         if (inBar == null) {
             inBar = SmokeState.of(setup);
             displacementBar = new Displacement(shape);
@@ -124,6 +139,9 @@ public final class SmokeSolver {
         medium.ready(at);
         if (!setup.obstacles().isEmpty()) {
             since = clock.lap(Clock.Part.SOLIDS, since);
+        }
+        if (strengthBar != null) {
+            strengthsBack(bar, at, seconds, strengthBar);
         }
         if (!follows) {
             trace.forward(outVelocity, seconds, displacement);
@@ -161,6 +179,17 @@ public final class SmokeSolver {
         trace.pullback(u, seconds, displacementBar, uBar);
         bar.set(inBar);
         clock.lap(Clock.Part.TRACE_BACK, since);
+    }
+
+    /** What a source gives into a solid is taken away again, so nothing is owed for it. */
+    private void strengthsBack(SmokeState bar, Substep at, double seconds, double[] strengthBar) {
+        medium.clearSolids(bar.density().values());
+        if (bar.temperature() != null) {
+            medium.clearSolids(bar.temperature().values());
+        }
+        for (int n = 0; n < sources.size(); n++) {
+            strengthBar[n] += sources.get(n).strengthBar(bar, at, seconds);
+        }
     }
 
     /** A cell value's step when its departures are traced. */

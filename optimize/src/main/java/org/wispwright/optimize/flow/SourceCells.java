@@ -19,18 +19,42 @@ final class SourceCells {
         this.shape = shape;
     }
 
-    /** Adds what the source gives in a substep; constant, so nothing is pulled back. The temperature may be null. */
-    void feed(SmokeState to, Substep at, double seconds) {
-        if (!source.feeds(at.frame())) {
+    /** Adds what the source gives in a substep: {@code q[c] += dt share[c] rate strength}. The temperature may be null. */
+    void feed(SmokeState to, Substep at, double seconds, double strength) {
+        if (!ready(at)) {
             return;
+        }
+        add(to.density().values(), source.ratePerSecond() * strength, seconds);
+        if (to.temperature() != null) {
+            add(to.temperature().values(), source.kelvinPerSecond() * strength, seconds);
+        }
+    }
+
+    /** The derivative by the strength: {@code dt sum_c share[c] (rate densityBar[c] + kelvin temperatureBar[c])}. */
+    double strengthBar(SmokeState toBar, Substep at, double seconds) {
+        if (!ready(at)) {
+            return 0;
+        }
+        double sum = source.ratePerSecond() * along(toBar.density().values());
+        return seconds * (toBar.temperature() == null ? sum : sum + source.kelvinPerSecond() * along(toBar.temperature().values()));
+    }
+
+    private boolean ready(Substep at) {
+        if (!source.feeds(at.frame())) {
+            return false;
         }
         if (cells == null || !source.centre().isStill()) {
             layOut(source.centre().at(at.to()));
         }
-        add(to.density().values(), source.ratePerSecond(), seconds);
-        if (to.temperature() != null) {
-            add(to.temperature().values(), source.kelvinPerSecond(), seconds);
+        return true;
+    }
+
+    private double along(float[] bar) {
+        double sum = 0;
+        for (int n = 0; n < cells.length; n++) {
+            sum += shares[n] * bar[cells[n]];
         }
+        return sum;
     }
 
     private void add(float[] values, double rate, double seconds) {

@@ -10,6 +10,7 @@ import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.force.Band;
 import org.wispwright.optimize.force.ForceBasis;
+import org.wispwright.optimize.force.SourceCurves;
 import org.wispwright.optimize.search.Lbfgs;
 import org.wispwright.optimize.search.LineSearch;
 import org.wispwright.render.lanes.Lanes;
@@ -32,6 +33,7 @@ final class Climb {
     private final String digest;
     private final Solve.Recorder recorder;
     private final List<Band> bands;
+    private final Optional<SourceCurves> curves;
     private final long began = System.nanoTime();
     private final List<Double> losses = new ArrayList<>();
     private final List<SolveResult.BandRun> runs = new ArrayList<>();
@@ -62,6 +64,7 @@ final class Climb {
         this.digest = digest;
         this.recorder = recorder;
         bands = Solve.bands(problem.flow());
+        curves = problem.sources() ? Optional.of(Solve.curves(problem.flow())) : Optional.empty();
     }
 
     SolveResult run(Optional<SolveState> from) {
@@ -80,7 +83,8 @@ final class Climb {
             loss.forward(lbfgs.x(), new double[lbfgs.x().length]);
             noteLosses = plan.noteLosses(loss.losses());
         }
-        return new SolveResult(lbfgs.x().clone(), List.copyOf(runs), List.copyOf(losses), met, noteLosses, lbfgs.evaluations(),
+        return new SolveResult(curves.map(c -> SolveLoss.forceOf(c, lbfgs.x())).orElse(lbfgs.x().clone()),
+                curves.map(c -> c.strengths(lbfgs.x())), List.copyOf(runs), List.copyOf(losses), met, noteLosses, lbfgs.evaluations(),
                 seconds(), lbfgs.quadratic(), lbfgs.quadraticValue() / plan.startLoss(), snapshots, ended);
     }
 
@@ -125,7 +129,7 @@ final class Climb {
         int steps = flow.stepsTo(lastFrame);
         snapshots = new Budget(memoryBytes, SmokeState.bytes(flow)).snapshots(steps);
         ForceBasis basis = new ForceBasis(grid, flow.frames().count() - 1, bands, lanes);
-        loss = new SolveLoss(solver, basis, terms, start, lastFrame, snapshots, cancelled);
+        loss = new SolveLoss(solver, basis, curves, terms, start, lastFrame, snapshots, cancelled);
         if (state.isPresent()) {
             lbfgs = new Lbfgs(loss, state.get().search(), settings());
             ended = ended.isEmpty() ? endedByRule() : ended;
@@ -147,7 +151,8 @@ final class Climb {
     }
 
     /** Opens a rung or a band: this rung's loss and so many unknowns, the new ones 0. */
-    private void begin(int unknowns) {
+    private void begin(int forceUnknowns) {
+        int unknowns = curves.map(SourceCurves::unknowns).orElse(0) + forceUnknowns;
         int gradients = lbfgs == null ? 0 : lbfgs.evaluations();
         if (lbfgs == null) {
             lbfgs = new Lbfgs(loss, new double[unknowns], settings());
@@ -207,7 +212,7 @@ final class Climb {
 
     private Lbfgs.Settings settings() {
         // To move still smoke by four cells over the range is a fair first guess of what a note asks.
-        return new Lbfgs.Settings(Solve.PAIRS, LineSearch.Rule.forQuasiNewton().withMostEvaluations(Solve.MOST_EVALUATIONS), forceOfCells(4));
+        return new Lbfgs.Settings(Solve.PAIRS, LineSearch.Rule.forQuasiNewton().withMostEvaluations(Solve.MOST_EVALUATIONS), Solve.forceOfCells(problem.flow(), 4));
     }
 
     /**
@@ -219,15 +224,8 @@ final class Climb {
         for (double v : lbfgs.x()) {
             squares += v * v;
         }
-        double least = forceOfCells(1);
+        double least = Solve.forceOfCells(problem.flow(), 1);
         lbfgs.addQuadratic(2 * Solve.ENERGY_SHARE * plan.startLoss() / Math.max(squares, least * least) - lbfgs.quadratic());
-    }
-
-    /** Norm of a steady force, m/s2, that moves still smoke by so many cells of the shot over the range. */
-    private double forceOfCells(double cells) {
-        FlowSetup flow = problem.flow();
-        double range = (flow.frames().count() - 1) * flow.frames().secondsPerFrame();
-        return 2 * cells * flow.grid().cellMetres() / (range * range);
     }
 
     private boolean hasEnded(int over) {

@@ -24,6 +24,12 @@ public final class Simulation {
         void frame(int frame, SmokeState state, MacVelocity force);
     }
 
+    /** Runs all frames with the sources as they were set up: see the other. */
+    public static void run(SmokeSolver solver, SmokeState start, ForceBasis basis, double[] x, int lastFrame,
+                           BooleanSupplier cancelled, EachFrame each) {
+        run(solver, start, basis, x, null, lastFrame, cancelled, each);
+    }
+
     /**
      * Runs all frames.
      *
@@ -31,11 +37,12 @@ public final class Simulation {
      * @param start     read: the state of the first frame
      * @param basis     of the force; not used if x is null
      * @param x         unknowns; null for no force
+     * @param strengths of the sources, [step][source]; null for 1
      * @param lastFrame where to stop, inside the shot's frames
      * @param cancelled asked before each step
      * @throws SolveCancelled if cancelled
      */
-    public static void run(SmokeSolver solver, SmokeState start, ForceBasis basis, double[] x, int lastFrame,
+    public static void run(SmokeSolver solver, SmokeState start, ForceBasis basis, double[] x, double[][] strengths, int lastFrame,
                            BooleanSupplier cancelled, EachFrame each) {
         int first = solver.setup().frames().first();
         int substeps = solver.setup().substeps();
@@ -52,7 +59,8 @@ public final class Simulation {
                 if (cancelled.getAsBoolean()) {
                     throw new SolveCancelled();
                 }
-                solver.step(now, force, new Substep(frame, n, substeps), follows, next);
+                solver.step(now, force, strengths == null ? null : strengths[frame - first - 1], new Substep(frame, n, substeps), follows,
+                        next);
                 follows = true;
                 SmokeState swap = now;
                 now = next;

@@ -45,6 +45,8 @@ final class SmokeChain implements ReversibleChain {
     private int barStep = -1;
     private double[] x;
     private double[] xBar;
+    private double[][] strengths;
+    private double[][] strengthBar;
 
     /** What the loss owes to a state itself. */
     @FunctionalInterface
@@ -69,10 +71,17 @@ final class SmokeChain implements ReversibleChain {
         spare = SmokeState.of(flow);
     }
 
-    /** Readies a sweep: unknowns to read, their gradient to add to, state 0 current, the adjoint 0. */
-    void begin(double[] unknowns, double[] gradient) {
+    /**
+     * Readies a sweep: the force's unknowns to read, their gradient to add to, state 0 current, the adjoint 0.
+     *
+     * @param strengthsNow      of the sources, [step][source], to read; null for 1
+     * @param strengthsGradient alike, to add to; null with the other
+     */
+    void begin(double[] unknowns, double[] gradient, double[][] strengthsNow, double[][] strengthsGradient) {
         x = unknowns;
         xBar = gradient;
+        strengths = strengthsNow;
+        strengthBar = strengthsGradient;
         known = -1;
         follows = false;
         forceStep = -1;
@@ -141,7 +150,7 @@ final class SmokeChain implements ReversibleChain {
             forceBar.fill(0);
             barStep = at;
         }
-        solver.pullback(before, current.velocity(), substep, follows, bar, forceBar);
+        solver.pullback(before, current.velocity(), substep, follows, bar, forceBar, strengthBar == null ? null : strengthBar[at]);
         follows = false;
         undisturbed = true;
         if (substep.number() == 0) {
@@ -162,7 +171,7 @@ final class SmokeChain implements ReversibleChain {
             forceStep = at;
             solver.clock().lap(Clock.Part.FORCE, since);
         }
-        solver.step(current, force, substep, follows, spare);
+        solver.step(current, force, strengths == null ? null : strengths[at], substep, follows, spare);
         follows = true;
         undisturbed = false;
     }

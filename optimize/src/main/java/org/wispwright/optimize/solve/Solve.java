@@ -8,6 +8,7 @@ import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.force.Band;
 import org.wispwright.optimize.force.BandPlan;
 import org.wispwright.optimize.force.ForceBasis;
+import org.wispwright.optimize.force.SourceCurves;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.view.Pinhole;
 import org.wispwright.render.view.Orthographic;
@@ -41,6 +42,8 @@ public final class Solve {
     static final int PAIRS = 20;
     /** A line search that needs more gradients than this is lost in rounding. */
     static final int MOST_EVALUATIONS = 8;
+    /** A source of steady strength 1.74 weighs as much as a steady force that moves still smoke by so many cells over the range. */
+    static final double SOURCE_CELLS = 2;
     /** Cells of the shot along one cell of the coarsest rung. */
     static final int MOST_COARSENING = 4;
     /** The coarsest rung has at least so many cells each way. */
@@ -95,6 +98,22 @@ public final class Solve {
     /** The force basis of a shot on its own grid: what the unknowns of a take mean. */
     public static ForceBasis basis(FlowSetup flow, Lanes lanes) {
         return new ForceBasis(flow.grid(), flow.frames().count() - 1, bands(flow), lanes);
+    }
+
+    /** The curves of a shot's sources: what the first unknowns mean where strengths may change. */
+    static SourceCurves curves(FlowSetup flow) {
+        int first = flow.frames().first() + 1;
+        int steps = flow.frames().count() - 1;
+        List<SourceCurves.Span> spans = flow.sources().stream()
+                .map(source -> new SourceCurves.Span(Math.max(0, source.firstFrame() - first), Math.min(steps, source.lastFrame() + 1 - first)))
+                .toList();
+        return new SourceCurves(steps, spans, forceOfCells(flow, SOURCE_CELLS));
+    }
+
+    /** Norm of a steady force, m/s2, that moves still smoke by so many cells over the range. */
+    static double forceOfCells(FlowSetup flow, double cells) {
+        double range = (flow.frames().count() - 1) * flow.frames().secondsPerFrame();
+        return 2 * cells * flow.grid().cellMetres() / (range * range);
     }
 
     /**

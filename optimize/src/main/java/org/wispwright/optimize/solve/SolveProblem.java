@@ -17,8 +17,9 @@ import org.wispwright.warp.loss.PictureLoss;
  * @param look  how density shows
  * @param notes at least one
  * @param holds what must stay as in the original
+ * @param sources whether the sources' strengths may change too, beside the force
  */
-public record SolveProblem(FlowSetup flow, List<View> views, Look look, List<Note> notes, List<Hold> holds) {
+public record SolveProblem(FlowSetup flow, List<View> views, Look look, List<Note> notes, List<Hold> holds, boolean sources) {
 
     /** Share of a pixel's weight where a note's retouch does not reach, so that the rest of the frame stays put. */
     public static final float WEIGHT_ELSEWHERE = 0.5f;
@@ -133,9 +134,19 @@ public record SolveProblem(FlowSetup flow, List<View> views, Look look, List<Not
         }
     }
 
+    /** To be reached by a force alone. */
+    public SolveProblem(FlowSetup flow, List<View> views, Look look, List<Note> notes, List<Hold> holds) {
+        this(flow, views, look, notes, holds, false);
+    }
+
     /** The same wishes on another grid of the same box. */
     public SolveProblem on(GridShape grid) {
-        return new SolveProblem(flow.on(grid), views, look, notes, holds);
+        return new SolveProblem(flow.on(grid), views, look, notes, holds, sources);
+    }
+
+    /** The same wishes, with or without the sources' strengths among what may change. */
+    public SolveProblem withSources(boolean change) {
+        return new SolveProblem(flow, views, look, notes, holds, change);
     }
 
     /** The last frame that anything is wished of; later frames take no part in a solve. */

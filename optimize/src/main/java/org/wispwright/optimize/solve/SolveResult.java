@@ -1,6 +1,7 @@
 package org.wispwright.optimize.solve;
 
 import java.util.List;
+import java.util.Optional;
 import org.wispwright.optimize.force.Band;
 import org.wispwright.render.volume.GridShape;
 import org.wispwright.warp.loss.LossChoice;
@@ -9,18 +10,19 @@ import org.wispwright.warp.loss.LossChoice;
  * What a solve found.
  *
  * @param unknowns     the force: the numbers for {@code ForceBasis} with these bands
+ * @param strengths    of the sources, [force step][source]; empty if they were not to change
  * @param bands        each rung's and band's part of the search
  * @param losses       total loss after each iteration, as a share of the original's on that rung; each rung adds its own start first
  * @param met          of each note at the solve's raster by the pyramid loss, in the problem's order
  * @param noteLosses   what each note was solved with on the last rung, in the problem's order
  * @param gradients    gradients computed
  * @param seconds      wall time
- * @param energyWeight weight of the force energy at the end, {@code weight |x|^2 / 2} beside notes that weigh 1
+ * @param energyWeight weight of the energy, that of the strengths included, at the end, {@code weight |x|^2 / 2} beside notes that weigh 1
  * @param energyShare  the energy's part of the objective at the end, as a share of the starting loss
  * @param snapshots    states that were kept in a sweep of the last rung
  * @param ended        why it ended, for a person
  */
-public record SolveResult(double[] unknowns, List<BandRun> bands, List<Double> losses, List<Double> met,
+public record SolveResult(double[] unknowns, Optional<double[][]> strengths, List<BandRun> bands, List<Double> losses, List<Double> met,
                           List<NoteLoss> noteLosses, int gradients, double seconds,
                           double energyWeight, double energyShare, int snapshots, String ended) {
 

@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.util.List;
+import java.util.Optional;
 import java.util.Random;
 import org.junit.jupiter.api.Nested;
 import org.junit.jupiter.api.Test;
@@ -17,6 +18,7 @@ import org.wispwright.optimize.flow.Sides;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.force.ForceBasis;
+import org.wispwright.optimize.force.SourceCurves;
 import org.wispwright.optimize.motion.Curve;
 import org.wispwright.optimize.solid.Obstacle;
 import org.wispwright.optimize.solid.Solid;
@@ -41,7 +43,8 @@ class WholeChainTest {
         ForceBasis basis = Solve.basis(flow, lanes);
         FrameTerms terms = new FrameTerms(flow.grid(), problem.views(), problem.look(), flow.grid().cellMetres(), solver.clock(), lanes);
         new TermPlan(problem, solver, start, terms, true, () -> false);
-        return new SolveLoss(solver, basis, terms, start, problem.lastFrame(), snapshots, () -> false);
+        Optional<SourceCurves> curves = problem.sources() ? Optional.of(Solve.curves(flow)) : Optional.empty();
+        return new SolveLoss(solver, basis, curves, terms, start, problem.lastFrame(), snapshots, () -> false);
     }
 
     private static SolveLoss loss(SolveProblem problem, int snapshots, Lanes lanes) {
@@ -93,6 +96,19 @@ class WholeChainTest {
         return x;
     }
 
+    /** The sources' unknowns, if they may change, and the force's. */
+    private static double[] unknowns(SolveProblem problem, double size, long seed) {
+        double[] force = unknowns(problem.flow(), size, seed);
+        int sources = problem.sources() ? Solve.curves(problem.flow()).unknowns() : 0;
+        double[] x = new double[sources + force.length];
+        Random random = new Random(seed + 10);
+        for (int n = 0; n < sources; n++) {
+            x[n] = size * random.nextGaussian();
+        }
+        System.arraycopy(force, 0, x, sources, force.length);
+        return x;
+    }
+
     /** 8 steps, one output: the loss. */
     private static Operator chain(boolean light, int substeps) {
         return chain(windy(light, substeps));
@@ -100,8 +116,8 @@ class WholeChainTest {
 
     private static Operator chain(SolveProblem problem) {
         SolveLoss loss = loss(problem, wind(problem.flow()), 100, new Lanes(1));
-        double[] point = unknowns(problem.flow(), 0.2, 1);
-        return new Operator("whole chain", point.length, 1, false, point, unknowns(problem.flow(), 0.6, 2), (in, out) -> {
+        double[] point = unknowns(problem, 0.2, 1);
+        return new Operator("whole chain", point.length, 1, false, point, unknowns(problem, 0.6, 2), (in, out) -> {
             out[0] = loss.evaluate(in, new double[in.length]);
         }, (in, outBar, inBar) -> {
             double[] gradient = new double[in.length];
@@ -132,6 +148,18 @@ class WholeChainTest {
     @Nested class WithLight extends Chain {
         @Override protected Operator operator() {
             return chain(true, 1);
+        }
+    }
+
+    @Nested class WithSources extends Chain {
+        @Override protected Operator operator() {
+            return chain(windy(true, 1).withSources(true));
+        }
+    }
+
+    @Nested class WithSourcesInTwoSubsteps extends Chain {
+        @Override protected Operator operator() {
+            return chain(windy(false, 2).withSources(true));
         }
     }
 
