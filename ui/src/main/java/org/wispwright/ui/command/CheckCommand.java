@@ -6,13 +6,16 @@ import java.io.PrintWriter;
 import java.nio.file.Path;
 import java.util.concurrent.Callable;
 import org.wispwright.optimize.flow.FlowSetup;
+import org.wispwright.render.lanes.Lanes;
 import org.wispwright.ui.job.Comparison;
 import org.wispwright.ui.job.NoteFolds;
+import org.wispwright.ui.job.SmokeAsked;
 import org.wispwright.ui.shot.Finding;
 import org.wispwright.ui.shot.MemoryNeed;
 import org.wispwright.ui.shot.Note;
 import org.wispwright.ui.shot.Shot;
 import org.wispwright.ui.shot.ShotCheck;
+import org.wispwright.ui.shot.ShotFolder;
 import org.wispwright.warp.retouch.Folds;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
@@ -70,12 +73,21 @@ final class CheckCommand implements Callable<Integer> {
                         .put("notesOff", checked.off().size()).put("holds", holds).put("renderedFrames", rendered)
                         .put("leastMemoryBytes", need);
         ArrayNode folding = object.putArray("foldingNotes");
-        StringBuilder folds = new StringBuilder();
+        ArrayNode asked = object.putArray("smokeAsked");
+        StringBuilder said = new StringBuilder();
+        try (Lanes lanes = new Lanes(1)) {
+            for (Note note : checked.notes()) {
+                SmokeAsked.known(ShotFolder.open(shot), checked, note, lanes).ifPresent(smoke -> {
+                    asked.add(smoke.json());
+                    said.append(smoke.isWorthTelling() ? " N" + smoke.inWords(false).substring(1) + "." : "");
+                });
+            }
+        }
         for (Note note : checked.notes()) {
             Folds found = NoteFolds.of(note, checked.view(note.view()).orElseThrow().view());
             if (found.cells() > 0) {
                 folding.add(note.id());
-                folds.append(" Note ").append(note.id()).append(": ").append(Comparison.OfNote.inWords(found))
+                said.append(" Note ").append(note.id()).append(": ").append(Comparison.OfNote.inWords(found))
                         .append("; pull its handles less far, or spread the pull over more of them.");
             }
         }
@@ -83,7 +95,7 @@ final class CheckCommand implements Callable<Integer> {
                 + flow.frames().last()
                 + ", views " + checked.views().size() + ", notes " + (checked.notes().size() + checked.off().size())
                 + (checked.off().isEmpty() ? "" : " (" + checked.off().size() + " off)") + ", holds " + holds + ", rendered frames " + rendered
-                + "; a solve takes at least " + MemoryNeed.inWords(need) + "." + folds, object);
+                + "; a solve takes at least " + MemoryNeed.inWords(need) + "." + said, object);
         return ExitCodes.OK;
     }
 

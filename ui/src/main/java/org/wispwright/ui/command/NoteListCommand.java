@@ -9,6 +9,7 @@ import java.util.Optional;
 import java.util.concurrent.Callable;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.ui.job.NoteLosses;
+import org.wispwright.ui.job.SmokeAsked;
 import org.wispwright.ui.shot.Note;
 import org.wispwright.ui.shot.NoteEdits;
 import org.wispwright.ui.shot.Shot;
@@ -49,6 +50,7 @@ final class NoteListCommand implements Callable<Integer> {
             ObjectNode entry = array.addObject().put("id", note.id()).put("frame", note.frame()).put("view", note.view())
                     .put("weight", note.weight())
                     .put("loss", named).put("on", listed.on()).put("words", note.words());
+            SmokeAsked.known(folder, checked, note, new Lanes(1)).ifPresent(smoke -> entry.set("smokeAsked", smoke.json()));
             loss.ifPresent(choice -> entry.put("lossChosen", choice.inWords()).put("lossWhy", choice.why()));
         }
         manner.say(notes.isEmpty() ? "The shot has no note." : String.join(System.lineSeparator(), lines), object);

@@ -17,6 +17,7 @@ import org.wispwright.ui.job.SolveReport;
 import org.wispwright.ui.job.Beginning;
 import org.wispwright.ui.job.Quality;
 import org.wispwright.ui.job.SolveWork;
+import org.wispwright.ui.job.SourceStrengths;
 import picocli.CommandLine.ArgGroup;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.ITypeConverter;
@@ -33,6 +34,7 @@ import picocli.CommandLine.TypeConversionException;
             "  java -jar wispwright.jar solve samples/kiln-yard --quality preview",
             "  java -jar wispwright.jar solve samples/kiln-yard --from 1",
             "  java -jar wispwright.jar solve samples/kiln-yard --resume",
+            "  java -jar wispwright.jar solve samples/kiln-yard --sources",
             "  java -jar wispwright.jar solve samples/kiln-yard --threads 2 --memory 2G --until loss=0.03",
             "  java -jar wispwright.jar solve samples/kiln-yard --until seconds=60 --until iterations=40 --json"})
 final class SolveCommand implements Callable<Integer> {
@@ -50,6 +52,10 @@ final class SolveCommand implements Callable<Integer> {
     @Option(names = "--without-stay",
             description = "Leave out the term that keeps the frames without a note near the original; only to measure what it does.")
     private boolean withoutStay;
+
+    @Option(names = "--sources", description = "Let the strength of each source change over time too, beside the force: "
+            + "for notes that want more or less smoke than there is.")
+    private boolean sources;
 
     @Option(names = "--quality", paramLabel = "Q", converter = QualityConverter.class, description = "How far to climb: preview (the lowest rung, a first look), review (up to the "
             + "rung below the shot's own grid) or final. The volumes always have the shot's grid. Default: final.")
@@ -92,7 +98,8 @@ final class SolveCommand implements Callable<Integer> {
         StopRule rule = Until.all(until);
         SolveWork.Result result;
         try (Lanes lanes = new Lanes(choice.threads()); ProgressLine progress = manner.progress()) {
-            result = SolveWork.run(choice.folder(), shot, new SolveWork.Manner(choice.memoryBytes(), rule, !withoutStay, quality, begin.beginning()), lanes, progress,
+            result = SolveWork.run(choice.folder(), shot, new SolveWork.Manner(choice.memoryBytes(), rule, !withoutStay, sources, quality,
+                    begin.beginning()), lanes, progress,
                     manner.cancel());
         }
         ObjectNode object = SolveReport.of(result).put("ok", true);
@@ -101,7 +108,13 @@ final class SolveCommand implements Callable<Integer> {
         }
         String notes = result.comparison().notes().stream()
                 .map(Comparison.OfNote::inWords).collect(Collectors.joining(", "));
-        manner.say(String.format(Locale.ROOT, "Take %s made in %.0f s: %s.", Takes.name(result.take()), result.seconds(), notes), object);
+        manner.say(String.format(Locale.ROOT, "Take %s made in %.0f s: %s.", Takes.name(result.take()), result.seconds(), notes)
+                + sources(result), object);
         return ExitCodes.OK;
+    }
+
+    private static String sources(SolveWork.Result result) {
+        return result.solve().strengths().map(strengths -> " " + String.join("; ", SourceStrengths.inWords(result.flow(), strengths)) + ".")
+                .map(line -> " S" + line.substring(2)).orElse("");
     }
 }

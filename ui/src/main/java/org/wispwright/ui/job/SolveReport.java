@@ -21,6 +21,9 @@ public final class SolveReport {
                 .put("departureBeforeLastNote", result.departure().before()).put("gradients", solve.gradients())
                 .put("solveSeconds", solve.seconds()).put("seconds", result.seconds()).put("peakMemoryBytes", PeakMemory.bytes())
                 .put("energyShare", solve.energyShare()).put("ended", solve.ended());
+        ArrayNode asked = top.putArray("smokeAsked");
+        result.asked().forEach(smoke -> asked.add(smoke.json()));
+        solve.strengths().ifPresent(strengths -> top.set("sources", SourceStrengths.figures(result.flow(), strengths)));
         ArrayNode losses = top.putArray("noteLosses");
         for (int n = 0; n < solve.noteLosses().size(); n++) {
             SolveResult.NoteLoss note = solve.noteLosses().get(n);

@@ -53,7 +53,7 @@ final class SolveSearch implements AutoCloseable {
     static SolveSearch begin(ShotFolder folder, SolveProblem problem, SolveWork.Manner manner, Progress progress) {
         SolvePlace place = SolvePlace.open(folder);
         try {
-            String digest = ShotDigest.of(folder, "stay " + manner.stay());
+            String digest = ShotDigest.of(folder, "stay " + manner.stay() + " sources " + manner.sources());
             Optional<SolveState> from = switch (manner.beginning().kind()) {
                 case FRESH -> fresh(place);
                 case ANEW -> anew(place);

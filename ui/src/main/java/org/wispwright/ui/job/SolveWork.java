@@ -2,6 +2,7 @@ package org.wispwright.ui.job;
 
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.util.List;
 import java.util.Locale;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
@@ -13,6 +14,7 @@ import org.wispwright.optimize.solve.SolveProblem;
 import org.wispwright.optimize.solve.SolveResult;
 import org.wispwright.optimize.solve.StopRule;
 import org.wispwright.render.lanes.Lanes;
+import org.wispwright.ui.shot.Finding;
 import org.wispwright.ui.shot.Note;
 import org.wispwright.ui.shot.Shot;
 import org.wispwright.ui.shot.ShotException;
@@ -33,13 +35,14 @@ public final class SolveWork {
      * @param memoryBytes that all of it may take; what the work itself does not need goes to the states that a sweep keeps
      * @param until when to end before the program's own rule does
      * @param stay false leaves the stay term out; only to measure what it does
+     * @param sources whether the sources' strengths may change too
      * @param quality how far it climbs
      * @param beginning where it begins
      */
-    public record Manner(long memoryBytes, StopRule until, boolean stay, Quality quality, Beginning beginning) {
+    public record Manner(long memoryBytes, StopRule until, boolean stay, boolean sources, Quality quality, Beginning beginning) {
         /** A whole solve from the beginning, whatever an unfinished one has left. */
         public Manner(long memoryBytes, StopRule until, boolean stay) {
-            this(memoryBytes, until, stay, Quality.FINAL, Beginning.ANEW);
+            this(memoryBytes, until, stay, false, Quality.FINAL, Beginning.ANEW);
         }
     }
 
@@ -47,6 +50,8 @@ public final class SolveWork {
      * What came out.
      *
      * @param take the new take's number
+     * @param flow what was simulated
+     * @param asked how much smoke each note wants
      * @param solve what the search found
      * @param comparison the new take against the original, note by note
      * @param divergenceMax largest |div u| h / |u| of any frame
@@ -55,7 +60,7 @@ public final class SolveWork {
      * @param departure see {@link Departure}
      * @param seconds wall time of it all
      */
-    public record Result(int take, SolveResult solve, Comparison comparison, double divergenceMax, double massRatio, double forceRms,
+    public record Result(int take, FlowSetup flow, List<SmokeAsked> asked, SolveResult solve, Comparison comparison, double divergenceMax, double massRatio, double forceRms,
                          Departure departure, double seconds) {
     }
 
@@ -69,17 +74,23 @@ public final class SolveWork {
     public static Result run(ShotFolder folder, Shot shot, Manner manner, Lanes lanes, Progress progress, Cancel cancel) {
         long start = System.nanoTime();
         FlowSetup flow = shot.flow();
-        SolveProblem problem = ShotProblem.of(shot);
+        SolveProblem problem = ShotProblem.of(shot).withSources(manner.sources());
+        if (manner.sources() && flow.sources().isEmpty()) {
+            throw new ShotException(new Finding("shot.json", "/sources",
+                    "the shot has no source whose strength could change; solve without --sources, or add one."));
+        }
         SimulateWork.Result original = SimulateWork.run(folder, shot, lanes, progress, cancel);
+        List<SmokeAsked> asked = SmokeAsked.ofAll(Takes.of(folder), shot, lanes);
+        asked.stream().filter(SmokeAsked::isWorthTelling).forEach(smoke -> progress.milestone(smoke.inWords(manner.sources())));
         try (SolveSearch search = SolveSearch.begin(folder, problem, manner, progress)) {
             SolveResult solve = search.run(lanes, cancel);
-            Result result = take(folder, shot, manner, original, solve, search, lanes, progress, cancel, start);
+            Result result = take(folder, shot, manner, original, asked, solve, search, lanes, progress, cancel, start);
             search.over();
             return result;
         }
     }
 
-    private static Result take(ShotFolder folder, Shot shot, Manner manner, SimulateWork.Result original, SolveResult solve,
+    private static Result take(ShotFolder folder, Shot shot, Manner manner, SimulateWork.Result original, List<SmokeAsked> asked, SolveResult solve,
                                SolveSearch search, Lanes lanes, Progress progress, Cancel cancel, long start) {
         FlowSetup flow = shot.flow();
         Takes takes = Takes.of(folder);
@@ -92,32 +103,40 @@ public final class SolveWork {
             FrameWriting writing = new FrameWriting(flow, draft, "take", progress);
             SmokeSolver solver = new SmokeSolver(flow, lanes);
             ForceBasis basis = Solve.basis(flow, lanes);
-            Simulation.run(solver, flow.startState(), basis, solve.unknowns(), flow.frames().last(), cancel::wished,
+            Simulation.run(solver, flow.startState(), basis, solve.unknowns(), solve.strengths().orElse(null), flow.frames().last(),
+                    cancel::wished,
                     (frame, state, force) -> writing.frame(frame, state, solver));
             draft.writeForce(solve.unknowns());
+            if (solve.strengths().isPresent()) {
+                draft.writeSources(SourceStrengths.json(flow, solve.strengths().get()));
+            }
             draft.writeSearch(search.end());
             double massRatio = original.lastMass() > 0 ? writing.lastMass() / original.lastMass() : 1;
             cancel.stopIfWished();
-            int take = draft.finish(record(shot, manner, solve, writing.divergenceMax(), massRatio, forceRms));
+            int take = draft.finish(record(shot, manner, asked, solve, writing.divergenceMax(), massRatio, forceRms));
             Comparison comparison = CompareWork.compare(folder, shot, 0, take, lanes, progress, new Cancel());
             Departure departure = Departure.of(shot, frame -> takes.density(0, frame, flow), frame -> takes.density(take, frame, flow),
                     lanes, new Cancel());
-            return new Result(take, solve, comparison, writing.divergenceMax(), massRatio, forceRms, departure,
+            return new Result(take, flow, asked, solve, comparison, writing.divergenceMax(), massRatio, forceRms, departure,
                     (System.nanoTime() - start) / 1e9);
-        } catch (SolveCancelled asked) {
+        } catch (SolveCancelled wished) {
             throw new Cancel.Cancelled();
         }
     }
 
     /** Nothing in it depends on threads, memory or the clock: the same shot gives the same bytes. */
-    private static TakeRecord record(Shot shot, Manner manner, SolveResult solve, double divergenceMax, double massRatio, double forceRms) {
-        ObjectNode settings = TakeRecord.object().put("stay", manner.stay()).put("quality", manner.quality().name().toLowerCase(Locale.ROOT));
+    private static TakeRecord record(Shot shot, Manner manner, List<SmokeAsked> asked, SolveResult solve, double divergenceMax, double massRatio,
+                                     double forceRms) {
+        ObjectNode settings = TakeRecord.object().put("stay", manner.stay()).put("sources", manner.sources())
+                .put("quality", manner.quality().name().toLowerCase(Locale.ROOT));
         settings.set("notes", notes(shot));
         ObjectNode losses = settings.putObject("noteLosses");
         settings.put("untilLoss", manner.until().loss());
         ObjectNode figures = TakeRecord.object().put("gradients", solve.gradients()).put("forceRms", forceRms).put("massRatio", massRatio)
                 .put("divergenceMax", divergenceMax).put("energyWeight", solve.energyWeight()).put("energyShare", solve.energyShare())
                         .put("ended", solve.ended());
+        ObjectNode smoke = figures.putObject("smokeAsked");
+        asked.forEach(a -> smoke.put(a.note().id(), a.depth()));
         ObjectNode met = figures.putObject("met");
         ObjectNode falls = figures.putObject("lossFall");
         for (int n = 0; n < Math.min(shot.notes().size(), solve.met().size()); n++) {
@@ -126,6 +145,7 @@ public final class SolveWork {
             losses.put(id, solve.noteLosses().get(n).choice().inWords());
             falls.put(id, solve.noteLosses().get(n).fall());
         }
+        solve.strengths().ifPresent(strengths -> figures.set("sources", SourceStrengths.figures(shot.flow(), strengths)));
         return new TakeRecord(TakeRecord.Kind.SOLVE, Build.version(), TakeRecord.digest(shot.flow()), settings, figures, solve.losses());
     }
 

@@ -1,5 +1,6 @@
 package org.wispwright.ui.shot;
 
+import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.io.IOException;
 import java.io.UncheckedIOException;
 import java.nio.channels.FileChannel;
@@ -78,6 +79,15 @@ public final class TakeDraft implements AutoCloseable {
     public void writeForce(double[] coefficients) {
         try {
             TakeVolumes.writeForce(making, coefficients);
+        } catch (IOException refused) {
+            throw cannotWrite(making, refused);
+        }
+    }
+
+    /** Writes {@code sources.json}. */
+    public void writeSources(ObjectNode strengths) {
+        try {
+            WholeFile.write(making.resolve("sources.json"), out -> out.write(TakeRecord.bytes(strengths)));
         } catch (IOException refused) {
             throw cannotWrite(making, refused);
         }

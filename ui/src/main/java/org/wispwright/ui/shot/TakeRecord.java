@@ -70,6 +70,11 @@ public record TakeRecord(Kind kind, String tool, String setupSha256, ObjectNode 
         top.set("figures", figures);
         ArrayNode list = top.putArray("losses");
         losses.forEach(list::add);
+        return bytes(top);
+    }
+
+    /** JSON as the files of a take have it: indented, UTF-8. */
+    static byte[] bytes(ObjectNode top) {
         try {
             return (MAPPER.writeValueAsString(top) + "\n").getBytes(StandardCharsets.UTF_8);
         } catch (JsonProcessingException impossible) {

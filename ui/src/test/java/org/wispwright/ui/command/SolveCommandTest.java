@@ -1,6 +1,7 @@
 package org.wispwright.ui.command;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
@@ -11,6 +12,8 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.SortedMap;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.wispwright.optimize.solve.StopRule;
@@ -129,5 +132,66 @@ class SolveCommandTest {
         Run run = Run.of("solve", shot.folder().toString());
         assertEquals(3, run.code(), run.err());
         assertTrue(run.err().contains("'open'") && run.err().contains("changes nothing"), run.err());
+    }
+
+    /** A note that paints smoke where there is none wants more than a force can give: told before the search, in check and in the report. */
+    @Test
+    void tellsOfANoteThatWantsMoreSmokeThanThereIs() throws IOException {
+        SmallShot shot = SmallShot.in(place.resolve("yard"));
+        shot.delete("notes/lean.json");
+        shot.swap("notes/open.json", "{\"stroke\": {\"brush\": \"remove\", \"radius\": 0.1, \"strength\": 0.9, \"softEdge\": 0.5, "
+                + "\"line\": [[0.33, 0.82], [0.42, 0.82]]}},", "");
+        assertFalse(Run.of("check", shot.folder().toString()).out().contains("more smoke"));
+        Run run = Run.of("solve", shot.folder().toString(), "--until", "iterations=1", "--json");
+        assertEquals(0, run.code(), run.err());
+        Matcher said = Pattern.compile("note open wants ([0-9]+) % more smoke than the original shows on frame 1006 .*--sources").matcher(run.err());
+        assertTrue(said.find(), run.err());
+        JsonNode asked = new ObjectMapper().readTree(run.out()).get("smokeAsked").get(0);
+        assertEquals("open", asked.get("id").textValue());
+        assertEquals(Integer.parseInt(said.group(1)), Math.round(100 * (asked.get("depth").doubleValue() - 1)));
+        JsonNode take = new ObjectMapper().readTree(shot.folder().resolve("takes/001/take.json").toFile());
+        assertEquals(asked.get("depth"), take.get("figures").get("smokeAsked").get("open"));
+        assertTrue(Run.of("check", shot.folder().toString()).out().contains("Note open wants " + said.group(1) + " % more smoke"));
+        JsonNode listed = new ObjectMapper().readTree(Run.of("note", "list", shot.folder().toString(), "--json").out());
+        assertEquals(asked, listed.get("notes").get(0).get("smokeAsked"));
+    }
+
+    /** Strengths are told, kept with the take and used by it: more smoke in the last frame than in the original. */
+    @Test
+    void sourcesChangeOnRequest() throws IOException {
+        SmallShot shot = SmallShot.in(place.resolve("yard"));
+        shot.delete("notes/lean.json");
+        shot.swap("notes/open.json", "\"remove\"", "\"add\"");
+        Run run = Run.of("solve", shot.folder().toString(), "--sources", "--until", "iterations=6", "--report", place.resolve("r.json").toString());
+        assertEquals(0, run.code(), run.err());
+        assertTrue(run.err().contains("the sources' strengths may change for it"), run.err());
+        assertTrue(Pattern.compile("Source 'kiln mouth' gives [0-9.]+ times its rate").matcher(run.out()).find(), run.out());
+        JsonNode file = new ObjectMapper().readTree(shot.folder().resolve("takes/001/sources.json").toFile()).get("sources").get(0);
+        assertEquals("kiln mouth", file.get("name").textValue());
+        assertEquals("[1002,1006]", file.get("frames").toString());
+        double sum = 0;
+        for (JsonNode strength : file.get("strength")) {
+            sum += strength.doubleValue();
+        }
+        assertEquals(5, file.get("strength").size());
+        JsonNode take = new ObjectMapper().readTree(shot.folder().resolve("takes/001/take.json").toFile());
+        JsonNode figures = take.get("figures");
+        assertEquals(sum / 5, figures.get("sources").get(0).get("mean").doubleValue(), 1e-12);
+        assertTrue(sum / 5 > 1.02, () -> figures.toString());
+        assertTrue(figures.get("massRatio").doubleValue() > 1.02, figures::toString);
+        assertTrue(take.get("settings").get("sources").booleanValue());
+        assertEquals(figures.get("sources"), new ObjectMapper().readTree(place.resolve("r.json").toFile()).get("sources"));
+        Run again = Run.of("solve", shot.folder().toString(), "--sources", "--from", "1", "--until", "iterations=7");
+        assertEquals(0, again.code(), again.err());
+        Run other = Run.of("solve", shot.folder().toString(), "--from", "1", "--until", "iterations=7");
+        assertEquals(3, other.code(), "a search with strengths is not gone on with without them");
+    }
+
+    @Test
+    void sourcesOfAShotWithoutAnyAreRefused() {
+        SmallShot shot = SmallShot.in(place.resolve("yard"));
+        shot.swap("shot.json", SmallShot.SETUP.substring(SmallShot.SETUP.indexOf("\"sources\""), SmallShot.SETUP.indexOf("\"look\"")),
+                "\"sources\": [], ");
+        Refused.by(place, List.of("solve", shot.folder().toString(), "--sources"), "shot.json at /sources", "no source");
     }
 }

@@ -4,6 +4,9 @@ import org.wispwright.render.picture.Picture;
 
 /** Plain figures of pictures for reports. Sums in double. */
 public final class PictureMeasure {
+    /** The opacity that counts at the most in {@link #depth}: what lies behind is hidden, and could be any amount. */
+    public static final double MOST_OPACITY = 0.998;
+
     private PictureMeasure() {
     }
 
@@ -41,6 +44,19 @@ public final class PictureMeasure {
         float[] rgba = picture.rgba();
         for (int n = 3; n < rgba.length; n += 4) {
             sum += rgba[n];
+        }
+        return sum / ((double) picture.height() * picture.height());
+    }
+
+    /**
+     * Optical depth of the smoke seen: the integral of {@code -ln(1 - min(alpha, 0.998))} over the picture, in squared heights. Seen in
+     * parallel it is extinction times the smoke there is, wherever along the rays (Max 1995), as far as the smoke is not opaque.
+     */
+    public static double depth(Picture picture) {
+        double sum = 0;
+        float[] rgba = picture.rgba();
+        for (int n = 3; n < rgba.length; n += 4) {
+            sum -= Math.log1p(-Math.max(0, Math.min(MOST_OPACITY, rgba[n])));
         }
         return sum / ((double) picture.height() * picture.height());
     }
