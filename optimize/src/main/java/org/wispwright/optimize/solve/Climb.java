@@ -79,9 +79,10 @@ final class Climb {
             ended = "the last band's loss has stopped falling";
         }
         record();
-        if (noteLosses.isEmpty()) {                                            // gone on with from a record, and ended before it moved
+        if (noteLosses.isEmpty()) {                                            // ended before it moved, from a record perhaps
             loss.forward(lbfgs.x(), new double[lbfgs.x().length]);
             noteLosses = plan.noteLosses(loss.losses());
+            met = plan.met(loss.losses());
         }
         return new SolveResult(curves.map(c -> SolveLoss.forceOf(c, lbfgs.x())).orElse(lbfgs.x().clone()),
                 curves.map(c -> c.strengths(lbfgs.x())), List.copyOf(runs), List.copyOf(losses), met, noteLosses, lbfgs.evaluations(),
@@ -157,7 +158,12 @@ final class Climb {
         if (lbfgs == null) {
             lbfgs = new Lbfgs(loss, new double[unknowns], settings());
         } else {
-            lbfgs.extend(unknowns, loss);
+            try {
+                lbfgs.extend(unknowns, loss);
+            } catch (IllegalArgumentException blown) {
+                throw new IllegalArgumentException(blown.getMessage() + loss.firstBad().map(bad -> "; " + bad).orElse("")
+                        + "; end the solve on the rung below to keep what it found", blown);
+            }
             weighEnergy();
         }
         done = 0;
@@ -176,7 +182,7 @@ final class Climb {
             bandGradients += lbfgs.evaluations() - gradients;
             bandSeconds += seconds() - since;
             if (iteration.outcome() != Lbfgs.Outcome.MOVED) {
-                ended = last ? iteration.sentence() : "";
+                ended = endedBy(iteration, last, loss);
                 break;
             }
             done++;
@@ -193,6 +199,17 @@ final class Climb {
             }
         }
         runs.add(new SolveResult.BandRun(grid, bands.get(open - 1), lbfgs.x().length, done, bandGradients, last(losses), bandSeconds));
+    }
+
+    /**
+     * Why a search that did not move ends the solve; empty if it only ends the band. What it had found stays as it was. Where numbers are not
+     * finite however short the step, more unknowns would not help: that ends the solve on any rung.
+     */
+    static String endedBy(Lbfgs.Iteration iteration, boolean last, SolveLoss loss) {
+        if (iteration.outcome() == Lbfgs.Outcome.NOT_FINITE) {
+            return iteration.sentence() + loss.firstBad().map(bad -> "; " + bad).orElse("");
+        }
+        return last ? iteration.sentence() : "";
     }
 
     private void record() {

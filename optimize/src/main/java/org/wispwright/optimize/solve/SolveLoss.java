@@ -1,6 +1,8 @@
 package org.wispwright.optimize.solve;
 
+import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.List;
 import java.util.Optional;
 import java.util.function.BooleanSupplier;
 import org.wispwright.optimize.checkpoint.Reversal;
@@ -26,6 +28,8 @@ final class SolveLoss implements Objective {
     /** The force's part of the unknowns and of the gradient, and what the sources' part says; null where sources do not change. */
     private double[] forceBar;
     private double[][] strengthBar;
+    /** Where the last value or gradient that was not finite was asked for; null while there was none. */
+    private double[] badX;
 
     /** With the sources as they were set up: see the other. */
     SolveLoss(SmokeSolver solver, ForceBasis basis, FrameTerms terms, SmokeState start, int lastFrame, int snapshots,
@@ -59,17 +63,68 @@ final class SolveLoss implements Objective {
     public double evaluate(double[] x, double[] gradient) {
         Arrays.fill(gradient, 0);
         double value = forward(x, gradient);
+        if (!Double.isFinite(value)) {
+            badX = x.clone();
+            Arrays.fill(gradient, Double.NaN);                                 // nothing can be pulled back from there
+            return value;
+        }
         reversal.reverse();
         if (curves != null) {
             System.arraycopy(forceBar, 0, gradient, curves.unknowns(), forceBar.length);
             curves.pullback(x, strengthBar, gradient);
         }
+        if (!Arrays.stream(gradient).allMatch(Double::isFinite)) {
+            badX = x.clone();
+        }
         return value;
     }
 
-    /** The value alone; the gradient is left for a reversal that may follow. */
+    /** The value alone, NaN if the smoke is not finite at the end; the gradient is left for a reversal that may follow. */
     double forward(double[] x, double[] gradient) {
         double[] sum = new double[1];
+        begin(x, gradient);
+        reversal.forward(n -> {
+            int frame = frameOf(flow, n);
+            if (frame >= 0) {
+                sum[0] += terms.forward(frame, chain.current().density(), losses);
+            }
+        });
+        // What is not finite spreads through the pressure to every cell, but a march takes NaN for nothing.
+        return Double.isFinite(chain.current().density().sum()) ? sum[0] : Double.NaN;
+    }
+
+    /**
+     * Runs once more where value or gradient was last not finite, to say where that began.
+     *
+     * @return such as "density at cell (31, 4, 17) of frame 1012 is NaN"; empty if there was no such place
+     */
+    Optional<String> firstBad() {
+        if (badX == null) {
+            return Optional.empty();
+        }
+        List<String> found = new ArrayList<>();
+        begin(badX, new double[badX.length]);
+        reversal.forward(n -> {
+            if (found.isEmpty()) {
+                NotFinite.in(chain.current(), moment(n)).ifPresent(found::add);
+            }
+            int frame = frameOf(flow, n);
+            if (found.isEmpty() && frame >= 0 && !Double.isFinite(terms.forward(frame, chain.current().density(), losses))) {
+                found.add("the smoke of frame " + frame + " is finite, but its pictures' loss is not");
+            }
+        });
+        return Optional.of(found.isEmpty() ? "smoke and loss are finite everywhere, so only the gradient is not" : found.get(0));
+    }
+
+    private String moment(int n) {
+        if (n == 0 || frameOf(flow, n) >= 0) {
+            return "frame " + frameOf(flow, n);
+        }
+        Substep last = flow.step(n - 1);
+        return "frame " + last.frame() + ", substep " + (last.number() + 1) + " of " + last.count() + ",";
+    }
+
+    private void begin(double[] x, double[] gradient) {
         if (curves == null) {
             chain.begin(x, gradient, null, null);
         } else {
@@ -78,13 +133,6 @@ final class SolveLoss implements Objective {
             forceBar = new double[x.length - curves.unknowns()];
             chain.begin(forceOf(curves, x), forceBar, strengths, strengthBar);
         }
-        reversal.forward(n -> {
-            int frame = frameOf(flow, n);
-            if (frame >= 0) {
-                sum[0] += terms.forward(frame, chain.current().density(), losses);
-            }
-        });
-        return sum[0];
     }
 
     /** The force's part of all unknowns. */

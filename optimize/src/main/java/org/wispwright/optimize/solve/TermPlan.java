@@ -63,6 +63,10 @@ final class TermPlan {
         problem.holds().forEach(hold -> framesOf(hold).forEach(frame -> needed.add(key(frame, hold.view()))));
         stayFrames().forEach(frame -> notedViews().forEach(view -> needed.add(key(frame, view))));
         Simulation.run(solver, start, null, null, problem.lastFrame(), cancelled, (frame, state, force) -> {
+            NotFinite.in(state, "frame " + frame).ifPresent(bad -> {
+                throw new IllegalArgumentException("the original blows up on a grid of " + problem.flow().grid().inWords() + ": " + bad
+                        + "; give the shot weaker sources, buoyancy, lift or wind, or more substeps");
+            });
             for (int view = 0; view < problem.views().size(); view++) {
                 if (needed.contains(key(frame, view))) {
                     originals.put(key(frame, view), terms.picture(state.density(), view));

@@ -3,7 +3,10 @@ package org.wispwright.ui.job;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
+import org.wispwright.optimize.solve.NotFinite;
 import org.wispwright.render.volume.ScalarGrid;
+import org.wispwright.ui.shot.Finding;
+import org.wispwright.ui.shot.ShotException;
 import org.wispwright.ui.shot.TakeDraft;
 
 /** Writes each frame of a run into a draft and measures it on the way. One thread. */
@@ -23,7 +26,12 @@ final class FrameWriting {
         this.progress = progress;
     }
 
+    /** @throws ShotException if a value of the frame is not finite: the run has blown up, and there is no take of it */
     void frame(int frame, SmokeState state, SmokeSolver solver) {
+        NotFinite.in(state, "frame " + frame).ifPresent(bad -> {
+            throw new ShotException(new Finding("shot.json", "/flow", what + ": the simulation blows up: " + bad
+                    + "; make sources, buoyancy, lift or wind weaker, or give more substeps."));
+        });
         draft.write(frame, state);
         lastMass = mass(state.density());
         int done = frame - flow.frames().first();
