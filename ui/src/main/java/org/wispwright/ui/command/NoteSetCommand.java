@@ -53,7 +53,8 @@ final class NoteSetCommand implements Callable<Integer> {
     @Override
     public Integer call() {
         NoteValues values = new NoteValues(Optional.ofNullable(words), Optional.ofNullable(frame), Optional.ofNullable(view),
-                Optional.ofNullable(weight), Optional.ofNullable(retouch).map(path -> RetouchFile.read(path, Optional.of(ShotFolder.open(shot)))));
+                Optional.ofNullable(weight), Optional.ofNullable(retouch).map(path -> RetouchFile.read(path,
+                Optional.of(ShotFolder.open(shot)))));
         if (values.isEmpty()) {
             throw new ParameterException(spec.commandLine(), "'note set' needs one of --words, --frame, --view, --weight, --retouch");
         }

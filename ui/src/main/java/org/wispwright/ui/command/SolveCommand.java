@@ -57,7 +57,8 @@ final class SolveCommand implements Callable<Integer> {
             + "for notes that want more or less smoke than there is.")
     private boolean sources;
 
-    @Option(names = "--quality", paramLabel = "Q", converter = QualityConverter.class, description = "How far to climb: preview (the lowest rung, a first look), review (up to the "
+    @Option(names = "--quality", paramLabel = "Q", converter = QualityConverter.class, description = "How far to climb: preview (the "
+            + "lowest rung, a first look), review (up to the "
             + "rung below the shot's own grid) or final. The volumes always have the shot's grid. Default: final.")
     private Quality quality = Quality.FINAL;
 
@@ -81,7 +82,8 @@ final class SolveCommand implements Callable<Integer> {
         @Option(names = "--anew", description = "Drop what a solve that was cut off has left, and begin at no force.")
         private boolean anew;
 
-        @Option(names = "--from", paramLabel = "TAKE", description = "Go on from where the search of this take ended, a preview's for example.")
+        @Option(names = "--from", paramLabel = "TAKE", description = "Go on from where the search of this take ended, a preview's for "
+                + "example.")
         private Integer take;
 
         Beginning beginning() {

@@ -118,7 +118,8 @@ public final class CarryWork {
                     + ownB.size() + "; give both the same number."));
         }
         if (a.weighBy().isPresent() != b.weighBy().isPresent()) {
-            throw new ShotException(new Finding(file, "/weighBy", "one of the two notes has 'weighBy' and the other has not; give it to both or to "
+            throw new ShotException(new Finding(file, "/weighBy", "one of the two notes has 'weighBy' and the other has not; give it to "
+                    + "both or to "
                     + "neither."));
         }
         List<Note> notes = new ArrayList<>();

@@ -150,8 +150,9 @@ public final class CompareWork {
     }
 
     /**
-     * Writes {@code sheet.png}, {@code compare.json}, {@code measures.csv} and, for every note, {@code ID.original.png}, {@code ID.wanted.png},
-     * {@code ID.got.png} and {@code ID.difference.png} (|got - wanted| times the sheet's gain). Each file appears whole.
+     * Writes {@code sheet.png}, {@code compare.json}, {@code measures.csv} and, for every note, {@code ID.original.png},
+     * {@code ID.wanted.png}, {@code ID.got.png} and {@code ID.difference.png} (|got - wanted| times the sheet's gain). Each file appears
+     * whole.
      *
      * @param out made if it is not there; its parent must be
      * @throws ShotException if the place cannot be written to

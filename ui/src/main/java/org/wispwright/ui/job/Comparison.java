@@ -40,7 +40,8 @@ public record Comparison(int before, int after, List<OfNote> notes) {
             double holdChange, Mass mass, Folds folds, LossChoice loss, double lossFall) {
         /** How far it is met, what the retouch did to the mass, and a fold if there is one: words for a line. */
         public String inWords() {
-            return String.format(Locale.ROOT, "%s met %.1f %% (loss %s, mass %.4f, wanted %.4f, got %.4f%s)", note.id(), 100 * met, loss.inWords(),
+            return String.format(Locale.ROOT, "%s met %.1f %% (loss %s, mass %.4f, wanted %.4f, got %.4f%s)", note.id(), 100 * met,
+                    loss.inWords(),
                     mass.before(), mass.wanted(), mass.got(), folds.cells() == 0 ? "" : "; " + inWords(folds));
         }
 

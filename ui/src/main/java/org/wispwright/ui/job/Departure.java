@@ -30,7 +30,9 @@ public record Departure(double all, double before) {
                 .filter(frame -> shot.notes().stream().noneMatch(note -> note.frame() == frame)).toArray();
     }
 
-    /** The shares; 0 where there is no such frame. {@code original} and {@code take} give the density of a frame, on any grid of the box. */
+    /**
+     * The shares; 0 where there is no such frame. {@code original} and {@code take} give the density of a frame, on any grid of the box.
+     */
     static Departure of(Shot shot, IntFunction<ScalarGrid> original, IntFunction<ScalarGrid> take, Lanes lanes, Cancel cancel) {
         List<View> views = shot.views().stream().map(v -> v.view())
                 .filter(view -> shot.notes().stream().map(Note::view).anyMatch(view.name()::equals))

@@ -30,7 +30,9 @@ public final class ReviewReport {
     private ReviewReport() {
     }
 
-    /** Adds {@code silhouetteLevel}, {@code measures} and {@code continuity} to an object; null stands for what is infinite or has no value. */
+    /**
+     * Adds {@code silhouetteLevel}, {@code measures} and {@code continuity} to an object; null stands for what is infinite or has no value.
+     */
     static ObjectNode add(Review review, ObjectNode top) {
         top.put("silhouetteLevel", Review.LEVEL);
         ArrayNode measures = top.putArray("measures");
@@ -119,7 +121,8 @@ public final class ReviewReport {
         Review.OfFrame flicker = moving.stream().max(Comparator.comparingDouble(Review.OfFrame::added)).orElseThrow();
         Review.OfFrame away = view.frames().stream().max(Comparator.comparingDouble(Review.OfFrame::fromOriginal)).orElseThrow();
         return String.format(Locale.ROOT,
-                "View %s, frame to frame: mean change %.5f before, %.5f after; most added %.5f at frame %d; farthest from the original %.5f at frame %d.",
+                "View %s, frame to frame: mean change %.5f before, %.5f after; most added %.5f at frame %d; farthest from the original "
+                        + "%.5f at frame %d.",
                 view.view(), moving.stream().mapToDouble(Review.OfFrame::before).average().orElse(0),
                 moving.stream().mapToDouble(Review.OfFrame::after).average().orElse(0), flicker.added(), flicker.frame(),
                 away.fromOriginal(), away.frame());

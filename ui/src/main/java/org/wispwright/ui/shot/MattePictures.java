@@ -39,7 +39,8 @@ final class MattePictures {
      * A picture as a matte.
      *
      * @param place the value that names the file
-     * @throws ShotException if there is no such file inside the folder, it is too large, no whole PNG picture, or has nothing in the channel
+     * @throws ShotException if there is no such file inside the folder, it is too large, no whole PNG picture, or has nothing in the
+     * channel
      */
     ImageMatte matte(JsonPlace place, ImageMatte.Channel channel, double feather) {
         String file = ShotFolder.named(place);

@@ -22,10 +22,12 @@ final class MatteReader {
 
     /** A matte of any kind. @throws ShotException if it, or a picture it names, is not as it must be */
     static Matte matte(JsonPlace place) {
-        place.only("rectangle", "ellipse", "polygon", "density", "brushed", "image", "union", "intersect", "subtract", "inverse", "feather");
+        place.only("rectangle", "ellipse", "polygon", "density", "brushed", "image", "union", "intersect", "subtract", "inverse",
+                "feather");
         List<String> kinds = place.keys().stream().filter(key -> !key.equals("feather")).toList();
         if (kinds.size() != 1) {
-            throw place.fault(kinds.size() + " kinds of matte in one", "one: " + KINDS, "give each matte one kind, and join them with union");
+            throw place.fault(kinds.size() + " kinds of matte in one", "one: " + KINDS, "give each matte one kind, and join them with "
+                    + "union");
         }
         String kind = kinds.get(0);
         if (place.has("feather") && !FEATHERED.contains(kind)) {
@@ -93,7 +95,8 @@ final class MatteReader {
     private static Pressure pressure(JsonPlace place, int points) {
         if (!place.has("pressure")) {
             if (place.has("pressureOn")) {
-                throw place.fault("'pressureOn' without 'pressure'", "both or neither", "give 'pressure' a number for each point of 'line'");
+                throw place.fault("'pressureOn' without 'pressure'", "both or neither", "give 'pressure' a number for each point of "
+                        + "'line'");
             }
             return Pressure.FULL;
         }

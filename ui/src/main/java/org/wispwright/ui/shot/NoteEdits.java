@@ -276,7 +276,8 @@ public final class NoteEdits {
 
     private void requireFree(String file) {
         if (files.isTaken(file)) {
-            throw new ShotException(Finding.of(file, "", (file.endsWith(".json") ? "a note" : "a file") + " of this name already", "a name that is free", "give another with --id"));
+            throw new ShotException(Finding.of(file, "", (file.endsWith(".json") ? "a note" : "a file") + " of this name already",
+                    "a name that is free", "give another with --id"));
         }
     }
 

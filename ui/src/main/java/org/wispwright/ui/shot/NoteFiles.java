@@ -41,7 +41,11 @@ final class NoteFiles {
                 .map(name -> name.substring(0, name.length() - ".json".length())).toList();
     }
 
-    /** Files that lie beside a note's own, sorted; folders, such as a paint-over's, stay where they are. @throws ShotException if one has a name that no file of a note may have */
+    /**
+     * Files that lie beside a note's own, sorted; folders, such as a paint-over's, stay where they are.
+     *
+     * @throws ShotException if one has a name that no file of a note may have
+     */
     List<String> beside(String id) {
         List<String> files = folder.names("notes", "", MOST_FILES).stream().filter(name -> name.startsWith(id + "."))
                 .map(name -> "notes/" + name).filter(file -> !file.equals(file(id)))

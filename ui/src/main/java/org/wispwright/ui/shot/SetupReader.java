@@ -128,7 +128,8 @@ final class SetupReader {
         }
         JsonPlace place = given.orElse(top);
         // The sources come last: whether they may give warmth is for the whole to say.
-        FlowSetup plain = place.make(() -> new FlowSetup(grid.get(), frames.get(), substeps, velocity, density, sides, buoyancy, dissipation,
+        FlowSetup plain = place.make(() -> new FlowSetup(grid.get(), frames.get(), substeps, velocity, density, sides, buoyancy,
+                dissipation,
                 List.of()));
         return Optional.of(place.make(() -> plain.withHeat(new Heat(lift, cooling)).withWind(wind).withSources(sources)));
     }

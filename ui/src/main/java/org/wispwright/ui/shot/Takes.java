@@ -125,7 +125,8 @@ public final class Takes {
             return found.state().orElseThrow(() -> new ShotException(Finding.of(where, "", found.damaged().isEmpty() ? "no such file"
                     : "a damaged record", "where the search of a solved take ended", "give another take, or solve without --from")));
         } catch (IOException unreadable) {
-            throw new ShotException(Finding.of(where, "", "a file that cannot be read", "a readable file", "check its permissions"), unreadable);
+            throw new ShotException(Finding.of(where, "", "a file that cannot be read", "a readable file", "check its permissions"),
+                    unreadable);
         }
     }
 

@@ -72,9 +72,11 @@ class FlowKeysTest {
             "obstacles": [
               {"name": "shelf", "box": {"sizeMetres": [1, 0.1, 1]}, "positionMetres": [1, 2, 1], "rotationRadians": [0, 0, 0.3]},
               {"name": "pipe", "cylinder": {"radiusMetres": 0.2, "lengthMetres": 2}, "positionMetres": [0.5, 1, 1]},
-              {"name": "rock", "volume": {"file": "solids/rock.npy", "holds": "distance", "cellMetres": 0.1}, "positionMetres": [1.5, 1, 1]},
+              {"name": "rock", "volume": {"file": "solids/rock.npy", "holds": "distance", "cellMetres": 0.1},
+                "positionMetres": [1.5, 1, 1]},
               {"name": "drum", "ball": {"radiusMetres": 0.3}, "keys": [
-                {"frame": 1001, "positionMetres": [0.5, 3, 1]}, {"frame": 1006, "positionMetres": [1.5, 3, 1], "rotationRadians": [0, 1, 0]}]}
+                {"frame": 1001, "positionMetres": [0.5, 3, 1]}, {"frame": 1006, "positionMetres": [1.5, 3, 1],
+                  "rotationRadians": [0, 1, 0]}]}
             ]""");
         FlowSetup flow = flow();
         assertEquals(4, flow.obstacles().size());
@@ -95,22 +97,35 @@ class FlowKeysTest {
     @ParameterizedTest
     @CsvSource(delimiter = '|', quoteCharacter = '~', value = {
         "{'name': 'a', 'positionMetres': [1,1,1]}                                                     | /obstacles/0 | no form",
-        "{'name': 'a', 'ball': {'radiusMetres': 1}, 'box': {'sizeMetres': [1,1,1]}, 'positionMetres': [1,1,1]} | /obstacles/0 | more than one form",
-        "{'name': 'a', 'ball': {'radiusMetres': -1}, 'positionMetres': [1,1,1]}                       | /obstacles/0/ball/radiusMetres | above 0",
-        "{'name': 'a', 'ball': {'radius': 1}, 'positionMetres': [1,1,1]}                              | /obstacles/0/ball/radius | unknown key",
-        "{'name': 'a', 'box': {'sizeMetres': [1,0,1]}, 'positionMetres': [1,1,1]}                     | /obstacles/0/box/sizeMetres/1 | above 0",
+        "{'name': 'a', 'ball': {'radiusMetres': 1}, 'box': {'sizeMetres': [1,1,1]}, 'positionMetres': [1,1,1]} | /obstacles/0 | more "
+                + "than one form",
+        "{'name': 'a', 'ball': {'radiusMetres': -1}, 'positionMetres': [1,1,1]}                       | /obstacles/0/ball/radiusMetres "
+                + "| above 0",
+        "{'name': 'a', 'ball': {'radius': 1}, 'positionMetres': [1,1,1]}                              | /obstacles/0/ball/radius | "
+                + "unknown key",
+        "{'name': 'a', 'box': {'sizeMetres': [1,0,1]}, 'positionMetres': [1,1,1]}                     | /obstacles/0/box/sizeMetres/1 | "
+                + "above 0",
         "{'name': 'a', 'ball': {'radiusMetres': 0.1}}                                                 | /obstacles/0 | neither",
         "{'name': 'a', 'ball': {'radiusMetres': 0.1}, 'positionMetres': [1,1,1], 'keys': []}          | /obstacles/0 | both",
-        "{'name': 'a', 'ball': {'radiusMetres': 0.1}, 'keys': []}                                     | /obstacles/0/keys | a list of 0 values",
-        "{'name': 'a', 'ball': {'radiusMetres': 0.1}, 'keys': [{'frame': 1001}]}                      | /obstacles/0/keys/0 | no 'positionMetres'",
-        "{'name': 'a', 'ball': {'radiusMetres': 0.1}, 'keys': [{'frame': 1002, 'positionMetres': [1,1,1]}, {'frame': 1002, 'positionMetres': [1,1,1]}]} | /obstacles/0/keys/1/frame | rise",
+        "{'name': 'a', 'ball': {'radiusMetres': 0.1}, 'keys': []}                                     | /obstacles/0/keys | a list of 0 "
+                + "values",
+        "{'name': 'a', 'ball': {'radiusMetres': 0.1}, 'keys': [{'frame': 1001}]}                      | /obstacles/0/keys/0 | no "
+                + "'positionMetres'",
+        "{'name': 'a', 'ball': {'radiusMetres': 0.1}, 'keys': [{'frame': 1002, 'positionMetres': [1,1,1]}, {'frame': 1002, "
+                + "'positionMetres': [1,1,1]}]} | /obstacles/0/keys/1/frame | rise",
         "{'name': 'a', 'ball': {'radiusMetres': 0.1}, 'positionMetres': [90,1,1]}                     | /obstacles/0 | outside the box",
-        "{'name': 'a', 'volume': {'file': 'none.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | /obstacles/0/volume/file | missing",
-        "{'name': 'a', 'volume': {'file': '../x.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | /obstacles/0/volume/file | leaves the shot folder",
-        "{'name': 'a', 'volume': {'file': 'solids/flat.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | /obstacles/0/volume/file | three sizes",
-        "{'name': 'a', 'volume': {'file': 'solids/loud.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | /obstacles/0/volume/file | values from 0 to 1",
-        "{'name': 'a', 'volume': {'file': 'solids/text.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | /obstacles/0/volume/file | not an NPY file",
-        "{'name': 'a', 'volume': {'file': 'solids/loud.npy', 'holds': 'smoke', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | /obstacles/0/volume/holds | distance"})
+        "{'name': 'a', 'volume': {'file': 'none.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | "
+                + "/obstacles/0/volume/file | missing",
+        "{'name': 'a', 'volume': {'file': '../x.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | "
+                + "/obstacles/0/volume/file | leaves the shot folder",
+        "{'name': 'a', 'volume': {'file': 'solids/flat.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | "
+                + "/obstacles/0/volume/file | three sizes",
+        "{'name': 'a', 'volume': {'file': 'solids/loud.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | "
+                + "/obstacles/0/volume/file | values from 0 to 1",
+        "{'name': 'a', 'volume': {'file': 'solids/text.npy', 'holds': 'mask', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | "
+                + "/obstacles/0/volume/file | not an NPY file",
+        "{'name': 'a', 'volume': {'file': 'solids/loud.npy', 'holds': 'smoke', 'cellMetres': 1}, 'positionMetres': [1,1,1]} | "
+                + "/obstacles/0/volume/holds | distance"})
     void obstaclesThatAreRefused(String obstacle, String pointer, String phrase) throws IOException {
         volume("solids/flat.npy", new int[] {4, 5}, 0);
         volume("solids/loud.npy", new int[] {2, 2, 2}, 7);
@@ -133,12 +148,14 @@ class FlowKeysTest {
         assertNotEquals(first, windy);
         assertEquals(1, flow().wind().velocity().at(1003).x());
         shot.swap("shot.json", "\"metresPerSecond\": [1, 0, 0]",
-                "\"keys\": [{\"frame\": 1001, \"metresPerSecond\": [0, 0, 0]}, {\"frame\": 1005, \"metresPerSecond\": [2, 0, 0], \"metresPerSecond2\": [0, 1, 0]}]");
+                "\"keys\": [{\"frame\": 1001, \"metresPerSecond\": [0, 0, 0]}, {\"frame\": 1005, \"metresPerSecond\": [2, 0, 0], "
+                        + "\"metresPerSecond2\": [0, 1, 0]}]");
         assertEquals(0.5, flow().wind().acceleration().at(1003).y(), 1e-12);
         assertNotEquals(windy, digest());
         String before = digest();
         shot.swap("shot.json", "\"centreMetres\": [1, 0.6, 1], \"radiusMetres\": 0.5, \"edgeMetres\": 0.25",
-                "\"keys\": [{\"frame\": 1001, \"centreMetres\": [0.5, 0.6, 1]}, {\"frame\": 1006, \"centreMetres\": [1.5, 0.6, 1]}], \"boxMetres\": [1, 0.5, 1]");
+                "\"keys\": [{\"frame\": 1001, \"centreMetres\": [0.5, 0.6, 1]}, {\"frame\": 1006, \"centreMetres\": [1.5, 0.6, 1]}], "
+                        + "\"boxMetres\": [1, 0.5, 1]");
         assertEquals(1, flow().sources().get(0).centre().at(1003.5).x(), 1e-12);
         assertEquals(0.125, flow().sources().get(0).edgeMetres());
         assertNotEquals(before, digest());
@@ -147,7 +164,8 @@ class FlowKeysTest {
         volume("start/x.npy", new int[] {8, 16, 9}, 0.5f);
         volume("start/y.npy", new int[] {8, 17, 8}, 0);
         volume("start/z.npy", new int[] {9, 16, 8}, 0);
-        add("\"start\": {\"density\": \"start/density.npy\", \"velocityX\": \"start/x.npy\", \"velocityY\": \"start/y.npy\", \"velocityZ\": \"start/z.npy\"}");
+        add("\"start\": {\"density\": \"start/density.npy\", \"velocityX\": \"start/x.npy\", \"velocityY\": \"start/y.npy\", "
+                + "\"velocityZ\": \"start/z.npy\"}");
         assertEquals(0.25f, flow().startState().density().at(3, 3, 3));
         assertNotEquals(before, digest());
         Run run = Run.of("simulate", shot.folder().toString());

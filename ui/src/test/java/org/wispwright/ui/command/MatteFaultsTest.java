@@ -143,7 +143,8 @@ class MatteFaultsTest {
     @Test
     void copyOntoAViewOfAnotherAspect() throws IOException {
         shot.swap("shot.json", "\"orthographicMetres\": [3, 4]", "\"orthographicMetres\": [4, 4]");
-        shot.swap("shot.json", "\"aimMetres\": [1, 2, 1], \"raster\": [48, 64]\n    }\n", "\"aimMetres\": [1, 2, 1], \"raster\": [64, 64]\n    }\n");
+        shot.swap("shot.json", "\"aimMetres\": [1, 2, 1], \"raster\": [48, 64]\n    }\n", "\"aimMetres\": [1, 2, 1], \"raster\": [64, "
+                + "64]\n    }\n");
         assertEquals(0, Run.of("check", shot.folder().toString()).code());
         Run copied = Run.of("note", "copy", shot.folder().toString(), "lean", "--frame", "1005");
         assertEquals(0, copied.code(), copied.err());

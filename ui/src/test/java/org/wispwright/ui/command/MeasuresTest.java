@@ -132,7 +132,8 @@ class MeasuresTest {
         assertEquals(4, view.get("frames").size());
         for (int n = 0; n < 4; n++) {
             for (int k = 0; k < 5; k++) {
-                assertEquals(expected[n][k], view.get("frames").get(n).get(keys[k]).doubleValue(), 1e-6, "frame " + (n + 1) + " " + keys[k]);
+                assertEquals(expected[n][k], view.get("frames").get(n).get(keys[k]).doubleValue(), 1e-6, "frame " + (n + 1) + " "
+                        + keys[k]);
             }
         }
     }
@@ -146,7 +147,8 @@ class MeasuresTest {
         assertTrue(run.out().contains("narrow  frame"), run.out());
         assertTrue(run.out().contains("18.1 > 21.1") && run.out().contains("0.500 > 0.667"), run.out());
         // 16/256 and 20/256 over three steps.
-        assertTrue(run.out().contains("View front, frame to frame: mean change 0.02083 before, 0.02604 after; most added 0.0156"), run.out());
+        assertTrue(run.out().contains("View front, frame to frame: mean change 0.02083 before, 0.02604 after; most added 0.0156"),
+                run.out());
         assertTrue(run.out().contains("farthest from the original 0.0156") && run.out().strip().endsWith(" at frame 3."), run.out());
         List<String> lines = Files.readAllLines(out.resolve("measures.csv"));
         assertEquals("note,region,picture,structure,peakSignalToNoise,meanAbsolute,overlap,farthest,nearest,across,down", lines.get(0));

@@ -22,7 +22,9 @@ import org.wispwright.ui.shot.ShotCheck;
 import org.wispwright.ui.shot.ShotFolder;
 import org.wispwright.ui.shot.SolvePlace;
 
-/** Solves that are cut off and gone on with, through the real command. Expected values are ours: those of a solve that nothing disturbed. */
+/**
+ * Solves that are cut off and gone on with, through the real command. Expected values are ours: those of a solve that nothing disturbed.
+ */
 class ResumeCommandTest {
     private static final String[] FEW = {"--until", "iterations=9", "--threads", "1"};
 
@@ -37,7 +39,8 @@ class ResumeCommandTest {
         stopAtIteration(yard, 4);
         Run refused = solve(yard);
         assertEquals(3, refused.code());
-        assertTrue(refused.err().contains("iteration 4") && refused.err().contains("--resume") && refused.err().contains("--anew"), refused.err());
+        assertTrue(refused.err().contains("iteration 4") && refused.err().contains("--resume") && refused.err().contains("--anew"),
+                refused.err());
         Run rest = solve(yard, "--resume");
         assertEquals(0, rest.code(), rest.err());
         assertEquals(SmallShot.listing(calm.folder().resolve("takes")), SmallShot.listing(yard.folder().resolve("takes")));
@@ -148,7 +151,8 @@ class ResumeCommandTest {
             assertEquals(0, rest.code(), rest.err());
         }
         for (String file : new String[] {"force.npy", "take.json", "density.1006.npy"}) {
-            assertEquals(-1, Files.mismatch(calm.folder().resolve("takes/001").resolve(file), yard.folder().resolve("takes/001").resolve(file)),
+            assertEquals(-1, Files.mismatch(calm.folder().resolve("takes/001").resolve(file),
+                    yard.folder().resolve("takes/001").resolve(file)),
                     file);
         }
     }

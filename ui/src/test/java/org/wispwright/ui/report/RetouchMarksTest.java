@@ -83,7 +83,9 @@ class RetouchMarksTest {
         return Arrays.toString(set);
     }
 
-    /** A matte without an outline of its own is drawn where its value is 1/2: left half in, so a line at the middle and nothing far from it. */
+    /**
+     * A matte without an outline of its own is drawn where its value is 1/2: left half in, so a line at the middle and nothing far from it.
+     */
     @Test
     void aMatteOfPixelsIsDrawnWhereItIsHalf() {
         float[] pixels = new float[100];
@@ -93,7 +95,8 @@ class RetouchMarksTest {
         BufferedImage image = new BufferedImage(200, 200, BufferedImage.TYPE_INT_ARGB);
         Graphics2D g = image.createGraphics();
         Matte half = new ImageMatte(10, 10, pixels, 0);
-        assertEquals(Set.of(RetouchMarks.Meaning.WEIGHS), RetouchMarks.meanings(new Retouch(List.of()), List.of(), Optional.of(half), Folds.NONE));
+        assertEquals(Set.of(RetouchMarks.Meaning.WEIGHS), RetouchMarks.meanings(new Retouch(List.of()), List.of(), Optional.of(half),
+                Folds.NONE));
         new RetouchMarks(g, 200, new Picture(100, 100)).draw(new Retouch(List.of()), List.of(), Optional.of(half), Folds.NONE);
         g.dispose();
         int atMiddle = 0;

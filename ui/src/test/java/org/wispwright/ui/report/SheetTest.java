@@ -90,7 +90,8 @@ class SheetTest {
         Picture dark = new Picture(4, 4);
         Picture lit = new Picture(4, 4);
         lit.rgba()[0] = 0.2f;
-        SheetRow row = new SheetRow("a", "words", "frame 1", Optional.empty(), new Retouch(List.of()), List.of(), Optional.empty(), dark, lit, dark,
+        SheetRow row = new SheetRow("a", "words", "frame 1", Optional.empty(), new Retouch(List.of()), List.of(), Optional.empty(), dark,
+                lit, dark,
                 Folds.NONE, 0);
         assertEquals(4, new Sheet("t", "s", "original", Rgb.BLACK, List.of(row)).gain());
     }
@@ -114,7 +115,8 @@ class SheetTest {
     @Test
     void refusesPicturesOfDifferentRasters() {
         IllegalArgumentException refused = assertThrows(IllegalArgumentException.class, () -> new SheetRow("n", "w", "p", Optional.empty(),
-                new Retouch(List.of()), List.of(), Optional.empty(), new Picture(4, 4), new Picture(4, 4), new Picture(5, 4), Folds.NONE, 0));
+                new Retouch(List.of()), List.of(), Optional.empty(), new Picture(4, 4), new Picture(4, 4), new Picture(5, 4), Folds.NONE,
+                0));
         assertTrue(refused.getMessage().contains("4x4") && refused.getMessage().contains("5x4"), refused.getMessage());
     }
 

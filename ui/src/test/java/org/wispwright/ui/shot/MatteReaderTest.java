@@ -53,11 +53,15 @@ class MatteReaderTest {
         assertEquals(new CombinedMatte(CombinedMatte.Way.INVERSE, List.of(BOX)), read("{'inverse': " + BOX_TEXT + "}"));
     }
 
-    /** By hand: an 8-bit file of linear light 0.2158605 over alpha 128/255 has colour code 128, so over black it counts encode(0.2158605 128/255). */
+    /**
+     * By hand: an 8-bit file of linear light 0.2158605 over alpha 128/255 has colour code 128, so over black it counts encode(0.2158605
+     * 128/255).
+     */
     @Test
     void aPictureByEitherChannelAndOnlyOnce() throws IOException {
         float a = 128 / 255f;
-        PngFile.write(new Picture(2, 1, new float[] {1, 1, 1, 1, 0.2158605f * a, 0.2158605f * a, 0.2158605f * a, a}), folder.resolve("m.png"),
+        PngFile.write(new Picture(2, 1, new float[] {1, 1, 1, 1, 0.2158605f * a, 0.2158605f * a, 0.2158605f * a, a}),
+                folder.resolve("m.png"),
                 PngFile.Depth.EIGHT);
         ImageMatte grey = (ImageMatte) read("{'image': {'file': 'm.png'}, 'feather': 0.1}");
         assertEquals(0.1, grey.feather());
@@ -66,7 +70,8 @@ class MatteReaderTest {
         ImageMatte alpha = (ImageMatte) read("{'image': {'file': 'm.png', 'channel': 'alpha'}}");
         assertArrayEquals(new float[] {1, a}, alpha.pixels(), 1e-6f);
         assertEquals(0, alpha.feather());
-        CombinedMatte both = (CombinedMatte) read("{'union': [{'image': {'file': 'm.png'}}, {'image': {'file': 'm.png'}, 'feather': 0.2}]}");
+        CombinedMatte both = (CombinedMatte) read("{'union': [{'image': {'file': 'm.png'}}, {'image': {'file': 'm.png'}, 'feather': "
+                + "0.2}]}");
         assertSame(((ImageMatte) both.parts().get(0)).pixels(), ((ImageMatte) both.parts().get(1)).pixels());
     }
 }

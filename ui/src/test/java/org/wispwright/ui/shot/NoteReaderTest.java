@@ -84,7 +84,8 @@ class NoteReaderTest {
         Files.writeString(folder.resolve("notes/a.json"), """
                 {"wispwright": 1, "words": "As drawn.", "frame": 3, "view": "front", "retouch": [%s]}
                 """.formatted(text));
-        List<Note> notes = new NoteReader(ShotFolder.open(folder), new MattePictures(ShotFolder.open(folder), 1L << 30), findings).read().on();
+        List<Note> notes = new NoteReader(ShotFolder.open(folder), new MattePictures(ShotFolder.open(folder), 1L << 30),
+                findings).read().on();
         assertEquals(List.of(), findings.all());
         return notes.get(0).retouch().operations().get(0);
     }

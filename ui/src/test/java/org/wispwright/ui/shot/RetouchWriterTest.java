@@ -66,8 +66,10 @@ class RetouchWriterTest {
         }
         for (WarpKind kind : WarpKind.values()) {
             operations.add(new MeshWarp(kind, List.of(new Handle(new Point(0, 0.1), new Point(0.2, 0.3)), Handle.pin(new Point(0.5, 0.1)),
-                    Handle.pin(new Point(0.3, 1))), kind == WarpKind.AS_RIGID_AS_POSSIBLE ? new Cells(7, 9) : Cells.USUAL, Optional.empty()));
-            operations.add(new OutlineWarp(0.3, List.of(new Handle(new Point(0.1, 0.2), new Point(0.3, 0.1)), Handle.pin(new Point(0.4, 0.2))),
+                    Handle.pin(new Point(0.3, 1))), kind == WarpKind.AS_RIGID_AS_POSSIBLE ? new Cells(7, 9) : Cells.USUAL,
+                    Optional.empty()));
+            operations.add(new OutlineWarp(0.3, List.of(new Handle(new Point(0.1, 0.2), new Point(0.3, 0.1)), Handle.pin(new Point(0.4,
+                    0.2))),
                     1 / 7.0, kind, Optional.of(MATTES.get(0))));
         }
         // Pixels are looked at below.
@@ -106,7 +108,8 @@ class RetouchWriterTest {
                  {"stroke": {"brush": "add", "radius": 0.1, "line": [[0, 0]],
                   "within": {"image": {"file": "matte.png", "channel": "grey"}, "feather": 0.1}}}]}
                 """.formatted(layers);
-        Note note = NoteReader.note(JsonDoor.parse("odd.json", text.getBytes(StandardCharsets.UTF_8)).with(new MattePictures(shot, 1L << 30)),
+        Note note = NoteReader.note(JsonDoor.parse("odd.json", text.getBytes(StandardCharsets.UTF_8)).with(new MattePictures(shot,
+                1L << 30)),
                 "odd.json", shot);
         String written = NoteText.of(RetouchWriter.note(note, true));
         assertTrue(written.contains(layers) && written.contains("matte.png") && written.contains("\"channel\":\"grey\""), written);

@@ -137,7 +137,8 @@ public final class Between {
     }
 
     private static String drawn(Sweep sweep) {
-        return (sweep.pressure().values().isEmpty() ? "even pressure" : "changing pressure") + (sweep.spacing() > 0 ? " and a spacing" : "");
+        return (sweep.pressure().values().isEmpty() ? "even pressure" : "changing pressure") + (sweep.spacing() > 0 ? " and a spacing"
+                : "");
     }
 
     private static Optional<Matte> within(String where, Operation a, Operation b, double share) {

@@ -44,7 +44,8 @@ public record BrushedMatte(List<Dab> dabs) implements Matte {
         }
         dabs = List.copyOf(dabs);
         if (dabs.get(0).way() == Way.TAKE) {
-            throw new IllegalArgumentException("brushed matte: its first sweep takes away, and there is nothing yet; begin with one that adds");
+            throw new IllegalArgumentException("brushed matte: its first sweep takes away, and there is nothing yet; begin with one "
+                    + "that adds");
         }
     }
 

@@ -42,7 +42,8 @@ public record CombinedMatte(Way way, List<Matte> parts) implements Matte {
         parts = List.copyOf(parts);
         int depth = 1 + parts.stream().mapToInt(CombinedMatte::depth).max().orElse(0);
         if (depth > DEEPEST) {
-            throw new IllegalArgumentException("combined matte: mattes stand " + depth + " deep inside one another, needs at most " + DEEPEST
+            throw new IllegalArgumentException("combined matte: mattes stand " + depth + " deep inside one another, needs at most "
+                    + DEEPEST
                     + "; join those of one kind in one list");
         }
     }

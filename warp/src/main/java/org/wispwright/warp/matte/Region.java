@@ -257,7 +257,9 @@ public sealed interface Region extends Matte permits Region.Rectangle, Region.El
             return bounds;
         }
 
-        /** Distances near the outline alone, signs by the crossings: time grows with the outline's length, not with corners times pixels. */
+        /**
+         * Distances near the outline alone, signs by the crossings: time grows with the outline's length, not with corners times pixels.
+         */
         @Override
         public void rowDistances(double y, double[] x, int height, double reach, double[] out) {
             Arrays.fill(out, Double.POSITIVE_INFINITY);

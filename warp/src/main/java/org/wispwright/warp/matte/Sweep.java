@@ -48,7 +48,8 @@ public record Sweep(double radius, double strength, double softEdge, List<Point>
                     + line.size() + " points of 'line'");
         }
         if (!(spacing == 0 || spacing >= LEAST_SPACING && spacing <= MOST_SPACING)) {
-            throw new IllegalArgumentException("stroke: got spacing " + spacing + ", needs 0 (a line drawn through) or a share of the radius, "
+            throw new IllegalArgumentException("stroke: got spacing " + spacing + ", needs 0 (a line drawn through) or a share of the "
+                    + "radius, "
                     + LEAST_SPACING + " to " + MOST_SPACING);
         }
         if (spacing > 0 && !(length(line) / (spacing * radius) < MOST_DABS)) {

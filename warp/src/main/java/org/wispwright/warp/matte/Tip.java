@@ -19,7 +19,9 @@ record Tip(double radius, double centre, double middle, double fade, double fine
         return new Tip(r, 0.5, r - softEdge * r / 2, softEdge * r, 1, strength, on);
     }
 
-    /** 1 to half a pixel beyond the radius (a hard edge ends there), then falling to 0 over a feather; pressure acts on the radius alone. */
+    /**
+     * 1 to half a pixel beyond the radius (a hard edge ends there), then falling to 0 over a feather; pressure acts on the radius alone.
+     */
     static Tip reaching(double radius, double feather, Pressure.On on, int height) {
         double finest = Math.max(feather * height, 1);
         return new Tip(Picture.LONGEST_SIDE, 1 + 0.5 / finest, radius * height, 0, finest, 1, on == Pressure.On.STRENGTH ? null

@@ -7,7 +7,8 @@ import org.wispwright.warp.loss.PictureMeasure;
 /**
  * The review figures of one frame: how alike what a take shows is to what is wanted, in a region.
  *
- * @param structure         structural similarity of alpha, 1 = equal; see {@link StructuralSimilarity}; NaN where a side has under 11 pixels
+ * @param structure         structural similarity of alpha, 1 = equal; see {@link StructuralSimilarity}; NaN where a side has under 11
+ *                          pixels
  * @param meanSquare        mean squared error of alpha
  * @param peakSignalToNoise from meanSquare with peak 1, decibels; infinite where nothing differs
  * @param meanAbsolute      mean absolute error over RGBA

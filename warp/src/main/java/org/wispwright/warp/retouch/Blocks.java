@@ -5,9 +5,9 @@ import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.matte.Window;
 
 /**
- * A picture at one half, one quarter, ... 1/{@value #WIDEST} of its raster: blocks of 2, 4, ... pixels a side, aligned to its top left corner,
- * made where they are asked for and made anew where the picture changed. Beyond the border stands the border pixel: every level has two
- * rings of blocks around it, and those beyond the second are like it.
+ * A picture at one half, one quarter, ... 1/{@value #WIDEST} of its raster: blocks of 2, 4, ... pixels a side, aligned to its top left
+ * corner, made where they are asked for and made anew where the picture changed. Beyond the border stands the border pixel: every level has
+ * two rings of blocks around it, and those beyond the second are like it.
  * <p>Level l has blocks of k = 2^l pixels, {@code columns(l) x rows(l)} of them and the rings. From level to level along both axes
  * {@code out[i] = (in[2i-1] + 3 in[2i] + 3 in[2i+1] + in[2i+2]) / 8}, the refinement of the quadratic B-spline, so a block is the picture
  * weighed with about that spline, of variance {@code (k^2 - 1) / 4} pixels. A plain mean over the block would be cheaper, but lets a
@@ -36,7 +36,10 @@ final class Blocks {
         rgba = picture.rgba();
     }
 
-    /** From now on reads this picture of the same raster; what was made stays, so where it differs, {@link #changed} or {@link #forget} must be told. */
+    /**
+     * From now on reads this picture of the same raster; what was made stays, so where it differs, {@link #changed} or {@link #forget}
+     * must be told.
+     */
     void from(Picture picture) {
         rgba = picture.rgba();
     }

@@ -119,7 +119,8 @@ final class Brushwork {
             case SOFTEN -> soften(part, coverage, surroundings.blurred(tx, ty, tile), out);
             case RESTORE -> restore(part, coverage, out);
             case PUSH -> push.move(part, coverage, out);
-            case EVEN -> LocalContrast.apply(part, coverage, surroundings.blurred(tx, ty, tile), surroundings.colour(tx, ty, tile), -1, out);
+            case EVEN -> LocalContrast.apply(part, coverage, surroundings.blurred(tx, ty, tile), surroundings.colour(tx, ty, tile), -1,
+                    out);
             case LIFT -> LocalContrast.apply(part, coverage, surroundings.blurred(tx, ty, tile), surroundings.colour(tx, ty, tile), 1, out);
         }
     }

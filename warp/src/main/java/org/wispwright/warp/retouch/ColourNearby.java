@@ -7,8 +7,9 @@ import org.wispwright.render.picture.Picture;
  * {@code c = (K * rgb) / (K * a)} for premultiplied rgb, with the kernel {@code K = sum_k 100^-k G(2^k sigma)} and the mean over the
  * picture as its last and widest member. So smoke close by decides, and far smoke only where there is none close by. White if the
  * picture has no smoke.
- * <p>Works on the picture's {@link Blocks}: of at most {@value #ROWS} rows, and coarser yet for a wide brush, whose colour is as smooth; each
- * wider Gaussian on blocks as wide as it allows. That is enough for a colour and independent of the raster. Between blocks, cubic B-splines.
+ * <p>Works on the picture's {@link Blocks}: of at most {@value #ROWS} rows, and coarser yet for a wide brush, whose colour is as smooth;
+ * each wider Gaussian on blocks as wide as it allows. That is enough for a colour and independent of the raster. Between blocks, cubic
+ * B-splines.
  * <p>Source: Knutsson and Westin (1993), CVPR 93, 515-523.
  */
 final class ColourNearby {

@@ -12,8 +12,8 @@ import org.wispwright.render.picture.Picture;
  * {@code s^2 = sigma^2 / k^2 - 1/3 - (1 - 1/k^2) / 4}. What is left of the difference is in the fourth moment,
  * {@code -(7/120) (k / sigma)^4} of excess: the step response is within 0.0005 of the true one. Weights
  * {@code exp(-n^2 / (2 s^2))}, |n| up to {@value #CUT} s, sum 1.
- * <p>k follows the brush, so the same brush at rasters of 256, 512 and 2048 rows blurs the same blocks. The bits of a pixel do not depend on
- * which tiles were asked for before.
+ * <p>k follows the brush, so the same brush at rasters of 256, 512 and 2048 rows blurs the same blocks. The bits of a pixel do not depend
+ * on which tiles were asked for before.
  * <p>Sources: Burt (1981), Computer Graphics and Image Processing 16, 20-51 (blurring at reduced resolution); Unser, Aldroubi and Eden
  * (1993), IEEE Trans. Signal Processing 41(2), 821-833 (B-splines; the variance of the cubic one is 1/3). The bookkeeping is ours.
  */
@@ -155,7 +155,8 @@ final class Gaussian {
     }
 
     /** Reads wide x high pixels from (x,y) on between blocks i0.., j0.. (across x down of them) into rows of {@code stride} floats. */
-    static void spread(float[] coarse, int across, int down, int channels, int level, float[] splines, int i0, int j0, int x, int y, int wide,
+    static void spread(float[] coarse, int across, int down, int channels, int level, float[] splines, int i0, int j0, int x, int y,
+            int wide,
             int high, float[] out, int stride) {
         int mask = (1 << level) - 1;
         int row = channels * wide;
@@ -179,7 +180,8 @@ final class Gaussian {
             int from = row * (first(y + j, level) - j0);
             int at = stride * j;
             for (int n = 0; n < row; n++) {
-                out[at + n] = a * lines[from + n] + b * lines[from + row + n] + c * lines[from + 2 * row + n] + d * lines[from + 3 * row + n];
+                out[at + n] = a * lines[from + n] + b * lines[from + row + n] + c * lines[from + 2 * row + n]
+                        + d * lines[from + 3 * row + n];
             }
         }
     }

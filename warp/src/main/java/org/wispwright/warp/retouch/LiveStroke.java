@@ -10,8 +10,8 @@ import org.wispwright.warp.matte.Sweep;
 import org.wispwright.warp.matte.Window;
 
 /**
- * A stroke while it is drawn on a {@link Canvas}: every few points that the pointer gives refresh the pixels near them and no others. At any
- * time the canvas shows what {@link Retoucher#wanted} makes of the operations before and {@link #stroke} as it is by then, to the bit.
+ * A stroke while it is drawn on a {@link Canvas}: every few points that the pointer gives refresh the pixels near them and no others. At
+ * any time the canvas shows what {@link Retoucher#wanted} makes of the operations before and {@link #stroke} as it is by then, to the bit.
  * <p>It ends once, by {@link #end} or {@link #cancel}.
  */
 public final class LiveStroke {

@@ -52,8 +52,8 @@ final class Push {
             double from = (double) n / parts;
             double to = (n + 1.0) / parts;
             double middle = pressureA + (from + to) / 2 * (pressureB - pressureA);
-            piece(a.x() + from * (b.x() - a.x()), a.y() + from * (b.y() - a.y()), a.x() + to * (b.x() - a.x()), a.y() + to * (b.y() - a.y()),
-                    narrows ? middle * sweep.radius() : sweep.radius());
+            piece(a.x() + from * (b.x() - a.x()), a.y() + from * (b.y() - a.y()), a.x() + to * (b.x() - a.x()),
+                    a.y() + to * (b.y() - a.y()), narrows ? middle * sweep.radius() : sweep.radius());
         }
     }
 
@@ -136,8 +136,8 @@ final class Push {
     }
 
     /**
-     * Bicubic (Keys, a = -1/2) at the sample position, the border pixel standing beyond the border. Where no pixel it reads is brighter than
-     * white, the overshoot is not either.
+     * Bicubic (Keys, a = -1/2) at the sample position, the border pixel standing beyond the border. Where no pixel it reads is brighter
+     * than white, the overshoot is not either.
      */
     private void read(double px, double py, float[] out, int at) {
         int width = before.width();

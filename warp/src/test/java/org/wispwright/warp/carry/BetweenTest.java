@@ -30,7 +30,9 @@ class BetweenTest {
         assertClose(b, (Stroke) one(a, b, 1));
     }
 
-    /** A line of two pieces of length 1 and 3 against one with corners at a quarter and a half: all three arcs appear, no corner is lost. */
+    /**
+     * A line of two pieces of length 1 and 3 against one with corners at a quarter and a half: all three arcs appear, no corner is lost.
+     */
     @Test
     void linesMatchByArcLengthAndKeepEveryCorner() {
         Stroke a = stroke(Brush.REMOVE, 0.1, 1, 0, Optional.empty(), new Point(0, 0), new Point(1, 0), new Point(1, 3));

@@ -68,7 +68,9 @@ class FeatherAndImageTest {
         }
     }
 
-    /** By hand. As many pixels: themselves. Two for three: (2 a + b) / 3, (b + 2 c) / 3. Four for two: a, (3 a + b) / 4, (a + 3 b) / 4, b. */
+    /**
+     * By hand. As many pixels: themselves. Two for three: (2 a + b) / 3, (b + 2 c) / 3. Four for two: a, (3 a + b) / 4, (a + 3 b) / 4, b.
+     */
     @Test
     void resamplingByHand() {
         float[] noise = MatteScenes.noise(7 * 5, 3);
@@ -95,10 +97,14 @@ class FeatherAndImageTest {
         assertEquals(whole, mean, 1e-6);
     }
 
-    /** IEC 61966-2-1 decodes code 128 to 0.2158605; as a matte it counts 128/255 again. Alpha is itself, and colour over black is premultiplied. */
+    /**
+     * IEC 61966-2-1 decodes code 128 to 0.2158605; as a matte it counts 128/255 again. Alpha is itself, and colour over black is
+     * premultiplied.
+     */
     @Test
     void channelsByHand() {
-        float[] rgba = {0, 0, 0, 1, 1, 1, 1, 1, 0.2158605f, 0.2158605f, 0.2158605f, 1, 0, 0, 0, 0.25f, 0.2158605f, 0.2158605f, 0.2158605f, 0.3f};
+        float[] rgba = {0, 0, 0, 1, 1, 1, 1, 1, 0.2158605f, 0.2158605f, 0.2158605f, 1, 0, 0, 0, 0.25f, 0.2158605f, 0.2158605f, 0.2158605f,
+                0.3f};
         Picture picture = new Picture(5, 1, rgba);
         assertArrayEquals(new float[] {0, 1, 128f / 255, 0, 128f / 255}, ImageMatte.pixels(picture, ImageMatte.Channel.GREY), 1e-6f);
         assertArrayEquals(new float[] {1, 1, 1, 0.25f, 0.3f}, ImageMatte.pixels(picture, ImageMatte.Channel.ALPHA));

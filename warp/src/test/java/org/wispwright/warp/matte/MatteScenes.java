@@ -13,7 +13,10 @@ final class MatteScenes {
     private MatteScenes() {
     }
 
-    /** White smoke whose opacity is a smooth function of the place, the mean over each pixel as a renderer would give it; width 3/4 of the height. */
+    /**
+     * White smoke whose opacity is a smooth function of the place, the mean over each pixel as a renderer would give it; width 3/4 of the
+     * height.
+     */
     static Picture smoke(int height) {
         int width = Math.max(1, Math.round(0.75f * height));
         Picture picture = new Picture(width, height);

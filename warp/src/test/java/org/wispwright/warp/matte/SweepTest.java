@@ -91,7 +91,8 @@ class SweepTest {
             for (int n = 0; n < got.length; n++) {
                 String place = "seed " + seed + " pixel (" + n % WIDTH + ", " + n / WIDTH + ")";
                 // 0.002: the search of the peak; 0.0005: a step of the twin.
-                assertEquals(plain(sweep, (n % WIDTH + 0.5) / HEIGHT, (n / WIDTH + 0.5) / HEIGHT, HEIGHT), got[n], even || spacing > 0 ? 0.0005 : 0.0025, place);
+                assertEquals(plain(sweep, (n % WIDTH + 0.5) / HEIGHT, (n / WIDTH + 0.5) / HEIGHT, HEIGHT), got[n],
+                        even || spacing > 0 ? 0.0005 : 0.0025, place);
                 seen = Math.max(seen, got[n]);
             }
         }
@@ -104,7 +105,8 @@ class SweepTest {
     void aWindowHasTheBitsOfTheWhole(Pressure.On on) {
         for (Sweep sweep : List.of(random(11, 9, on, false, 0.5, 0), random(12, 9, on, true, 0.5, 0), random(13, 9, on, false, 0.5, 0.3))) {
             float[] whole = sweep.coverage(ALL, HEIGHT);
-            for (Window window : List.of(new Window(0, 0, 1, 1), new Window(13, 7, 29, 21), new Window(50, 36, 1, 1), new Window(5, 30, 40, 3))) {
+            for (Window window : List.of(new Window(0, 0, 1, 1), new Window(13, 7, 29, 21), new Window(50, 36, 1, 1),
+                    new Window(5, 30, 40, 3))) {
                 float[] part = sweep.coverage(window, HEIGHT);
                 for (int n = 0; n < part.length; n++) {
                     assertEquals(whole[window.left() + n % window.width() + WIDTH * (window.top() + n / window.width())], part[n]);
@@ -203,7 +205,8 @@ class SweepTest {
     /** Going back and pressing harder on the spot are kept. */
     @Test
     void thinningKeepsTurnsAndPresses() {
-        List<Point> line = List.of(new Point(0.1, 0.5), new Point(0.11, 0.5), new Point(0.12, 0.5), new Point(0.11, 0.5), new Point(0.1, 0.5),
+        List<Point> line = List.of(new Point(0.1, 0.5), new Point(0.11, 0.5), new Point(0.12, 0.5), new Point(0.11, 0.5), new Point(0.1,
+                0.5),
                 new Point(0.1, 0.5), new Point(0.1, 0.5));
         Trail trail = new Trail(line, List.of(1.0, 1.0, 1.0, 1.0, 1.0, 0.2, 0.9)).thinned(0.2, 1);
         assertEquals(List.of(line.get(0), line.get(2), line.get(4), line.get(5), line.get(6)), trail.line());

@@ -209,7 +209,10 @@ class PlaneMeasuresTest {
         assertThrows(IllegalArgumentException.class, () -> Likeness.of(a, b, ones, 0));
     }
 
-    /** Ours: nothing against nothing has nowhere to move, nothing against something no way; a picture too small for the window has no structure. */
+    /**
+     * Ours: nothing against nothing has nowhere to move, nothing against something no way; a picture too small for the window has no
+     * structure.
+     */
     @Test
     void likenessOfNothing() {
         Picture none = new Picture(10, 20);

@@ -72,7 +72,9 @@ class GaussianTest {
         }
     }
 
-    /** A step at every offset to the blocks: the normal distribution's integral (Abramowitz and Stegun 26.2), within what the class states. */
+    /**
+     * A step at every offset to the blocks: the normal distribution's integral (Abramowitz and Stegun 26.2), within what the class states.
+     */
     @ParameterizedTest
     @ValueSource(doubles = {8, 9.1, 13.7, 16, 40})
     void aStepEqualsTheErrorIntegral(double sigma) {

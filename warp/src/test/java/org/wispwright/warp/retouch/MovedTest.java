@@ -36,7 +36,8 @@ class MovedTest {
             new MeshWarp(List.of(new Handle(new Point(0, 0), new Point(0.5, 0.25)), Handle.pin(new Point(1, 0)), Handle.pin(new Point(0,
                     1))),
                     Optional.of(MATTES.get(2))),
-            new OutlineWarp(0.25, List.of(new Handle(new Point(0, 0), new Point(0.5, 0.25))), 0.125, WarpKind.RIGID, Optional.of(MATTES.get(4))));
+            new OutlineWarp(0.25, List.of(new Handle(new Point(0, 0), new Point(0.5, 0.25))), 0.125, WarpKind.RIGID,
+            Optional.of(MATTES.get(4))));
 
     /** The lists above are whole: a kind that joins must join them. */
     @Test

@@ -325,7 +325,8 @@ class RetoucherTest {
     private static void assertTouchedCovers(Retouch before, Retouch all, double far) {
         Picture original = Retoucher.wanted(before, smoke(128));
         Picture wanted = Retoucher.wanted(all, smoke(128));
-        float[] touched = Retoucher.touched(new Retouch(all.operations().subList(before.operations().size(), all.operations().size())), original,
+        float[] touched = Retoucher.touched(new Retouch(all.operations().subList(before.operations().size(), all.operations().size())),
+                original,
                 0.04);
         assertFalse(Arrays.equals(original.rgba(), wanted.rgba()));
         double untouched = 0;

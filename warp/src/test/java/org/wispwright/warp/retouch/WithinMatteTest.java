@@ -18,7 +18,9 @@ import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.matte.Region;
 import org.wispwright.warp.matte.Sweep;
 
-/** Every operation within a matte of every kind changes nothing where the matte is 0, something where it is not, and a stroke says where. */
+/**
+ * Every operation within a matte of every kind changes nothing where the matte is 0, something where it is not, and a stroke says where.
+ */
 class WithinMatteTest {
     static List<Matte> mattes() {
         float[] half = new float[12 * 16];
