@@ -20,7 +20,10 @@ public final class Cover {
     private final float[] values;
     private final Rows rows;
     private boolean begun;
+    /** Whether the last piece had even pressure. */
     private boolean level;
+    /** Whether what a touch at the last point gives is still to be taken in. */
+    private boolean open;
     private double x;
     private double y;
     private double pressure;
@@ -99,6 +102,7 @@ public final class Cover {
             if (!same) {
                 touch(bx, by, Math.max(p, pressure));
                 level = false;
+                open = false;
             }
             return;
         }
@@ -107,12 +111,15 @@ public final class Cover {
         if (same) {
             if (level) {
                 joint(nextX, nextY);
+            } else if (open) {
+                touch(x, y, pressure);
             }
             strip(nextX, nextY, length);
         } else {
             cone(nextX, nextY, length, p);
         }
         level = same;
+        open = !same;
         ux = nextX;
         uy = nextY;
     }
@@ -187,11 +194,16 @@ public final class Cover {
         }
     }
 
-    /** A piece whose pressure goes from that of the last point to p, both ends taken in. */
+    /**
+     * A piece whose pressure goes from that of the last point to p, its start taken in. Where coverage is the most at its end, that is left
+     * to what follows: the next piece, or the touch that ends the line.
+     */
     private void cone(double vx, double vy, double length, double p) {
         double end = tip.end(Math.max(p, pressure));
         double slope = (p - pressure) / length;
         double harder = Math.max(p, pressure);
+        double core = Math.max(0, tip.core(harder));
+        float most = (float) tip.most(harder);
         double farY = y + length * vy;
         double farX = x + length * vx;
         rows.between(Math.min(y, farY) - end, Math.max(y, farY) + end);
@@ -200,39 +212,52 @@ public final class Cover {
             rows.all();
             rows.keep(1, Math.min(x, farX) - end, Math.max(x, farX) + end);
             rows.keep(vy, vy * x + vx * dy - end, vy * x + vx * dy + end);
+            if (slope > 0) {
+                // Ahead of the end coverage rises all along the piece.
+                rows.keep(vx, Double.NEGATIVE_INFINITY, vx * x - vy * dy + length);
+            }
             int at = window.width() * (j - window.top()) - window.left();
             for (int i = rows.left; i <= rows.right; i++) {
                 double along = (i - x) * vx + dy * vy;
                 double beside = (i - x) * vy - dy * vx;
                 double past = Math.max(0, Math.max(-along, along - length));
                 double squared = beside * beside + past * past;
+                if (squared >= end * end || values[at + i] >= most) {
+                    continue;
+                }
+                double fromHarder = slope > 0 ? along - length : along;
+                if (beside * beside + fromHarder * fromHarder <= core * core) {
+                    values[at + i] = most;
+                    continue;
+                }
                 // No point of the piece gives more than the nearest would, pressed as hard as the harder end.
-                if (squared < end * end && tip.value(squared, harder) > values[at + i]) {
-                    values[at + i] = Math.max(values[at + i], (float) peak(along, beside * beside, length, slope));
+                double distance = Math.sqrt(squared);
+                if (tip.at(distance, harder) > values[at + i]) {
+                    values[at + i] = Math.max(values[at + i], (float) peak(along, beside * beside, distance, length, slope));
                 }
             }
         }
     }
 
-    /** The most along a piece, between the nearest point and the end that was pressed harder. */
-    private double peak(double along, double beside2, double length, double slope) {
+    /** The most along a piece, between the nearest point, which is at {@code distance}, and the end that was pressed harder. */
+    private double peak(double along, double beside2, double distance, double length, double slope) {
         double near = Math.min(length, Math.max(0, along));
         double far = slope > 0 ? length : 0;
-        double atNear = tip.value(beside2 + (along - near) * (along - near), pressure + slope * near);
+        double atNear = tip.at(distance, pressure + slope * near);
         if (near == far) {
             return atNear;
         }
-        double atFar = tip.value(beside2 + (along - far) * (along - far), pressure + slope * far);
         double narrow = SEARCH_SHARE * Math.max(tip.fade(), tip.finest());
-        // One peak: if coverage still rises towards an end there, that end has it.
+        // One peak: if coverage falls away from an end there, that end has it.
         double step = Math.min(narrow, Math.abs(far - near)) / 8 * Math.signum(far - near);
-        double within = far - step;
-        if (tip.value(beside2 + (along - within) * (along - within), pressure + slope * within) < atFar) {
-            return atFar;
-        }
-        within = near + step;
+        double within = near + step;
         if (tip.value(beside2 + (along - within) * (along - within), pressure + slope * within) < atNear) {
             return atNear;
+        }
+        double atFar = tip.value(beside2 + (along - far) * (along - far), pressure + slope * far);
+        within = far - step;
+        if (tip.value(beside2 + (along - within) * (along - within), pressure + slope * within) < atFar) {
+            return atFar;
         }
         double best = Math.max(atNear, atFar);
         double a = near;

@@ -148,13 +148,16 @@ final class Blocks {
         float[] line = new float[4 * (2 * (right - left) + 4)];
         for (int j = top; j <= bottom; j++) {
             down(level - 1, in, 2 * left - 1, j, line);
-            float[] out = levels[level];
-            int at = at(level, left, j);
-            for (int n = 0; n < line.length - 8; n += 8) {
-                for (int c = n; c < n + 4; c++, at++) {
-                    out[at] = 0.125f * (line[c] + line[c + 12] + 3 * (line[c + 4] + line[c + 8]));
-                }
-            }
+            across(line, levels[level], at(level, left, j));
+        }
+    }
+
+    private static void across(float[] line, float[] out, int first) {
+        for (int n = 0, at = first; n < line.length - 8; n += 8, at += 4) {
+            out[at] = 0.125f * (line[n] + line[n + 12] + 3 * (line[n + 4] + line[n + 8]));
+            out[at + 1] = 0.125f * (line[n + 1] + line[n + 13] + 3 * (line[n + 5] + line[n + 9]));
+            out[at + 2] = 0.125f * (line[n + 2] + line[n + 14] + 3 * (line[n + 6] + line[n + 10]));
+            out[at + 3] = 0.125f * (line[n + 3] + line[n + 15] + 3 * (line[n + 7] + line[n + 11]));
         }
     }
 
@@ -169,13 +172,19 @@ final class Blocks {
         int count = line.length / 4;
         int low = Math.min(count, Math.max(0, least - first));
         int high = Math.max(low, Math.min(count, most - first + 1));
-        for (int n = 4 * low, at = 4 * (first + low); n < 4 * high; n++, at++) {
-            line[n] = 0.125f * (in[a + at] + in[d + at] + 3 * (in[b + at] + in[c + at]));
+        int at = 4 * (first + low);
+        rows(in, a + at, b + at, c + at, d + at, line, 4 * low, 4 * (high - low));
+        for (int i = 0; i < low; i++) {
+            System.arraycopy(line, 4 * low, line, 4 * i, 4);
         }
-        for (int i = 0; i < count; i++) {
-            if (i < low || i >= high) {
-                System.arraycopy(line, 4 * Math.min(high - 1, Math.max(low, i)), line, 4 * i, 4);
-            }
+        for (int i = high; i < count; i++) {
+            System.arraycopy(line, 4 * (high - 1), line, 4 * i, 4);
+        }
+    }
+
+    private static void rows(float[] in, int a, int b, int c, int d, float[] line, int at, int count) {
+        for (int n = 0; n < count; n++) {
+            line[at + n] = 0.125f * (in[a + n] + in[d + n] + 3 * (in[b + n] + in[c + n]));
         }
     }
 

@@ -162,27 +162,33 @@ final class Gaussian {
         int row = channels * wide;
         float[] lines = new float[row * down];
         for (int j = 0; j < down; j++) {
-            for (int i = 0, n = row * j; i < wide; i++) {
+            for (int i = 0; i < wide; i++) {
                 int w = 4 * (x + i & mask);
-                int from = channels * (first(x + i, level) - i0 + across * j);
-                for (int c = 0; c < channels; c++, n++) {
-                    lines[n] = splines[w] * coarse[from + c] + splines[w + 1] * coarse[from + channels + c]
-                            + splines[w + 2] * coarse[from + 2 * channels + c] + splines[w + 3] * coarse[from + 3 * channels + c];
-                }
+                mixOne(coarse, channels * (first(x + i, level) - i0 + across * j), channels, splines[w], splines[w + 1], splines[w + 2],
+                        splines[w + 3], lines, row * j + channels * i);
             }
         }
         for (int j = 0; j < high; j++) {
             int w = 4 * (y + j & mask);
-            float a = splines[w];
-            float b = splines[w + 1];
-            float c = splines[w + 2];
-            float d = splines[w + 3];
-            int from = row * (first(y + j, level) - j0);
-            int at = stride * j;
-            for (int n = 0; n < row; n++) {
-                out[at + n] = a * lines[from + n] + b * lines[from + row + n] + c * lines[from + 2 * row + n]
-                        + d * lines[from + 3 * row + n];
-            }
+            mixRows(lines, row * (first(y + j, level) - j0), row, splines[w], splines[w + 1], splines[w + 2], splines[w + 3], out, stride * j);
+        }
+    }
+
+    // The loops stand in methods of their own, however few their lines: the compiler then makes each of them quick on its own, whichever
+    // brush came first.
+    private static void mixOne(float[] in, int from, int channels, float a, float b, float c, float d, float[] out, int at) {
+        for (int n = 0; n < channels; n++) {
+            int i = from + n;
+            out[at + n] = a * in[i] + b * in[i + channels] + c * in[i + 2 * channels] + d * in[i + 3 * channels];
+        }
+    }
+
+    private static void mixRows(float[] in, int from, int row, float a, float b, float c, float d, float[] out, int at) {
+        int second = from + row;
+        int third = second + row;
+        int fourth = third + row;
+        for (int n = 0; n < row; n++) {
+            out[at + n] = a * in[from + n] + b * in[second + n] + c * in[third + n] + d * in[fourth + n];
         }
     }
 

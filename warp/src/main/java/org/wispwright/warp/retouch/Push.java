@@ -6,7 +6,6 @@ import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.matte.Pressure;
 import org.wispwright.warp.matte.Sweep;
 import org.wispwright.warp.matte.Window;
-import org.wispwright.warp.resample.Kernel;
 import org.wispwright.warp.resample.Resampling;
 
 /**
@@ -31,10 +30,13 @@ final class Push {
     private final Sweep sweep;
     private final Picture before;
     private final int tilesAcross;
-    /** Travel so far, not yet shortened: x and y in heights, two numbers a pixel of a tile; null where there is none. */
+    /** Travel so far, not yet shortened, in heights: of a tile's pixels first x, then y; null where there is none. */
     private final double[][] travels;
-    private final double[] wx = new double[4];
-    private final double[] wy = new double[4];
+    /** Where the columns' centres are, in heights. */
+    private final double[] centres;
+    private final double[] travelled = new double[TILE];
+    private final float[] wx = new float[4];
+    private final float[] wy = new float[4];
 
     /** A line without a piece yet; {@code before} is the picture before the stroke, read only. */
     Push(Sweep sweep, Picture before) {
@@ -42,6 +44,10 @@ final class Push {
         this.before = before;
         tilesAcross = (before.width() + TILE - 1) / TILE;
         travels = new double[tilesAcross * ((before.height() + TILE - 1) / TILE)][];
+        centres = new double[before.width()];
+        for (int i = 0; i < centres.length; i++) {
+            centres[i] = (i + 0.5) / before.height();
+        }
     }
 
     /** The line goes on by a piece. */
@@ -66,36 +72,55 @@ final class Push {
         }
         double ux = (bx - ax) / length;
         double uy = (by - ay) / length;
-        int right = window.left() + window.width() - 1;
         for (int j = window.top(); j < window.top() + window.height(); j++) {
             double py = (j + 0.5) / height - ay;
-            for (int i = window.left(); i <= right;) {
+            // Only columns less than r beside the line, and a pixel more.
+            double middle = Math.abs(uy) < 1e-9 ? 0 : ax + py * ux / uy;
+            double reach = Math.abs(uy) < 1e-9 ? Double.POSITIVE_INFINITY : r / Math.abs(uy);
+            int left = (int) Math.max(window.left(), Math.floor((middle - reach) * height) - 1);
+            int right = (int) Math.min(window.left() + window.width() - 1, Math.ceil((middle + reach) * height) + 1);
+            for (int i = left; i <= right; i = i / TILE * TILE + TILE) {
                 int tile = i / TILE + tilesAcross * (j / TILE);
-                int end = Math.min(right, i / TILE * TILE + TILE - 1);
-                for (int at = 2 * (i % TILE + TILE * (j % TILE)); i <= end; i++, at += 2) {
-                    double px = (i + 0.5) / height - ax;
-                    double beside = px * uy - py * ux;
-                    if (beside * beside < r * r) {
-                        double t = travel(px * ux + py * uy, beside, length, r);
-                        if (t != 0) {
-                            if (travels[tile] == null) {
-                                travels[tile] = new double[2 * TILE * TILE];
-                            }
-                            travels[tile][at] += t * ux;
-                            travels[tile][at + 1] += t * uy;
-                        }
-                    }
+                if (travels[tile] == null) {
+                    travels[tile] = new double[2 * TILE * TILE];
                 }
+                int count = Math.min(right + 1, i / TILE * TILE + TILE) - i;
+                int at = i % TILE + TILE * (j % TILE);
+                travel(centres, i, count, ax, py, ux, uy, length, r, travelled);
+                add(travelled, count, ux, travels[tile], at);
+                add(travelled, count, uy, travels[tile], at + TILE * TILE);
             }
+        }
+    }
+
+    private static void add(double[] t, int count, double u, double[] out, int at) {
+        for (int n = 0; n < count; n++) {
+            out[at + n] += t[n] * u;
+        }
+    }
+
+    /** The integral of w over a straight piece from its start (ax, 0), for {@code count} places of a row that is {@code py} below it. */
+    private static void travel(double[] centres, int from, int count, double ax, double py, double ux, double uy, double length, double r,
+            double[] out) {
+        double perR2 = 1 / (r * r);
+        for (int n = 0; n < count; n++) {
+            double px = centres[from + n] - ax;
+            double along = px * ux + py * uy;
+            double beside = px * uy - py * ux;
+            double near = Math.max(0, 1 - beside * beside * perR2);
+            double half = r * Math.sqrt(near);
+            double a = Math.max(-half, -along);
+            double b = Math.min(half, length - along);
+            out[n] = 0.75 * Math.max(0, b - a) * (near - (b * b + b * a + a * a) * perR2 / 3);
         }
     }
 
     /** Sets x and y of out to T at a pixel, in heights. */
     void travel(int x, int y, double[] out) {
         double[] travel = travels[x / TILE + tilesAcross * (y / TILE)];
-        int at = 2 * (x % TILE + TILE * (y % TILE));
+        int at = x % TILE + TILE * (y % TILE);
         out[0] = travel == null ? 0 : travel[at];
-        out[1] = travel == null ? 0 : travel[at + 1];
+        out[1] = travel == null ? 0 : travel[at + TILE * TILE];
         double squared = out[0] * out[0] + out[1] * out[1];
         if (squared > sweep.radius() * sweep.radius()) {
             double shorter = sweep.radius() / Math.sqrt(squared);
@@ -123,18 +148,6 @@ final class Push {
         }
     }
 
-    /** The integral of w over a straight piece, for a place {@code along} it from its start and {@code beside} it. */
-    private static double travel(double along, double beside, double length, double r) {
-        double near = 1 - beside * beside / (r * r);
-        if (near <= 0) {
-            return 0;
-        }
-        double half = r * Math.sqrt(near);
-        double from = Math.max(-half, -along);
-        double to = Math.min(half, length - along);
-        return from < to ? 0.75 * (to - from) * (near - (to * to + to * from + from * from) / (3 * r * r)) : 0;
-    }
-
     /**
      * Bicubic (Keys, a = -1/2) at the sample position, the border pixel standing beyond the border. Where no pixel it reads is brighter
      * than white, the overshoot is not either.
@@ -146,30 +159,56 @@ final class Push {
         double y = Math.min(height - 1, Math.max(0, py));
         int x0 = (int) x;
         int y0 = (int) y;
-        Kernel.KEYS.weights(x - x0, wx);
-        Kernel.KEYS.weights(y - y0, wy);
-        double red = 0;
-        double green = 0;
-        double blue = 0;
-        double alpha = 0;
-        boolean glows = false;
+        keys((float) (x - x0), wx);
+        keys((float) (y - y0), wy);
+        int a = 4 * Math.max(0, x0 - 1);
+        int b = 4 * x0;
+        int c = 4 * Math.min(width - 1, x0 + 1);
+        int d = 4 * Math.min(width - 1, x0 + 2);
+        float wa = wx[0];
+        float wb = wx[1];
+        float wc = wx[2];
+        float wd = wx[3];
+        float red = 0;
+        float green = 0;
+        float blue = 0;
+        float alpha = 0;
         float[] in = before.rgba();
         for (int n = 0; n < 4; n++) {
-            int row = width * Math.min(height - 1, Math.max(0, y0 - 1 + n));
-            for (int m = 0; m < 4; m++) {
-                int from = 4 * (row + Math.min(width - 1, Math.max(0, x0 - 1 + m)));
-                double w = wy[n] * wx[m];
-                red += w * in[from];
-                green += w * in[from + 1];
-                blue += w * in[from + 2];
-                alpha += w * in[from + 3];
-                glows |= in[from] > in[from + 3] || in[from + 1] > in[from + 3] || in[from + 2] > in[from + 3];
+            int row = 4 * width * Math.min(height - 1, Math.max(0, y0 - 1 + n));
+            float w = wy[n];
+            red += w * (wa * in[row + a] + wb * in[row + b] + (wc * in[row + c] + wd * in[row + d]));
+            green += w * (wa * in[row + a + 1] + wb * in[row + b + 1] + (wc * in[row + c + 1] + wd * in[row + d + 1]));
+            blue += w * (wa * in[row + a + 2] + wb * in[row + b + 2] + (wc * in[row + c + 2] + wd * in[row + d + 2]));
+            alpha += w * (wa * in[row + a + 3] + wb * in[row + b + 3] + (wc * in[row + c + 3] + wd * in[row + d + 3]));
+        }
+        boolean bright = red > alpha || green > alpha || blue > alpha;
+        float most = bright && !glows(x0, y0) ? alpha : Float.POSITIVE_INFINITY;
+        out[at] = Math.min(most, red);
+        out[at + 1] = Math.min(most, green);
+        out[at + 2] = Math.min(most, blue);
+        out[at + 3] = alpha;
+    }
+
+    /** Whether one of the 4 x 4 pixels around is brighter than white smoke of its opacity. */
+    private boolean glows(int x0, int y0) {
+        float[] in = before.rgba();
+        for (int y = Math.max(0, y0 - 1); y <= Math.min(before.height() - 1, y0 + 2); y++) {
+            for (int x = Math.max(0, x0 - 1); x <= Math.min(before.width() - 1, x0 + 2); x++) {
+                int from = 4 * (x + before.width() * y);
+                if (in[from] > in[from + 3] || in[from + 1] > in[from + 3] || in[from + 2] > in[from + 3]) {
+                    return true;
+                }
             }
         }
-        double most = glows ? Double.POSITIVE_INFINITY : alpha;
-        out[at] = (float) Math.min(most, red);
-        out[at + 1] = (float) Math.min(most, green);
-        out[at + 2] = (float) Math.min(most, blue);
-        out[at + 3] = (float) alpha;
+        return false;
+    }
+
+    /** {@link org.wispwright.warp.resample.Kernel#KEYS} in float. */
+    private static void keys(float t, float[] out) {
+        out[0] = ((1 - 0.5f * t) * t - 0.5f) * t;
+        out[1] = (1.5f * t - 2.5f) * t * t + 1;
+        out[2] = ((2 - 1.5f * t) * t + 0.5f) * t;
+        out[3] = (0.5f * t - 0.5f) * t * t;
     }
 }
