@@ -26,6 +26,7 @@ final class Brushwork {
     private final Picture before;
     private final int tilesAcross;
     private final Cover cover;
+    private final Spare spare;
     private final Surroundings surroundings;
     private final Push push;
     private final float[][] mattes;
@@ -41,16 +42,18 @@ final class Brushwork {
      * @param blocks   those of {@code before}
      * @param window   the part that the line may reach
      * @param coverage one a pixel of the window, all 0: overwritten
+     * @param spare    where arrays come from, and go to when {@link #over} is called
      */
-    Brushwork(Stroke stroke, Picture original, Picture before, Blocks blocks, Window window, float[] coverage) {
+    Brushwork(Stroke stroke, Picture original, Picture before, Blocks blocks, Window window, float[] coverage, Spare spare) {
         this.stroke = stroke;
         this.original = original;
         this.before = before;
         tilesAcross = (before.width() + TILE - 1) / TILE;
         int tiles = tilesAcross * ((before.height() + TILE - 1) / TILE);
         cover = new Cover(stroke.sweep(), before.height(), window, coverage);
-        surroundings = new Surroundings(stroke, before, blocks, tiles);
-        push = stroke.brush() == Brush.PUSH ? new Push(stroke.sweep(), before) : null;
+        this.spare = spare;
+        surroundings = new Surroundings(stroke, before, blocks, tiles, spare);
+        push = stroke.brush() == Brush.PUSH ? new Push(stroke.sweep(), before, spare) : null;
         mattes = stroke.within().isPresent() ? new float[tiles][] : null;
     }
 
@@ -84,38 +87,68 @@ final class Brushwork {
         lastPressure = pressure;
     }
 
+    /** The stroke is done. */
+    void over() {
+        surroundings.over();
+        if (push != null) {
+            push.over();
+        }
+    }
+
     /** Writes the pixels of a window as the line so far leaves them; {@code picture} may be the picture before the stroke itself. */
     void refresh(Window window, Picture picture) {
+        boolean once = picture == before;
         List<Window> parts = new ArrayList<>();
         List<float[]> results = new ArrayList<>();
+        float[] coverage = spare.floats(1);
         for (int ty = window.top() / TILE; ty <= (window.top() + window.height() - 1) / TILE; ty++) {
             for (int tx = window.left() / TILE; tx <= (window.left() + window.width() - 1) / TILE; tx++) {
                 Window part = common(window, tx, ty);
-                float[] coverage = new float[part.pixels()];
                 cover.read(part, coverage);
-                boolean covered = anything(coverage);
-                if (covered || picture != before) {
-                    float[] out = new float[4 * part.pixels()];
-                    read(before, part, out);
-                    if (covered) {
-                        within(coverage, part, tx, ty);
-                        work(tx, ty, part, coverage, out);
+                boolean covered = anything(coverage, part.pixels());
+                if (!covered) {
+                    if (!once) {
+                        copy(part, picture);
                     }
+                    continue;
+                }
+                float[] out = spare.floats(4);
+                read(before, part, out);
+                within(coverage, part, tx, ty);
+                work(tx, ty, part, coverage, out);
+                if (once) {
+                    surroundings.done(tx + tilesAcross * ty);
+                }
+                if (once && looksAround()) {
+                    // Later tiles still look at what was here.
                     parts.add(part);
                     results.add(out);
+                } else {
+                    write(out, part, picture);
+                    spare.back(out);
                 }
             }
         }
         for (int n = 0; n < parts.size(); n++) {
             write(results.get(n), parts.get(n), picture);
+            spare.back(results.get(n));
         }
+        spare.back(coverage);
+    }
+
+    /** Whether pixels are read beyond the tile at hand while the stroke is at work. */
+    private boolean looksAround() {
+        return switch (stroke.brush()) {
+            case ADD, REMOVE, RESTORE -> false;
+            case SOFTEN, PUSH, EVEN, LIFT -> true;
+        };
     }
 
     private void work(int tx, int ty, Window part, float[] coverage, float[] out) {
         int tile = tx + tilesAcross * ty;
         switch (stroke.brush()) {
             case ADD -> add(part, coverage, surroundings.colour(tx, ty, tile), out);
-            case REMOVE -> remove(coverage, out);
+            case REMOVE -> remove(part.pixels(), coverage, out);
             case SOFTEN -> soften(part, coverage, surroundings.blurred(tx, ty, tile), out);
             case RESTORE -> restore(part, coverage, out);
             case PUSH -> push.move(part, coverage, out);
@@ -140,8 +173,8 @@ final class Brushwork {
         }
     }
 
-    private static void remove(float[] coverage, float[] out) {
-        for (int n = 0; n < coverage.length; n++) {
+    private static void remove(int pixels, float[] coverage, float[] out) {
+        for (int n = 0; n < pixels; n++) {
             if (coverage[n] > 0) {
                 float stays = 1 - coverage[n];
                 out[4 * n] *= stays;
@@ -210,13 +243,20 @@ final class Brushwork {
                 Math.min(window.top() + window.height(), (ty + 1) * TILE) - top);
     }
 
-    private static boolean anything(float[] coverage) {
-        for (float c : coverage) {
-            if (c > 0) {
+    private static boolean anything(float[] coverage, int pixels) {
+        for (int n = 0; n < pixels; n++) {
+            if (coverage[n] > 0) {
                 return true;
             }
         }
         return false;
+    }
+
+    private void copy(Window part, Picture picture) {
+        for (int j = 0; j < part.height(); j++) {
+            int at = 4 * (part.left() + picture.width() * (part.top() + j));
+            System.arraycopy(before.rgba(), at, picture.rgba(), at, 4 * part.width());
+        }
     }
 
     private static void read(Picture picture, Window part, float[] out) {

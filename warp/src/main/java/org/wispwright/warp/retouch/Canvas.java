@@ -18,6 +18,8 @@ public final class Canvas {
     private Picture before;
     private float[] coverage;
     private LiveStroke live;
+    private Brushwork work;
+    private final Spare spare = new Spare();
 
     /** The picture as it is before any operation. @param original read; never changed */
     public Canvas(Picture original) {
@@ -64,11 +66,12 @@ public final class Canvas {
         if (window == null) {
             return;
         }
-        Brushwork work = new Brushwork(stroke, original, picture, blocks, window, new float[window.pixels()]);
+        Brushwork laid = new Brushwork(stroke, original, picture, blocks, window, spare.window(window.pixels()), spare);
         for (int n = 0; n < stroke.line().size(); n++) {
-            work.extend(stroke.line().get(n), stroke.sweep().pressure().at(n));
+            laid.extend(stroke.line().get(n), stroke.sweep().pressure().at(n));
         }
-        work.refresh(window, picture);
+        laid.refresh(window, picture);
+        laid.over();
         blocks.changed(window);
         if (before != null) {
             copy(picture, before, window);
@@ -89,8 +92,8 @@ public final class Canvas {
             coverage = new float[picture.width() * picture.height()];
         }
         blocks.from(before);
-        live = new LiveStroke(this, start, new Brushwork(start, original, before, blocks, Window.all(picture.width(), picture.height()),
-                coverage));
+        work = new Brushwork(start, original, before, blocks, Window.all(picture.width(), picture.height()), coverage, spare);
+        live = new LiveStroke(this, start, work);
         return live;
     }
 
@@ -103,6 +106,8 @@ public final class Canvas {
     /** The stroke being drawn is over; all it changed lies in {@code window}, null for nothing. */
     void over(Window window, boolean kept) {
         live = null;
+        work.over();
+        work = null;
         if (window != null) {
             copy(kept ? picture : before, kept ? before : picture, window);
             for (int y = window.top(); y < window.top() + window.height(); y++) {

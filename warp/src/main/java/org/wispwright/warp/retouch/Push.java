@@ -30,6 +30,7 @@ final class Push {
     private final Sweep sweep;
     private final Picture before;
     private final int tilesAcross;
+    private final Spare spare;
     /** Travel so far, not yet shortened, in heights: of a tile's pixels first x, then y; null where there is none. */
     private final double[][] travels;
     /** Where the columns' centres are, in heights. */
@@ -39,7 +40,8 @@ final class Push {
     private final float[] wy = new float[4];
 
     /** A line without a piece yet; {@code before} is the picture before the stroke, read only. */
-    Push(Sweep sweep, Picture before) {
+    Push(Sweep sweep, Picture before, Spare spare) {
+        this.spare = spare;
         this.sweep = sweep;
         this.before = before;
         tilesAcross = (before.width() + TILE - 1) / TILE;
@@ -47,6 +49,14 @@ final class Push {
         centres = new double[before.width()];
         for (int i = 0; i < centres.length; i++) {
             centres[i] = (i + 0.5) / before.height();
+        }
+    }
+
+    /** The travel's arrays go back. */
+    void over() {
+        for (int tile = 0; tile < travels.length; tile++) {
+            spare.back(travels[tile]);
+            travels[tile] = null;
         }
     }
 
@@ -82,7 +92,7 @@ final class Push {
             for (int i = left; i <= right; i = i / TILE * TILE + TILE) {
                 int tile = i / TILE + tilesAcross * (j / TILE);
                 if (travels[tile] == null) {
-                    travels[tile] = new double[2 * TILE * TILE];
+                    travels[tile] = spare.zeros();
                 }
                 int count = Math.min(right + 1, i / TILE * TILE + TILE) - i;
                 int at = i % TILE + TILE * (j % TILE);
@@ -133,7 +143,7 @@ final class Push {
     void move(Window part, float[] coverage, float[] out) {
         int height = before.height();
         double[] travel = new double[2];
-        for (int n = 0; n < coverage.length; n++) {
+        for (int n = 0; n < part.pixels(); n++) {
             if (coverage[n] > 0) {
                 int x = part.left() + n % part.width();
                 int y = part.top() + n / part.width();

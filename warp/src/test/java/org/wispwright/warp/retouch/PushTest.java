@@ -79,7 +79,7 @@ class PushTest {
     @Test
     void travelEqualsPlain() {
         Point[] line = {new Point(0.2, 0.3), new Point(0.45, 0.25), new Point(0.4, 0.6), new Point(0.35, 0.62)};
-        Push push = new Push(push(0.15, 1, 1, line).sweep(), new Picture(28, 40));
+        Push push = new Push(push(0.15, 1, 1, line).sweep(), new Picture(28, 40), new Spare());
         for (int n = 1; n < line.length; n++) {
             push.extend(line[n - 1], 1, line[n], 1);
         }
