@@ -73,7 +73,8 @@ class StoriesTest {
             }
         }
         String text = Files.readString(to.resolve("shot.json"));
-        String coarser = text.replace("\"cells\": [32, 48, 32], \"cellMetres\": 0.1,", "\"cells\": [24, 36, 24], \"cellMetres\": 0.1333333333,");
+        String coarser = text.replace("\"cells\": [32, 48, 32], \"cellMetres\": 0.1,", "\"cells\": [24, 36, 24], \"cellMetres\": "
+                + "0.1333333333,");
         assertTrue(!coarser.equals(text));
         Files.writeString(to.resolve("shot.json"), coarser);
         return to;

@@ -33,8 +33,8 @@ import org.wispwright.ui.shot.Shot;
 import org.wispwright.ui.shot.ShotCheck;
 
 /**
- * Makes the roof vent's rendered frame and the same frame as a person painted over it: thicker, bluer smoke at dusk over a roof, 8 bits, grain;
- * then, in the picture's own coded colours and knowing nothing of smoke, soft dabs that bring back the clean sky and soft dabs of a
+ * Makes the roof vent's rendered frame and the same frame as a person painted over it: thicker, bluer smoke at dusk over a roof, 8 bits,
+ * grain; then, in the picture's own coded colours and knowing nothing of smoke, soft dabs that bring back the clean sky and soft dabs of a
  * colour picked up from the smoke.
  * <p>Run: {@code java -cp <test class path> org.wispwright.ui.sample.PaintRoofVentFrames samples/roof-vent samples/roof-vent/frames}.
  */
@@ -97,7 +97,8 @@ public final class PaintRoofVentFrames {
         Graphics2D g = dab.createGraphics();
         g.setRenderingHint(RenderingHints.KEY_ANTIALIASING, RenderingHints.VALUE_ANTIALIAS_ON);
         g.setPaint(new RadialGradientPaint(new Point2D.Double(x * h, y * h), (float) (radius * h), new float[] {0, 0.5f, 1},
-                new Color[] {new Color(1f, 1f, 1f, (float) strength), new Color(1f, 1f, 1f, (float) (0.6 * strength)), new Color(1f, 1f, 1f, 0f)}));
+                new Color[] {new Color(1f, 1f, 1f, (float) strength), new Color(1f, 1f, 1f, (float) (0.6 * strength)),
+                    new Color(1f, 1f, 1f, 0f)}));
         g.fill(new Ellipse2D.Double((x - radius) * h, (y - radius) * h, 2 * radius * h, 2 * radius * h));
         g.setComposite(java.awt.AlphaComposite.SrcIn);
         g.setPaint(new TexturePaint(source, new Rectangle2D.Double(0, 0, source.getWidth(), h)));
@@ -114,7 +115,8 @@ public final class PaintRoofVentFrames {
             double noise = 1 + 0.01 * grain.nextGaussian();
             int rgb = 0;
             for (int c = 0; c < 3; c++) {
-                double light = smoke.rgba()[4 * p + c] + (1 - smoke.rgba()[4 * p + 3]) * Srgb.decode((behind >> (16 - 8 * c) & 255) / 255.0);
+                double light = smoke.rgba()[4 * p + c] + (1 - smoke.rgba()[4 * p + 3])
+                        * Srgb.decode((behind >> (16 - 8 * c) & 255) / 255.0);
                 rgb = rgb << 8 | (int) Math.round(255 * Srgb.encode(Math.min(1, Math.max(0, light * noise))));
             }
             out.setRGB(p % smoke.width(), p / smoke.width(), rgb);

@@ -9,7 +9,7 @@ import org.wispwright.warp.matte.Window;
  * ({@link LiveStroke}). What brushes must know of the picture's wide surroundings is kept beside it and made anew only where it changed, so
  * that the next stroke starts quickly. Not for several threads at once.
  * <p>Holds two copies of the picture once a stroke was begun, one before: 16 bytes a pixel each, 5 more for the surroundings, 4 for
- * coverage.
+ * coverage; and up to 16 MB of arrays that strokes have done with.
  */
 public final class Canvas {
     private final Picture original;

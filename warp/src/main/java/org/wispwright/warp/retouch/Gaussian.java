@@ -170,7 +170,8 @@ final class Gaussian {
         }
         for (int j = 0; j < high; j++) {
             int w = 4 * (y + j & mask);
-            mixRows(lines, row * (first(y + j, level) - j0), row, splines[w], splines[w + 1], splines[w + 2], splines[w + 3], out, stride * j);
+            mixRows(lines, row * (first(y + j, level) - j0), row, splines[w], splines[w + 1], splines[w + 2], splines[w + 3], out,
+                    stride * j);
         }
     }
 
