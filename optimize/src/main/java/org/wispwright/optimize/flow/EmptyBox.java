@@ -12,7 +12,6 @@ final class EmptyBox implements Medium {
     private final Carry carryZ;
     private final Carry carryCells;
     private final Projection projection;
-    private final float[] scratch;
 
     EmptyBox(FlowSetup setup, Lanes lanes) {
         this.lanes = lanes;
@@ -23,7 +22,6 @@ final class EmptyBox implements Medium {
         carryZ = Carry.ofFaces(shape, Lattice.Axis.Z_FACES, setup.velocity(), sides.back(), sides.front(), lanes);
         carryCells = Carry.ofCells(shape, setup.density(), lanes);
         projection = new Projection(shape, sides, lanes);
-        scratch = new float[shape.cells()];
     }
 
     @Override
@@ -70,6 +68,6 @@ final class EmptyBox implements Medium {
 
     @Override
     public double relativeDivergence(MacVelocity u) {
-        return DivergenceKernel.relativeMax(u, scratch, k -> { }, lanes);
+        return DivergenceKernel.relativeMax(u, projection.workspace(), k -> { }, lanes);
     }
 }

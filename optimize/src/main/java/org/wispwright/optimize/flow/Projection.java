@@ -133,6 +133,11 @@ public final class Projection {
         }
     }
 
+    /** An array of the box's cells that nobody needs between two calls of {@link #apply}; writing to it spoils {@link #lastPressure}. */
+    float[] workspace() {
+        return a;
+    }
+
     /** The pressure of the last {@link #apply}, in the velocity's unit times cells, index as cells; for measures and tests. */
     float[] lastPressure() {
         return a;

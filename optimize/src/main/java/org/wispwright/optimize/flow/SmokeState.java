@@ -1,5 +1,7 @@
 package org.wispwright.optimize.flow;
 
+import java.util.ArrayList;
+import java.util.List;
 import org.wispwright.render.volume.GridShape;
 import org.wispwright.render.volume.MacVelocity;
 import org.wispwright.render.volume.ScalarGrid;
@@ -36,6 +38,15 @@ public record SmokeState(ScalarGrid density, MacVelocity velocity, ScalarGrid te
     public static SmokeState of(FlowSetup flow) {
         GridShape shape = flow.grid();
         return new SmokeState(new ScalarGrid(shape), new MacVelocity(shape), flow.heat().isCarried() ? new ScalarGrid(shape) : null);
+    }
+
+    /** Its arrays, in one order for all states of a shot. */
+    public List<float[]> arrays() {
+        List<float[]> arrays = new ArrayList<>(List.of(density.values(), velocity.x(), velocity.y(), velocity.z()));
+        if (temperature != null) {
+            arrays.add(temperature.values());
+        }
+        return arrays;
     }
 
     /** Overwrites this state with another of the same box. */

@@ -4,7 +4,6 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.function.BooleanSupplier;
-import org.wispwright.optimize.checkpoint.Budget;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
@@ -27,7 +26,7 @@ final class Climb {
     private final boolean stay;
     private final Lanes lanes;
     private final BooleanSupplier cancelled;
-    private final long memoryBytes;
+    private final StateRoom room;
     private final StopRule until;
     private final Progress.Listener listener;
     private final String digest;
@@ -51,14 +50,14 @@ final class Climb {
     private int bandGradients;
     private double bandSeconds;
 
-    Climb(SolveProblem problem, List<GridShape> grids, boolean stay, Lanes lanes, BooleanSupplier cancelled, long memoryBytes, StopRule until,
+    Climb(SolveProblem problem, List<GridShape> grids, boolean stay, Lanes lanes, BooleanSupplier cancelled, StateRoom room, StopRule until,
           Progress.Listener listener, String digest, Solve.Recorder recorder) {
         this.problem = problem;
         this.grids = grids;
         this.stay = stay;
         this.lanes = lanes;
         this.cancelled = cancelled;
-        this.memoryBytes = memoryBytes;
+        this.room = room;
         this.until = until;
         this.listener = listener;
         this.digest = digest;
@@ -68,6 +67,16 @@ final class Climb {
     }
 
     SolveResult run(Optional<SolveState> from) {
+        try {
+            return climb(from);
+        } finally {
+            if (loss != null) {
+                loss.release();
+            }
+        }
+    }
+
+    private SolveResult climb(Optional<SolveState> from) {
         from.ifPresent(this::take);
         for (int next = Math.max(1, rung); next <= grids.size(); next++) {
             climb(next, from.filter(state -> lbfgs == null));
@@ -118,6 +127,7 @@ final class Climb {
         GridShape grid = grids.get(rung - 1);
         if (loss != null) {
             loss.release();                                                    // the search still holds the lower rung's loss for a moment
+            plan = null;
         }
         SolveProblem here = problem.on(grid);
         FlowSetup flow = here.flow();
@@ -128,9 +138,10 @@ final class Climb {
         plan = new TermPlan(here, solver, start, terms, stay, cancelled);
         int lastFrame = here.lastFrame();
         int steps = flow.stepsTo(lastFrame);
-        snapshots = new Budget(memoryBytes, SmokeState.bytes(flow)).snapshots(steps);
+        Snapshots states = new Snapshots(flow, start, steps, room);
+        snapshots = states.count();
         ForceBasis basis = new ForceBasis(grid, flow.frames().count() - 1, bands, lanes);
-        loss = new SolveLoss(solver, basis, curves, terms, start, lastFrame, snapshots, cancelled);
+        loss = new SolveLoss(solver, basis, curves, terms, lastFrame, states, cancelled);
         if (state.isPresent()) {
             lbfgs = new Lbfgs(loss, state.get().search(), settings());
             ended = ended.isEmpty() ? endedByRule() : ended;

@@ -5,6 +5,7 @@ import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
 import java.util.TreeMap;
+import java.util.function.Supplier;
 import org.wispwright.optimize.flow.Clock;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.march.Look;
@@ -24,7 +25,9 @@ import org.wispwright.warp.loss.PictureLoss;
  */
 final class FrameTerms {
     private final Map<Integer, List<Shown>> byFrame = new TreeMap<>();
-    private final List<RayMarcher> marchers = new ArrayList<>();
+    private final List<Supplier<RayMarcher>> makers = new ArrayList<>();
+    /** Made when first needed: each takes about 25 bytes a cell, and not every view has a note. */
+    private final RayMarcher[] marchers;
     private final Look look;
     private final Clock clock;
     private int terms;
@@ -50,8 +53,16 @@ final class FrameTerms {
         this.look = look;
         this.clock = clock;
         for (View view : views) {
-            marchers.add(new RayMarcher(shape, view, stepMetres, lanes));
+            makers.add(() -> new RayMarcher(shape, view, stepMetres, lanes));
         }
+        marchers = new RayMarcher[makers.size()];
+    }
+
+    private RayMarcher marcher(int view) {
+        if (marchers[view] == null) {
+            marchers[view] = makers.get(view).get();
+        }
+        return marchers[view];
     }
 
     /** A new term. @return its number */
@@ -59,7 +70,7 @@ final class FrameTerms {
         List<Shown> there = byFrame.computeIfAbsent(frame, f -> new ArrayList<>());
         Shown shown = there.stream().filter(s -> s.view == view).findFirst().orElse(null);
         if (shown == null) {
-            shown = new Shown(view, marchers.get(view).view().raster().picture());
+            shown = new Shown(view, marcher(view).view().raster().picture());
             there.add(shown);
         }
         shown.terms.add(new Term(terms, loss, scale));
@@ -78,8 +89,8 @@ final class FrameTerms {
 
     /** The picture of a density in a view, into a new picture. */
     Picture picture(ScalarGrid density, int view) {
-        Picture out = marchers.get(view).view().raster().picture();
-        marchers.get(view).picture(density, look, out);
+        Picture out = marcher(view).view().raster().picture();
+        marcher(view).picture(density, look, out);
         return out;
     }
 
@@ -93,7 +104,7 @@ final class FrameTerms {
         double sum = 0;
         for (Shown shown : byFrame.getOrDefault(frame, List.of())) {
             long since = System.nanoTime();
-            marchers.get(shown.view).picture(density, look, shown.got);
+            marcher(shown.view).picture(density, look, shown.got);
             since = clock.lap(Clock.Part.PICTURE, since);
             Arrays.fill(shown.bar, 0f);
             for (Term term : shown.terms) {
@@ -109,7 +120,7 @@ final class FrameTerms {
     void pullback(int frame, ScalarGrid density, ScalarGrid densityBar) {
         for (Shown shown : byFrame.getOrDefault(frame, List.of())) {
             long since = System.nanoTime();
-            marchers.get(shown.view).pullback(density, look, shown.got, shown.bar, densityBar);
+            marcher(shown.view).pullback(density, look, shown.got, shown.bar, densityBar);
             clock.lap(Clock.Part.PICTURE_BACK, since);
         }
     }

@@ -6,7 +6,6 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.Random;
 import org.wispwright.optimize.checkpoint.BinomialPlan;
-import org.wispwright.optimize.checkpoint.Budget;
 import org.wispwright.optimize.flow.Clock;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.FrameRange;
@@ -38,12 +37,13 @@ import org.wispwright.warp.loss.PyramidLoss;
  * @param forwardSeconds one forward run: force, steps, the last frame's picture and loss; the least of three
  * @param gradientSeconds the forward run and the way back, the least of three
  * @param snapshots      states that were kept
+ * @param onDisk        of them on disk
  * @param plainSteps     steps that a gradient ran again or for the first time, without the taped ones
  * @param forwardShare   of the forward run, by part
  * @param gradientShare  of the gradient, by part
  */
 public record Measurement(GridShape grid, int frames, int threads, double stepNanosACell, double forwardSeconds, double gradientSeconds,
-                          int snapshots, long plainSteps, Map<Clock.Part, Double> forwardShare, Map<Clock.Part, Double> gradientShare) {
+                          int snapshots, int onDisk, long plainSteps, Map<Clock.Part, Double> forwardShare, Map<Clock.Part, Double> gradientShare) {
     private static final int TRIES = 3;
 
     /** Gradient seconds a forward second. */
@@ -56,10 +56,10 @@ public record Measurement(GridShape grid, int frames, int threads, double stepNa
      *
      * @param cells       cells each way, 8 to 512
      * @param frames      2 or more
-     * @param memoryBytes for the states kept in a sweep
+     * @param room        for the states kept in a sweep
      * @throws IllegalArgumentException if a number is out of range or not one state fits
      */
-    public static Measurement of(int cells, int frames, long memoryBytes, Lanes lanes) {
+    public static Measurement of(int cells, int frames, StateRoom room, Lanes lanes) {
         if (cells < 8 || cells > 512 || frames < 2) {
             throw new IllegalArgumentException("measure: got a grid of " + cells + " and " + frames + " frames, needs 8 to 512 and at least 2");
         }
@@ -74,8 +74,8 @@ public record Measurement(GridShape grid, int frames, int threads, double stepNa
         Arrays.fill(weights, 1f);
         terms.add(flow.frames().last(), 0, new PyramidLoss(new Picture(cells, cells), weights), 1);
         int steps = frames - 1;
-        int snapshots = new Budget(memoryBytes, SmokeState.bytes(grid)).snapshots(steps);
-        SolveLoss loss = new SolveLoss(solver, basis, terms, new SmokeState(grid), flow.frames().last(), snapshots, () -> false);
+        Snapshots states = new Snapshots(flow, new SmokeState(grid), steps, room);
+        SolveLoss loss = new SolveLoss(solver, basis, terms, flow.frames().last(), states, () -> false);
         double[] x = new double[basis.unknowns(1)];
         Random random = new Random(1);
         for (int n = 0; n < x.length; n++) {
@@ -105,8 +105,9 @@ public record Measurement(GridShape grid, int frames, int threads, double stepNa
                 wholeParts = solver.clock().seconds();
             }
         }
-        return new Measurement(grid, frames, lanes.count(), stepNanos(solver), forward, whole, snapshots,
-                BinomialPlan.leastSteps(steps, snapshots), forwardParts, wholeParts);
+        loss.release();
+        return new Measurement(grid, frames, lanes.count(), stepNanos(solver), forward, whole, states.count(), states.onDisk(),
+                BinomialPlan.leastSteps(steps, states.count()), forwardParts, wholeParts);
     }
 
     /** A plume in a box of 4 m: open sides, walled floor, one source. */

@@ -1,7 +1,5 @@
 package org.wispwright.optimize.solve;
 
-import java.util.ArrayList;
-import java.util.List;
 import java.util.function.BooleanSupplier;
 import org.wispwright.optimize.checkpoint.ReversibleChain;
 import org.wispwright.optimize.flow.Clock;
@@ -19,16 +17,16 @@ import org.wispwright.render.volume.ScalarGrid;
  *
  * <p>A substep's pullback needs the state before it and the velocity after it, and the latter is part of the state that the
  * pull before this one started from. So a tape costs nothing once the reversal is under way: only the last substep, and those
- * between snapshots, are ever run. Memory: three states, the adjoint, two forces, and a state for each slot used.
+ * between snapshots, are ever run. Memory: three states, the adjoint, two forces, the start,
+ * and a state for each slot used that is not on disk.
  */
 final class SmokeChain implements ReversibleChain {
     private final SmokeSolver solver;
     private final ForceBasis basis;
     private final BooleanSupplier cancelled;
     private final Owed owed;
-    private final SmokeState start;
     private final FlowSetup flow;
-    private final List<SmokeState> slots = new ArrayList<>();
+    private final Snapshots states;
     private final SmokeState bar;
     private final MacVelocity force;
     private final MacVelocity forceBar;
@@ -55,12 +53,12 @@ final class SmokeChain implements ReversibleChain {
         void addTo(int n, ScalarGrid density, ScalarGrid densityBar);
     }
 
-    SmokeChain(SmokeSolver solver, ForceBasis basis, SmokeState start, BooleanSupplier cancelled, Owed owed) {
+    SmokeChain(SmokeSolver solver, ForceBasis basis, Snapshots states, BooleanSupplier cancelled, Owed owed) {
         this.solver = solver;
         this.basis = basis;
         this.cancelled = cancelled;
         this.owed = owed;
-        this.start = start;
+        this.states = states;
         flow = solver.setup();
         GridShape shape = flow.grid();
         bar = SmokeState.of(flow);
@@ -86,13 +84,13 @@ final class SmokeChain implements ReversibleChain {
         follows = false;
         forceStep = -1;
         barStep = -1;
-        current.set(start);
+        current.set(states.start());
         bar.clear();
     }
 
-    /** Lets go of the snapshots, most of the memory; a sweep after this makes new ones. */
+    /** Lets go of the snapshots; a sweep after this makes new ones. */
     void release() {
-        slots.clear();
+        states.release();
     }
 
     /** The current state, to read. */
@@ -102,15 +100,12 @@ final class SmokeChain implements ReversibleChain {
 
     @Override
     public void save(int slot) {
-        if (slot == slots.size()) {
-            slots.add(SmokeState.of(flow));
-        }
-        slots.get(slot).set(current);
+        states.save(slot, current);
     }
 
     @Override
     public void restore(int slot) {
-        current.set(slots.get(slot));
+        states.restore(slot, current);
         follows = false;
     }
 

@@ -160,20 +160,22 @@ public final class Solve {
      * @throws IllegalArgumentException if a note wants nothing, or not one state fits in the memory
      */
     public SolveResult run(long memoryBytes, StopRule until, Progress.Listener listener) {
-        return run(memoryBytes, until, listener, "", Optional.empty(), Recorder.NONE);
+        return run(StateRoom.inMemory(memoryBytes), until, listener, "", Optional.empty(), Recorder.NONE);
     }
 
     /**
      * Runs to its end from where an earlier run of the same problem stood, with the bits that run would have had. A state that had ended on a
      * lower rung than this solve's last goes on with the next rung.
      *
+     * @param room     for the states kept in a sweep
      * @param digest   of the problem, for the records
      * @param from     where to begin; empty begins at the beginning
      * @param recorder told of each accepted iteration
      * @throws SolveCancelled           if cancelled
      * @throws IllegalArgumentException as above, or if the state is of another problem or a higher rung
+     * @throws java.io.UncheckedIOException if the disk for states refuses; what was recorded can be gone on with
      */
-    public SolveResult run(long memoryBytes, StopRule until, Progress.Listener listener, String digest, Optional<SolveState> from,
+    public SolveResult run(StateRoom room, StopRule until, Progress.Listener listener, String digest, Optional<SolveState> from,
                            Recorder recorder) {
         from.ifPresent(state -> {
             if (!state.problem().equals(digest) || state.rung() > climb.size()) {
@@ -181,6 +183,6 @@ public final class Solve {
                         + climb.size() + " rungs; begin anew");
             }
         });
-        return new Climb(problem, climb, stay, lanes, cancelled, memoryBytes, until, listener, digest, recorder).run(from);
+        return new Climb(problem, climb, stay, lanes, cancelled, room, until, listener, digest, recorder).run(from);
     }
 }

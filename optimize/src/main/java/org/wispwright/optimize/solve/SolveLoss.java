@@ -8,7 +8,6 @@ import java.util.function.BooleanSupplier;
 import org.wispwright.optimize.checkpoint.Reversal;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
-import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.flow.Substep;
 import org.wispwright.optimize.force.ForceBasis;
 import org.wispwright.optimize.force.SourceCurves;
@@ -19,9 +18,9 @@ import org.wispwright.optimize.search.Objective;
  * search adds that itself.
  */
 final class SolveLoss implements Objective {
-    private final FrameTerms terms;
-    private final SmokeChain chain;
-    private final Reversal reversal;
+    private FrameTerms terms;
+    private SmokeChain chain;
+    private Reversal reversal;
     private final FlowSetup flow;
     private final double[] losses;
     private final SourceCurves curves;
@@ -32,30 +31,28 @@ final class SolveLoss implements Objective {
     private double[] badX;
 
     /** With the sources as they were set up: see the other. */
-    SolveLoss(SmokeSolver solver, ForceBasis basis, FrameTerms terms, SmokeState start, int lastFrame, int snapshots,
-              BooleanSupplier cancelled) {
-        this(solver, basis, Optional.empty(), terms, start, lastFrame, snapshots, cancelled);
+    SolveLoss(SmokeSolver solver, ForceBasis basis, FrameTerms terms, int lastFrame, Snapshots states, BooleanSupplier cancelled) {
+        this(solver, basis, Optional.empty(), terms, lastFrame, states, cancelled);
     }
 
     /**
      * @param curves    of the sources' strengths, if they may change: their unknowns come first, the force's follow
-     * @param start     read: the state of the first frame
      * @param lastFrame the last frame that a term looks at, or later
-     * @param snapshots states kept in the sweep
+     * @param states    kept in the sweep, and the first frame's
      */
-    SolveLoss(SmokeSolver solver, ForceBasis basis, Optional<SourceCurves> curves, FrameTerms terms, SmokeState start, int lastFrame,
-              int snapshots, BooleanSupplier cancelled) {
+    SolveLoss(SmokeSolver solver, ForceBasis basis, Optional<SourceCurves> curves, FrameTerms terms, int lastFrame, Snapshots states,
+              BooleanSupplier cancelled) {
         this.terms = terms;
         this.curves = curves.orElse(null);
         FlowSetup flow = solver.setup();
         losses = new double[terms.count()];
-        chain = new SmokeChain(solver, basis, start, cancelled, (n, density, densityBar) -> {
+        chain = new SmokeChain(solver, basis, states, cancelled, (n, density, densityBar) -> {
             int frame = frameOf(flow, n);
             if (frame >= 0) {
-                terms.pullback(frame, density, densityBar);
+                this.terms.pullback(frame, density, densityBar);
             }
         });
-        reversal = new Reversal(chain, flow.stepsTo(lastFrame), snapshots);
+        reversal = new Reversal(chain, flow.stepsTo(lastFrame), states.count());
         this.flow = flow;
     }
 
@@ -149,9 +146,14 @@ final class SolveLoss implements Objective {
         return last.number() == last.count() - 1 ? last.frame() : -1;
     }
 
-    /** Lets go of the kept states; an evaluation after this makes new ones. */
+    /** Lets go of all memory, and of the file that holds states; this loss is over. The losses of the last evaluation stay. */
     void release() {
-        chain.release();
+        if (chain != null) {
+            chain.release();
+        }
+        chain = null;
+        reversal = null;
+        terms = null;
     }
 
     /** Losses of the terms at the last evaluation, before their scales. */

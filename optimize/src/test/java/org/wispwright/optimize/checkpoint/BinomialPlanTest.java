@@ -108,6 +108,11 @@ class BinomialPlanTest {
         assertEquals(1, new Budget(4_000, 1_000).snapshots(1));
         String message = assertThrows(IllegalArgumentException.class, () -> new Budget(999, 1_000)).getMessage();
         assertTrue(message.contains("got 999 bytes") && message.contains("at least 1000"), message);
+        assertEquals(3 + 5, new Budget(3_999, 5_999, 1_000).snapshots(100));
+        assertEquals(5, new Budget(3_999, 5_999, 1_000).onDisk(100));
+        assertEquals(9 - 3, new Budget(3_999, Long.MAX_VALUE, 1_000).onDisk(10), "more than steps - 1 are of no use");
+        assertEquals(0, new Budget(9_000, 5_000, 1_000).onDisk(10), "memory first");
+        assertThrows(IllegalArgumentException.class, () -> new Budget(1_000, -1, 1_000));
         assertThrows(IllegalArgumentException.class, () -> new Budget(1, 0));
         assertThrows(IllegalArgumentException.class, () -> new Budget(10, 1).snapshots(0));
     }

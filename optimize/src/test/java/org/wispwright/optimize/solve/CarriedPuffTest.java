@@ -185,7 +185,7 @@ class CarriedPuffTest {
         FrameTerms terms = new FrameTerms(BOX, List.of(FRONT), LOOK, BOX.cellMetres(), solver.clock(), lanes);
         terms.add(NOTED, 0, loss, 1);
         double[] gradient = new double[way.length];
-        SolveLoss chain = new SolveLoss(solver, basis, terms, new SmokeState(BOX), NOTED, 100, () -> false);
+        SolveLoss chain = new SolveLoss(solver, basis, terms, NOTED, WholeChainTest.states(FLOW, new SmokeState(BOX), NOTED, 100), () -> false);
         double value = chain.evaluate(new double[way.length], gradient);
         double slope = 0;
         for (int n = 0; n < way.length; n++) {

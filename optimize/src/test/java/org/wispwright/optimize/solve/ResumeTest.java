@@ -30,14 +30,14 @@ class ResumeTest {
         List<SolveState> states = new ArrayList<>();
         try (Lanes lanes = new Lanes(2)) {
             Solve solve = new Solve(problem, true, lanes, () -> false);
-            SolveResult whole = solve.run(MEMORY, SOME, p -> { }, "d", Optional.empty(), states::add);
+            SolveResult whole = solve.run(StateRoom.inMemory(MEMORY), SOME, p -> { }, "d", Optional.empty(), states::add);
             assertEquals(45, states.size());
             assertTrue(states.stream().anyMatch(s -> s.rung() == 2) && states.stream().anyMatch(s -> s.rung() == 1));
             for (int n = 0; n < states.size(); n += 8) {
                 SolveRecords records = new SolveRecords(folder);
                 records.write(states.get(n));
                 List<SolveState> after = new ArrayList<>();
-                SolveResult rest = solve.run(1 << 20, SOME, p -> { }, "d", records.latest().state(), after::add);
+                SolveResult rest = solve.run(new StateRoom(1 << 20, 1 << 20, folder.resolve("states")), SOME, p -> { }, "d", records.latest().state(), after::add);
                 assertArrayEquals(whole.unknowns(), rest.unknowns(), "from iteration " + states.get(n).search().iterations());
                 assertEquals(whole.losses(), rest.losses());
                 assertEquals(whole.met(), rest.met());
@@ -60,16 +60,16 @@ class ResumeTest {
         try (Lanes lanes = new Lanes(2)) {
             SolveResult whole = new Solve(problem, true, lanes, () -> false).run(MEMORY, SOME, p -> { });
             Solve low = new Solve(problem, rungs.subList(0, 1), true, lanes, () -> false);
-            SolveResult first = low.run(MEMORY, SOME, p -> { }, "d", Optional.empty(), states::add);
+            SolveResult first = low.run(StateRoom.inMemory(MEMORY), SOME, p -> { }, "d", Optional.empty(), states::add);
             SolveState end = states.get(states.size() - 1);
             assertEquals(first.ended(), end.ended());
             Solve all = new Solve(problem, rungs, true, lanes, () -> false);
-            assertArrayEquals(whole.unknowns(), all.run(MEMORY, SOME, p -> { }, "d", Optional.of(end), Solve.Recorder.NONE).unknowns());
+            assertArrayEquals(whole.unknowns(), all.run(StateRoom.inMemory(MEMORY), SOME, p -> { }, "d", Optional.of(end), Solve.Recorder.NONE).unknowns());
             assertThrows(IllegalArgumentException.class,
-                    () -> all.run(MEMORY, SOME, p -> { }, "another", Optional.of(end), Solve.Recorder.NONE));
+                    () -> all.run(StateRoom.inMemory(MEMORY), SOME, p -> { }, "another", Optional.of(end), Solve.Recorder.NONE));
             SolveState high = new SolveState("d", 2, 1, 0, 0, 0, 0, end.search(), end.losses(), end.met(), end.runs(), "");
             assertThrows(IllegalArgumentException.class,
-                    () -> low.run(MEMORY, SOME, p -> { }, "d", Optional.of(high), Solve.Recorder.NONE));
+                    () -> low.run(StateRoom.inMemory(MEMORY), SOME, p -> { }, "d", Optional.of(high), Solve.Recorder.NONE));
         }
     }
 

@@ -2,14 +2,21 @@ package org.wispwright.optimize.solve;
 
 import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.io.UncheckedIOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.List;
 import java.util.Optional;
 import java.util.Random;
 import org.junit.jupiter.api.Nested;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
 import org.wispwright.optimize.checkpoint.BinomialPlan;
 import org.wispwright.optimize.flow.FlowSetup;
@@ -38,13 +45,21 @@ import org.wispwright.warp.loss.LossKind;
 class WholeChainTest {
 
     private static SolveLoss loss(SolveProblem problem, SmokeState start, int snapshots, Lanes lanes) {
+        return loss(problem, states(problem.flow(), start, problem.lastFrame(), snapshots), lanes);
+    }
+
+    private static SolveLoss loss(SolveProblem problem, Snapshots states, Lanes lanes) {
         FlowSetup flow = problem.flow();
         SmokeSolver solver = new SmokeSolver(flow, lanes);
         ForceBasis basis = Solve.basis(flow, lanes);
         FrameTerms terms = new FrameTerms(flow.grid(), problem.views(), problem.look(), flow.grid().cellMetres(), solver.clock(), lanes);
-        new TermPlan(problem, solver, start, terms, true, () -> false);
+        new TermPlan(problem, solver, states.start(), terms, true, () -> false);
         Optional<SourceCurves> curves = problem.sources() ? Optional.of(Solve.curves(flow)) : Optional.empty();
-        return new SolveLoss(solver, basis, curves, terms, start, problem.lastFrame(), snapshots, () -> false);
+        return new SolveLoss(solver, basis, curves, terms, problem.lastFrame(), states, () -> false);
+    }
+
+    static Snapshots states(FlowSetup flow, SmokeState start, int lastFrame, int count) {
+        return new Snapshots(flow, start, flow.stepsTo(lastFrame), StateRoom.inMemory(count * SmokeState.bytes(flow)));
     }
 
     private static SolveLoss loss(SolveProblem problem, int snapshots, Lanes lanes) {
@@ -237,6 +252,40 @@ class WholeChainTest {
         assertEquals(a, b);
         assertArrayEquals(all, few);
         assertTrue(BinomialPlan.leastSteps(8, snapshots) >= 7);
+    }
+
+    /** The same from states on disk, and the file is gone afterwards. */
+    @ParameterizedTest @CsvSource({"1, 1", "1, 2", "1, 100", "2, 1", "3, 2"}) void diskGivesTheSameBits(int inMemory, int onDisk, @TempDir Path folder) {
+        SolveProblem problem = SolveScene.problem(12, 1011, 1, true);
+        FlowSetup flow = problem.flow();
+        long state = SmokeState.bytes(flow);
+        double[] x = unknowns(flow, 1.5, 1);
+        double[] all = new double[x.length];
+        double[] few = new double[x.length];
+        Path file = folder.resolve("states");
+        Snapshots states = new Snapshots(flow, new SmokeState(flow.grid()), flow.stepsTo(problem.lastFrame()),
+                new StateRoom(inMemory * state, onDisk * state, file));
+        double a = loss(problem, 100, new Lanes(1)).evaluate(x, all);
+        SolveLoss loss = loss(problem, states, new Lanes(1));
+        double b = loss.evaluate(x, few);
+        assertEquals(Math.min(onDisk, flow.stepsTo(problem.lastFrame()) - 1 - inMemory), states.onDisk());
+        assertEquals(a, b);
+        assertArrayEquals(all, few);
+        assertEquals(a, loss.evaluate(x, new double[x.length]));
+        loss.release();
+        assertFalse(Files.exists(file));
+    }
+
+    /** A disk that refuses ends the gradient with its own words. */
+    @Test void aDiskThatRefusesIsNamed(@TempDir Path folder) {
+        SolveProblem problem = SolveScene.problem(12, 1009, 1, false);
+        long state = SmokeState.bytes(problem.flow());
+        Snapshots states = new Snapshots(problem.flow(), new SmokeState(problem.flow().grid()), 8,
+                new StateRoom(state, 3 * state, folder.resolve("none").resolve("states")));
+        SolveLoss loss = loss(problem, states, new Lanes(1));
+        double[] x = unknowns(problem.flow(), 1, 1);
+        UncheckedIOException refused = assertThrows(UncheckedIOException.class, () -> loss.evaluate(x, new double[x.length]));
+        assertTrue(refused.getMessage().contains("cannot make"), refused::getMessage);
     }
 
     /** Things that move stand where the step says, whichever way the sweep comes to it. */

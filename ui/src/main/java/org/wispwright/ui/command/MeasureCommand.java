@@ -1,8 +1,12 @@
 package org.wispwright.ui.command;
 
+import java.io.IOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.util.concurrent.Callable;
 import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.solve.Measurement;
+import org.wispwright.optimize.solve.StateRoom;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.volume.GridShape;
 import org.wispwright.ui.shot.Finding;
@@ -39,6 +43,10 @@ final class MeasureCommand implements Callable<Integer> {
             description = "The memory for the states that a gradient keeps, such as 256M. Default: enough to keep all, if Java has it.")
     private ByteSize memory;
 
+    @Option(names = "--disk", paramLabel = "SIZE", converter = ByteSize.Converter.class,
+            description = "Disk, where Java puts temporary files, for states that --memory does not hold. Default: none.")
+    private ByteSize disk;
+
     @Option(names = "--threads", paramLabel = "N", converter = ThreadCount.Converter.class,
             description = "Threads to use. Default: one for each core.")
     private ThreadCount threads;
@@ -69,9 +77,19 @@ final class MeasureCommand implements Callable<Integer> {
         try (Lanes lanes = new Lanes(threads == null ? Runtime.getRuntime().availableProcessors()
                 : threads.count()); ProgressLine progress = manner.progress()) {
             progress.now("measure: " + grid.inWords() + ", " + frames + " frames");
-            measured = Measurement.of(cells, frames, forStates, lanes);
+            measured = Measurement.of(cells, frames, disk == null ? StateRoom.inMemory(forStates)
+                    : new StateRoom(forStates, disk.bytes(), temporary()), lanes);
         }
         manner.say(MeasureReport.inWords(measured), MeasureReport.of(measured).put("ok", true));
         return ExitCodes.OK;
+    }
+
+    private static Path temporary() {
+        try {
+            return Files.createTempFile("wispwright-states", "");
+        } catch (IOException refused) {
+            throw new ShotException(new Finding("measure", "", "no temporary file can be made (" + refused.getMessage() + "); leave out --disk."),
+                    refused);
+        }
     }
 }

@@ -36,6 +36,7 @@ import picocli.CommandLine.TypeConversionException;
             "  java -jar wispwright.jar solve samples/kiln-yard --resume",
             "  java -jar wispwright.jar solve samples/kiln-yard --sources",
             "  java -jar wispwright.jar solve samples/kiln-yard --threads 2 --memory 2G --until loss=0.03",
+            "  java -Xmx1g -jar wispwright.jar solve samples/kiln-yard --disk 4G",
             "  java -jar wispwright.jar solve samples/kiln-yard --until seconds=60 --until iterations=40 --json"})
 final class SolveCommand implements Callable<Integer> {
     @Mixin
@@ -43,6 +44,11 @@ final class SolveCommand implements Callable<Integer> {
 
     @Mixin
     private ShotChoice choice;
+
+    @Option(names = "--disk", paramLabel = "SIZE", converter = ByteSize.Converter.class,
+            description = "Disk in the shot's folder for states that --memory does not hold, such as 4G: quicker than to compute them "
+                    + "again where the disk is quick. Gone when the solve ends. Default: none.")
+    private ByteSize disk;
 
     @Option(names = "--until", paramLabel = "WHAT=N", converter = Until.Converter.class,
             description = "End early: loss=0.03 (share of the original's), seconds=60, or iterations=40. "
@@ -100,8 +106,8 @@ final class SolveCommand implements Callable<Integer> {
         StopRule rule = Until.all(until);
         SolveWork.Result result;
         try (Lanes lanes = new Lanes(choice.threads()); ProgressLine progress = manner.progress()) {
-            result = SolveWork.run(choice.folder(), shot, new SolveWork.Manner(choice.memoryBytes(), rule, !withoutStay, sources, quality,
-                    begin.beginning()), lanes, progress,
+            result = SolveWork.run(choice.folder(), shot, new SolveWork.Manner(choice.memoryBytes(), disk == null ? 0 : disk.bytes(), rule,
+                    !withoutStay, sources, quality, begin.beginning()), lanes, progress,
                     manner.cancel());
         }
         ObjectNode object = SolveReport.of(result).put("ok", true);

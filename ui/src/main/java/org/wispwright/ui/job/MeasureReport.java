@@ -19,7 +19,7 @@ public final class MeasureReport {
                 .put("threads", m.threads())
                 .put("stepNanosACell", m.stepNanosACell()).put("forwardSeconds", m.forwardSeconds())
                         .put("gradientSeconds", m.gradientSeconds())
-                .put("ratio", m.ratio()).put("snapshots", m.snapshots()).put("plainSteps", m.plainSteps())
+                .put("ratio", m.ratio()).put("snapshots", m.snapshots()).put("onDisk", m.onDisk()).put("plainSteps", m.plainSteps())
                         .put("peakMemoryBytes", PeakMemory.bytes());
         shares(top.putObject("forwardShare"), m.forwardShare());
         shares(top.putObject("gradientShare"), m.gradientShare());
@@ -32,8 +32,8 @@ public final class MeasureReport {
         words.append(String.format(Locale.ROOT, "%s, %d frames, %d threads%n", m.grid().inWords(), m.frames(), m.threads()));
         words.append(String.format(Locale.ROOT, "one step            %8.1f ns a cell%n", m.stepNanosACell()));
         words.append(String.format(Locale.ROOT, "forward run         %8.3f s%n", m.forwardSeconds()));
-        words.append(String.format(Locale.ROOT, "gradient            %8.3f s, %.2f times the forward run, %d states kept%n",
-                m.gradientSeconds(), m.ratio(), m.snapshots()));
+        words.append(String.format(Locale.ROOT, "gradient            %8.3f s, %.2f times the forward run, %d states kept%s%n",
+                m.gradientSeconds(), m.ratio(), m.snapshots(), m.onDisk() > 0 ? ", " + m.onDisk() + " of them on disk" : ""));
         words.append(String.format(Locale.ROOT, "peak memory         %8s%n", MemoryNeed.inWords(PeakMemory.bytes())));
         words.append(String.format(Locale.ROOT, "share of time       %8s %8s", "forward", "gradient"));
         double forward = total(m.forwardShare());

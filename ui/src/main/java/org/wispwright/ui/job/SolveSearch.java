@@ -1,6 +1,7 @@
 package org.wispwright.ui.job;
 
 import java.io.IOException;
+import java.io.UncheckedIOException;
 import java.util.Locale;
 import java.util.Optional;
 import java.util.stream.Collectors;
@@ -11,6 +12,7 @@ import org.wispwright.optimize.solve.SolveProblem;
 import org.wispwright.optimize.solve.SolveRecords;
 import org.wispwright.optimize.solve.SolveResult;
 import org.wispwright.optimize.solve.SolveState;
+import org.wispwright.optimize.solve.StateRoom;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.ui.shot.Finding;
 import org.wispwright.ui.shot.MemoryNeed;
@@ -25,6 +27,9 @@ import org.wispwright.ui.shot.Takes;
  * every accepted iteration, and leaves the records until {@link #over} says that the take is there.
  */
 final class SolveSearch implements AutoCloseable {
+    /** The file of the states that memory does not hold. */
+    private static final String STATES = "states";
+
     private final SolveProblem problem;
     private final SolveWork.Manner manner;
     private final Progress progress;
@@ -71,7 +76,7 @@ final class SolveSearch implements AutoCloseable {
     /**
      * Searches to the end.
      *
-     * @throws ShotException if a note wants nothing or the memory does not hold one state
+     * @throws ShotException if a note wants nothing, the memory does not hold one state, or the disk refuses one; the records stay
      * @throws Cancel.Cancelled if cancelled; the records stay
      */
     SolveResult run(Lanes lanes, Cancel cancel) {
@@ -80,9 +85,12 @@ final class SolveSearch implements AutoCloseable {
             long forStates = MemoryNeed.forStates(flow.grid(), flow.frames(), flow.substeps(),
                     manner.memoryBytes() - MemoryNeed.ofMore(flow));
             return new Solve(problem, manner.quality().rungs(flow.grid()), manner.stay(), lanes, cancel::wished)
-                    .run(forStates, manner.until(), this::tell, digest, from, this::record);
+                    .run(new StateRoom(forStates, manner.diskBytes(), place.file(STATES)), manner.until(), this::tell, digest, from, this::record);
         } catch (SolveCancelled asked) {
             throw new Cancel.Cancelled();
+        } catch (UncheckedIOException refused) {
+            throw new ShotException(new Finding("takes/.solving/" + STATES, "", refused.getMessage() + " (" + refused.getCause().getMessage()
+                    + ")" + (end == null ? "." : "; then go on by --resume, after iteration " + end.search().iterations() + ".")), refused);
         } catch (IllegalArgumentException refused) {
             String words = String.valueOf(refused.getMessage());
             throw new ShotException(new Finding("shot.json", "", words.endsWith(".") ? words : words + "."), refused);

@@ -33,16 +33,18 @@ public final class SolveWork {
      * How to solve.
      *
      * @param memoryBytes that all of it may take; what the work itself does not need goes to the states that a sweep keeps
+     * @param diskBytes that states may take in the shot's folder when memory does not hold them all; 0 for none
      * @param until when to end before the program's own rule does
      * @param stay false leaves the stay term out; only to measure what it does
      * @param sources whether the sources' strengths may change too
      * @param quality how far it climbs
      * @param beginning where it begins
      */
-    public record Manner(long memoryBytes, StopRule until, boolean stay, boolean sources, Quality quality, Beginning beginning) {
+    public record Manner(long memoryBytes, long diskBytes, StopRule until, boolean stay, boolean sources, Quality quality,
+                         Beginning beginning) {
         /** A whole solve from the beginning, whatever an unfinished one has left. */
         public Manner(long memoryBytes, StopRule until, boolean stay) {
-            this(memoryBytes, until, stay, false, Quality.FINAL, Beginning.ANEW);
+            this(memoryBytes, 0, until, stay, false, Quality.FINAL, Beginning.ANEW);
         }
     }
 
