@@ -87,8 +87,8 @@ public final class Lbfgs {
     }
 
     /**
-     * All that a search needs to go on with the same bits, as plain numbers. Arrays are copied in; the accessors give the
-     * record's own arrays, to read.
+     * All that a search needs to go on with the same bits, as plain numbers. Arrays are shared, not copied, to read: a search never changes
+     * one that it has once filled, and they are as large as all else that it holds.
      *
      * @param x           unknowns
      * @param value       there, quadratic term included
@@ -102,12 +102,10 @@ public final class Lbfgs {
      */
     public record State(double[] x, double value, double[] gradient, double quadratic, double[][] s, double[][] y,
                         int iterations, int evaluations, double lastMoved) {
-        /** Copies the arrays and checks shapes and numbers. @throws IllegalArgumentException naming what is off */
+        /** Checks shapes and numbers. @throws IllegalArgumentException naming what is off */
         public State {
-            x = x.clone();
-            gradient = gradient.clone();
-            s = copied(s);
-            y = copied(y);
+            s = s.clone();
+            y = y.clone();
             requireFinite("x", x);
             requireFinite("gradient", gradient);
             requireFinite("value, quadratic, lastMoved", new double[] {value, quadratic, lastMoved});
@@ -126,13 +124,6 @@ public final class Lbfgs {
             }
         }
 
-        private static double[][] copied(double[][] a) {
-            double[][] out = new double[a.length][];
-            for (int n = 0; n < a.length; n++) {
-                out[n] = a[n].clone();
-            }
-            return out;
-        }
     }
 
     /**
@@ -166,12 +157,12 @@ public final class Lbfgs {
             throw new IllegalArgumentException("L-BFGS state: got " + state.s().length + " pairs, needs at most " + settings.pairs()
                     + " as in the settings");
         }
-        x = state.x().clone();
-        gradient = state.gradient().clone();
+        x = state.x();
+        gradient = state.gradient();
         value = state.value();
         quadratic = state.quadratic();
         for (int n = 0; n < state.s().length; n++) {
-            if (!pairs.add(state.s()[n].clone(), state.y()[n].clone())) {
+            if (!pairs.add(state.s()[n], state.y()[n])) {
                 throw new IllegalArgumentException("L-BFGS state: pair " + n + " has s.y not above 0; the record is damaged");
             }
         }
@@ -227,7 +218,7 @@ public final class Lbfgs {
         return pairs.count();
     }
 
-    /** A copy of everything, from which a new object goes on with the same bits. */
+    /** Everything, from which a new object goes on with the same bits; later calls do not change it. */
     public State state() {
         double[][] s = new double[pairs.count()][];
         double[][] y = new double[pairs.count()][];

@@ -1,14 +1,19 @@
 package org.wispwright.optimize.solve;
 
-import java.io.ByteArrayInputStream;
-import java.io.ByteArrayOutputStream;
+import java.io.BufferedInputStream;
 import java.io.DataInputStream;
 import java.io.DataOutputStream;
+import java.io.EOFException;
+import java.io.FilterInputStream;
+import java.io.FilterOutputStream;
 import java.io.IOException;
+import java.io.InputStream;
+import java.io.OutputStream;
 import java.nio.ByteBuffer;
 import java.nio.file.Files;
 import java.nio.file.LinkOption;
 import java.nio.file.Path;
+import java.security.DigestOutputStream;
 import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
 import java.util.ArrayList;
@@ -23,15 +28,16 @@ import org.wispwright.render.volume.GridShape;
 /**
  * The records of a running solve: two files in one folder, written in turn, so that whatever happens to the newer one the older
  * is there. Each appears whole or not at all, and says by its digest if a single bit of it has changed since.
- * <p>Layout, big-endian: the 8 bytes {@code WISPREC1}, the payload's length (int64), the payload ({@link #encoded}), its SHA-256 (32 bytes).
+ * <p>Layout, big-endian: the 8 bytes {@code WISPREC1}, the payload's length (int64), the payload ({@link #encode}), its SHA-256 (32 bytes).
  */
 public final class SolveRecords {
     /** Name of a record that stands alone. */
     public static final String ONLY = "record-0.bin";
     private static final byte[] MAGIC = {'W', 'I', 'S', 'P', 'R', 'E', 'C', '1'};
     private static final int DIGEST = 32;
-    /** The most a record may weigh: 1 GiB. */
-    private static final long MOST_BYTES = 1L << 30;
+    private static final int HEAD = 8 + Long.BYTES;
+    /** Numbers that go through the buffer at a time. */
+    private static final int CHUNK = 1 << 13;
 
     private final Path folder;
 
@@ -68,13 +74,14 @@ public final class SolveRecords {
     }
 
     private static void write(SolveState state, Path file) throws IOException {
-        byte[] payload = encoded(state);
-        byte[] digest = digest(payload);
+        Counted length = new Counted(OutputStream.nullOutputStream());
+        encode(state, length);
         WholeFile.write(file, out -> {
             out.write(MAGIC);
-            out.write(ByteBuffer.allocate(Long.BYTES).putLong(payload.length).array());
-            out.write(payload);
-            out.write(digest);
+            out.write(ByteBuffer.allocate(Long.BYTES).putLong(length.bytes).array());
+            DigestOutputStream digested = new DigestOutputStream(out, sha256());
+            encode(state, digested);
+            out.write(digested.getMessageDigest().digest());
         });
     }
 
@@ -88,7 +95,7 @@ public final class SolveRecords {
                 continue;
             }
             try {
-                SolveState state = decoded(payload(file));
+                SolveState state = read(file);
                 if (newest.isEmpty() || newest.get().search().iterations() < state.search().iterations()) {
                     newest = Optional.of(state);
                 }
@@ -110,59 +117,70 @@ public final class SolveRecords {
         return folder.resolve("record-" + n + ".bin");
     }
 
-    private static byte[] payload(Path file) throws IOException, DamagedException {
+    /** Goes through the file twice, first for its digest: no number of a record is believed before all of it is known to be whole. */
+    private static SolveState read(Path file) throws IOException, DamagedException {
         long size = Files.size(file);
-        if (size > MOST_BYTES) {
-            throw new DamagedException(size + " bytes, needs at most " + MOST_BYTES);
+        long length = size - HEAD - DIGEST;
+        try (InputStream in = new BufferedInputStream(Files.newInputStream(file), 1 << 16)) {
+            byte[] head = in.readNBytes(HEAD);
+            if (length < 0 || head.length < HEAD || !Arrays.equals(Arrays.copyOf(head, MAGIC.length), MAGIC)) {
+                throw new DamagedException("does not begin as a record of this version does");
+            }
+            if (ByteBuffer.wrap(head, MAGIC.length, Long.BYTES).getLong() != length) {
+                throw new DamagedException("is cut short or grown: " + size + " bytes");
+            }
+            MessageDigest digest = sha256();
+            byte[] some = new byte[1 << 16];
+            for (long left = length; left > 0;) {
+                int count = in.readNBytes(some, 0, (int) Math.min(left, some.length));
+                if (count == 0) {
+                    throw new DamagedException("is cut short");
+                }
+                digest.update(some, 0, count);
+                left -= count;
+            }
+            if (!Arrays.equals(digest.digest(), in.readNBytes(DIGEST))) {
+                throw new DamagedException("its digest does not fit, so some of its bytes have changed");
+            }
         }
-        byte[] all = Files.readAllBytes(file);
-        int head = MAGIC.length + Long.BYTES;
-        if (all.length < head + DIGEST || !Arrays.equals(Arrays.copyOf(all, MAGIC.length), MAGIC)) {
-            throw new DamagedException("does not begin as a record of this version does");
+        try (InputStream in = new BufferedInputStream(Files.newInputStream(file), 1 << 16)) {
+            in.skipNBytes(HEAD);
+            return decoded(in, length);
         }
-        long length = ByteBuffer.wrap(all, MAGIC.length, Long.BYTES).getLong();
-        if (length != all.length - head - DIGEST) {
-            throw new DamagedException("is cut short or grown: " + all.length + " bytes");
-        }
-        byte[] payload = Arrays.copyOfRange(all, head, all.length - DIGEST);
-        if (!Arrays.equals(digest(payload), Arrays.copyOfRange(all, all.length - DIGEST, all.length))) {
-            throw new DamagedException("its digest does not fit, so some of its bytes have changed");
-        }
-        return payload;
     }
 
     /** The fields of a {@link SolveState} in their order: numbers as they are, texts as modified UTF-8, lists after their length. */
-    static byte[] encoded(SolveState state) throws IOException {
-        ByteArrayOutputStream bytes = new ByteArrayOutputStream();
-        try (DataOutputStream out = new DataOutputStream(bytes)) {
-            out.writeUTF(state.problem());
-            out.writeInt(state.rung());
-            out.writeInt(state.band());
-            out.writeInt(state.bandIterations());
-            out.writeInt(state.bandGradients());
-            out.writeDouble(state.bandSeconds());
-            out.writeDouble(state.seconds());
-            write(out, state.search());
-            write(out, state.losses());
-            write(out, state.met());
-            out.writeInt(state.runs().size());
-            for (SolveResult.BandRun run : state.runs()) {
-                write(out, run);
-            }
-            out.writeUTF(state.ended());
+    static void encode(SolveState state, OutputStream to) throws IOException {
+        DataOutputStream out = new DataOutputStream(to);
+        out.writeUTF(state.problem());
+        out.writeInt(state.rung());
+        out.writeInt(state.band());
+        out.writeInt(state.bandIterations());
+        out.writeInt(state.bandGradients());
+        out.writeDouble(state.bandSeconds());
+        out.writeDouble(state.seconds());
+        write(out, state.search());
+        write(out, state.losses());
+        write(out, state.met());
+        out.writeInt(state.runs().size());
+        for (SolveResult.BandRun run : state.runs()) {
+            write(out, run);
         }
-        return bytes.toByteArray();
+        out.writeUTF(state.ended());
+        out.flush();
     }
 
-    private static SolveState decoded(byte[] payload) throws DamagedException {
-        try (DataInputStream in = new DataInputStream(new ByteArrayInputStream(payload))) {
+    private static SolveState decoded(InputStream from, long length) throws IOException, DamagedException {
+        Rest rest = new Rest(from, length);
+        DataInputStream in = new DataInputStream(rest);
+        try {
             SolveState state = new SolveState(in.readUTF(), in.readInt(), in.readInt(), in.readInt(), in.readInt(), in.readDouble(),
-                    in.readDouble(), readSearch(in), readList(in), readList(in), readRuns(in), in.readUTF());
-            if (in.available() > 0) {
+                    in.readDouble(), readSearch(in, rest), readList(in, rest), readList(in, rest), readRuns(in, rest), in.readUTF());
+            if (rest.left > 0) {
                 throw new DamagedException("has more in it than a record of this version");
             }
             return state;
-        } catch (IOException | IllegalArgumentException wrong) {
+        } catch (IllegalArgumentException | EOFException wrong) {
             throw new DamagedException("cannot be understood (" + wrong.getMessage() + ")");
         }
     }
@@ -182,17 +200,17 @@ public final class SolveRecords {
         out.writeDouble(search.lastMoved());
     }
 
-    private static Lbfgs.State readSearch(DataInputStream in) throws IOException {
-        double[] x = readArray(in);
+    private static Lbfgs.State readSearch(DataInputStream in, Rest rest) throws IOException {
+        double[] x = readArray(in, rest);
         double value = in.readDouble();
-        double[] gradient = readArray(in);
+        double[] gradient = readArray(in, rest);
         double quadratic = in.readDouble();
-        int pairs = count(in, 2 * Integer.BYTES);
+        int pairs = count(in, rest, 2 * Integer.BYTES);
         double[][] s = new double[pairs][];
         double[][] y = new double[pairs][];
         for (int n = 0; n < pairs; n++) {
-            s[n] = readArray(in);
-            y[n] = readArray(in);
+            s[n] = readArray(in, rest);
+            y[n] = readArray(in, rest);
         }
         return new Lbfgs.State(x, value, gradient, quadratic, s, y, in.readInt(), in.readInt(), in.readDouble());
     }
@@ -213,9 +231,9 @@ public final class SolveRecords {
         out.writeDouble(run.seconds());
     }
 
-    private static List<SolveResult.BandRun> readRuns(DataInputStream in) throws IOException {
+    private static List<SolveResult.BandRun> readRuns(DataInputStream in, Rest rest) throws IOException {
         List<SolveResult.BandRun> runs = new ArrayList<>();
-        for (int n = count(in, Long.BYTES); n > 0; n--) {
+        for (int n = count(in, rest, Long.BYTES); n > 0; n--) {
             GridShape grid = new GridShape(in.readInt(), in.readInt(), in.readInt(), in.readDouble(), in.readDouble(), in.readDouble(),
                     in.readDouble());
             Band band = new Band(in.readDouble(), in.readDouble(), in.readInt());
@@ -226,15 +244,22 @@ public final class SolveRecords {
 
     private static void write(DataOutputStream out, double[] values) throws IOException {
         out.writeInt(values.length);
-        ByteBuffer bytes = ByteBuffer.allocate(values.length * Double.BYTES);
-        bytes.asDoubleBuffer().put(values);
-        out.write(bytes.array());
+        ByteBuffer bytes = ByteBuffer.allocate(CHUNK * Double.BYTES);
+        for (int from = 0; from < values.length; from += CHUNK) {
+            int count = Math.min(CHUNK, values.length - from);
+            bytes.asDoubleBuffer().put(values, from, count);
+            out.write(bytes.array(), 0, count * Double.BYTES);
+        }
     }
 
-    private static double[] readArray(DataInputStream in) throws IOException {
-        double[] values = new double[count(in, Double.BYTES)];
-        byte[] bytes = in.readNBytes(values.length * Double.BYTES);
-        ByteBuffer.wrap(bytes).asDoubleBuffer().get(values);
+    private static double[] readArray(DataInputStream in, Rest rest) throws IOException {
+        double[] values = new double[count(in, rest, Double.BYTES)];
+        ByteBuffer bytes = ByteBuffer.allocate(CHUNK * Double.BYTES);
+        for (int from = 0; from < values.length; from += CHUNK) {
+            int count = Math.min(CHUNK, values.length - from);
+            in.readFully(bytes.array(), 0, count * Double.BYTES);
+            bytes.asDoubleBuffer().get(values, from, count);
+        }
         return values;
     }
 
@@ -242,24 +267,67 @@ public final class SolveRecords {
         write(out, values.stream().mapToDouble(Double::doubleValue).toArray());
     }
 
-    private static List<Double> readList(DataInputStream in) throws IOException {
-        return Arrays.stream(readArray(in)).boxed().toList();
+    private static List<Double> readList(DataInputStream in, Rest rest) throws IOException {
+        return Arrays.stream(readArray(in, rest)).boxed().toList();
     }
 
     /** A length, refused if what follows cannot hold so many entries. */
-    private static int count(DataInputStream in, int bytesEach) throws IOException {
+    private static int count(DataInputStream in, Rest rest, int bytesEach) throws IOException {
         int count = in.readInt();
-        if (count < 0 || count > in.available() / bytesEach) {
-            throw new IOException("a list of " + count + " entries in " + in.available() + " bytes");
+        if (count < 0 || count > rest.left / bytesEach) {
+            throw new EOFException("a list of " + count + " entries in " + rest.left + " bytes");
         }
         return count;
     }
 
-    private static byte[] digest(byte[] bytes) {
+    private static MessageDigest sha256() {
         try {
-            return MessageDigest.getInstance("SHA-256").digest(bytes);
+            return MessageDigest.getInstance("SHA-256");
         } catch (NoSuchAlgorithmException impossible) {
             throw new IllegalStateException(impossible);
+        }
+    }
+
+    /** Counts what goes through. */
+    private static final class Counted extends FilterOutputStream {
+        private long bytes;
+
+        Counted(OutputStream out) {
+            super(out);
+        }
+
+        @Override
+        public void write(int one) throws IOException {
+            bytes++;
+        }
+
+        @Override
+        public void write(byte[] some, int from, int count) throws IOException {
+            bytes += count;
+        }
+    }
+
+    /** The rest of a payload: knows how much of it is left, and ends with it. */
+    private static final class Rest extends FilterInputStream {
+        private long left;
+
+        Rest(InputStream in, long length) {
+            super(in);
+            left = length;
+        }
+
+        @Override
+        public int read() throws IOException {
+            int one = left > 0 ? super.read() : -1;
+            left -= one < 0 ? 0 : 1;
+            return one;
+        }
+
+        @Override
+        public int read(byte[] some, int from, int count) throws IOException {
+            int got = left > 0 ? super.read(some, from, (int) Math.min(left, count)) : -1;
+            left -= Math.max(0, got);
+            return got;
         }
     }
 

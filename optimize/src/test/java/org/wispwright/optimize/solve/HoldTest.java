@@ -135,7 +135,8 @@ class HoldTest {
         new TermPlan(problem, solver, flow.startState(), terms, false, () -> false);
         double[] x = new double[Solve.basis(flow, lanes).unknowns(1)];
         Arrays.fill(x, 0.3);
-        return new SolveLoss(solver, Solve.basis(flow, lanes), terms, flow.startState(), problem.lastFrame(), 100, () -> false)
+        return new SolveLoss(solver, Solve.basis(flow, lanes), terms, problem.lastFrame(),
+                WholeChainTest.states(flow, flow.startState(), problem.lastFrame(), 100), () -> false)
                 .forward(x, new double[x.length]);
     }
 

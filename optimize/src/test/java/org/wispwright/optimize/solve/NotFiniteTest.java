@@ -30,7 +30,8 @@ class NotFiniteTest {
         SmokeSolver solver = new SmokeSolver(flow, lanes);
         FrameTerms terms = new FrameTerms(flow.grid(), problem.views(), problem.look(), flow.grid().cellMetres(), solver.clock(), lanes);
         new TermPlan(problem, solver, flow.startState(), terms, false, () -> false);
-        return new SolveLoss(solver, Solve.basis(flow, lanes), terms, flow.startState(), problem.lastFrame(), snapshots, () -> false);
+        return new SolveLoss(solver, Solve.basis(flow, lanes), terms, problem.lastFrame(),
+                WholeChainTest.states(flow, flow.startState(), problem.lastFrame(), snapshots), () -> false);
     }
 
     /** By hand, on faces and cells of a box of 3 x 4 x 5: value n of x faces lies at (n mod 4, n / 4 mod 4, n / 16). */

@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertArrayEquals;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.io.ByteArrayOutputStream;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -27,7 +28,7 @@ class SolveRecordsTest {
         SolveState state = state(7);
         records.write(state);
         SolveState back = records.latest().state().orElseThrow();
-        assertArrayEquals(SolveRecords.encoded(state), SolveRecords.encoded(back));
+        assertArrayEquals(encoded(state), encoded(back));
         assertArrayEquals(state.search().s()[1], back.search().s()[1]);
         assertEquals(state.runs(), back.runs());
         assertEquals(state.losses(), back.losses());
@@ -66,6 +67,12 @@ class SolveRecordsTest {
         Files.write(folder.resolve("record-0.bin"), new byte[0]);
         assertTrue(records.latest().state().isEmpty());
         assertEquals(2, records.latest().damaged().size());
+    }
+
+    private static byte[] encoded(SolveState state) throws IOException {
+        ByteArrayOutputStream bytes = new ByteArrayOutputStream();
+        SolveRecords.encode(state, bytes);
+        return bytes.toByteArray();
     }
 
     private static void assertFallsBack(SolveRecords records, String what) throws IOException {

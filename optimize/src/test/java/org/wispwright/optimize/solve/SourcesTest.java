@@ -91,14 +91,14 @@ class SourcesTest {
         List<SolveState> states = new ArrayList<>();
         SolveResult whole;
         try (Lanes lanes = new Lanes(2)) {
-            whole = new Solve(problem, true, lanes, () -> false).run(MEMORY, some, p -> { }, "d", Optional.empty(), states::add);
+            whole = new Solve(problem, true, lanes, () -> false).run(StateRoom.inMemory(MEMORY), some, p -> { }, "d", Optional.empty(), states::add);
         }
         assertTrue(states.stream().anyMatch(s -> s.rung() == 2), "the second rung is reached");
         for (int from : new int[] {2, 31, states.size() - 2}) {
             SolveRecords records = new SolveRecords(folder);
             records.write(states.get(from));
             try (Lanes lanes = new Lanes(1 + from % 3)) {
-                SolveResult rest = new Solve(problem, true, lanes, () -> false).run(1 << 20, some, p -> { }, "d", records.latest().state(), s -> { });
+                SolveResult rest = new Solve(problem, true, lanes, () -> false).run(StateRoom.inMemory(1 << 20), some, p -> { }, "d", records.latest().state(), s -> { });
                 assertArrayEquals(whole.unknowns(), rest.unknowns());
                 assertTrue(Arrays.deepEquals(whole.strengths().orElseThrow(), rest.strengths().orElseThrow()));
                 assertEquals(whole.losses(), rest.losses());

@@ -37,6 +37,7 @@ final class SolveSearch implements AutoCloseable {
     private final String digest;
     private final Optional<SolveState> from;
     private SolveState end;
+    private int recorded;
     private boolean recordsFail;
     private int told;
 
@@ -90,7 +91,7 @@ final class SolveSearch implements AutoCloseable {
             throw new Cancel.Cancelled();
         } catch (UncheckedIOException refused) {
             throw new ShotException(new Finding("takes/.solving/" + STATES, "", refused.getMessage() + " (" + refused.getCause().getMessage()
-                    + ")" + (end == null ? "." : "; then go on by --resume, after iteration " + end.search().iterations() + ".")), refused);
+                    + ")" + (recorded == 0 ? "." : "; then go on by --resume, after iteration " + recorded + ".")), refused);
         } catch (IllegalArgumentException refused) {
             String words = String.valueOf(refused.getMessage());
             throw new ShotException(new Finding("shot.json", "", words.endsWith(".") ? words : words + "."), refused);
@@ -117,9 +118,12 @@ final class SolveSearch implements AutoCloseable {
     }
 
     private void record(SolveState state) {
-        end = state;
+        if (!state.ended().isEmpty()) {
+            end = state;                                                       // only the last: each holds as much as the search
+        }
         try {
             place.records().write(state);
+            recorded = state.search().iterations();
             recordsFail = false;
         } catch (IOException refused) {
             if (!recordsFail) {

@@ -49,7 +49,8 @@ public final class SolidGradientFigures {
         float[] weights = new float[grid.nx() * grid.nx()];
         Arrays.fill(weights, 1f);
         terms.add(lastFrame, 0, new PyramidLoss(new Picture(grid.nx(), grid.nx()), weights), 1);
-        SolveLoss loss = new SolveLoss(solver, basis, terms, flow.startState(), lastFrame, 1000, () -> false);
+        SolveLoss loss = new SolveLoss(solver, basis, terms, lastFrame,
+                new Snapshots(flow, flow.startState(), flow.stepsTo(lastFrame), StateRoom.inMemory(Long.MAX_VALUE)), () -> false);
         double[] x = new double[basis.unknowns(1)];
         Random random = new Random(1);
         for (int n = 0; n < x.length; n++) {
