@@ -100,6 +100,21 @@ public final class Solve {
         return new ForceBasis(flow.grid(), flow.frames().count() - 1, bands(flow), lanes);
     }
 
+    /** Numbers that a search of all bands of a shot has to find, sources left out. */
+    public static int unknowns(FlowSetup flow) {
+        return basis(flow, new Lanes(1)).unknowns(bands(flow).size());
+    }
+
+    /** The same for a search that climbs no higher than a grid. */
+    public static int unknowns(FlowSetup flow, GridShape top) {
+        return basis(flow, new Lanes(1)).unknowns(open(bands(flow), top));
+    }
+
+    /** Bytes that the search itself takes for so many unknowns: its pairs, and the seven arrays of a line search beside them. */
+    public static long searchBytes(long unknowns) {
+        return unknowns * Double.BYTES * (2 * PAIRS + 7);
+    }
+
     /** The curves of a shot's sources: what the first unknowns mean where strengths may change. */
     static SourceCurves curves(FlowSetup flow) {
         int first = flow.frames().first() + 1;

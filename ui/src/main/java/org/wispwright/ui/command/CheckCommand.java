@@ -63,8 +63,7 @@ final class CheckCommand implements Callable<Integer> {
         }
         Shot checked = result.shot().orElseThrow();
         FlowSetup flow = checked.flow();
-        long need = MemoryNeed.bytes(flow.grid(), flow.frames(), flow.substeps())
-                + MemoryNeed.ofMore(flow);
+        long need = MemoryNeed.bytes(flow);
         int holds = checked.holds().size() + checked.notes().stream().mapToInt(note -> note.holds().size()).sum();
         int rendered = checked.views().stream().mapToInt(v -> v.rendered().size()).sum();
         object.put("name", checked.name()).put("cells", flow.grid().cells()).put("firstFrame", flow.frames().first())

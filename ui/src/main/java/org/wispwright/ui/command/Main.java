@@ -21,7 +21,7 @@ import picocli.CommandLine.UnmatchedArgumentException;
 /** The program: finds the command, runs it, and turns whatever happens into an exit code and at most one sentence. */
 @Command(name = "wispwright", versionProvider = Main.Version.class, sortOptions = false,
         description = "Changes a smoke simulation so that it satisfies review notes drawn on its frames.",
-        subcommands = {TourCommand.class, SimulateCommand.class, PictureCommand.class, RetouchCommand.class, SolveCommand.class,
+        subcommands = {TourCommand.class, SimulateCommand.class, PictureCommand.class, RetouchCommand.class, EstimateCommand.class, SolveCommand.class,
                 CompareCommand.class, CheckCommand.class, NoteCommand.class, MeasureCommand.class},
         synopsisSubcommandLabel = "COMMAND",
         footer = {"",

@@ -83,8 +83,7 @@ final class SolveSearch implements AutoCloseable {
     SolveResult run(Lanes lanes, Cancel cancel) {
         try {
             FlowSetup flow = problem.flow();
-            long forStates = MemoryNeed.forStates(flow.grid(), flow.frames(), flow.substeps(),
-                    manner.memoryBytes() - MemoryNeed.ofMore(flow));
+            long forStates = MemoryNeed.forStates(flow, manner.memoryBytes(), MemoryNeed.region());
             return new Solve(problem, manner.quality().rungs(flow.grid()), manner.stay(), lanes, cancel::wished)
                     .run(new StateRoom(forStates, manner.diskBytes(), place.file(STATES)), manner.until(), this::tell, digest, from, this::record);
         } catch (SolveCancelled asked) {

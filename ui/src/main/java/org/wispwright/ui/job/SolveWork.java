@@ -85,6 +85,8 @@ public final class SolveWork {
         List<SmokeAsked> asked = SmokeAsked.ofAll(Takes.of(folder), shot, lanes);
         asked.stream().filter(SmokeAsked::isWorthTelling).forEach(smoke -> progress.milestone(smoke.inWords(manner.sources())));
         try (SolveSearch search = SolveSearch.begin(folder, problem, manner, progress)) {
+            progress.milestone("estimate: " + Estimate.of(manner.quality(), shot, manner.memoryBytes(), manner.diskBytes(), lanes, cancel)
+                    .inWords());
             SolveResult solve = search.run(lanes, cancel);
             Result result = take(folder, shot, manner, original, asked, solve, search, lanes, progress, cancel, start);
             search.over();

@@ -1,25 +1,37 @@
 package org.wispwright.ui.shot;
 
+import com.sun.management.HotSpotDiagnosticMXBean;
+import java.lang.management.ManagementFactory;
 import java.util.Locale;
 import java.util.Optional;
 import org.wispwright.optimize.flow.FlowSetup;
-import org.wispwright.optimize.flow.FrameRange;
+import org.wispwright.optimize.flow.SmokeState;
+import org.wispwright.optimize.solve.Solve;
 import org.wispwright.render.volume.GridShape;
 
 /**
  * How much memory a solve takes at the least, so that a shot that cannot fit is refused before work starts.
- * <p>{@code bytes = BASE + cells * (STATE * states + STEP)}: a state is density and three face components, 16 bytes a cell;
+ * <p>{@code bytes = BASE + cells * (STATE * states + STEP + SEARCH)}: a state is density and three face components, 16 bytes a cell;
  * states are kept at {@code ceil(log2(steps)) + 1} moments (binomial placement, Griewank and Walther 2000, needs no more
- * for a bounded number of repeats); one step on tape, its pullback and the search's fields take STEP a cell. More memory
- * makes a solve quicker, not better.
+ * for a bounded number of repeats); one step on tape, its pullback and a picture's fields take STEP a cell; the search's pairs SEARCH,
+ * counted exactly from the unknowns where they are known ({@link Solve#searchBytes}). More memory makes a solve quicker, not better.
  */
 public final class MemoryNeed {
     /** The program itself, pictures and notes. */
     static final long BASE = 96L << 20;
     /** Bytes a cell of one kept state. */
     static final long STATE = 16;
-    /** Bytes a cell of everything that is there once: 48 float fields. */
-    static final long STEP = 192;
+    /**
+     * Bytes a cell of everything that is there once. Counted: four states of the chain and the start 80, two forces 24, the solver's
+     * adjoint 16, departures 48, pressure 12; the march of one view with its light 26; waves of the force about 6.
+     */
+    static final long STEP = 212;
+    /** Bytes a cell of the search's pairs where the unknowns are not counted yet: 0.43 a cell, those of a cube of 128. */
+    static final long SEARCH = 160;
+    /** Bytes a cell of a plain run: three states, a force, paths and pressure. */
+    static final long RUN = 110;
+    /** Of the heap, what is left to the collector: 1 part in so many. */
+    private static final long COLLECTORS_PART = 16;
 
     /** Bytes a pixel of a picture that is drawn: 16 for its values, 60 for its rays, and its file. */
     static final long PIXEL = 80;
@@ -35,25 +47,61 @@ public final class MemoryNeed {
         return BASE + cells * bytesACell(steps);
     }
 
-    /** Least bytes for a solve. */
-    public static long bytes(GridShape grid, FrameRange frames, int substeps) {
-        return bytes(grid.cells(), (long) frames.count() * substeps);
+    /** Least bytes for a solve of a shot that is known, its unknowns counted. */
+    public static long bytes(FlowSetup flow) {
+        return ofSearchAndStep(flow) + SmokeState.bytes(flow.grid()) * states((long) flow.frames().count() * flow.substeps()) + ofMore(flow);
     }
 
-    /** What of the memory given is left for the states that a sweep keeps; at least what {@link #bytes} counts for them. */
-    public static long forStates(GridShape grid, FrameRange frames, int substeps, long memoryBytes) {
-        long least = bytes(grid, frames, substeps) - besidesStates(grid);
-        return Math.max(least, memoryBytes - besidesStates(grid));
+    /**
+     * What of the memory given is left for the states that a sweep keeps; at least what {@link #bytes} counts for them. The collector
+     * keeps a large array in whole regions, the last of them unused to its end, and needs some room to work: both are left to it.
+     *
+     * @param region bytes of the collector's regions, see {@link #region}; 0 for a collector without
+     */
+    public static long forStates(FlowSetup flow, long memoryBytes, long region) {
+        long least = SmokeState.bytes(flow) * states((long) flow.frames().count() * flow.substeps());
+        double waste = waste(4L * flow.grid().cells(), region);
+        double left = memoryBytes - memoryBytes / COLLECTORS_PART - waste * (ofSearchAndStep(flow) - BASE) - BASE - ofMore(flow);
+        return Math.max(least, (long) (left / waste));
     }
 
-    /** Bytes that a gradient takes beside the states it keeps. */
+    /**
+     * What a solve that climbs to a grid holds at once: the search there with so many states, or the run of its take on the shot's own
+     * grid, whichever is more.
+     */
+    public static long ofSolve(FlowSetup flow, GridShape top, int states) {
+        FlowSetup there = flow.on(top);
+        long unknowns = Solve.unknowns(flow, top);
+        long search = besidesStates(top) + Solve.searchBytes(unknowns) + ofMore(there) + states * SmokeState.bytes(there);
+        long run = BASE + RUN * flow.grid().cells() + ofSolids(flow.grid().cells(), !flow.obstacles().isEmpty());
+        return Math.max(search, run);
+    }
+
+    /** Heap that an array of so many bytes takes, as a multiple: an array of half a region or more has whole regions to itself. */
+    static double waste(long arrayBytes, long region) {
+        long held = arrayBytes + 16;
+        return region == 0 || held < region / 2 ? 1 : (held + region - 1) / region * region / (double) arrayBytes;
+    }
+
+    /** Bytes of the regions of this Java's collector; 0 if it has none. */
+    public static long region() {
+        HotSpotDiagnosticMXBean machine = ManagementFactory.getPlatformMXBean(HotSpotDiagnosticMXBean.class);
+        boolean regions = machine != null && Boolean.parseBoolean(machine.getVMOption("UseG1GC").getValue());
+        return regions ? Long.parseLong(machine.getVMOption("G1HeapRegionSize").getValue()) : 0;
+    }
+
+    private static long ofSearchAndStep(FlowSetup flow) {
+        return besidesStates(flow.grid()) + Solve.searchBytes(Solve.unknowns(flow));
+    }
+
+    /** Bytes that a gradient takes beside the states it keeps and the search. */
     public static long besidesStates(GridShape grid) {
         return BASE + grid.cells() * STEP;
     }
 
     /** What a temperature takes beside all that, if there is one: a field in every state, and four at once. */
     static long ofTemperature(long cells, long steps, boolean any) {
-        return any ? cells * (bytesACell(steps) - STEP + 4 * STATE) / 4 : 0;
+        return any ? cells * STATE * (states(steps) + 4) / 4 : 0;
     }
 
     /** What solids take beside all that, if there are any. */
@@ -123,8 +171,10 @@ public final class MemoryNeed {
     }
 
     private static long bytesACell(long solverSteps) {
-        long steps = Math.max(2, solverSteps);
-        long states = 65 - Long.numberOfLeadingZeros(steps - 1);
-        return STATE * states + STEP;
+        return STATE * states(solverSteps) + STEP + SEARCH;
+    }
+
+    private static long states(long solverSteps) {
+        return 65 - Long.numberOfLeadingZeros(Math.max(2, solverSteps) - 1);
     }
 }

@@ -14,6 +14,7 @@ final class ShotCommands {
                 List.of("simulate", shot.toString()),
                 List.of("picture", shot.toString(), "--take", "0", "--frame", "1004", "--view", "front", "--out", out + ".png"),
                 List.of("solve", shot.toString(), "--until", "iterations=1"),
+                List.of("estimate", shot.toString()),
                 List.of("compare", shot.toString(), "--takes", "0,1", "--out", out.toString()));
     }
 }

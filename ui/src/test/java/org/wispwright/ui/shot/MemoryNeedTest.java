@@ -8,10 +8,20 @@ import java.util.Optional;
 import org.junit.jupiter.api.Test;
 
 class MemoryNeedTest {
-    /** By hand: 1024 cells, 32 steps: 16 bytes at log2(32) + 1 = 6 moments and 192 once are 288 a cell; plus 96 MiB. */
+    /** By hand: 1024 cells, 32 steps: 16 bytes at log2(32) + 1 = 6 moments, 212 and 160 once are 468 a cell; plus 96 MiB. */
     @Test
     void bytesByHand() {
-        assertEquals((96L << 20) + 1024 * 288, MemoryNeed.bytes(1024, 32));
+        assertEquals((96L << 20) + 1024 * 468, MemoryNeed.bytes(1024, 32));
+    }
+
+    /** By hand: a cube of 64 has arrays of 1 MiB, which with their heads take two regions of 1 MiB; one of 128 nine for eight. */
+    @Test
+    void largeArraysTakeWholeRegions() {
+        long mib = 1L << 20;
+        assertEquals(2, MemoryNeed.waste(mib, mib));
+        assertEquals(9 / 8.0, MemoryNeed.waste(8 * mib, mib));
+        assertEquals(1, MemoryNeed.waste(mib, 4 * mib));
+        assertEquals(1, MemoryNeed.waste(mib, 0));
     }
 
     /** What is said to fit fits, and a tenth more along each axis does not. */
