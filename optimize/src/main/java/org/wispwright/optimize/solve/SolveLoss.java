@@ -76,7 +76,7 @@ final class SolveLoss implements Objective {
         return value;
     }
 
-    /** The value alone, NaN if the smoke is not finite at the end; the gradient is left for a reversal that may follow. */
+    /** The value alone; the gradient is left for a reversal that may follow. */
     double forward(double[] x, double[] gradient) {
         double[] sum = new double[1];
         begin(x, gradient);
@@ -86,8 +86,7 @@ final class SolveLoss implements Objective {
                 sum[0] += terms.forward(frame, chain.current().density(), losses);
             }
         });
-        // What is not finite spreads through the pressure to every cell, but a march takes NaN for nothing.
-        return Double.isFinite(chain.current().density().sum()) ? sum[0] : Double.NaN;
+        return sum[0];
     }
 
     /**

@@ -18,6 +18,7 @@ import org.wispwright.optimize.force.ForceBasis;
 import org.wispwright.optimize.search.Lbfgs;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.volume.GridShape;
+import org.wispwright.render.volume.MacVelocity;
 
 /** Runs and searches whose numbers go out of bounds say where that began, and keep what they had. Expected values by hand. */
 class NotFiniteTest {
@@ -25,13 +26,17 @@ class NotFiniteTest {
     private static final double HUGE = 1e45;
 
     private static SolveLoss loss(SolveProblem problem, int snapshots) {
+        return loss(problem, problem.flow().startState(), snapshots);
+    }
+
+    private static SolveLoss loss(SolveProblem problem, SmokeState start, int snapshots) {
         FlowSetup flow = problem.flow();
         Lanes lanes = new Lanes(1);
         SmokeSolver solver = new SmokeSolver(flow, lanes);
         FrameTerms terms = new FrameTerms(flow.grid(), problem.views(), problem.look(), flow.grid().cellMetres(), solver.clock(), lanes);
         new TermPlan(problem, solver, flow.startState(), terms, false, () -> false);
         return new SolveLoss(solver, Solve.basis(flow, lanes), terms, problem.lastFrame(),
-                WholeChainTest.states(flow, flow.startState(), problem.lastFrame(), snapshots), () -> false);
+                WholeChainTest.states(flow, start, problem.lastFrame(), snapshots), () -> false);
     }
 
     /** By hand, on faces and cells of a box of 3 x 4 x 5: value n of x faces lies at (n mod 4, n / 4 mod 4, n / 16). */
@@ -65,11 +70,25 @@ class NotFiniteTest {
         assertTrue(Arrays.stream(gradient).allMatch(Double::isNaN));
         String bad = loss.firstBad().orElseThrow();
         SmokeState next = SmokeState.of(flow);
-        org.wispwright.render.volume.MacVelocity force = new org.wispwright.render.volume.MacVelocity(flow.grid());
+        MacVelocity force = new MacVelocity(flow.grid());
         basis.force(x, 0, force);
         new SmokeSolver(flow, lanes).step(flow.startState(), force, flow.step(0), false, next);
         assertEquals(NotFinite.in(next, "frame 1002, substep 1 of 2,").orElseThrow(), bad);
         assertTrue(Double.isFinite(loss.evaluate(new double[x.length], gradient)), "and the next evaluation is as ever");
+    }
+
+    /** Air that stands, with one cell of NaN in a corner: the loss must not be taken for a number. */
+    @Test void smokeThatIsNotFiniteIsNoLoss() {
+        SolveProblem plain = SolveScene.problem(12, 1009, 1, false);
+        FlowSetup f = plain.flow();
+        FlowSetup still = new FlowSetup(f.grid(), f.frames(), 1, Interpolation.LINEAR, Interpolation.LINEAR, f.sides(), 0, 0, f.sources());
+        SolveProblem problem = new SolveProblem(still, plain.views(), plain.look(), plain.notes(), List.of());
+        SmokeState start = still.startState();
+        start.density().values()[f.grid().cell(11, 14, 11)] = Float.NaN;
+        SolveLoss loss = loss(problem, start, 100);
+        double[] x = new double[Solve.basis(still, new Lanes(1)).unknowns(1)];
+        assertTrue(Double.isNaN(loss.evaluate(x, new double[x.length])));
+        assertEquals(Optional.of("density at cell (11, 14, 11) of frame 1001 is NaN"), loss.firstBad());
     }
 
     /** However short its steps, this search meets numbers out of bounds: it keeps where it stood and says where they began. */
