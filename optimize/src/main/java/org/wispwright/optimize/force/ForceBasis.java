@@ -17,7 +17,7 @@ import org.wispwright.render.volume.MacVelocity;
  *
  * <p>Layout of x: bands in order; in a band modes in order, each with its splines side by side. Opening a band appends.
  */
-public final class ForceBasis {
+public final class ForceBasis implements ForceModel {
     private final GridShape shape;
     private final int steps;
     private final List<Band> bands;
@@ -90,6 +90,11 @@ public final class ForceBasis {
         return bands;
     }
 
+    @Override
+    public int unknowns() {
+        return firstUnknown[bands.size()];
+    }
+
     /** Number of unknowns of the first {@code openBands} bands. */
     public int unknowns(int openBands) {
         return firstUnknown[openBands];
@@ -100,14 +105,8 @@ public final class ForceBasis {
         return modes.get(band).size();
     }
 
-    /**
-     * Overwrites the force of a step.
-     *
-     * @param x    read: {@code unknowns(b)} numbers for some b
-     * @param step 0..steps-1
-     * @param out  overwritten, m/s2
-     * @throws IllegalArgumentException if x has not the length of a number of open bands
-     */
+    /** Takes as many unknowns as some number of open bands has. */
+    @Override
     public void force(double[] x, int step, MacVelocity out) {
         int open = openBands(x);
         WaveSum sum = wavesOf(open);
@@ -126,13 +125,7 @@ public final class ForceBasis {
         sum.sum(out);
     }
 
-    /**
-     * Adds to xBar what a derivative by the force of a step asks of the unknowns.
-     *
-     * @param forceBar read
-     * @param step     0..steps-1
-     * @param xBar     added to, as long as x
-     */
+    @Override
     public void pullback(MacVelocity forceBar, int step, double[] xBar) {
         int open = openBands(xBar);
         WaveSum sum = wavesOf(open);

@@ -7,7 +7,7 @@ import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.flow.Substep;
-import org.wispwright.optimize.force.ForceBasis;
+import org.wispwright.optimize.force.ForceModel;
 import org.wispwright.render.volume.GridShape;
 import org.wispwright.render.volume.MacVelocity;
 import org.wispwright.render.volume.ScalarGrid;
@@ -22,7 +22,7 @@ import org.wispwright.render.volume.ScalarGrid;
  */
 final class SmokeChain implements ReversibleChain {
     private final SmokeSolver solver;
-    private final ForceBasis basis;
+    private final ForceModel model;
     private final BooleanSupplier cancelled;
     private final Owed owed;
     private final FlowSetup flow;
@@ -53,9 +53,9 @@ final class SmokeChain implements ReversibleChain {
         void addTo(int n, ScalarGrid density, ScalarGrid densityBar);
     }
 
-    SmokeChain(SmokeSolver solver, ForceBasis basis, Snapshots states, BooleanSupplier cancelled, Owed owed) {
+    SmokeChain(SmokeSolver solver, ForceModel model, Snapshots states, BooleanSupplier cancelled, Owed owed) {
         this.solver = solver;
-        this.basis = basis;
+        this.model = model;
         this.cancelled = cancelled;
         this.owed = owed;
         this.states = states;
@@ -150,7 +150,7 @@ final class SmokeChain implements ReversibleChain {
         undisturbed = true;
         if (substep.number() == 0) {
             long since = System.nanoTime();
-            basis.pullback(forceBar, at, xBar);
+            model.pullback(forceBar, at, xBar);
             solver.clock().lap(Clock.Part.FORCE_BACK, since);
         }
         known = step;
@@ -162,7 +162,7 @@ final class SmokeChain implements ReversibleChain {
         int at = frameStep(substep);
         if (at != forceStep) {
             long since = System.nanoTime();
-            basis.force(x, at, force);
+            model.force(x, at, force);
             forceStep = at;
             solver.clock().lap(Clock.Part.FORCE, since);
         }

@@ -9,7 +9,7 @@ import org.wispwright.optimize.checkpoint.Reversal;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.Substep;
-import org.wispwright.optimize.force.ForceBasis;
+import org.wispwright.optimize.force.ForceModel;
 import org.wispwright.optimize.force.SourceCurves;
 import org.wispwright.optimize.search.Objective;
 
@@ -31,8 +31,8 @@ final class SolveLoss implements Objective {
     private double[] badX;
 
     /** With the sources as they were set up: see the other. */
-    SolveLoss(SmokeSolver solver, ForceBasis basis, FrameTerms terms, int lastFrame, Snapshots states, BooleanSupplier cancelled) {
-        this(solver, basis, Optional.empty(), terms, lastFrame, states, cancelled);
+    SolveLoss(SmokeSolver solver, ForceModel model, FrameTerms terms, int lastFrame, Snapshots states, BooleanSupplier cancelled) {
+        this(solver, model, Optional.empty(), terms, lastFrame, states, cancelled);
     }
 
     /**
@@ -40,13 +40,13 @@ final class SolveLoss implements Objective {
      * @param lastFrame the last frame that a term looks at, or later
      * @param states    kept in the sweep, and the first frame's
      */
-    SolveLoss(SmokeSolver solver, ForceBasis basis, Optional<SourceCurves> curves, FrameTerms terms, int lastFrame, Snapshots states,
+    SolveLoss(SmokeSolver solver, ForceModel model, Optional<SourceCurves> curves, FrameTerms terms, int lastFrame, Snapshots states,
               BooleanSupplier cancelled) {
         this.terms = terms;
         this.curves = curves.orElse(null);
         FlowSetup flow = solver.setup();
         losses = new double[terms.count()];
-        chain = new SmokeChain(solver, basis, states, cancelled, (n, density, densityBar) -> {
+        chain = new SmokeChain(solver, model, states, cancelled, (n, density, densityBar) -> {
             int frame = frameOf(flow, n);
             if (frame >= 0) {
                 this.terms.pullback(frame, density, densityBar);
