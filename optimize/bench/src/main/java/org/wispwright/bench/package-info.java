@@ -13,7 +13,8 @@
  * <p>Figures count only from a machine that does nothing else.
  * <p>Doors: {@link org.wispwright.bench.StepBench}, {@link org.wispwright.bench.MarchBench}, {@link org.wispwright.bench.LossBench},
  * {@link org.wispwright.bench.RetouchBench}, {@link org.wispwright.bench.MatteBench}; in the packages of what they compare, because that is not public:
- * {@link org.wispwright.optimize.flow.TransformBench}, {@link org.wispwright.optimize.force.ForceBench}, {@link org.wispwright.optimize.solve.SolveRace}.
+ * {@link org.wispwright.optimize.flow.TransformBench}, {@link org.wispwright.optimize.force.ForceBench},
+ * {@link org.wispwright.optimize.solve.SolveRace}.
  * <p>Words: <i>both sides</i> = the way that is timed and the one that it is held against.
  * <p>May use: render, warp, optimize.
  */

@@ -7,8 +7,8 @@ import org.wispwright.render.volume.MacVelocity;
 
 /**
  * Refinement by space instead of by frequency: the force is the discrete curl of a vector potential on the cells' edges, the sum
- * of lattices of cubic B-splines, each twice as fine as the one before: a quarter of the box's smallest side between knots, an eighth, and
- * so on down to 4 cells, about the shortest wave of {@link BandPlan}. In time each lattice has the splines of a band: 5, 10, 20.
+ * of lattices of cubic B-splines, each twice as fine as the one before: a quarter of the box's smallest side between knots, an eighth,
+ * and so on down to 4 cells, about the shortest wave of {@link BandPlan}. In time each lattice has the splines of a band: 5, 10, 20.
  *
  * <p>Forward: {@code f = curl(sum over levels of scale Bz By Bx c)}, {@code c = sum over splines of q[s][r] x}. Pullback: each factor's
  * transpose in turn. The scale makes the force of a spline in the middle of a lattice have root mean square 1 over the box; splines overlap,
