@@ -1,7 +1,6 @@
 package org.wispwright.optimize.solve;
 
 import java.util.List;
-import org.wispwright.optimize.checkpoint.Budget;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.SmokeSolver;
 import org.wispwright.optimize.flow.SmokeState;
@@ -32,7 +31,7 @@ final class RaceTrack {
         FrameTerms terms = new FrameTerms(flow.grid(), problem.views(), problem.look(), flow.grid().cellMetres(), solver.clock(), lanes);
         plan = new TermPlan(problem, solver, start, terms, true, () -> false);
         int steps = flow.stepsTo(problem.lastFrame());
-        loss = new SolveLoss(solver, model, terms, start, problem.lastFrame(), new Budget(MEMORY, SmokeState.bytes(flow)).snapshots(steps),
+        loss = new SolveLoss(solver, model, terms, problem.lastFrame(), new Snapshots(flow, start, steps, StateRoom.inMemory(MEMORY)),
                 curve::isOver);
     }
 
