@@ -10,7 +10,8 @@ public final class NotFinite {
     }
 
     /**
-     * The first such value in words: velocity along x, y and z, which a step makes first, then density, then temperature; each in memory order.
+     * The first such value in words: velocity along x, y and z, which a step makes first, then density, then temperature; each in memory
+     * order.
      *
      * @param when the moment, such as "frame 1012"
      * @return such as "density at cell (31, 4, 17) of frame 1012 is NaN"; empty if all values are finite

@@ -15,7 +15,8 @@ import org.wispwright.render.contract.PullbackContract;
 class SourceCurvesTest extends PullbackContract {
     private static final int STEPS = 21;
     /** All steps; six in the middle; none; one. */
-    private static final SourceCurves CURVES = new SourceCurves(STEPS, List.of(new SourceCurves.Span(0, STEPS), new SourceCurves.Span(9, 15),
+    private static final SourceCurves CURVES = new SourceCurves(STEPS, List.of(new SourceCurves.Span(0, STEPS), new SourceCurves.Span(9,
+            15),
             new SourceCurves.Span(4, 4), new SourceCurves.Span(20, 21)), 0.7);
 
     @Override protected Operator operator() {
@@ -38,7 +39,10 @@ class SourceCurvesTest extends PullbackContract {
         });
     }
 
-    /** By hand: round(21 / 8) = 3 spans of cubics are 6 splines, round(6 / 8) = 1 is 4; a source that feeds nothing has none, one step one. */
+    /**
+     * By hand: round(21 / 8) = 3 spans of cubics are 6 splines, round(6 / 8) = 1 is 4; a source that feeds nothing has none, one
+     * step one.
+     */
     @Test void countsItsUnknowns() {
         assertEquals(6 + 4 + 0 + 1, CURVES.unknowns());
     }

@@ -81,7 +81,8 @@ class HoldTest {
                 SolveProblem problem = with(List.of(hold(held, 1, all)));
                 SolveResult result = new Solve(problem, true, lanes, () -> false).run(MEMORY, MOST, p -> { });
                 Map<Integer, Picture> got = side(problem, result.unknowns(), lanes);
-                assertTrue(result.met().get(0) > 0.9 * without.met().get(0), () -> held + ": met " + result.met() + ", free " + without.met());
+                assertTrue(result.met().get(0) > 0.9 * without.met().get(0),
+                        () -> held + ": met " + result.met() + ", free " + without.met());
                 double ratio = squares(original, got) / squares(original, left);
                 double outline = outlines(original, got) / outlines(original, left);
                 assertTrue(ratio < 0.1, () -> held + ": squares of the change " + ratio + " of what they are without");
@@ -108,7 +109,8 @@ class HoldTest {
      * 1004; 1006, which is not looked at, so by itself; 1010 and 1011, twice named and once counted.
      */
     @Test void spansAreLookedAtWhereFramesAre() {
-        SolveProblem problem = with(List.of(hold(SolveProblem.Held.PICTURE, 1, new SolveProblem.Span(1002, 1005), new SolveProblem.Span(1006, 1006),
+        SolveProblem problem = with(List.of(hold(SolveProblem.Held.PICTURE, 1, new SolveProblem.Span(1002, 1005),
+                new SolveProblem.Span(1006, 1006),
                 new SolveProblem.Span(1010, 1012), new SolveProblem.Span(1011, 1011))));
         FlowSetup flow = problem.flow();
         Lanes lanes = new Lanes(1);

@@ -96,7 +96,8 @@ class NotFiniteTest {
         SolveProblem problem = SolveScene.problem(12, 1009, 1, false);
         SolveLoss loss = loss(problem, 100);
         int count = Solve.basis(problem.flow(), new Lanes(1)).unknowns(1);
-        Lbfgs lbfgs = new Lbfgs((x, gradient) -> loss.evaluate(Arrays.stream(x).map(v -> v * HUGE * 1e12).toArray(), gradient), new double[count],
+        Lbfgs lbfgs = new Lbfgs((x, gradient) -> loss.evaluate(Arrays.stream(x).map(v -> v * HUGE * 1e12).toArray(), gradient),
+                new double[count],
                 Lbfgs.Settings.standard());
         double value = lbfgs.value();
         Lbfgs.Iteration iteration = lbfgs.step();
@@ -125,7 +126,8 @@ class NotFiniteTest {
     @Test void anOriginalThatBlowsUpIsRefused() {
         SolveProblem calm = SolveScene.problem(12, 1009, 1, false);
         FlowSetup f = calm.flow();
-        FlowSetup wild = new FlowSetup(f.grid(), f.frames(), 1, Interpolation.LINEAR, Interpolation.LINEAR, f.sides(), 1e45, 0, f.sources());
+        FlowSetup wild = new FlowSetup(f.grid(), f.frames(), 1, Interpolation.LINEAR, Interpolation.LINEAR, f.sides(), 1e45, 0,
+                f.sources());
         for (FlowSetup flow : List.of(wild, f.withSources(List.of(new Source("pot", 1, 0.35, 1, 0.4, 0.25, 1e45, 1001, 1009))))) {
             SolveProblem problem = new SolveProblem(flow, calm.views(), calm.look(), calm.notes(), List.of());
             try (Lanes lanes = new Lanes(1)) {

@@ -45,7 +45,8 @@ class SourcesTest {
                 return ones;
             }
         };
-        return new SolveProblem(plain.flow(), plain.views(), plain.look(), List.of(new SolveProblem.Note("thick", last - 2, 0, 1, wish)), List.of());
+        return new SolveProblem(plain.flow(), plain.views(), plain.look(), List.of(new SolveProblem.Note("thick", last - 2, 0, 1, wish)),
+                List.of());
     }
 
     private static double norm(double[] x) {
@@ -62,7 +63,8 @@ class SourcesTest {
             assertTrue(without.strengths().isEmpty());
             assertTrue(without.met().get(0) < 0.8, () -> "without sources met " + without.met());
             assertTrue(with.met().get(0) > 0.93, () -> "with sources met " + with.met());
-            assertTrue(norm(with.unknowns()) < norm(without.unknowns()), () -> norm(with.unknowns()) + ", without " + norm(without.unknowns()));
+            assertTrue(norm(with.unknowns()) < norm(without.unknowns()),
+                    () -> norm(with.unknowns()) + ", without " + norm(without.unknowns()));
             double[][] strengths = with.strengths().orElseThrow();
             double mean = Arrays.stream(strengths).mapToDouble(row -> row[0]).average().orElseThrow();
             assertEquals(12, strengths.length);
@@ -75,11 +77,13 @@ class SourcesTest {
     private static double metAgain(SolveProblem problem, SolveResult result, Lanes lanes) {
         SmokeSolver solver = new SmokeSolver(problem.flow(), lanes);
         double h = problem.flow().grid().cellMetres();
-        FrameTerms terms = new FrameTerms(problem.flow().grid(), problem.views().stream().map(v -> Solve.proxy(v, h)).toList(), problem.look(), h,
+        FrameTerms terms = new FrameTerms(problem.flow().grid(), problem.views().stream().map(v -> Solve.proxy(v, h)).toList(),
+                problem.look(), h,
                 solver.clock(), lanes);
         TermPlan plan = new TermPlan(problem, solver, problem.flow().startState(), terms, false, () -> false);
         double[] losses = new double[terms.count()];
-        Simulation.run(solver, problem.flow().startState(), Solve.basis(problem.flow(), lanes), result.unknowns(), result.strengths().orElseThrow(),
+        Simulation.run(solver, problem.flow().startState(), Solve.basis(problem.flow(), lanes), result.unknowns(),
+                result.strengths().orElseThrow(),
                 problem.lastFrame(), () -> false, (frame, state, force) -> terms.forward(frame, state.density(), losses));
         return plan.met(losses).get(0);
     }
@@ -91,14 +95,16 @@ class SourcesTest {
         List<SolveState> states = new ArrayList<>();
         SolveResult whole;
         try (Lanes lanes = new Lanes(2)) {
-            whole = new Solve(problem, true, lanes, () -> false).run(StateRoom.inMemory(MEMORY), some, p -> { }, "d", Optional.empty(), states::add);
+            whole = new Solve(problem, true, lanes, () -> false).run(StateRoom.inMemory(MEMORY), some, p -> { }, "d", Optional.empty(),
+                    states::add);
         }
         assertTrue(states.stream().anyMatch(s -> s.rung() == 2), "the second rung is reached");
         for (int from : new int[] {2, 31, states.size() - 2}) {
             SolveRecords records = new SolveRecords(folder);
             records.write(states.get(from));
             try (Lanes lanes = new Lanes(1 + from % 3)) {
-                SolveResult rest = new Solve(problem, true, lanes, () -> false).run(StateRoom.inMemory(1 << 20), some, p -> { }, "d", records.latest().state(), s -> { });
+                SolveResult rest = new Solve(problem, true, lanes, () -> false).run(StateRoom.inMemory(1 << 20), some, p -> { }, "d",
+                        records.latest().state(), s -> { });
                 assertArrayEquals(whole.unknowns(), rest.unknowns());
                 assertTrue(Arrays.deepEquals(whole.strengths().orElseThrow(), rest.strengths().orElseThrow()));
                 assertEquals(whole.losses(), rest.losses());

@@ -67,7 +67,8 @@ public record SmokeAsked(Note note, double depth, double opacity) {
     /** What the note wants, what a force can do, and the way out. */
     public String inWords(boolean sources) {
         boolean more = depth > 1;
-        return String.format(Locale.ROOT, "note %s wants %.0f %% %s smoke than the original shows on frame %d (%.0f %% %s opacity); ", note.id(),
+        return String.format(Locale.ROOT, "note %s wants %.0f %% %s smoke than the original shows on frame %d (%.0f %% %s opacity); ",
+                note.id(),
                 100 * Math.abs(depth - 1), more ? "more" : "less", note.frame(), 100 * Math.abs(opacity - 1), opacity < 1 ? "less" : "more")
                 + (sources ? "the sources' strengths may change for it"
                 : more ? "a force moves smoke and cannot make it: ask for less, or let the sources' strengths change with solve --sources"

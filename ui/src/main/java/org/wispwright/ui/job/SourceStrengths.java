@@ -50,8 +50,10 @@ public final class SourceStrengths {
         List<String> lines = new ArrayList<>();
         for (int n = 0; n < flow.sources().size(); n++) {
             double[] values = values(flow, strengths, n);
-            lines.add(String.format(Locale.ROOT, "source '%s' gives %.2f times its rate (%.2f to %.2f over its frames)", flow.sources().get(n).name(),
-                    Arrays.stream(values).average().orElse(1), Arrays.stream(values).min().orElse(1), Arrays.stream(values).max().orElse(1)));
+            lines.add(String.format(Locale.ROOT, "source '%s' gives %.2f times its rate (%.2f to %.2f over its frames)",
+                    flow.sources().get(n).name(),
+                    Arrays.stream(values).average().orElse(1), Arrays.stream(values).min().orElse(1),
+                            Arrays.stream(values).max().orElse(1)));
         }
         return lines;
     }

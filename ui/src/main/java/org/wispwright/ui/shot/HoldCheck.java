@@ -5,7 +5,10 @@ import java.util.Optional;
 import org.wispwright.optimize.flow.FrameRange;
 import org.wispwright.optimize.solve.SolveProblem;
 
-/** Whether holds fit the shot: views and frames that are there, pictures of the view's aspect, and nothing held that a note wants changed. */
+/**
+ * Whether holds fit the shot: views and frames that are there, pictures of the view's aspect, and nothing held that a note
+ * wants changed.
+ */
 final class HoldCheck {
     private HoldCheck() {
     }
@@ -44,7 +47,8 @@ final class HoldCheck {
         if (hold.view().isPresent() && there.isEmpty()) {
             List<String> names = shot.views().stream().map(v -> v.view().name()).toList();
             findings.add(Finding.of(file, pointer + "/view", "view '" + view + "', which the shot does not have", "one of "
-                    + String.join(", ", names), NearestWord.to(view, names).map(near -> "did you mean '" + near + "'").orElse("correct the name")));
+                    + String.join(", ", names), NearestWord.to(view,
+                            names).map(near -> "did you mean '" + near + "'").orElse("correct the name")));
         }
         if (hold.view().isPresent()) {
             there.ifPresent(v -> mattes.requireAspect(file, place -> place.startsWith(pointer + "/"), v.view(), findings));

@@ -39,7 +39,8 @@ class HoldFaultsTest {
         shot.write("holds.json", WIDE);
         shot.swap("notes/lean.json", "\"holds\": [", "\"holds\": [{\"view\": \"side\"}, ");
         List<SolveProblem.Hold> holds = ShotProblem.of(ShotCheck.require(shot.folder(), 1L << 30)).holds();
-        assertEquals(List.of("lean hold 1", "lean hold 2", "open hold 1", "hold 1", "hold 2"), holds.stream().map(SolveProblem.Hold::id).toList());
+        assertEquals(List.of("lean hold 1", "lean hold 2", "open hold 1", "hold 1", "hold 2"),
+                holds.stream().map(SolveProblem.Hold::id).toList());
         assertEquals(List.of(1, 0, 1, 1, 0), holds.stream().map(SolveProblem.Hold::view).toList());
         assertEquals(List.of(new SolveProblem.Span(1004, 1004)), holds.get(0).spans());
         assertEquals(SolveProblem.Held.PICTURE, holds.get(0).held());
