@@ -1,14 +1,10 @@
 package org.wispwright.optimize.solve;
 
-import java.util.List;
 import java.util.function.BooleanSupplier;
 import org.wispwright.optimize.checkpoint.BinomialPlan;
 import org.wispwright.optimize.flow.FlowSetup;
-import org.wispwright.optimize.flow.SmokeSolver;
-import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.force.ForceBasis;
 import org.wispwright.render.lanes.Lanes;
-import org.wispwright.render.view.View;
 import org.wispwright.render.volume.GridShape;
 
 /**
@@ -38,17 +34,13 @@ public record Calibration(long cells, int steps, double gradientSeconds, double 
      * @throws SolveCancelled           if cancelled
      */
     public static Calibration of(SolveProblem problem, GridShape grid, Lanes lanes, BooleanSupplier cancelled) {
-        SolveProblem here = problem.on(grid);
-        FlowSetup flow = here.flow();
-        SmokeSolver solver = new SmokeSolver(flow, lanes);
-        List<View> views = here.views().stream().map(view -> Solve.proxy(view, grid.cellMetres())).toList();
-        FrameTerms terms = new FrameTerms(grid, views, here.look(), grid.cellMetres(), solver.clock(), lanes);
-        SmokeState start = flow.startState();
-        new TermPlan(here, solver, start, terms, true, cancelled);
-        int steps = flow.stepsTo(here.lastFrame());
+        Rung ready = Rung.of(problem, grid, true, lanes, cancelled);
+        FlowSetup flow = ready.problem().flow();
+        int lastFrame = ready.problem().lastFrame();
+        int steps = flow.stepsTo(lastFrame);
         ForceBasis basis = new ForceBasis(grid, flow.frames().count() - 1, Solve.bands(problem.flow()), lanes);
-        SolveLoss loss = new SolveLoss(solver, basis, terms, here.lastFrame(),
-                new Snapshots(flow, start, steps, StateRoom.inMemory(Long.MAX_VALUE)), cancelled);
+        SolveLoss loss = new SolveLoss(ready.solver(), basis, ready.terms(), lastFrame,
+                new Snapshots(flow, ready.start(), steps, StateRoom.inMemory(Long.MAX_VALUE)), cancelled);
         double[] x = new double[basis.unknowns(Solve.open(Solve.bands(problem.flow()), grid))];
         double forward = Double.POSITIVE_INFINITY;
         double whole = Double.POSITIVE_INFINITY;

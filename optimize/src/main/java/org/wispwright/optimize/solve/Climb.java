@@ -5,15 +5,12 @@ import java.util.List;
 import java.util.Optional;
 import java.util.function.BooleanSupplier;
 import org.wispwright.optimize.flow.FlowSetup;
-import org.wispwright.optimize.flow.SmokeSolver;
-import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.force.Band;
 import org.wispwright.optimize.force.ForceBasis;
 import org.wispwright.optimize.force.SourceCurves;
 import org.wispwright.optimize.search.Lbfgs;
 import org.wispwright.optimize.search.LineSearch;
 import org.wispwright.render.lanes.Lanes;
-import org.wispwright.render.view.View;
 import org.wispwright.render.volume.GridShape;
 
 /**
@@ -116,8 +113,8 @@ final class Climb {
     }
 
     /**
-     * One rung: from the force of the rung below, or from none, until its last band ends. A rung leaves the bands closed whose waves it does
-     * not resolve. A finer rung's loss bends much as the coarser one's did: the pairs go on.
+     * One rung: from the force of the rung below, or from none, until its last band ends. A rung leaves the bands closed whose waves it
+     * does not resolve. A finer rung's loss bends much as the coarser one's did: the pairs go on.
      *
      * @param state if given, this rung is gone on with from there, instead of begun
      */
@@ -129,19 +126,14 @@ final class Climb {
             loss.release();                                                    // the search still holds the lower rung's loss for a moment
             plan = null;
         }
-        SolveProblem here = problem.on(grid);
-        FlowSetup flow = here.flow();
-        SmokeSolver solver = new SmokeSolver(flow, lanes);
-        List<View> views = here.views().stream().map(view -> Solve.proxy(view, grid.cellMetres())).toList();
-        FrameTerms terms = new FrameTerms(grid, views, here.look(), grid.cellMetres(), solver.clock(), lanes);
-        SmokeState start = flow.startState();
-        plan = new TermPlan(here, solver, start, terms, stay, cancelled);
-        int lastFrame = here.lastFrame();
-        int steps = flow.stepsTo(lastFrame);
-        Snapshots states = new Snapshots(flow, start, steps, room);
+        Rung ready = Rung.of(problem, grid, stay, lanes, cancelled);
+        FlowSetup flow = ready.problem().flow();
+        plan = ready.plan();
+        int lastFrame = ready.problem().lastFrame();
+        Snapshots states = new Snapshots(flow, ready.start(), flow.stepsTo(lastFrame), room);
         snapshots = states.count();
         ForceBasis basis = new ForceBasis(grid, flow.frames().count() - 1, bands, lanes);
-        loss = new SolveLoss(solver, basis, curves, terms, lastFrame, states, cancelled);
+        loss = new SolveLoss(ready.solver(), basis, curves, ready.terms(), lastFrame, states, cancelled);
         if (state.isPresent()) {
             lbfgs = new Lbfgs(loss, state.get().search(), settings());
             ended = ended.isEmpty() ? endedByRule() : ended;
@@ -213,8 +205,8 @@ final class Climb {
     }
 
     /**
-     * Why a search that did not move ends the solve; empty if it only ends the band. What it had found stays as it was. Where numbers are not
-     * finite however short the step, more unknowns would not help: that ends the solve on any rung.
+     * Why a search that did not move ends the solve; empty if it only ends the band. What it had found stays as it was. Where numbers
+     * are not finite however short the step, more unknowns would not help: that ends the solve on any rung.
      */
     static String endedBy(Lbfgs.Iteration iteration, boolean last, SolveLoss loss) {
         if (iteration.outcome() == Lbfgs.Outcome.NOT_FINITE) {
@@ -224,7 +216,8 @@ final class Climb {
     }
 
     private void record() {
-        recorder.record(new SolveState(digest, rung, open, done, bandGradients, bandSeconds, seconds(), lbfgs.state(), losses, met, runs, ended));
+        recorder.record(new SolveState(digest, rung, open, done, bandGradients, bandSeconds, seconds(), lbfgs.state(), losses, met, runs,
+                ended));
     }
 
     private void tell(int lastBand) {
@@ -240,7 +233,8 @@ final class Climb {
 
     private Lbfgs.Settings settings() {
         // To move still smoke by four cells over the range is a fair first guess of what a note asks.
-        return new Lbfgs.Settings(Solve.PAIRS, LineSearch.Rule.forQuasiNewton().withMostEvaluations(Solve.MOST_EVALUATIONS), Solve.forceOfCells(problem.flow(), 4));
+        return new Lbfgs.Settings(Solve.PAIRS, LineSearch.Rule.forQuasiNewton().withMostEvaluations(Solve.MOST_EVALUATIONS),
+                Solve.forceOfCells(problem.flow(), 4));
     }
 
     /**

@@ -1,15 +1,11 @@
 package org.wispwright.ui.command;
 
-import java.nio.file.Path;
 import java.util.Optional;
 import java.util.concurrent.Callable;
 import org.wispwright.ui.shot.Note;
-import org.wispwright.ui.shot.NoteEdits;
-import org.wispwright.ui.shot.ShotFolder;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Option;
-import picocli.CommandLine.Parameters;
 
 /** {@code note copy SHOT ID --frame F [--view V] [--id NEW]}. */
 @Command(name = "copy", sortOptions = false,
@@ -21,11 +17,8 @@ final class NoteCopyCommand implements Callable<Integer> {
     @Mixin
     private Manner manner;
 
-    @Parameters(index = "0", paramLabel = "SHOT", description = "The shot folder.")
-    private Path shot;
-
-    @Parameters(index = "1", paramLabel = "ID", description = "The note: its file's name without .json.")
-    private String id;
+    @Mixin
+    private NoteChoice choice;
 
     @Option(names = "--frame", paramLabel = "F", required = true, description = "The frame of the new note.")
     private int frame;
@@ -38,7 +31,8 @@ final class NoteCopyCommand implements Callable<Integer> {
 
     @Override
     public Integer call() {
-        Note note = NoteEdits.of(ShotFolder.open(shot)).copy(id, frame, Optional.ofNullable(view), Optional.ofNullable(newId));
+        String id = choice.id();
+        Note note = choice.edits().copy(id, frame, Optional.ofNullable(view), Optional.ofNullable(newId));
         manner.say("Note '" + note.id() + "' made of '" + id + "': frame " + note.frame() + ", view " + note.view() + ".",
                 Manner.object().put("ok", true).put("id", note.id()).put("from", id).put("frame", note.frame()).put("view", note.view()));
         return ExitCodes.OK;

@@ -3,16 +3,13 @@ package org.wispwright.ui.command;
 import java.nio.file.Path;
 import java.util.Optional;
 import java.util.concurrent.Callable;
-import org.wispwright.ui.shot.NoteEdits;
 import org.wispwright.ui.shot.NoteValues;
 import org.wispwright.ui.shot.RetouchFile;
-import org.wispwright.ui.shot.ShotFolder;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
 import picocli.CommandLine.Model.CommandSpec;
 import picocli.CommandLine.Option;
 import picocli.CommandLine.ParameterException;
-import picocli.CommandLine.Parameters;
 import picocli.CommandLine.Spec;
 
 /** {@code note set SHOT ID [--words TEXT] [--frame F] [--view V] [--weight W] [--retouch FILE]}. */
@@ -25,11 +22,8 @@ final class NoteSetCommand implements Callable<Integer> {
     @Mixin
     private Manner manner;
 
-    @Parameters(index = "0", paramLabel = "SHOT", description = "The shot folder.")
-    private Path shot;
-
-    @Parameters(index = "1", paramLabel = "ID", description = "The note: its file's name without .json.")
-    private String id;
+    @Mixin
+    private NoteChoice choice;
 
     @Option(names = "--words", paramLabel = "TEXT", description = "What the reviewer said.")
     private String words;
@@ -52,13 +46,14 @@ final class NoteSetCommand implements Callable<Integer> {
 
     @Override
     public Integer call() {
+        String id = choice.id();
         NoteValues values = new NoteValues(Optional.ofNullable(words), Optional.ofNullable(frame), Optional.ofNullable(view),
                 Optional.ofNullable(weight), Optional.ofNullable(retouch).map(path -> RetouchFile.read(path,
-                Optional.of(ShotFolder.open(shot)))));
+                Optional.of(choice.folder()))));
         if (values.isEmpty()) {
             throw new ParameterException(spec.commandLine(), "'note set' needs one of --words, --frame, --view, --weight, --retouch");
         }
-        boolean changed = NoteEdits.of(ShotFolder.open(shot)).set(id, values);
+        boolean changed = choice.edits().set(id, values);
         manner.say(changed ? "Note '" + id + "' changed." : "Note '" + id + "' is so already; nothing was done.",
                 Manner.object().put("ok", true).put("id", id).put("changed", changed));
         return ExitCodes.OK;

@@ -85,12 +85,13 @@ final class SolveSearch implements AutoCloseable {
             FlowSetup flow = problem.flow();
             long forStates = MemoryNeed.forStates(flow, manner.memoryBytes(), MemoryNeed.region());
             return new Solve(problem, manner.quality().rungs(flow.grid()), manner.stay(), lanes, cancel::wished)
-                    .run(new StateRoom(forStates, manner.diskBytes(), place.file(STATES)), manner.until(), this::tell, digest, from, this::record);
+                    .run(new StateRoom(forStates, manner.diskBytes(), place.file(STATES)), manner.until(), this::tell, digest, from,
+                            this::record);
         } catch (SolveCancelled asked) {
             throw new Cancel.Cancelled();
         } catch (UncheckedIOException refused) {
-            throw new ShotException(new Finding("takes/.solving/" + STATES, "", refused.getMessage() + " (" + refused.getCause().getMessage()
-                    + ")" + (recorded == 0 ? "." : "; then go on by --resume, after iteration " + recorded + ".")), refused);
+            throw new ShotException(new Finding(SolvePlace.FOLDER + "/" + STATES, "", refused.getMessage() + " ("
+                    + refused.getCause().getMessage() + ")" + (recorded == 0 ? "." : "; then go on by --resume, after iteration " + recorded + ".")), refused);
         } catch (IllegalArgumentException refused) {
             String words = String.valueOf(refused.getMessage());
             throw new ShotException(new Finding("shot.json", "", words.endsWith(".") ? words : words + "."), refused);
@@ -107,7 +108,8 @@ final class SolveSearch implements AutoCloseable {
         try {
             place.records().clear();
         } catch (IOException left) {
-            progress.milestone("solve: its records could not be removed (" + left.getMessage() + "); takes/.solving may be deleted");
+            progress.milestone("solve: its records could not be removed (" + left.getMessage() + "); "
+                    + SolvePlace.FOLDER + " may be deleted");
         }
     }
 
@@ -152,7 +154,7 @@ final class SolveSearch implements AutoCloseable {
     private static Optional<SolveState> fresh(SolvePlace place) {
         SolveRecords.Found found = found(place);
         if (found.state().isPresent()) {
-            throw new ShotException(Finding.of("takes/.solving", "", "a solve that was cut off after iteration "
+            throw new ShotException(Finding.of(SolvePlace.FOLDER, "", "a solve that was cut off after iteration "
                     + found.state().get().search().iterations(), "none", "go on with it by --resume, or drop it by --anew"));
         }
         return Optional.empty();
@@ -170,7 +172,7 @@ final class SolveSearch implements AutoCloseable {
     private static SolveState resumed(SolvePlace place, Progress progress) {
         SolveRecords.Found found = found(place);
         found.damaged().forEach(what -> progress.milestone("solve: a record is damaged and was passed over: " + what));
-        SolveState state = found.state().orElseThrow(() -> new ShotException(Finding.of("takes/.solving", "", found.damaged().isEmpty()
+        SolveState state = found.state().orElseThrow(() -> new ShotException(Finding.of(SolvePlace.FOLDER, "", found.damaged().isEmpty()
                 ? "no record of an unfinished solve" : "only damaged records", "one to go on from", "solve without --resume")));
         progress.milestone("solve: going on after iteration " + state.search().iterations());
         return state;
@@ -185,7 +187,7 @@ final class SolveSearch implements AutoCloseable {
     }
 
     private static ShotException unreadable(IOException refused) {
-        return new ShotException(Finding.of("takes/.solving", "", "records that cannot be reached (" + refused.getMessage() + ")",
+        return new ShotException(Finding.of(SolvePlace.FOLDER, "", "records that cannot be reached (" + refused.getMessage() + ")",
                 "a folder that can be read and written", "check its permissions"), refused);
     }
 
@@ -196,7 +198,7 @@ final class SolveSearch implements AutoCloseable {
         }
         int rungs = manner.quality().rungs(problem.flow().grid()).size();
         if (state.rung() > rungs) {
-            throw new ShotException(Finding.of("takes/.solving", "", "a solve that has reached rung " + state.rung(),
+            throw new ShotException(Finding.of(SolvePlace.FOLDER, "", "a solve that has reached rung " + state.rung(),
                     "one that stands on rung " + rungs + " or below for --quality " + manner.quality().name().toLowerCase(Locale.ROOT),
                     "ask for a higher quality"));
         }

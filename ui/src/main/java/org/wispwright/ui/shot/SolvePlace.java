@@ -19,7 +19,8 @@ import org.wispwright.optimize.solve.SolveRecords;
  * the system's and goes with the process, however that ends. Closing leaves the folder only if there are records to go on with.
  */
 public final class SolvePlace implements AutoCloseable {
-    private static final String FOLDER = "takes/.solving";
+    /** Where, inside the shot folder. */
+    public static final String FOLDER = "takes/.solving";
     private static final String LOCK = "in-use.lock";
     private static final int TRIES = 10;
 
@@ -57,11 +58,6 @@ public final class SolvePlace implements AutoCloseable {
     /** The records. */
     public SolveRecords records() {
         return records;
-    }
-
-    /** The records of a shot, to read without taking the place. */
-    public static SolveRecords records(ShotFolder shot) {
-        return new SolveRecords(shot.inside(FOLDER));
     }
 
     /** A path in the place for a file that goes with the solve. */

@@ -1,6 +1,6 @@
 package org.wispwright.warp.matte;
 
-/** Distances to straight pieces of line, and to lines made of them. */
+/** Distances to straight pieces of line, and pixels of a window. */
 public final class Segment {
     private Segment() {
     }
