@@ -70,11 +70,22 @@ class WallsTest {
 
     @Test
     void inUiTheJobsAndTheShotKnowNoScreen() {
-        noClasses().that().resideInAnyPackage("org.wispwright.ui.shot..", "org.wispwright.ui.job..", "org.wispwright.ui.command..")
-                .should().dependOnClassesThat()
+        noClasses().that().resideInAnyPackage("org.wispwright.ui.shot..", "org.wispwright.ui.job..", "org.wispwright.ui.command..",
+                "org.wispwright.ui.desk..").should().dependOnClassesThat()
                 .resideInAnyPackage("javax.swing..").check(OURS);
-        noClasses().that().resideInAnyPackage("org.wispwright.ui.shot..", "org.wispwright.ui.command..").should().dependOnClassesThat()
+        noClasses().that().resideInAnyPackage("org.wispwright.ui.shot..", "org.wispwright.ui.desk..").should().dependOnClassesThat()
                 .resideInAnyPackage("java.awt..").check(OURS);
+    }
+
+    @Test
+    void onlyTheCommandOpensTheWindow() {
+        noClasses().that().resideInAPackage("org.wispwright.ui..").and()
+                .resideOutsideOfPackages("org.wispwright.ui.window..", "org.wispwright.ui.command..").should().dependOnClassesThat()
+                .resideInAPackage("org.wispwright.ui.window..").check(OURS);
+        noClasses().that().resideInAnyPackage("org.wispwright.ui.shot..", "org.wispwright.ui.job..", "org.wispwright.ui.report..").should()
+                .dependOnClassesThat().resideInAPackage("org.wispwright.ui.desk..").check(OURS);
+        noClasses().that().resideOutsideOfPackage("org.wispwright.ui.window..").should().dependOnClassesThat()
+                .resideInAnyPackage("com.formdev..", "net.miginfocom..", "javax.swing..").check(OURS);
     }
 
     @Test

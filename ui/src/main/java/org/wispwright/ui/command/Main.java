@@ -1,8 +1,10 @@
 package org.wispwright.ui.command;
 
 import com.fasterxml.jackson.databind.node.ObjectNode;
+import java.awt.GraphicsEnvironment;
 import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
+import java.util.Optional;
 import java.util.concurrent.CountDownLatch;
 import java.util.concurrent.TimeUnit;
 import org.wispwright.ui.shot.Finding;
@@ -21,13 +23,14 @@ import picocli.CommandLine.UnmatchedArgumentException;
 /** The program: finds the command, runs it, and turns whatever happens into an exit code and at most one sentence. */
 @Command(name = "wispwright", versionProvider = Main.Version.class, sortOptions = false,
         description = "Changes a smoke simulation so that it satisfies review notes drawn on its frames.",
-        subcommands = {TourCommand.class, SimulateCommand.class, PictureCommand.class, RetouchCommand.class, EstimateCommand.class, SolveCommand.class,
+        subcommands = {DeskCommand.class, TourCommand.class, SimulateCommand.class, PictureCommand.class, RetouchCommand.class, EstimateCommand.class, SolveCommand.class,
                 CompareCommand.class, CheckCommand.class, NoteCommand.class, MeasureCommand.class},
         synopsisSubcommandLabel = "COMMAND",
         footer = {"",
             "Exit codes: 0 done, 1 an error of ours, 2 wrong usage, 3 bad input, 130 stopped by Ctrl-C.",
             "",
             "Examples:",
+            "  java -jar wispwright.jar",
             "  java -jar wispwright.jar tour",
             "  java -jar wispwright.jar check samples/kiln-yard",
             "  java -jar wispwright.jar solve samples/kiln-yard",
@@ -100,10 +103,13 @@ public final class Main implements Runnable {
         }
     }
 
-    /** Without a command: says what there is. */
+    /** Without a command: the desk, where there is a display. */
     @Override
     public void run() {
-        throw new ParameterException(spec.commandLine(), "no command given");
+        if (GraphicsEnvironment.isHeadless()) {
+            throw new ParameterException(spec.commandLine(), "no command given, and no display to open the desk on");
+        }
+        DeskCommand.open(Optional.empty());
     }
 
     Cancel cancel() {

@@ -94,6 +94,16 @@ final class NoteChanges {
                 .map(change -> new NoteEdits.FileNow(change.file(), change.after().isPresent())).toList(), changed);
     }
 
+    /** The command that {@link #undo} would take back. */
+    Optional<String> undoName() {
+        return journal.last().map(Entry::command);
+    }
+
+    /** The command that {@link #redo} would make again. */
+    Optional<String> redoName() {
+        return journal.lastTakenBack().map(Entry::command);
+    }
+
     /** True if the file is still to be changed. @throws ShotException if it is neither as it should become nor as it was left */
     private boolean differs(FileChange change, Optional<FileBytes> wanted, Optional<FileBytes> left, String leftBy, String journalFile) {
         Optional<FileBytes> now = files.bytes(change.file());

@@ -7,6 +7,7 @@ import com.fasterxml.jackson.databind.node.TextNode;
 import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.Comparator;
+import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -208,6 +209,66 @@ public final class NoteEdits {
         changes.make(command, all);
     }
 
+    /**
+     * Makes the notes that differ between two lists those of the second; one change, taken back as one. Of a note's file only the keys that
+     * differ change, unless one of them goes.
+     *
+     * @param command what the person asked for
+     * @param before the notes as the person had them
+     * @param after the notes as they are wanted
+     * @param copied id of a new note to the note that it is a copy of: it takes the files beside that one
+     * @return false if nothing differs; then nothing is written
+     * @throws ShotException if the shot or a note is not as it must be, a name is taken, or the disk refuses; then all is as before
+     */
+    public boolean change(String command, List<Listed> before, List<Listed> after, Map<String, String> copied) {
+        Map<String, Listed> old = byId(before);
+        Map<String, Listed> now = byId(after);
+        Shot shot = ShotCheck.requireForNotes(folder);
+        List<FileChange> all = new ArrayList<>();
+        old.keySet().stream().filter(id -> !now.containsKey(id)).forEach(id -> all.addAll(removal(id)));
+        for (Listed listed : after) {
+            String id = listed.note().id();
+            String file = NoteFiles.file(id);
+            Listed was = old.get(id);
+            if (listed.equals(was)) {
+                continue;
+            }
+            Optional<FileBytes> there = Optional.empty();
+            String text;
+            if (was == null) {
+                requireFree(file);
+                requireRoom(1);
+                text = NoteText.of(RetouchWriter.note(listed.note(), listed.on()));
+                if (copied.containsKey(id)) {
+                    all.addAll(copiesOfBeside(copied.get(id), id));
+                }
+            } else {
+                String onDisk = files.need(id);
+                there = Optional.of(FileBytes.of(onDisk));
+                text = RetouchWriter.changed(onDisk, was, listed);
+            }
+            fitting(file, text, id, shot);
+            all.add(new FileChange(file, there, Optional.of(FileBytes.of(text))));
+        }
+        return changes.make(command, all);
+    }
+
+    private static Map<String, Listed> byId(List<Listed> notes) {
+        Map<String, Listed> byId = new LinkedHashMap<>();
+        notes.forEach(listed -> byId.put(listed.note().id(), listed));
+        return byId;
+    }
+
+    /** What {@link #undo} would take back. @throws ShotException if the journal is damaged */
+    public Optional<String> undoName() {
+        return changes.undoName();
+    }
+
+    /** What {@link #redo} would make again. @throws ShotException if the journal is damaged */
+    public Optional<String> redoName() {
+        return changes.redoName();
+    }
+
     /** Refuses notes that could not be added: of frames or a view that the shot does not have, of names that are taken, or too many. */
     public void requireFit(List<Note> notes) {
         Shot shot = ShotCheck.requireForNotes(folder);
@@ -230,12 +291,16 @@ public final class NoteEdits {
      * @throws ShotException if there is no such note, or the disk refuses
      */
     public void delete(String id) {
+        changes.make("note delete " + id, removal(id));
+    }
+
+    private List<FileChange> removal(String id) {
         List<FileChange> all = new ArrayList<>();
         all.add(new FileChange(NoteFiles.file(id), Optional.of(FileBytes.of(files.need(id))), Optional.empty()));
         for (String file : files.beside(id)) {
             all.add(new FileChange(file, files.bytes(file), Optional.empty()));
         }
-        changes.make("note delete " + id, all);
+        return all;
     }
 
     /**

@@ -74,10 +74,10 @@ final class NoteReader {
         return top.make(() -> new Note(id, words, frame, view, weight, weighBy, retouch, holds, loss));
     }
 
-    /** The list of operations. @throws ShotException if it is not as it must be */
+    /** The list of operations; a note that was just begun has none. @throws ShotException if it is not as it must be */
     static Retouch retouch(JsonPlace top, ShotFolder folder) {
         JsonPlace list = top.need("retouch");
-        List<Operation> operations = list.items(1, Retouch.MOST_OPERATIONS).stream().map(place -> RetouchReader.operation(place, folder))
+        List<Operation> operations = list.items(0, Retouch.MOST_OPERATIONS).stream().map(place -> RetouchReader.operation(place, folder))
                 .toList();
         return list.make(() -> new Retouch(operations));
     }

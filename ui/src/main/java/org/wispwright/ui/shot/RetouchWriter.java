@@ -3,6 +3,7 @@ package org.wispwright.ui.shot;
 import com.fasterxml.jackson.databind.node.ArrayNode;
 import com.fasterxml.jackson.databind.node.JsonNodeFactory;
 import com.fasterxml.jackson.databind.node.ObjectNode;
+import com.fasterxml.jackson.databind.node.TextNode;
 import org.wispwright.optimize.solve.SolveProblem;
 import org.wispwright.warp.retouch.Handle;
 import org.wispwright.warp.retouch.MeshWarp;
@@ -24,18 +25,64 @@ final class RetouchWriter {
             object.put("on", false);
         }
         object.put("words", note.words()).put("frame", note.frame()).put("view", note.view()).put("weight", note.weight());
-        ArrayNode retouch = object.putArray("retouch");
-        note.retouch().operations().forEach(operation -> retouch.add(operation(operation)));
+        object.set("retouch", operations(note));
         note.weighBy().ifPresent(matte -> object.set("weighBy", MatteWriter.matte(matte)));
         note.loss().ifPresent(loss -> {
             ArrayNode kinds = object.putArray("loss");
             loss.kinds().forEach(kind -> kinds.add(JsonPlace.word(kind)));
         });
         if (!note.holds().isEmpty()) {
-            ArrayNode holds = object.putArray("holds");
-            note.holds().forEach(hold -> holds.add(hold(hold, note.frame())));
+            object.set("holds", holds(note));
         }
         return object;
+    }
+
+    /**
+     * A note's text with what differs between two states of the note written anew; every other character stays, unless a key goes.
+     *
+     * @param text what is on disk
+     */
+    static String changed(String text, NoteEdits.Listed before, NoteEdits.Listed after) {
+        Note was = before.note();
+        Note note = after.note();
+        if (!was.weighBy().equals(note.weighBy()) || !was.loss().equals(note.loss()) || note.holds().isEmpty() && !was.holds().isEmpty()) {
+            return NoteText.of(note(note, after.on()));
+        }
+        String now = text;
+        if (before.on() != after.on()) {
+            now = NoteText.with(now, "on", String.valueOf(after.on()));
+        }
+        if (!was.words().equals(note.words())) {
+            now = NoteText.with(now, "words", new TextNode(note.words()).toString());
+        }
+        if (was.frame() != note.frame()) {
+            now = NoteText.with(now, "frame", String.valueOf(note.frame()));
+        }
+        if (!was.view().equals(note.view())) {
+            now = NoteText.with(now, "view", new TextNode(note.view()).toString());
+        }
+        if (was.weight() != note.weight()) {
+            now = NoteText.with(now, "weight", String.valueOf(note.weight()));
+        }
+        if (!was.retouch().equals(note.retouch())) {
+            now = NoteText.with(now, "retouch", NoteText.value(operations(note)));
+        }
+        if (!was.holds().equals(note.holds())) {
+            now = NoteText.with(now, "holds", NoteText.value(holds(note)));
+        }
+        return now;
+    }
+
+    private static ArrayNode operations(Note note) {
+        ArrayNode retouch = JsonNodeFactory.instance.arrayNode();
+        note.retouch().operations().forEach(operation -> retouch.add(operation(operation)));
+        return retouch;
+    }
+
+    private static ArrayNode holds(Note note) {
+        ArrayNode holds = JsonNodeFactory.instance.arrayNode();
+        note.holds().forEach(hold -> holds.add(hold(hold, note.frame())));
+        return holds;
     }
 
     private static ObjectNode hold(Hold hold, int noteFrame) {

@@ -1,0 +1,80 @@
+package org.wispwright.ui.desk;
+
+import java.util.List;
+import java.util.Optional;
+import org.wispwright.ui.shot.NoteEdits.Listed;
+
+/**
+ * All that the desk is at one moment. Immutable; the window draws from it and nothing else.
+ *
+ * @param shot    the shot on the desk; empty at the beginning
+ * @param showing what the easel shows; empty without a shot
+ * @param note    id of the note that is open; what is done to pictures belongs to it
+ * @param hand    what the pointer does on the easel
+ * @param takes   what is there, lowest number first
+ * @param history what can be undone and redone
+ * @param saving  how far edits are on disk
+ * @param message the latest sentence for the person, until it is put away
+ */
+public record DeskState(Optional<OpenShot> shot, Optional<Showing> showing, Optional<String> note, Hand hand, List<TakeEntry> takes,
+                        History history, Saving saving, Optional<Message> message) {
+    /** An empty desk. */
+    public static final DeskState EMPTY = new DeskState(Optional.empty(), Optional.empty(), Optional.empty(), Hand.LOOK, List.of(),
+            History.NONE, Saving.DONE, Optional.empty());
+
+    /** Keeps a copy. */
+    public DeskState {
+        takes = List.copyOf(takes);
+    }
+
+    /** The open note as it is now. */
+    public Optional<Listed> openNote() {
+        return shot.flatMap(s -> note.flatMap(s::note));
+    }
+
+    /** True if the easel shows the frame and view of the open note, where it can be retouched. */
+    public boolean isAtOpenNote() {
+        return openNote().map(Listed::note)
+                .map(n -> showing.map(s -> s.frame() == n.frame() && s.view().equals(n.view())).orElse(false)).orElse(false);
+    }
+
+    /** Another shot. */
+    public DeskState withShot(OpenShot other) {
+        return new DeskState(Optional.of(other), showing, note, hand, takes, history, saving, message);
+    }
+
+    /** Something else on the easel. */
+    public DeskState withShowing(Showing other) {
+        return new DeskState(shot, Optional.of(other), note, hand, takes, history, saving, message);
+    }
+
+    /** Another note open, or none. */
+    public DeskState withNote(Optional<String> other) {
+        return new DeskState(shot, showing, other, hand, takes, history, saving, message);
+    }
+
+    /** Another hand. */
+    public DeskState withHand(Hand other) {
+        return new DeskState(shot, showing, note, other, takes, history, saving, message);
+    }
+
+    /** Other takes. */
+    public DeskState withTakes(List<TakeEntry> others) {
+        return new DeskState(shot, showing, note, hand, others, history, saving, message);
+    }
+
+    /** Another history. */
+    DeskState withHistory(History other) {
+        return new DeskState(shot, showing, note, hand, takes, other, saving, message);
+    }
+
+    /** Another state of the disk. */
+    DeskState withSaving(Saving other) {
+        return new DeskState(shot, showing, note, hand, takes, history, other, message);
+    }
+
+    /** Another message, or none. */
+    public DeskState withMessage(Optional<Message> other) {
+        return new DeskState(shot, showing, note, hand, takes, history, saving, other);
+    }
+}

@@ -1,0 +1,282 @@
+package org.wispwright.ui.window;
+
+import java.awt.AWTException;
+import java.awt.Component;
+import java.awt.Container;
+import java.awt.Dimension;
+import java.awt.Point;
+import java.awt.Rectangle;
+import java.awt.Robot;
+import java.awt.Window;
+import java.awt.event.InputEvent;
+import java.awt.event.KeyEvent;
+import java.awt.image.BufferedImage;
+import java.io.IOException;
+import java.io.UncheckedIOException;
+import java.nio.file.Files;
+import java.nio.file.Path;
+import java.util.ArrayList;
+import java.util.List;
+import java.util.concurrent.Callable;
+import java.util.concurrent.FutureTask;
+import java.util.function.Predicate;
+import javax.imageio.ImageIO;
+import javax.swing.JMenuItem;
+import javax.swing.KeyStroke;
+import javax.swing.SwingUtilities;
+import org.wispwright.ui.desk.Desk;
+import org.wispwright.ui.desk.DeskState;
+import org.wispwright.ui.desk.Workers;
+
+/**
+ * Works the desk as a person does: finds components by their names, moves the pointer, clicks, drags and types with real events on the
+ * toolkit's screen, and waits for what comes of it. One at a time; close it.
+ */
+public final class DeskDriver implements AutoCloseable {
+    private static final long MOST_SECONDS = 120;
+
+    private final Robot robot;
+    private final Desk desk;
+    private final DeskWindow window;
+
+    /** Opens an empty desk in a window of a size. */
+    public DeskDriver(Dimension size) {
+        this(size, true, 1);
+    }
+
+    /** Opens an empty desk. @param dark the theme @param textScale 1 is usual */
+    public DeskDriver(Dimension size, boolean dark, double textScale) {
+        try {
+            robot = new Robot();
+        } catch (AWTException none) {
+            throw new IllegalStateException(none);
+        }
+        robot.setAutoDelay(2);
+        Object[] made = onSwing(() -> {
+            Palette.use(dark, textScale);
+            Desk d = new Desk(new Workers(SwingUtilities::invokeLater));
+            DeskWindow w = new DeskWindow(d);
+            w.frame().setSize(size);
+            w.frame().setLocation(0, 0);
+            w.frame().setVisible(true);
+            return new Object[] {d, w};
+        });
+        desk = (Desk) made[0];
+        window = (DeskWindow) made[1];
+        robot.waitForIdle();
+    }
+
+    /** Opens a shot and waits until it lies on the desk. */
+    public DeskDriver open(Path folder) {
+        doOnSwing(() -> desk.open(folder));
+        await("the shot is open", s -> s.shot().isPresent());
+        return this;
+    }
+
+    /** The window. */
+    public DeskWindow window() {
+        return window;
+    }
+
+    /** The desk; its methods belong to Swing's thread. */
+    public Desk desk() {
+        return desk;
+    }
+
+    /** The state of this moment. */
+    public DeskState state() {
+        return onSwing(desk::state);
+    }
+
+    /** Waits until the state is as it should be. */
+    public void await(String what, Predicate<DeskState> wished) {
+        awaitTrue(what, () -> wished.test(desk.state()));
+    }
+
+    /** Waits until something holds, asked on Swing's thread. @throws AssertionError if it does not come */
+    public void awaitTrue(String what, Callable<Boolean> wished) {
+        long end = System.nanoTime() + MOST_SECONDS * 1_000_000_000L;
+        while (!onSwing(wished)) {
+            if (System.nanoTime() > end) {
+                throw new AssertionError("waited " + MOST_SECONDS + " s and it is still not so: " + what + "; message: "
+                        + state().message());
+            }
+            robot.delay(10);
+        }
+        robot.waitForIdle();
+    }
+
+    /** The showing component of that name, in any window. @throws AssertionError if there is none */
+    public <T extends Component> T find(String name, Class<T> kind) {
+        return onSwing(() -> {
+            List<Component> all = new ArrayList<>();
+            for (Window w : Window.getWindows()) {
+                if (w.isShowing()) {
+                    collect(w, all);
+                }
+            }
+            return all.stream().filter(c -> name.equals(c.getName()) && kind.isInstance(c) && c.isShowing()).map(kind::cast).findFirst()
+                    .orElseThrow(() -> new AssertionError("no showing component named '" + name + "'"));
+        });
+    }
+
+    /** Every component of the window, shown or not. */
+    public List<Component> everything() {
+        return onSwing(() -> {
+            List<Component> all = new ArrayList<>();
+            collect(window.frame(), all);
+            return all;
+        });
+    }
+
+    private static void collect(Component c, List<Component> all) {
+        all.add(c);
+        if (c instanceof Container container) {
+            for (Component child : container.getComponents()) {
+                collect(child, all);
+            }
+        }
+    }
+
+    /** Clicks the middle of a component. */
+    public void click(String name) {
+        Component c = find(name, Component.class);
+        clickAt(onScreen(c, 0.5, 0.5));
+    }
+
+    /** Clicks at a place on the screen. */
+    public void clickAt(Point p) {
+        robot.mouseMove(p.x, p.y);
+        robot.mousePress(InputEvent.BUTTON1_DOWN_MASK);
+        robot.mouseRelease(InputEvent.BUTTON1_DOWN_MASK);
+        robot.waitForIdle();
+    }
+
+    /** Drags over places on the screen with the left button. */
+    public void drag(List<Point> places) {
+        robot.mouseMove(places.get(0).x, places.get(0).y);
+        robot.mousePress(InputEvent.BUTTON1_DOWN_MASK);
+        for (Point p : places.subList(1, places.size())) {
+            robot.mouseMove(p.x, p.y);
+            robot.waitForIdle();
+        }
+        robot.mouseRelease(InputEvent.BUTTON1_DOWN_MASK);
+        robot.waitForIdle();
+    }
+
+    /** A place in a component on the screen. @param x share of its width @param y share of its height */
+    public Point onScreen(Component c, double x, double y) {
+        return onSwing(() -> {
+            Point corner = c.getLocationOnScreen();
+            return new Point(corner.x + (int) Math.round(x * (c.getWidth() - 1)), corner.y + (int) Math.round(y * (c.getHeight() - 1)));
+        });
+    }
+
+    /** Presses a key with its modifiers, such as "ctrl Z". */
+    public void key(String stroke) {
+        KeyStroke key = KeyStroke.getKeyStroke(stroke);
+        int[] modifiers = {InputEvent.CTRL_DOWN_MASK, InputEvent.SHIFT_DOWN_MASK, InputEvent.ALT_DOWN_MASK};
+        int[] codes = {KeyEvent.VK_CONTROL, KeyEvent.VK_SHIFT, KeyEvent.VK_ALT};
+        for (int n = 0; n < codes.length; n++) {
+            if ((key.getModifiers() & modifiers[n]) != 0) {
+                robot.keyPress(codes[n]);
+            }
+        }
+        robot.keyPress(key.getKeyCode());
+        robot.keyRelease(key.getKeyCode());
+        for (int n = codes.length - 1; n >= 0; n--) {
+            if ((key.getModifiers() & modifiers[n]) != 0) {
+                robot.keyRelease(codes[n]);
+            }
+        }
+        robot.waitForIdle();
+    }
+
+    /** Types plain letters, digits and spaces where the focus is. */
+    public void type(String text) {
+        for (char c : text.toCharArray()) {
+            boolean upper = Character.isUpperCase(c);
+            if (upper) {
+                robot.keyPress(KeyEvent.VK_SHIFT);
+            }
+            int code = KeyEvent.getExtendedKeyCodeForChar(c);
+            robot.keyPress(code);
+            robot.keyRelease(code);
+            if (upper) {
+                robot.keyRelease(KeyEvent.VK_SHIFT);
+            }
+        }
+        robot.waitForIdle();
+    }
+
+    /** Does an action by its menu item, without opening the menu. @throws AssertionError if it is not enabled */
+    public void act(String id) {
+        doOnSwing(() -> {
+            JMenuItem item = new JMenuItem(window.actions().get(id));
+            if (!item.isEnabled()) {
+                throw new AssertionError("the action '" + id + "' is not enabled");
+            }
+            item.doClick(0);
+        });
+        robot.waitForIdle();
+    }
+
+    /** What the window looks like now. */
+    public BufferedImage screenshot() {
+        robot.waitForIdle();
+        Rectangle bounds = onSwing(() -> window.frame().getBounds());
+        return robot.createScreenCapture(bounds);
+    }
+
+    /** Writes what the window looks like into {@code target/screens}, for people. */
+    public void keepScreenshot(String name) {
+        try {
+            Path folder = Files.createDirectories(Path.of("target", "screens"));
+            ImageIO.write(screenshot(), "png", folder.resolve(name + ".png").toFile());
+        } catch (IOException refused) {
+            throw new UncheckedIOException(refused);
+        }
+    }
+
+    /** Runs on Swing's thread and waits for it. */
+    public void doOnSwing(Runnable task) {
+        onSwing(() -> {
+            task.run();
+            return null;
+        });
+    }
+
+    /** Asks on Swing's thread and waits for the answer. */
+    public static <T> T onSwing(Callable<T> task) {
+        FutureTask<T> future = new FutureTask<>(task);
+        if (SwingUtilities.isEventDispatchThread()) {
+            future.run();
+        } else {
+            SwingUtilities.invokeLater(future);
+        }
+        try {
+            return future.get();
+        } catch (InterruptedException stop) {
+            throw new IllegalStateException(stop);
+        } catch (java.util.concurrent.ExecutionException thrown) {
+            if (thrown.getCause() instanceof RuntimeException ours) {
+                throw ours;
+            }
+            if (thrown.getCause() instanceof Error error) {
+                throw error;
+            }
+            throw new IllegalStateException(thrown.getCause());
+        }
+    }
+
+    /** Closes the window and everything that it opened. */
+    @Override
+    public void close() {
+        doOnSwing(window::close);
+        doOnSwing(() -> {
+            for (Window w : Window.getWindows()) {
+                w.dispose();
+            }
+        });
+    }
+}
