@@ -1,6 +1,7 @@
 package org.wispwright.render.march;
 
 import java.util.Arrays;
+import java.util.function.BooleanSupplier;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.picture.Rgb;
@@ -132,18 +133,27 @@ public final class RayMarcher {
      * @throws IllegalArgumentException if a shape differs
      */
     public void picture(ScalarGrid smoke, Look look, Picture out) {
+        picture(smoke, look, out, () -> false);
+    }
+
+    /**
+     * As {@link #picture(ScalarGrid, Look, Picture)}, but given up where it is no longer wanted; out is then of no use.
+     *
+     * @param stop asked before every row, on any lane
+     */
+    public void picture(ScalarGrid smoke, Look look, Picture out, BooleanSupplier stop) {
         requireShape("density", smoke);
         requireRaster("out", out.width(), out.height());
         takeIn(smoke, look);
         empty.update(density, lanes);
-        draw(look, out);
+        draw(look, out, stop);
     }
 
     /** As {@link #picture}, but samples empty space too: the slow twin that must give the same bits. */
     void pictureWithoutSkipping(ScalarGrid smoke, Look look, Picture out) {
         takeIn(smoke, look);
         empty.fillAll();
-        draw(look, out);
+        draw(look, out, () -> false);
     }
 
     /**
@@ -197,10 +207,10 @@ public final class RayMarcher {
         }
     }
 
-    private void draw(Look look, Picture out) {
+    private void draw(Look look, Picture out, BooleanSupplier stop) {
         lanes.forEach(PIECES, piece -> {
             int height = out.height();
-            for (int y = piece; y < height; y += PIECES) {
+            for (int y = piece; y < height && !stop.getAsBoolean(); y += PIECES) {
                 drawRow(y, look, scratch[piece], out);
             }
         });

@@ -28,10 +28,13 @@ import org.wispwright.warp.retouch.Retoucher;
 public final class Pictures {
     /** Rows of a draft, as a share of the whole. */
     public static final int DRAFT = 4;
+    /** Pictures of at most so many rows are drawn apart from the large ones, so that neither waits for the other. */
+    private static final int SMALL_ROWS = 200;
     private static final int FEW_PIXELS = 200_000;
 
     private final Workers workers;
     private final ExecutorService lane;
+    private final ExecutorService smallLane;
     private final Map<String, Replacing> asked = new LinkedHashMap<>();
     private final Map<Key, Picture> kept = new LinkedHashMap<>(16, 0.75f, true);
     private final long mostBytes = Runtime.getRuntime().maxMemory() / 4;
@@ -53,6 +56,7 @@ public final class Pictures {
     Pictures(Workers workers) {
         this.workers = workers;
         lane = workers.lane("pictures");
+        smallLane = workers.lane("thumbnails");
     }
 
     /** Another shot: what was drawn and asked of the one before is dropped. */
@@ -93,7 +97,8 @@ public final class Pictures {
      * @param failed on the desk's thread: why there is none
      */
     public void ask(String name, OpenShot now, Ask ask, Consumer<Drawn> show, Consumer<String> failed) {
-        Replacing mine = asked.computeIfAbsent(name, n -> new Replacing(workers, lane));
+        boolean small = ask.rows() > 0 && ask.rows() <= SMALL_ROWS;
+        Replacing mine = asked.computeIfAbsent(name, n -> new Replacing(workers, small ? smallLane : lane));
         Optional<Picture> there = ready(now, ask);
         if (there.isPresent()) {
             mine.drop();
@@ -131,7 +136,7 @@ public final class Pictures {
         Key key = key(now, ask);
         Picture picture;
         if (ask.source() instanceof Source.Take take) {
-            picture = take(now.setup(), Takes.of(now.folder()), take.number(), view(now, ask), ask.frame());
+            picture = take(now.setup(), Takes.of(now.folder()), take.number(), view(now, ask), ask.frame(), cancel);
         } else if (ask.source() instanceof Source.Wanted) {
             Picture original = draw(now, new Ask(Source.ORIGINAL, ask.view(), ask.frame(), ask.rows()), cancel);
             cancel.stopIfWished();
@@ -143,11 +148,11 @@ public final class Pictures {
         return picture;
     }
 
-    private static Picture take(Shot setup, Takes takes, int number, View view, int frame) {
+    private static Picture take(Shot setup, Takes takes, int number, View view, int frame, Cancel cancel) {
         takes.requireOf(number, setup.flow());
         ScalarGrid density = takes.density(number, frame, setup.flow());
         try (Lanes lanes = new Lanes(Math.max(1, Runtime.getRuntime().availableProcessors() - 1))) {
-            return PictureWork.picture(setup, density, view, lanes);
+            return PictureWork.picture(setup, density, view, lanes, cancel);
         }
     }
 

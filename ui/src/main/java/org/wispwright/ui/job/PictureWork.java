@@ -19,9 +19,15 @@ public final class PictureWork {
 
     /** The picture of a density through a view: linear, premultiplied, nothing behind it. */
     public static Picture picture(Shot shot, ScalarGrid density, View view, Lanes lanes) {
+        return picture(shot, density, view, lanes, new Cancel());
+    }
+
+    /** The same. @throws Cancel.Cancelled soon after it is wished */
+    public static Picture picture(Shot shot, ScalarGrid density, View view, Lanes lanes, Cancel cancel) {
         RayMarcher marcher = new RayMarcher(density.shape(), view, STEP_CELLS * density.shape().cellMetres(), lanes);
         Picture picture = view.raster().picture();
-        marcher.picture(density, shot.look(), picture);
+        marcher.picture(density, shot.look(), picture, cancel::wished);
+        cancel.stopIfWished();
         return picture;
     }
 

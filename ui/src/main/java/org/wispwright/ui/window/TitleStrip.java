@@ -8,7 +8,6 @@ import org.wispwright.ui.desk.Desk;
 import org.wispwright.ui.desk.DeskState;
 import org.wispwright.ui.desk.Message;
 import org.wispwright.ui.desk.Showing;
-import org.wispwright.ui.desk.Source;
 
 /** The line above everything: which shot, view, frame and takes are shown; what the desk has to say; the way to every action. */
 final class TitleStrip extends JPanel {
@@ -47,15 +46,7 @@ final class TitleStrip extends JPanel {
 
     private static String inWords(DeskState state, Showing showing) {
         String shown = showing.other().map(far -> Words.of("title.against." + showing.against().name().toLowerCase(java.util.Locale.ROOT),
-                inWords(showing.near()), inWords(far))).orElse(inWords(showing.near()));
+                Sources.inWords(showing.near()), Sources.inWords(far))).orElse(Sources.inWords(showing.near()));
         return Words.of("title.where", state.shot().orElseThrow().setup().name(), showing.view(), showing.frame(), shown);
-    }
-
-    /** What a source is called. */
-    static String inWords(Source source) {
-        if (source instanceof Source.Take take) {
-            return take.number() == 0 ? Words.of("source.original") : Words.of("source.take", take.number());
-        }
-        return Words.of(source instanceof Source.Rendered ? "source.rendered" : "source.wanted");
     }
 }

@@ -10,6 +10,8 @@ import java.awt.Robot;
 import java.awt.Window;
 import java.awt.event.InputEvent;
 import java.awt.event.KeyEvent;
+import java.awt.event.MouseEvent;
+import java.awt.event.MouseWheelEvent;
 import java.awt.image.BufferedImage;
 import java.io.IOException;
 import java.io.UncheckedIOException;
@@ -152,6 +154,22 @@ public final class DeskDriver implements AutoCloseable {
         robot.waitForIdle();
     }
 
+    /** Moves the pointer there. */
+    public void moveTo(Point p) {
+        robot.mouseMove(p.x, p.y);
+        robot.waitForIdle();
+    }
+
+    /** Turns the wheel over a component. The toolkit's robot has no wheel, so the event is posted. @param notches below 0 away from the hand */
+    public void wheel(Component c, double x, double y, int notches) {
+        Point corner = onScreen(c, 0, 0);
+        Point p = onScreen(c, x, y);
+        moveTo(p);
+        java.awt.Toolkit.getDefaultToolkit().getSystemEventQueue().postEvent(new MouseWheelEvent(c, MouseEvent.MOUSE_WHEEL,
+                System.currentTimeMillis(), 0, p.x - corner.x, p.y - corner.y, 0, false, MouseWheelEvent.WHEEL_UNIT_SCROLL, 1, notches));
+        robot.waitForIdle();
+    }
+
     /** Drags over places on the screen with the left button. */
     public void drag(List<Point> places) {
         robot.mouseMove(places.get(0).x, places.get(0).y);
@@ -226,6 +244,15 @@ public final class DeskDriver implements AutoCloseable {
         robot.waitForIdle();
         Rectangle bounds = onSwing(() -> window.frame().getBounds());
         return robot.createScreenCapture(bounds);
+    }
+
+    /** What a component paints now. */
+    public BufferedImage screenshotOf(Component c) {
+        return onSwing(() -> {
+            BufferedImage image = new BufferedImage(c.getWidth(), c.getHeight(), BufferedImage.TYPE_INT_RGB);
+            c.paint(image.createGraphics());
+            return image;
+        });
     }
 
     /** Writes what the window looks like into {@code target/screens}, for people. */

@@ -1,34 +1,128 @@
 package org.wispwright.ui.window.easel;
 
+import java.awt.BorderLayout;
+import java.util.ArrayList;
 import java.util.List;
+import java.util.Locale;
+import javax.swing.BorderFactory;
+import javax.swing.JLabel;
 import javax.swing.JPanel;
-import net.miginfocom.swing.MigLayout;
+import javax.swing.JPopupMenu;
+import javax.swing.SwingConstants;
+import javax.swing.Timer;
+import org.wispwright.ui.desk.Against;
 import org.wispwright.ui.desk.Desk;
 import org.wispwright.ui.desk.DeskState;
+import org.wispwright.ui.desk.Showing;
+import org.wispwright.ui.shot.ShotView;
 import org.wispwright.ui.window.DeskAction;
 import org.wispwright.ui.window.Palette;
 import org.wispwright.ui.window.Words;
 
-/** Shows the picture, and what the hand does to it. */
+/** The middle of the desk: the picture, what it is set against, and the hand of the moment. */
 public final class EaselPanel extends JPanel {
+    /**
+     * How long each of two pictures is shown in turn, milliseconds: 0.7 flashes a second, far below the three that WCAG 2.x, 2.3.1 allows.
+     */
+    static final int TURN_MILLIS = 700;
+    private static final double STEP = 1.25;
+
     private final Desk desk;
+    private final EaselPictures pictures;
+    private final EaselCanvas canvas;
+    private final ReadOut readOut;
+    private final JLabel missing = new JLabel("", SwingConstants.CENTER);
+    private final Timer turning;
+    private double toneStops;
+    private double toneGamma = 1;
 
     /** Follows a desk. */
     public EaselPanel(Desk desk) {
-        super(new MigLayout("insets 8, fill"));
+        super(new BorderLayout());
         this.desk = desk;
         setName("easel");
         setBackground(Palette.PANEL.colour());
         getAccessibleContext().setAccessibleName(Words.of("easel.name"));
+        pictures = new EaselPictures(desk, this::shown, missing::setText);
+        canvas = new EaselCanvas(desk, pictures);
+        readOut = new ReadOut(desk, canvas, pictures);
+        canvas.whenPlaced(readOut::placed);
+        turning = new Timer(TURN_MILLIS, e -> canvas.turn());
+        new EaselPointing(desk, canvas, readOut::at, JPopupMenu::new);
+        missing.setName("easel-missing");
+        missing.setBorder(BorderFactory.createEmptyBorder(4, 8, 4, 8));
+        missing.setForeground(Palette.FAULT.colour());
+        JPanel middle = new JPanel(new BorderLayout());
+        middle.add(missing, BorderLayout.NORTH);
+        middle.add(canvas, BorderLayout.CENTER);
+        add(new CompareBar(desk), BorderLayout.NORTH);
+        add(middle, BorderLayout.CENTER);
+        add(readOut, BorderLayout.SOUTH);
         desk.listen(this::follow);
+    }
+
+    private void shown() {
+        missing.setVisible(!missing.getText().isEmpty());
+        canvas.repaint();
+    }
+
+    private void follow(DeskState state) {
+        pictures.follow(state);
+        boolean turns = state.showing().map(s -> s.against() == Against.BLINK).orElse(false);
+        if (turns != turning.isRunning()) {
+            if (turns) {
+                turning.start();
+            } else {
+                turning.stop();
+            }
+        }
+        state.showing().ifPresent(s -> {
+            if (s.exposure() != toneStops || s.gamma() != toneGamma) {
+                toneStops = s.exposure();
+                toneGamma = s.gamma();
+                canvas.toneChanged();
+            }
+        });
+        readOut.placed();
     }
 
     /** What can be done here. */
     public List<DeskAction> actions() {
-        return List.of();
+        List<DeskAction> actions = new ArrayList<>(List.of(
+                DeskAction.withShot("look.fit", "ctrl 0", canvas::fit),
+                DeskAction.withShot("look.actual", "ctrl 1", canvas::actualSize),
+                DeskAction.withShot("look.closer", "ctrl PERIOD", () -> zoom(STEP)),
+                DeskAction.withShot("look.farther", "ctrl COMMA", () -> zoom(1 / STEP)),
+                DeskAction.withShot("look.brighter", "ctrl UP", () -> brighten(0.5)),
+                DeskAction.withShot("look.darker", "ctrl DOWN", () -> brighten(-0.5)),
+                DeskAction.withShot("look.as-is", null, () -> desk.show(s -> s.withTone(0, 1))),
+                DeskAction.withShot("look.outline", "ctrl L", () -> desk.show(s -> s.withOutline(!s.outline()))),
+                DeskAction.withShot("look.view", "ctrl G", this::nextView),
+                DeskAction.withShot("look.picture", "ctrl E", canvas::requestFocusInWindow)));
+        for (Against each : Against.values()) {
+            String word = each.name().toLowerCase(Locale.ROOT);
+            actions.add(DeskAction.withShot("compare." + word, "shift " + (each.ordinal() + 1), () -> desk.show(s -> s.withAgainst(each))));
+        }
+        actions.add(DeskAction.withShot("compare.swap", "shift S", () -> desk.show(s -> s.withNear(s.far()).withFar(s.near()))));
+        return actions;
     }
 
-    private void follow(DeskState state) {
-        setEnabled(state.shot().isPresent());
+    private void zoom(double factor) {
+        canvas.zoom(factor, canvas.getWidth() / 2.0, canvas.getHeight() / 2.0);
+    }
+
+    private void brighten(double stops) {
+        desk.show(s -> s.withTone(Math.max(-Showing.MOST_STOPS, Math.min(Showing.MOST_STOPS, s.exposure() + stops)), s.gamma()));
+    }
+
+    private void nextView() {
+        List<ShotView> views = desk.state().shot().orElseThrow().setup().views();
+        desk.show(s -> {
+            int here = 0;
+            for (int n = 0; n < views.size(); n++) {
+                here = views.get(n).view().name().equals(s.view()) ? n : here;
+            }
+            return s.withView(views.get((here + 1) % views.size()).view().name());
+        });
     }
 }
