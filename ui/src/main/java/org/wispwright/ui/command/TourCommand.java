@@ -8,6 +8,7 @@ import org.wispwright.optimize.solve.StopRule;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.ui.job.Comparison;
 import org.wispwright.ui.job.SolveWork;
+import org.wispwright.ui.job.SampleWork;
 import org.wispwright.ui.job.TourWork;
 import picocli.CommandLine.Command;
 import picocli.CommandLine.Mixin;
@@ -39,7 +40,7 @@ final class TourCommand implements Callable<Integer> {
         try (Lanes lanes = new Lanes(means.threads()); ProgressLine progress = manner.progress()) {
             SolveWork.Manner how = new SolveWork.Manner(means.memoryBytes(), GOOD_ENOUGH, true);
             Path into = out == null ? freeFolder() : out;
-            result = TourWork.onOwnSample(sample -> TourWork.run(sample, into, how, lanes, progress, manner.cancel()));
+            result = SampleWork.onOwnSample(sample -> TourWork.run(sample, into, how, lanes, progress, manner.cancel()));
         }
         StringBuilder words = new StringBuilder();
         for (Comparison.OfNote n : result.solve().comparison().notes()) {

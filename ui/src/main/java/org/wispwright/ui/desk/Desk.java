@@ -56,6 +56,11 @@ public final class Desk implements AutoCloseable {
         return () -> listeners.remove(listener);
     }
 
+    /** Tells nobody any more, as before another window takes the session over. */
+    public void forgetListeners() {
+        listeners.clear();
+    }
+
     /** A look: changes what is shown and nothing of the shot. */
     public void look(UnaryOperator<DeskState> change) {
         DeskState next = change.apply(state);

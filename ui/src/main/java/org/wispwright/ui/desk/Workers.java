@@ -1,7 +1,7 @@
 package org.wispwright.ui.desk;
 
-import java.util.ArrayList;
-import java.util.List;
+import java.util.LinkedHashMap;
+import java.util.Map;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executor;
 import java.util.concurrent.Executors;
@@ -15,7 +15,7 @@ public final class Workers implements AutoCloseable {
     private static final long SECONDS_TO_END = 10;
 
     private final Executor desk;
-    private final List<ExecutorService> lanes = new ArrayList<>();
+    private final Map<String, ExecutorService> lanes = new LinkedHashMap<>();
 
     /** @param desk runs a task on the desk's thread, soon and in order; with a window, Swing's own */
     public Workers(Executor desk) {
@@ -27,22 +27,20 @@ public final class Workers implements AutoCloseable {
         desk.execute(task);
     }
 
-    /** A new lane. @param name of its thread */
+    /** The lane of a name. */
     public synchronized ExecutorService lane(String name) {
-        ExecutorService lane = Executors.newSingleThreadExecutor(task -> {
+        return lanes.computeIfAbsent(name, n -> Executors.newSingleThreadExecutor(task -> {
             Thread thread = new Thread(task, "desk-" + name);
             thread.setDaemon(true);
             return thread;
-        });
-        lanes.add(lane);
-        return lane;
+        }));
     }
 
     /** Ends all lanes after what they have begun or queued, some seconds at most. */
     @Override
     public synchronized void close() {
-        lanes.forEach(ExecutorService::shutdown);
-        for (ExecutorService lane : lanes) {
+        lanes.values().forEach(ExecutorService::shutdown);
+        for (ExecutorService lane : lanes.values()) {
             try {
                 if (!lane.awaitTermination(SECONDS_TO_END, TimeUnit.SECONDS)) {
                     lane.shutdownNow();

@@ -2,15 +2,8 @@ package org.wispwright.ui.job;
 
 import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.io.IOException;
-import java.nio.file.FileSystem;
-import java.nio.file.FileSystems;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.net.URI;
-import java.net.URISyntaxException;
-import java.net.URL;
-import java.util.List;
-import java.util.Map;
 import java.util.stream.Stream;
 import org.wispwright.render.lanes.Lanes;
 import org.wispwright.ui.shot.Finding;
@@ -21,9 +14,6 @@ import org.wispwright.ui.shot.ShotFolder;
 
 /** The whole job on a sample, from a copy of its shot folder to the sheet and the report. */
 public final class TourWork {
-    /** The sample that travels in the program. */
-    public static final String SAMPLE = "kiln-yard";
-
     private TourWork() {
     }
 
@@ -36,33 +26,6 @@ public final class TourWork {
      * @param solve the solve
      */
     public record Result(Path shot, Path sheet, ObjectNode report, SolveWork.Result solve) {
-    }
-
-    /** A step that is given the sample's folder. */
-    @FunctionalInterface
-    public interface OnSample<T> {
-        /** Runs on the folder, which may lie inside a jar and is only good until this returns. */
-        T on(Path sample);
-    }
-
-    /** Runs a step on the sample that travels in the program. */
-    public static <T> T onOwnSample(OnSample<T> step) {
-        URL found = TourWork.class.getResource("/samples/" + SAMPLE + "/shot.json");
-        if (found == null) {
-            throw new IllegalStateException("the sample " + SAMPLE + " is missing from the program; build it again with mvn package");
-        }
-        try {
-            URI uri = found.toURI();
-            if (!"jar".equals(uri.getScheme())) {
-                return step.on(Path.of(uri).getParent());
-            }
-            try (FileSystem jar = FileSystems.newFileSystem(uri, Map.of())) {
-                return step.on(jar.getPath("/samples/" + SAMPLE));
-            }
-        } catch (IOException | URISyntaxException broken) {
-            throw new IllegalStateException("the sample " + SAMPLE + " cannot be read from the program; build it again with mvn package",
-                    broken);
-        }
     }
 
     /**
@@ -78,7 +41,7 @@ public final class TourWork {
         long start = System.nanoTime();
         Path folder = out.resolve(sample.getFileName().toString().replace("/", ""));
         requireEmpty(out);
-        copy(sample, folder);
+        SampleWork.copy(sample, folder);
         Shot shot = ShotCheck.require(folder, manner.memoryBytes());
         ShotFolder shotFolder = ShotFolder.open(folder);
         progress.milestone("tour: '" + shot.name() + "', " + shot.flow().grid().inWords() + ", " + shot.flow().frames().count()
@@ -109,22 +72,6 @@ public final class TourWork {
             }
         } catch (IOException refused) {
             throw PictureFile.cannotWrite(out, refused);
-        }
-    }
-
-    private static void copy(Path from, Path to) {
-        try (Stream<Path> paths = Files.walk(from)) {
-            List<Path> all = paths.toList();
-            for (Path path : all) {
-                Path there = to.resolve(from.relativize(path).toString());
-                if (Files.isDirectory(path)) {
-                    Files.createDirectories(there);
-                } else {
-                    Files.copy(path, there);
-                }
-            }
-        } catch (IOException refused) {
-            throw PictureFile.cannotWrite(to, refused);
         }
     }
 }

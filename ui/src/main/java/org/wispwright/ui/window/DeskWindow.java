@@ -3,12 +3,16 @@ package org.wispwright.ui.window;
 import java.awt.BorderLayout;
 import java.awt.CardLayout;
 import java.awt.Dimension;
+import java.awt.GraphicsDevice;
+import java.awt.GraphicsEnvironment;
+import java.awt.Rectangle;
 import java.awt.event.WindowAdapter;
 import java.awt.event.WindowEvent;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Optional;
 import java.util.concurrent.CountDownLatch;
+import java.util.function.UnaryOperator;
 import javax.swing.BorderFactory;
 import javax.swing.JFrame;
 import javax.swing.JPanel;
@@ -17,6 +21,8 @@ import javax.swing.SwingUtilities;
 import javax.swing.WindowConstants;
 import org.wispwright.ui.desk.Desk;
 import org.wispwright.ui.desk.DeskState;
+import org.wispwright.ui.desk.Memory;
+import org.wispwright.ui.desk.Remembered;
 import org.wispwright.ui.desk.Workers;
 import org.wispwright.ui.window.easel.EaselPanel;
 import org.wispwright.ui.window.notes.NotesPanel;
@@ -28,24 +34,28 @@ import org.wispwright.ui.window.takes.TakesPanel;
 public final class DeskWindow {
     /** The smallest window in which everything can be reached. */
     public static final Dimension SMALLEST = new Dimension(1024, 700);
+    private static final Dimension USUAL = new Dimension(1440, 900);
     private static final int SIDE = 250;
 
     private final Desk desk;
+    private final Memory memory;
     private final JFrame frame = new JFrame(Words.of("window.title"));
     private final JPanel cards = new JPanel(new CardLayout());
     private final ActionTable actions;
+    private Optional<Path> opened = Optional.empty();
     private Runnable closed = () -> { };
 
     /** Builds the window round a desk; {@link #show} opens it. */
-    public DeskWindow(Desk desk) {
+    public DeskWindow(Desk desk, Memory memory) {
         this.desk = desk;
+        this.memory = memory;
         actions = new ActionTable(desk, frame.getRootPane());
         NotesPanel notes = new NotesPanel(desk);
         EaselPanel easel = new EaselPanel(desk);
         TakesPanel takes = new TakesPanel(desk);
         RibbonPanel ribbon = new RibbonPanel(desk);
-        StartPanel start = new StartPanel(desk);
-        actions.add(new DeskActions(desk, this).all());
+        StartPanel start = new StartPanel(desk, memory);
+        actions.add(new DeskActions(desk, this, memory).all());
         for (List<DeskAction> some : List.of(start.actions(), notes.actions(), easel.actions(), takes.actions(), ribbon.actions())) {
             actions.add(some);
         }
@@ -68,6 +78,7 @@ public final class DeskWindow {
                 close();
             }
         });
+        frame.getRootPane().setTransferHandler(new Dropped(desk));
         desk.listen(this::follow);
     }
 
@@ -79,6 +90,11 @@ public final class DeskWindow {
     }
 
     private void follow(DeskState state) {
+        Optional<Path> now = state.shot().map(s -> s.folder().root());
+        if (!now.equals(opened)) {
+            opened = now;
+            now.ifPresent(path -> memory.change(m -> m.opened(path)));
+        }
         ((CardLayout) cards.getLayout()).show(cards, state.shot().isPresent() ? "work" : "start");
         frame.setTitle(state.shot().map(s -> Words.of("window.title.shot", s.setup().name())).orElse(Words.of("window.title")));
     }
@@ -93,14 +109,42 @@ public final class DeskWindow {
         return actions;
     }
 
-    /** Opens the window. */
+    /** Opens the window where it was last. */
     public void show() {
-        frame.setSize(new Dimension(1440, 900));
+        frame.setSize(USUAL);
+        frame.setLocationByPlatform(memory.now().window().isEmpty());
+        memory.now().window().ifPresent(w -> frame.setBounds(onScreen(new Rectangle(w.get(0), w.get(1), w.get(2), w.get(3)))));
         frame.setVisible(true);
+    }
+
+    /** A remembered place, unless its screen is gone. */
+    private static Rectangle onScreen(Rectangle wished) {
+        for (GraphicsDevice screen : GraphicsEnvironment.getLocalGraphicsEnvironment().getScreenDevices()) {
+            Rectangle there = screen.getDefaultConfiguration().getBounds().intersection(wished);
+            if (there.width >= SMALLEST.width / 2 && there.height >= SMALLEST.height / 2) {
+                return wished;
+            }
+        }
+        return new Rectangle(0, 0, USUAL.width, USUAL.height);
+    }
+
+    /** Another theme or size of text: the window is built anew round the same session. */
+    void renew(UnaryOperator<Remembered> change) {
+        memory.change(change);
+        Rectangle bounds = frame.getBounds();
+        desk.forgetListeners();
+        frame.dispose();
+        Palette.use(memory.now().dark(), memory.now().textScale());
+        DeskWindow next = new DeskWindow(desk, memory);
+        next.closed = closed;
+        next.frame.setBounds(bounds);
+        next.frame.setVisible(true);
     }
 
     /** Closes the window and the session. */
     public void close() {
+        Rectangle b = frame.getBounds();
+        memory.change(m -> m.ended(List.of(b.x, b.y, b.width, b.height)));
         frame.dispose();
         desk.close();
         closed.run();
@@ -114,12 +158,12 @@ public final class DeskWindow {
     public static void runUntilClosed(Optional<Path> folder) {
         CountDownLatch ended = new CountDownLatch(1);
         SwingUtilities.invokeLater(() -> {
-            Palette.use(true, 1);
-            Desk desk = new Desk(new Workers(SwingUtilities::invokeLater));
-            DeskWindow window = new DeskWindow(desk);
+            Memory memory = new Memory(Memory.usual());
+            Palette.use(memory.now().dark(), memory.now().textScale());
+            DeskWindow window = new DeskWindow(new Desk(new Workers(SwingUtilities::invokeLater)), memory);
             window.closed = ended::countDown;
             window.show();
-            folder.ifPresent(desk::open);
+            folder.ifPresent(window.desk::open);
         });
         try {
             ended.await();

@@ -28,6 +28,7 @@ import javax.swing.KeyStroke;
 import javax.swing.SwingUtilities;
 import org.wispwright.ui.desk.Desk;
 import org.wispwright.ui.desk.DeskState;
+import org.wispwright.ui.desk.Memory;
 import org.wispwright.ui.desk.Workers;
 
 /**
@@ -46,8 +47,13 @@ public final class DeskDriver implements AutoCloseable {
         this(size, true, 1);
     }
 
-    /** Opens an empty desk. @param dark the theme @param textScale 1 is usual */
+    /** Opens an empty desk that remembers nothing. @param dark the theme @param textScale 1 is usual */
     public DeskDriver(Dimension size, boolean dark, double textScale) {
+        this(size, new Memory(forgotten()), dark, textScale);
+    }
+
+    /** Opens an empty desk. @param memory what it remembers @param dark the theme @param textScale 1 is usual */
+    public DeskDriver(Dimension size, Memory memory, boolean dark, double textScale) {
         try {
             robot = new Robot();
         } catch (AWTException none) {
@@ -57,7 +63,7 @@ public final class DeskDriver implements AutoCloseable {
         Object[] made = onSwing(() -> {
             Palette.use(dark, textScale);
             Desk d = new Desk(new Workers(SwingUtilities::invokeLater));
-            DeskWindow w = new DeskWindow(d);
+            DeskWindow w = new DeskWindow(d, memory);
             w.frame().setSize(size);
             w.frame().setLocation(0, 0);
             w.frame().setVisible(true);
@@ -66,6 +72,19 @@ public final class DeskDriver implements AutoCloseable {
         desk = (Desk) made[0];
         window = (DeskWindow) made[1];
         robot.waitForIdle();
+    }
+
+    /** A file that nothing is remembered in; gone after the test run. */
+    private static Path forgotten() {
+        try {
+            Path folder = Files.createTempDirectory("desk");
+            folder.toFile().deleteOnExit();
+            Path file = folder.resolve("desk.properties");
+            file.toFile().deleteOnExit();
+            return file;
+        } catch (IOException refused) {
+            throw new UncheckedIOException(refused);
+        }
     }
 
     /** Opens a shot and waits until it lies on the desk. */

@@ -61,6 +61,12 @@ public final class EaselPanel extends JPanel {
         desk.listen(this::follow);
     }
 
+    @Override
+    public void removeNotify() {
+        turning.stop();
+        super.removeNotify();
+    }
+
     private void shown() {
         missing.setVisible(!missing.getText().isEmpty());
         canvas.repaint();
