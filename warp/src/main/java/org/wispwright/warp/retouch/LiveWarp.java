@@ -55,6 +55,36 @@ public final class LiveWarp {
     }
 
     /**
+     * The place before the warp that is shown at a place now, its displacement linear between the centres of the pixels around; a handle
+     * from there to the place leaves the picture as it is, but for what the kind makes of one handle more.
+     *
+     * @param place in heights; beyond the picture the border's displacement counts
+     * @return empty where the mesh has left nothing
+     */
+    public Optional<Point> cameFrom(Point place) {
+        int height = original.height();
+        int width = original.width();
+        double x = Math.max(0, Math.min(width - 1, place.x() * height - 0.5));
+        double y = Math.max(0, Math.min(height - 1, place.y() * height - 0.5));
+        int left = (int) Math.min(Math.max(0, width - 2), Math.floor(x));
+        int right = Math.min(width - 1, left + 1);
+        double[] dx = new double[width];
+        double[] dy = new double[width];
+        double fromX = 0;
+        double fromY = 0;
+        for (int row = (int) Math.floor(y); row <= Math.min(height - 1, Math.floor(y) + 1); row++) {
+            double share = Math.max(0, 1 - Math.abs(y - row));
+            bend.displacements(row, dx, dy);
+            if (share > 0) {
+                fromX += share * (dx[left] + (x - left) * (dx[right] - dx[left]));
+                fromY += share * (dy[left] + (x - left) * (dy[right] - dy[left]));
+            }
+        }
+        return Double.isNaN(fromX) || Double.isNaN(fromY) ? Optional.empty()
+                : Optional.of(new Point(place.x() + fromX / height, place.y() + fromY / height));
+    }
+
+    /**
      * Pulls a handle to another place.
      *
      * @return the pixels that were drawn again, empty if none

@@ -196,6 +196,20 @@ class WarpKindTest {
         assertEquals(0.85, over.bottom(), 1e-12);
     }
 
+    /** Every kind carries each handle's start exactly to its end, by {@link WarpKind}'s words, so that is where what lies there came from. */
+    @ParameterizedTest
+    @EnumSource(WarpKind.class)
+    void whatLiesAtAHandlesEndCameFromItsStart(WarpKind kind) {
+        LiveWarp live = new LiveWarp(warp(kind, pulled(), Optional.empty()), RetoucherTest.smoke(ROWS), RetoucherTest.smoke(ROWS));
+        for (Handle handle : live.warp().handles()) {
+            Point from = live.cameFrom(handle.to()).orElseThrow();
+            assertEquals(0, from.distanceTo(handle.from()), 0.1 / ROWS, kind + " " + handle);
+        }
+        // Between centres the displacement is read as linear, and at a handle it may have a kink: a quarter of a pixel for that.
+        live.drag(0, new Point(0.5, 0.5));
+        assertEquals(0, live.cameFrom(new Point(0.5, 0.5)).orElseThrow().distanceTo(live.warp().handles().get(0).from()), 0.25 / ROWS);
+    }
+
     /** A live warp draws, at rest, the bits of the wanted picture; while dragged, nothing outside the window it names changes. */
     @ParameterizedTest
     @EnumSource(WarpKind.class)
