@@ -12,6 +12,7 @@ import org.wispwright.ui.shot.Finding;
 import org.wispwright.ui.shot.NoteEdits;
 import org.wispwright.ui.shot.NoteEdits.Listed;
 import org.wispwright.ui.shot.ShotException;
+import org.wispwright.ui.shot.ShotFolder;
 
 /**
  * An artist's session: one {@link DeskState} at a time, told to those who listen. Knows no screen. All methods belong to the desk's thread;
@@ -23,6 +24,9 @@ public final class Desk implements AutoCloseable {
     private final Replacing opening;
     private final List<Consumer<DeskState>> listeners = new ArrayList<>();
     private final Pictures pictures;
+    private final Thumbnails thumbnails;
+    private final MetWatch met;
+    private final ChangeWatch change;
     private DeskState state = DeskState.EMPTY;
     private Keeper keeper;
 
@@ -32,6 +36,10 @@ public final class Desk implements AutoCloseable {
         files = workers.lane("files");
         opening = new Replacing(workers, files);
         pictures = new Pictures(workers);
+        thumbnails = new Thumbnails(workers, pictures);
+        ExecutorService figures = workers.lane("figures");
+        met = new MetWatch(workers, figures, pictures);
+        change = new ChangeWatch(workers, figures);
     }
 
     /** All as it is now. */
@@ -42,6 +50,21 @@ public final class Desk implements AutoCloseable {
     /** Pictures of takes and wishes of the shot on the desk. */
     public Pictures pictures() {
         return pictures;
+    }
+
+    /** Small pictures of the same. */
+    public Thumbnails thumbnails() {
+        return thumbnails;
+    }
+
+    /** How far takes meet the notes. */
+    public MetWatch met() {
+        return met;
+    }
+
+    /** How far takes have left the original. */
+    public ChangeWatch change() {
+        return change;
     }
 
     /** Where work runs. */
@@ -169,14 +192,40 @@ public final class Desk implements AutoCloseable {
         }));
     }
 
+    /**
+     * Writes to the shot folder behind all edits, as a change of its journal that is no {@link NoteEdit}, then reads the notes again. It can
+     * be undone through the journal, and so can all edits before it. A fault is said, and nothing has changed then.
+     *
+     * @param write on a worker
+     * @param then  on the desk's thread, with the notes as they have become
+     */
+    public void outside(Consumer<ShotFolder> write, Runnable then) {
+        OpenShot shot = state.shot().orElseThrow(() -> new IllegalStateException("no shot on the desk"));
+        keeper.outside(() -> write.accept(shot.folder()), fault -> fault.ifPresentOrElse(
+                found -> say(Message.Kind.FAULT, found.inWords()), () -> readsNotesAgain(then)));
+    }
+
     private void readsNotesAgain() {
+        readsNotesAgain(() -> { });
+    }
+
+    private void readsNotesAgain(Runnable then) {
         OpenShot shot = state.shot().orElseThrow();
+        Keeper asked = keeper;
         files.execute(() -> {
             try {
                 List<Listed> notes = NoteEdits.of(shot.folder()).list();
                 workers.onDesk(() -> {
+                    if (keeper != asked) {
+                        return;
+                    }
+                    if (!state.saving().isDone()) {                            // edited meanwhile: what was read is older than that
+                        keeper.outside(() -> { }, fault -> readsNotesAgain(then));
+                        return;
+                    }
                     look(s -> notes(s, notes).withHistory(History.NONE));
                     asksJournal();
+                    then.run();
                 });
             } catch (ShotException fault) {
                 workers.onDesk(() -> say(Message.Kind.FAULT, fault.finding().inWords()));

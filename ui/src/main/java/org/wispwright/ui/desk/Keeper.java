@@ -20,10 +20,13 @@ import org.wispwright.ui.shot.ShotException;
  */
 final class Keeper {
     /** Which way a step goes. */
-    private enum Way { MAKE, BACK, FORTH, EARLIER_BACK, LATER_FORTH }
+    private enum Way { MAKE, BACK, FORTH, EARLIER_BACK, LATER_FORTH, OUTSIDE }
 
-    /** One thing to write. */
-    private record Writing(Way way, Step step, Runnable then) {
+    /** One thing to write. @param outside what writes it, if it is no step; its fault is told and holds nothing up */
+    private record Writing(Way way, Step step, Runnable then, Runnable outside, Consumer<Optional<Finding>> ended) {
+        private Writing(Way way, Step step, Runnable then) {
+            this(way, step, then, null, null);
+        }
     }
 
     private final Workers workers;
@@ -77,6 +80,11 @@ final class Keeper {
         add(new Writing(Way.LATER_FORTH, null, then));
     }
 
+    /** Writes something that is no step, behind all that waits. @param ended on the desk's thread, with what went wrong */
+    void outside(Runnable write, Consumer<Optional<Finding>> ended) {
+        add(new Writing(Way.OUTSIDE, null, () -> { }, write, ended));
+    }
+
     private void add(Writing writing) {
         waiting.add(writing);
         again();
@@ -113,9 +121,12 @@ final class Keeper {
             Optional<Finding> fault = attempt(first);
             workers.onDesk(() -> {
                 busy = false;
-                refused = fault;
-                if (fault.isEmpty()) {
+                refused = first.way() == Way.OUTSIDE ? Optional.empty() : fault;
+                if (refused.isEmpty()) {
                     waiting.remove().then().run();
+                }
+                if (first.way() == Way.OUTSIDE) {
+                    first.ended().accept(fault);
                 }
                 next();
                 tell();
@@ -128,6 +139,7 @@ final class Keeper {
             switch (writing.way()) {
                 case MAKE -> edits.change(writing.step().name(), writing.step().before(), writing.step().after(), writing.step().copied());
                 case BACK, EARLIER_BACK -> edits.undo();
+                case OUTSIDE -> writing.outside().run();
                 default -> edits.redo();
             }
             return Optional.empty();

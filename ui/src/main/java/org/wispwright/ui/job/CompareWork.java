@@ -13,6 +13,7 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import javax.imageio.ImageIO;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.render.lanes.Lanes;
@@ -84,15 +85,10 @@ public final class CompareWork {
         Picture wanted = wish.wanted(original);
         float[] weights = wish.weights(original);
         PyramidLoss loss = new PyramidLoss(wanted, weights);
-        double start = loss.value(original);
-        double startFinest = loss.finest(original);
-        if (!(start > LossChoice.LEAST_START && startFinest > 0)) {
-            throw new ShotException(new Finding("notes/" + note.id() + ".json", "/retouch", "it changes nothing that can be seen on frame "
-                    + note.frame()
-                    + (note.weighBy().isPresent() ? ", where its weighBy counts" : "") + "; check where its strokes and handles lie."));
-        }
-        double met = 1 - loss.value(got) / start;
-        double finest = loss.finest(got) / startFinest;
+        double met = met(loss, original, got).orElseThrow(() -> new ShotException(new Finding("notes/" + note.id() + ".json", "/retouch",
+                "it changes nothing that can be seen on frame " + note.frame()
+                + (note.weighBy().isPresent() ? ", where its weighBy counts" : "") + "; check where its strokes and handles lie.")));
+        double finest = loss.finest(got) / loss.finest(original);
         LossChoice choice = wish.losses(original, wanted);
         double fall = fall(note, choice, original, wanted, weights, got);
         double change = 0;
@@ -104,6 +100,24 @@ public final class CompareWork {
         return new Comparison.OfNote(note, original, shown, wanted, got, met, finest, change,
                 new Comparison.Mass(PictureMeasure.mass(original), PictureMeasure.mass(wanted), PictureMeasure.mass(got)),
                 Folds.of(note.retouch(), original), choice, fall);
+    }
+
+    /**
+     * How far a picture is from the original towards what a note wants: 1 when it is there, 0 at the original, less beyond it.
+     *
+     * @param original in the note's view on its frame, at any raster of the view
+     * @param got      the picture to judge, same raster
+     * @return empty if the note changes nothing that can be seen
+     */
+    public static OptionalDouble met(Note note, Picture original, Picture got) {
+        NoteWish wish = new NoteWish(note);
+        return met(new PyramidLoss(wish.wanted(original), wish.weights(original)), original, got);
+    }
+
+    private static OptionalDouble met(PyramidLoss loss, Picture original, Picture got) {
+        double start = loss.value(original);
+        boolean seen = start > LossChoice.LEAST_START && loss.finest(original) > 0;
+        return seen ? OptionalDouble.of(1 - loss.value(got) / start) : OptionalDouble.empty();
     }
 
     private static double fall(Note note, LossChoice choice, Picture original, Picture wanted, float[] weights, Picture got) {

@@ -45,22 +45,41 @@ public record Departure(double all, double before) {
             ScalarGrid was = original.apply(frame);
             ScalarGrid is = take.apply(frame);
             for (View view : views) {
-                Picture before = PictureWork.picture(shot, was, view, lanes);
-                Picture after = PictureWork.picture(shot, is, view, lanes);
-                double squares = 0;
-                double differences = 0;
-                for (int n = 0; n < before.rgba().length; n++) {
-                    double o = before.rgba()[n];
-                    double d = after.rgba()[n] - o;
-                    differences += d * d;
-                    squares += o * o;
-                }
+                Apart one = apart(shot, view, was, is, lanes);
                 for (int span = 0; span < (frame < lastNoted ? 2 : 1); span++) {
-                    apart[span] += differences;
-                    whole[span] += squares;
+                    apart[span] += one.differences();
+                    whole[span] += one.squares();
                 }
             }
         }
         return new Departure(whole[0] > 0 ? apart[0] / whole[0] : 0, whole[1] > 0 ? apart[1] / whole[1] : 0);
+    }
+
+    /**
+     * The same for one frame in one view: squared differences as a share of the original's squares; 0 where the original shows nothing.
+     *
+     * @param was the original's density
+     * @param is  another take's density of the same frame
+     */
+    public static double share(Shot shot, View view, ScalarGrid was, ScalarGrid is, Lanes lanes) {
+        Apart one = apart(shot, Solve.proxy(view, shot.flow().grid().cellMetres()), was, is, lanes);
+        return one.squares() > 0 ? one.differences() / one.squares() : 0;
+    }
+
+    private record Apart(double differences, double squares) {
+    }
+
+    private static Apart apart(Shot shot, View view, ScalarGrid was, ScalarGrid is, Lanes lanes) {
+        Picture before = PictureWork.picture(shot, was, view, lanes);
+        Picture after = PictureWork.picture(shot, is, view, lanes);
+        double squares = 0;
+        double differences = 0;
+        for (int n = 0; n < before.rgba().length; n++) {
+            double o = before.rgba()[n];
+            double d = after.rgba()[n] - o;
+            differences += d * d;
+            squares += o * o;
+        }
+        return new Apart(differences, squares);
     }
 }

@@ -19,6 +19,9 @@ import org.wispwright.ui.shot.NoteJournal.FileChange;
  * {@link #undo} can take it back. One at a time: two edits of one shot must not run at once.
  */
 public final class NoteEdits {
+    /** The most notes that a shot may have. */
+    public static final int MOST_NOTES = NoteReader.MOST_NOTES;
+
     private final ShotFolder folder;
     private final NoteFiles files;
     private final NoteChanges changes;

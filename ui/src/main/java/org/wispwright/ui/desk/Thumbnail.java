@@ -1,0 +1,34 @@
+package org.wispwright.ui.desk;
+
+import org.wispwright.render.picture.Picture;
+import org.wispwright.render.picture.Rgb;
+import org.wispwright.render.picture.Srgb;
+
+/**
+ * A small picture as a display shows it: over the shot's background, coded by sRGB. Nobody changes the array.
+ *
+ * @param width  pixels
+ * @param height pixels
+ * @param rgb    rows from the top, each pixel {@code 0xRRGGBB}
+ */
+public record Thumbnail(int width, int height, int[] rgb) {
+    /** Checks the size. @throws IllegalArgumentException if the array has another */
+    public Thumbnail {
+        if (rgb.length != width * height) {
+            throw new IllegalArgumentException("thumbnail: got " + rgb.length + " pixels for " + width + " x " + height);
+        }
+    }
+
+    /** A linear premultiplied picture over a background. */
+    static Thumbnail of(Picture picture, Rgb background) {
+        float[] rgba = picture.rgba();
+        int[] rgb = new int[picture.width() * picture.height()];
+        for (int n = 0; n < rgb.length; n++) {
+            double through = 1 - rgba[4 * n + 3];
+            rgb[n] = Srgb.encodeTo(255, rgba[4 * n] + through * background.r()) << 16
+                    | Srgb.encodeTo(255, rgba[4 * n + 1] + through * background.g()) << 8
+                    | Srgb.encodeTo(255, rgba[4 * n + 2] + through * background.b());
+        }
+        return new Thumbnail(picture.width(), picture.height(), rgb);
+    }
+}
