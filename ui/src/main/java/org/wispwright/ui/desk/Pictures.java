@@ -22,12 +22,14 @@ import org.wispwright.warp.retouch.Retoucher;
 
 /**
  * Pictures of the shot on the desk: of takes at any frame, of wishes, of rendered frames. Drawn on a worker, kept while there is room, linear
- * and premultiplied; nobody changes one. What is asked under one name replaces what was asked under it before; a draft with a quarter of the
- * rows comes first where the whole picture takes long.
+ * and premultiplied; nobody changes one. What is asked under one name replaces what was asked under it before; a small draft comes
+ * first where the whole picture takes long.
  */
 public final class Pictures {
-    /** Rows of a draft, as a share of the whole. */
-    public static final int DRAFT = 4;
+    /** Pixels of a draft: so many are drawn within a few frames of the screen. */
+    private static final int DRAFT_PIXELS = 50_000;
+    /** Samples of small pictures and drafts lie at most this share of a cell apart. */
+    private static final double SMALL_STEP_CELLS = 1;
     /** Pictures of at most so many rows are drawn apart from the large ones, so that neither waits for the other. */
     private static final int SMALL_ROWS = 200;
     private static final int FEW_PIXELS = 200_000;
@@ -105,7 +107,7 @@ public final class Pictures {
             show.accept(new Drawn(there.get(), false));
             return;
         }
-        Ask draft = new Ask(ask.source(), ask.view(), ask.frame(), Math.max(1, key(now, ask).rows() / DRAFT));
+        Ask draft = new Ask(ask.source(), ask.view(), ask.frame(), draftRows(now, ask));
         if (!(ask.source() instanceof Source.Rendered) && pixels(now, ask) > FEW_PIXELS) {
             mine.replace(cancel -> draw(now, draft, cancel), picture -> {
                 show.accept(new Drawn(picture, true));
@@ -152,7 +154,8 @@ public final class Pictures {
         takes.requireOf(number, setup.flow());
         ScalarGrid density = takes.density(number, frame, setup.flow());
         try (Lanes lanes = new Lanes(Math.max(1, Runtime.getRuntime().availableProcessors() - 1))) {
-            return PictureWork.picture(setup, density, view, lanes, cancel);
+            return PictureWork.picture(setup, density, view, view.raster().height() <= SMALL_ROWS ? SMALL_STEP_CELLS : PictureWork.STEP_CELLS,
+                    lanes, cancel);
         }
     }
 
@@ -174,6 +177,12 @@ public final class Pictures {
     private static long pixels(OpenShot now, Ask ask) {
         View view = view(now, ask);
         return (long) view.raster().width() * view.raster().height();
+    }
+
+    private static int draftRows(OpenShot now, Ask ask) {
+        View view = view(now, ask);
+        double aspect = (double) view.raster().width() / view.raster().height();
+        return Math.max(1, Math.min(SMALL_ROWS, (int) Math.sqrt(DRAFT_PIXELS / aspect)));
     }
 
     private static Key key(OpenShot now, Ask ask) {

@@ -24,7 +24,12 @@ public final class PictureWork {
 
     /** The same. @throws Cancel.Cancelled soon after it is wished */
     public static Picture picture(Shot shot, ScalarGrid density, View view, Lanes lanes, Cancel cancel) {
-        RayMarcher marcher = new RayMarcher(density.shape(), view, STEP_CELLS * density.shape().cellMetres(), lanes);
+        return picture(shot, density, view, STEP_CELLS, lanes, cancel);
+    }
+
+    /** The same with other samples. @param stepCells share of a cell that samples lie apart at most */
+    public static Picture picture(Shot shot, ScalarGrid density, View view, double stepCells, Lanes lanes, Cancel cancel) {
+        RayMarcher marcher = new RayMarcher(density.shape(), view, stepCells * density.shape().cellMetres(), lanes);
         Picture picture = view.raster().picture();
         marcher.picture(density, shot.look(), picture, cancel::wished);
         cancel.stopIfWished();
