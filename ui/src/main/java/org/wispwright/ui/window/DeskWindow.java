@@ -27,6 +27,7 @@ import org.wispwright.ui.desk.Workers;
 import org.wispwright.ui.window.easel.EaselPanel;
 import org.wispwright.ui.window.notes.NotesPanel;
 import org.wispwright.ui.window.ribbon.RibbonPanel;
+import org.wispwright.ui.window.start.BeginPanel;
 import org.wispwright.ui.window.start.StartPanel;
 import org.wispwright.ui.window.takes.TakesPanel;
 
@@ -42,6 +43,8 @@ public final class DeskWindow {
     private final JFrame frame = new JFrame(Words.of("window.title"));
     private final JPanel cards = new JPanel(new CardLayout());
     private final ActionTable actions;
+    private final BeginPanel beginning;
+    private boolean begins;
     private Optional<Path> opened = Optional.empty();
     private Runnable closed = () -> { };
 
@@ -54,7 +57,7 @@ public final class DeskWindow {
         EaselPanel easel = new EaselPanel(desk);
         TakesPanel takes = new TakesPanel(desk);
         RibbonPanel ribbon = new RibbonPanel(desk);
-        StartPanel start = new StartPanel(desk, memory);
+        StartPanel start = new StartPanel(desk, memory, () -> begin(Optional.empty()));
         actions.add(new DeskActions(desk, this, memory).all());
         for (List<DeskAction> some : List.of(start.actions(), notes.actions(), easel.actions(), takes.actions(), ribbon.actions())) {
             actions.add(some);
@@ -68,6 +71,11 @@ public final class DeskWindow {
         takes.setPreferredSize(new Dimension(SIDE, 0));
         cards.add(start, "start");
         cards.add(work, "work");
+        beginning = new BeginPanel(desk, () -> {
+            begins = false;
+            follow(desk.state());
+        });
+        cards.add(beginning, "begin");
         frame.setContentPane(cards);
         frame.setJMenuBar(Menus.of(actions));
         frame.setMinimumSize(SMALLEST);
@@ -78,7 +86,7 @@ public final class DeskWindow {
                 close();
             }
         });
-        frame.getRootPane().setTransferHandler(new Dropped(desk));
+        frame.getRootPane().setTransferHandler(new Dropped(desk, this::begin));
         desk.listen(this::follow);
     }
 
@@ -95,8 +103,15 @@ public final class DeskWindow {
             opened = now;
             now.ifPresent(path -> memory.change(m -> m.opened(path)));
         }
-        ((CardLayout) cards.getLayout()).show(cards, state.shot().isPresent() ? "work" : "start");
+        ((CardLayout) cards.getLayout()).show(cards, begins ? "begin" : state.shot().isPresent() ? "work" : "start");
         frame.setTitle(state.shot().map(s -> Words.of("window.title.shot", s.setup().name())).orElse(Words.of("window.title")));
+    }
+
+    /** Opens the guided set-up. @param frames a folder of frames to begin with */
+    void begin(Optional<Path> frames) {
+        begins = true;
+        frames.ifPresent(beginning::framesIn);
+        follow(desk.state());
     }
 
     /** The frame itself. */

@@ -7,16 +7,22 @@ import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
+import java.util.Optional;
+import java.util.function.Consumer;
 import javax.swing.TransferHandler;
 import org.wispwright.ui.desk.Desk;
 import org.wispwright.ui.desk.Message;
 
-/** Files dropped on the window: a shot folder, or its shot.json, is opened. */
+/** Files dropped on the window: a shot folder, or its shot.json, is opened; with any other folder or picture the guided set-up
+ * begins. */
 final class Dropped extends TransferHandler {
     private final transient Desk desk;
+    private final transient Consumer<Optional<Path>> begin;
 
-    Dropped(Desk desk) {
+    /** @param begin opens the guided set-up with a folder of frames */
+    Dropped(Desk desk, Consumer<Optional<Path>> begin) {
         this.desk = desk;
+        this.begin = begin;
     }
 
     @Override
@@ -42,7 +48,12 @@ final class Dropped extends TransferHandler {
             desk.open(shot);
             return true;
         }
-        desk.say(Message.Kind.FAULT, Words.of("drop.no-shot", file.getFileName()));
-        return false;
+        Path folder = Files.isDirectory(file) ? file : file.toAbsolutePath().getParent();
+        if (!Files.isDirectory(folder)) {
+            desk.say(Message.Kind.FAULT, Words.of("drop.unreadable"));
+            return false;
+        }
+        begin.accept(Optional.of(folder));
+        return true;
     }
 }

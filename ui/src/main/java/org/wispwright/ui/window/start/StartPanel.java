@@ -21,21 +21,23 @@ import org.wispwright.ui.window.DeskAction;
 import org.wispwright.ui.window.Palette;
 import org.wispwright.ui.window.Words;
 
-/** What a person sees before there is a shot: three ways in, the shots of the last days, and what the tool is not for. */
+/** What a person sees before there is a shot: ways in, the shots of the last days, and what the tool is not for. */
 public final class StartPanel extends JPanel {
     private static final int WIDE = 460;
 
     private final Desk desk;
     private final Memory memory;
+    private final Runnable begin;
     private final JPanel recent = new JPanel(new MigLayout("insets 0, wrap 1, fillx, gapy 4", "[grow, fill]"));
     private final JPanel left = new JPanel(new MigLayout("insets 0, wrap 1, fillx, gapy 4", "[grow, fill]"));
     private final JLabel said = new JLabel();
 
-    /** Follows a desk. */
-    public StartPanel(Desk desk, Memory memory) {
+    /** Follows a desk. @param begin opens the guided set-up */
+    public StartPanel(Desk desk, Memory memory, Runnable begin) {
         super(new MigLayout("insets 32, wrap 1, align center center, hidemode 3", "[" + WIDE + "!, fill]"));
         this.desk = desk;
         this.memory = memory;
+        this.begin = begin;
         setName("start");
         getAccessibleContext().setAccessibleName(Words.of("start.name"));
         JLabel title = new JLabel(Words.of("start.name"));
@@ -44,12 +46,14 @@ public final class StartPanel extends JPanel {
         add(words("start.job", "start-job", false), "gapbottom 16");
         add(left, "gapbottom 16");
         add(way("shot.open", this::choose));
+        add(way("shot.begin", begin));
         add(way("shot.sample", this::trySample));
         said.setName("start-message");
         said.setForeground(Palette.FAULT.colour());
         add(said, "gaptop 8");
         add(recent, "gaptop 16");
         add(words("start.caution", "start-caution", true), "gaptop 24");
+        listRecent();
         whatWasLeft(memory.now().open());
         desk.listen(this::follow);
     }
@@ -89,7 +93,8 @@ public final class StartPanel extends JPanel {
 
     /** What can be done here. */
     public List<DeskAction> actions() {
-        return List.of(DeskAction.always("shot.open", "ctrl O", this::choose), DeskAction.always("shot.sample", null, this::trySample));
+        return List.of(DeskAction.always("shot.open", "ctrl O", this::choose),
+                DeskAction.always("shot.begin", "ctrl N", begin), DeskAction.always("shot.sample", null, this::trySample));
     }
 
     private void choose() {
@@ -118,16 +123,17 @@ public final class StartPanel extends JPanel {
     private void follow(DeskState state) {
         said.setText(state.shot().isPresent() ? "" : state.message().map(m -> "<html><div style='width:" + WIDE * 3 / 4 + "px'>"
                 + m.words().replace("<", "&lt;") + "</div></html>").orElse(""));
-        recent.removeAll();
+    }
+
+    /** The shots that are still there. */
+    private void listRecent() {
         List<Path> there = memory.now().recent().stream().filter(p -> Files.isDirectory(p)).toList();
         if (!there.isEmpty()) {
             JLabel title = new JLabel(Words.of("start.recent"));
             title.setFont(Palette.small());
             recent.add(title);
         }
-        for (Path shot : there) {
-            recent.add(link(shot));
-        }
+        there.forEach(shot -> recent.add(link(shot)));
     }
 
     private Component link(Path shot) {

@@ -10,6 +10,7 @@ import java.nio.file.Path;
 import java.util.List;
 import java.util.Optional;
 import javax.swing.JLabel;
+import javax.swing.JTextField;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.wispwright.ui.command.SmallShot;
@@ -84,5 +85,48 @@ class StartTest {
         assertEquals(org.wispwright.ui.desk.Remembered.NOTHING, memory().now());
         memory().change(m -> m.withTextScale(5));
         assertEquals(2, memory().now().textScale(), 0);
+    }
+
+    /** Frames are the sample's own. */
+    @Test
+    void aShotIsBegunFromAFolderOfFrames() throws IOException {
+        try (DeskDriver driver = new DeskDriver(DeskWindow.SMALLEST, memory(), true, 1)) {
+            driver.click("start-begin");
+            driver.keepScreenshot("begin");
+            text(driver, "begin-title", "Yard at night");
+            text(driver, "begin-below", folder.toString());
+            text(driver, "begin-frames", Path.of("..", "samples", "kiln-yard", "frames").toAbsolutePath().normalize().toString());
+            driver.doOnSwing(() -> driver.find("begin-frames", JTextField.class).postActionEvent());
+            driver.click("begin-next");
+            text(driver, "begin-cells", "8 10");
+            driver.click("begin-next");
+            driver.awaitTrue("the raster is the frames' own", () -> "540 720".equals(driver.find("begin-raster", JTextField.class).getText()));
+            driver.click("begin-next");
+            driver.click("begin-next");
+            JLabel said = driver.find("begin-message", JLabel.class);
+            assertTrue(said.getText().contains("found \"8 10\", needs 3 number(s)"), said.getText());
+            driver.click("begin-back");
+            driver.click("begin-back");
+            text(driver, "begin-cells", "8 10 8");
+            driver.click("begin-next");
+            driver.click("begin-next");
+            driver.click("begin-next");
+            driver.awaitTrue("what is wrong is said", () -> said.getText().contains("source"));
+            assertTrue(Files.notExists(folder.resolve("yard-at-night")), "no half shot is left");
+            text(driver, "begin-source", "0.4 0.3 0.4");
+            text(driver, "begin-radius", "0.2");
+            driver.click("begin-back");
+            text(driver, "begin-aim", "0.4 0.5 0.4");
+            text(driver, "begin-position", "0.4 0.5 4");
+            driver.click("begin-next");
+            driver.click("begin-next");
+            driver.await("the shot is open", s -> s.shot().isPresent());
+            assertEquals("Yard at night", driver.state().shot().orElseThrow().setup().name());
+            assertTrue(Files.isRegularFile(folder.resolve("yard-at-night/frames/front.1027.png")));
+        }
+    }
+
+    private static void text(DeskDriver driver, String field, String value) {
+        driver.doOnSwing(() -> driver.find(field, JTextField.class).setText(value));
     }
 }
