@@ -18,6 +18,9 @@ import org.wispwright.render.volume.GridShape;
  * that a {@link SolveState} holds and of nothing else, so a run that goes on from one decides as the first did.
  */
 final class Climb {
+    /** Why a solve ended that a person had end with what it had; one that goes on from there does go on. */
+    static final String ENOUGH = "a person found it enough";
+
     private final SolveProblem problem;
     private final List<GridShape> grids;
     private final boolean stay;
@@ -30,7 +33,7 @@ final class Climb {
     private final Solve.Recorder recorder;
     private final List<Band> bands;
     private final Optional<SourceCurves> curves;
-    private final long began = System.nanoTime();
+    private long began = System.nanoTime();
     private final List<Double> losses = new ArrayList<>();
     private final List<SolveResult.BandRun> runs = new ArrayList<>();
     private List<Double> met = List.of();
@@ -106,7 +109,7 @@ final class Climb {
         met = state.met();
         runs.addAll(state.runs());
         ended = state.ended();
-        if (!ended.isEmpty() && rung < grids.size()) {
+        if (!ended.isEmpty() && (rung < grids.size() || ended.equals(ENOUGH))) {
             ended = "";
             runs.remove(runs.size() - 1);                                      // its band is open again, and ends at once or goes on
         }
@@ -195,10 +198,11 @@ final class Climb {
             if ((open > 1 || rung > 1) && done % Solve.ENERGY_EVERY == 0) {
                 weighEnergy();
             }
-            ended = endedByRule();
             tell(lastBand);
+            ended = endedByRule();
             if (ended.isEmpty()) {
                 record();
+                ended = enough() ? ENOUGH : "";
             }
         }
         runs.add(new SolveResult.BandRun(grid, bands.get(open - 1), lbfgs.x().length, done, bandGradients, last(losses), bandSeconds));
@@ -220,6 +224,13 @@ final class Climb {
                 ended));
     }
 
+    private boolean enough() {
+        long asked = System.nanoTime();
+        boolean enough = listener.enough();
+        began += System.nanoTime() - asked;
+        return enough;
+    }
+
     private void tell(int lastBand) {
         double perIteration = bandSeconds / done;
         double left = perIteration * (Math.max(1, Solve.USUAL_ITERATIONS - done) + Solve.USUAL_ITERATIONS * (lastBand - open));
@@ -227,8 +238,11 @@ final class Climb {
         for (int finer = rung + 1, times = 8; finer <= grids.size(); finer++, times *= 8) {
             left += perIteration * times * Solve.USUAL_ITERATIONS;
         }
+        long told = System.nanoTime();
         listener.iteration(new Progress(rung, grids.size(), open, bands.size(), lbfgs.iterations(), lbfgs.evaluations(),
                 last(losses), met, seconds(), left));
+        listener.pictures(plan::got);
+        began += System.nanoTime() - told;
     }
 
     private Lbfgs.Settings settings() {

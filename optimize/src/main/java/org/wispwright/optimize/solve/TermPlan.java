@@ -210,6 +210,11 @@ final class TermPlan {
         return notes.stream().map(note -> 1 - note.met.fallen(losses)).toList();
     }
 
+    /** Copies of the notes' pictures as the last evaluation drew them, in the problem's order. */
+    List<Picture> got() {
+        return problem.notes().stream().map(note -> terms.last(note.frame(), note.view())).toList();
+    }
+
     /** What each note is solved with, and how far that has fallen. */
     List<SolveResult.NoteLoss> noteLosses(double[] losses) {
         return notes.stream().map(note -> new SolveResult.NoteLoss(note.choice,

@@ -27,6 +27,8 @@ public final class Desk implements AutoCloseable {
     private final Thumbnails thumbnails;
     private final MetWatch met;
     private final ChangeWatch change;
+    private final Solving solving;
+    private final WritingOut writingOut;
     private DeskState state = DeskState.EMPTY;
     private Keeper keeper;
 
@@ -40,6 +42,8 @@ public final class Desk implements AutoCloseable {
         ExecutorService figures = workers.lane("figures");
         met = new MetWatch(workers, figures, pictures);
         change = new ChangeWatch(workers, figures);
+        solving = new Solving(this, workers, files);
+        writingOut = new WritingOut(this, workers);
     }
 
     /** All as it is now. */
@@ -65,6 +69,16 @@ public final class Desk implements AutoCloseable {
     /** How far takes have left the original. */
     public ChangeWatch change() {
         return change;
+    }
+
+    /** The solve that runs, and what comes before one. */
+    public Solving solving() {
+        return solving;
+    }
+
+    /** What is written out for others. */
+    public WritingOut writingOut() {
+        return writingOut;
     }
 
     /** Where work runs. */
@@ -116,7 +130,7 @@ public final class Desk implements AutoCloseable {
     private void opened(Opening found) {
         keeper = new Keeper(workers, files, NoteEdits.of(found.shot().folder()), saving -> look(s -> s.withSaving(saving)));
         pictures.of(found.shot());
-        look(s -> found.onto(s.hand()));
+        look(s -> found.onto(s.hand(), s.work()));
         asksJournal();
     }
 
@@ -251,6 +265,8 @@ public final class Desk implements AutoCloseable {
     @Override
     public void close() {
         listeners.clear();
+        solving.close();
+        writingOut.stop();
         workers.close();
     }
 }

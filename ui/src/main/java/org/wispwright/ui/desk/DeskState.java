@@ -2,6 +2,7 @@ package org.wispwright.ui.desk;
 
 import java.util.List;
 import java.util.Optional;
+import java.util.function.UnaryOperator;
 import org.wispwright.ui.shot.NoteEdits.Listed;
 
 /**
@@ -15,12 +16,13 @@ import org.wispwright.ui.shot.NoteEdits.Listed;
  * @param history what can be undone and redone
  * @param saving  how far edits are on disk
  * @param message the latest sentence for the person, until it is put away
+ * @param work    on takes: the solve that runs, what one would take
  */
 public record DeskState(Optional<OpenShot> shot, Optional<Showing> showing, Optional<String> note, Hand hand, List<TakeEntry> takes,
-                        History history, Saving saving, Optional<Message> message) {
+                        History history, Saving saving, Optional<Message> message, TakeWork work) {
     /** An empty desk. */
     public static final DeskState EMPTY = new DeskState(Optional.empty(), Optional.empty(), Optional.empty(), Hand.LOOK, List.of(),
-            History.NONE, Saving.DONE, Optional.empty());
+            History.NONE, Saving.DONE, Optional.empty(), TakeWork.NONE);
 
     /** Keeps a copy. */
     public DeskState {
@@ -40,41 +42,56 @@ public record DeskState(Optional<OpenShot> shot, Optional<Showing> showing, Opti
 
     /** Another shot. */
     public DeskState withShot(OpenShot other) {
-        return new DeskState(Optional.of(other), showing, note, hand, takes, history, saving, message);
+        return new DeskState(Optional.of(other), showing, note, hand, takes, history, saving, message, work);
     }
 
     /** Something else on the easel. */
     public DeskState withShowing(Showing other) {
-        return new DeskState(shot, Optional.of(other), note, hand, takes, history, saving, message);
+        return new DeskState(shot, Optional.of(other), note, hand, takes, history, saving, message, work);
     }
 
     /** Another note open, or none. */
     public DeskState withNote(Optional<String> other) {
-        return new DeskState(shot, showing, other, hand, takes, history, saving, message);
+        return new DeskState(shot, showing, other, hand, takes, history, saving, message, work);
     }
 
     /** Another hand. */
     public DeskState withHand(Hand other) {
-        return new DeskState(shot, showing, note, other, takes, history, saving, message);
+        return new DeskState(shot, showing, note, other, takes, history, saving, message, work);
     }
 
     /** Other takes. */
     public DeskState withTakes(List<TakeEntry> others) {
-        return new DeskState(shot, showing, note, hand, others, history, saving, message);
+        return new DeskState(shot, showing, note, hand, others, history, saving, message, work);
     }
 
     /** Another history. */
     DeskState withHistory(History other) {
-        return new DeskState(shot, showing, note, hand, takes, other, saving, message);
+        return new DeskState(shot, showing, note, hand, takes, other, saving, message, work);
     }
 
     /** Another state of the disk. */
     DeskState withSaving(Saving other) {
-        return new DeskState(shot, showing, note, hand, takes, history, other, message);
+        return new DeskState(shot, showing, note, hand, takes, history, other, message, work);
     }
 
     /** Another message, or none. */
     public DeskState withMessage(Optional<Message> other) {
-        return new DeskState(shot, showing, note, hand, takes, history, saving, other);
+        return new DeskState(shot, showing, note, hand, takes, history, saving, other, work);
+    }
+
+    /** Other work on takes. */
+    DeskState withWork(UnaryOperator<TakeWork> change) {
+        return new DeskState(shot, showing, note, hand, takes, history, saving, message, change.apply(work));
+    }
+
+    /** True if there is an original that belongs to the shot as it is. */
+    public boolean hasOriginal() {
+        return takes.stream().anyMatch(take -> take.number() == 0 && take.current());
+    }
+
+    /** The take that is shown, if it is one and belongs to the shot as it is. */
+    public Optional<TakeEntry> takeShown() {
+        return showing.flatMap(s -> takes.stream().filter(t -> t.current() && s.near().equals(new Source.Take(t.number()))).findFirst());
     }
 }

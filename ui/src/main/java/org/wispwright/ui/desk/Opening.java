@@ -32,14 +32,14 @@ record Opening(OpenShot shot, List<TakeEntry> takes) {
     }
 
     /** The desk with the shot on it: its first note open, its newest take shown. */
-    DeskState onto(Hand hand) {
+    DeskState onto(Hand hand, TakeWork work) {
         Optional<Listed> first = shot.notes().stream().findFirst();
         String view = first.map(l -> l.note().view()).orElse(shot.setup().views().get(0).view().name());
         int frame = first.map(l -> l.note().frame()).orElse(shot.setup().flow().frames().last());
         int newest = takes.stream().filter(TakeEntry::current).mapToInt(TakeEntry::number).max().orElse(0);
         Showing showing = Showing.of(view, frame).withNear(new Source.Take(newest));
         return new DeskState(Optional.of(shot), Optional.of(showing), first.map(l -> l.note().id()), hand, takes, History.NONE,
-                Saving.DONE, Optional.empty());
+                Saving.DONE, Optional.empty(), work.onAnotherShot());
     }
 
     /** The takes that are there; one that cannot be read is left out. */

@@ -27,7 +27,7 @@ public final class Replacing {
      * @param show   told of what came out, unless something newer was asked
      * @param failed told of what was thrown, likewise; never of {@link Cancel.Cancelled}
      */
-    public <T> void replace(Function<Cancel, T> work, Consumer<T> show, Consumer<RuntimeException> failed) {
+    public <T> void replace(Function<Cancel, T> work, Consumer<T> show, Consumer<Throwable> failed) {
         running.wish();
         Cancel cancel = new Cancel();
         running = cancel;
@@ -44,7 +44,7 @@ public final class Replacing {
                 });
             } catch (Cancel.Cancelled dropped) {
                 return;
-            } catch (RuntimeException thrown) {
+            } catch (RuntimeException | Error thrown) {                        // out of memory is told like all else
                 workers.onDesk(() -> {
                     if (!cancel.wished()) {
                         failed.accept(thrown);

@@ -1,8 +1,10 @@
 package org.wispwright.ui.job;
 
-/** A wish to stop, made on one thread and asked about on another. */
+/** What a person wishes of a running job: to stop, to pause, to end with what it has. Made on one thread and asked about on another. */
 public final class Cancel {
     private volatile boolean wished;
+    private volatile boolean enough;
+    private boolean held;
 
     /** Thrown by a job that stopped because it was asked to; nothing half done is left. */
     public static final class Cancelled extends RuntimeException {
@@ -13,8 +15,9 @@ public final class Cancel {
     }
 
     /** Asks the job to stop at its next chance. */
-    public void wish() {
+    public synchronized void wish() {
         wished = true;
+        notifyAll();
     }
 
     /** True once {@link #wish} was called. */
@@ -27,5 +30,47 @@ public final class Cancel {
         if (wished) {
             throw new Cancelled();
         }
+    }
+
+    /** Asks a search to end after its next iteration and to make its take of what it has. Other work goes on. */
+    public synchronized void wishEnough() {
+        enough = true;
+        notifyAll();
+    }
+
+    /** True once {@link #wishEnough} was called. */
+    public boolean isEnough() {
+        return enough;
+    }
+
+    /** Asks a search to wait between two iterations, or to go on. Other work goes on. */
+    public synchronized void hold(boolean wait) {
+        held = wait;
+        notifyAll();
+    }
+
+    /**
+     * Waits while the search is to wait, unless it is to stop or to end.
+     *
+     * @param waits run once before it waits; not run if it need not
+     */
+    void waitWhileHeld(Runnable waits) {
+        if (isHeld()) {
+            waits.run();
+        }
+        synchronized (this) {
+            while (isHeld()) {
+                try {
+                    wait();
+                } catch (InterruptedException stop) {
+                    wished = true;
+                    Thread.currentThread().interrupt();
+                }
+            }
+        }
+    }
+
+    private synchronized boolean isHeld() {
+        return held && !wished && !enough;
     }
 }

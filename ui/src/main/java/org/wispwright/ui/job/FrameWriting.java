@@ -34,6 +34,7 @@ final class FrameWriting {
         });
         draft.write(frame, state);
         lastMass = mass(state.density());
+        progress.frame(frame, flow.frames().last());
         int done = frame - flow.frames().first();
         if (done > 0) {
             divergenceMax = Math.max(divergenceMax, solver.relativeDivergence(state.velocity()));

@@ -2,8 +2,10 @@ package org.wispwright.ui.job;
 
 import java.io.IOException;
 import java.io.UncheckedIOException;
+import java.util.List;
 import java.util.Locale;
 import java.util.Optional;
+import java.util.function.Supplier;
 import java.util.stream.Collectors;
 import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.solve.Solve;
@@ -14,9 +16,9 @@ import org.wispwright.optimize.solve.SolveResult;
 import org.wispwright.optimize.solve.SolveState;
 import org.wispwright.optimize.solve.StateRoom;
 import org.wispwright.render.lanes.Lanes;
+import org.wispwright.render.picture.Picture;
 import org.wispwright.ui.shot.Finding;
 import org.wispwright.ui.shot.MemoryNeed;
-import org.wispwright.ui.shot.ShotDigest;
 import org.wispwright.ui.shot.ShotException;
 import org.wispwright.ui.shot.ShotFolder;
 import org.wispwright.ui.shot.SolvePlace;
@@ -54,12 +56,12 @@ final class SolveSearch implements AutoCloseable {
     /**
      * Takes the place and finds where to begin.
      *
+     * @param digest of the problem as {@link SolveWork#digest} made it
      * @throws ShotException if another solve is at work, or there is nothing to go on from, or the shot is no longer what it was
      */
-    static SolveSearch begin(ShotFolder folder, SolveProblem problem, SolveWork.Manner manner, Progress progress) {
+    static SolveSearch begin(ShotFolder folder, String digest, SolveProblem problem, SolveWork.Manner manner, Progress progress) {
         SolvePlace place = SolvePlace.open(folder);
         try {
-            String digest = ShotDigest.of(folder, "stay " + manner.stay() + " sources " + manner.sources());
             Optional<SolveState> from = switch (manner.beginning().kind()) {
                 case FRESH -> fresh(place);
                 case ANEW -> anew(place);
@@ -85,7 +87,7 @@ final class SolveSearch implements AutoCloseable {
             FlowSetup flow = problem.flow();
             long forStates = MemoryNeed.forStates(flow, manner.memoryBytes(), MemoryNeed.region());
             return new Solve(problem, manner.quality().rungs(flow.grid()), manner.stay(), lanes, cancel::wished)
-                    .run(new StateRoom(forStates, manner.diskBytes(), place.file(STATES)), manner.until(), this::tell, digest, from,
+                    .run(new StateRoom(forStates, manner.diskBytes(), place.file(STATES)), manner.until(), new Told(cancel), digest, from,
                             this::record);
         } catch (SolveCancelled asked) {
             throw new Cancel.Cancelled();
@@ -108,7 +110,7 @@ final class SolveSearch implements AutoCloseable {
         try {
             place.records().clear();
         } catch (IOException left) {
-            progress.milestone("solve: its records could not be removed (" + left.getMessage() + "); "
+            progress.warning("solve: its records could not be removed (" + left.getMessage() + "); "
                     + SolvePlace.FOLDER + " may be deleted");
         }
     }
@@ -128,10 +130,37 @@ final class SolveSearch implements AutoCloseable {
             recordsFail = false;
         } catch (IOException refused) {
             if (!recordsFail) {
-                progress.milestone("solve: this iteration could not be recorded (" + refused.getMessage()
+                progress.warning("solve: this iteration could not be recorded (" + refused.getMessage()
                         + "); the solve goes on, and could only be resumed from an earlier one");
             }
             recordsFail = true;
+        }
+    }
+
+    /** What the search tells goes to the progress; what is wished of it comes from the person. */
+    private final class Told implements org.wispwright.optimize.solve.Progress.Listener {
+        private final Cancel cancel;
+        private org.wispwright.optimize.solve.Progress now;
+
+        Told(Cancel cancel) {
+            this.cancel = cancel;
+        }
+
+        @Override
+        public void iteration(org.wispwright.optimize.solve.Progress accepted) {
+            now = accepted;
+            tell(accepted);
+        }
+
+        @Override
+        public void pictures(Supplier<List<Picture>> got) {
+            progress.iteration(now, got);
+        }
+
+        @Override
+        public boolean enough() {
+            cancel.waitWhileHeld(progress::waits);
+            return cancel.isEnough() && !cancel.wished();
         }
     }
 
@@ -171,7 +200,7 @@ final class SolveSearch implements AutoCloseable {
 
     private static SolveState resumed(SolvePlace place, Progress progress) {
         SolveRecords.Found found = found(place);
-        found.damaged().forEach(what -> progress.milestone("solve: a record is damaged and was passed over: " + what));
+        found.damaged().forEach(what -> progress.warning("solve: a record is damaged and was passed over: " + what));
         SolveState state = found.state().orElseThrow(() -> new ShotException(Finding.of(SolvePlace.FOLDER, "", found.damaged().isEmpty()
                 ? "no record of an unfinished solve" : "only damaged records", "one to go on from", "solve without --resume")));
         progress.milestone("solve: going on after iteration " + state.search().iterations());

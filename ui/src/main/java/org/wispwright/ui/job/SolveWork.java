@@ -17,6 +17,7 @@ import org.wispwright.render.lanes.Lanes;
 import org.wispwright.ui.shot.Finding;
 import org.wispwright.ui.shot.Note;
 import org.wispwright.ui.shot.Shot;
+import org.wispwright.ui.shot.ShotDigest;
 import org.wispwright.ui.shot.ShotException;
 import org.wispwright.ui.shot.ShotFolder;
 import org.wispwright.ui.shot.TakeDraft;
@@ -66,14 +67,25 @@ public final class SolveWork {
                          Departure departure, double seconds) {
     }
 
+    /** Digest of the problem that a solve of the shot as it is on disk would have; records of other problems are not gone on with. */
+    public static String digest(ShotFolder folder, boolean stay, boolean sources) {
+        return ShotDigest.of(folder, "stay " + stay + " sources " + sources);
+    }
+
+    /** Runs the solve of a shot that was just read from disk; see the other. */
+    public static Result run(ShotFolder folder, Shot shot, Manner manner, Lanes lanes, Progress progress, Cancel cancel) {
+        return run(folder, shot, digest(folder, manner.stay(), manner.sources()), manner, lanes, progress, cancel);
+    }
+
     /**
      * Runs the solve.
      *
+     * @param digest {@link #digest} of the files that the shot was read from; they may change while it runs
      * @throws ShotException if the shot has no note, a note wants nothing, the memory does not hold one state, a take 0 of another
      *     set-up is there, or the disk refuses
      * @throws Cancel.Cancelled if cancelled; no half take is left, and what the search had found can be gone on with
      */
-    public static Result run(ShotFolder folder, Shot shot, Manner manner, Lanes lanes, Progress progress, Cancel cancel) {
+    public static Result run(ShotFolder folder, Shot shot, String digest, Manner manner, Lanes lanes, Progress progress, Cancel cancel) {
         long start = System.nanoTime();
         FlowSetup flow = shot.flow();
         SolveProblem problem = ShotProblem.of(shot).withSources(manner.sources());
@@ -84,10 +96,11 @@ public final class SolveWork {
         SimulateWork.Result original = SimulateWork.run(folder, shot, lanes, progress, cancel);
         List<SmokeAsked> asked = SmokeAsked.ofAll(Takes.of(folder), shot, lanes);
         asked.stream().filter(SmokeAsked::isWorthTelling).forEach(smoke -> progress.milestone(smoke.inWords(manner.sources())));
-        try (SolveSearch search = SolveSearch.begin(folder, problem, manner, progress)) {
+        try (SolveSearch search = SolveSearch.begin(folder, digest, problem, manner, progress)) {
             progress.milestone("estimate: " + Estimate.of(manner.quality(), shot, manner.memoryBytes(), manner.diskBytes(), lanes, cancel)
                     .inWords());
             SolveResult solve = search.run(lanes, cancel);
+            progress.writesTake();
             Result result = take(folder, shot, manner, original, asked, solve, search, lanes, progress, cancel, start);
             search.over();
             return result;
@@ -133,6 +146,9 @@ public final class SolveWork {
                                      double forceRms) {
         ObjectNode settings = TakeRecord.object().put("stay", manner.stay()).put("sources", manner.sources())
                 .put("quality", manner.quality().name().toLowerCase(Locale.ROOT));
+        if (manner.beginning().kind() == Beginning.Kind.TAKE) {
+            settings.put("from", manner.beginning().take());
+        }
         settings.set("notes", notes(shot));
         ObjectNode losses = settings.putObject("noteLosses");
         settings.put("untilLoss", manner.until().loss());

@@ -67,7 +67,7 @@ public final class SolvePlace implements AutoCloseable {
 
     @Override
     public void close() {
-        try {
+        try (lock) {                                                           // let go of even where the folder is out of reach
             boolean others;
             try (Stream<Path> entries = Files.list(folder)) {
                 others = entries.anyMatch(p -> !p.getFileName().toString().equals(LOCK));
@@ -76,7 +76,6 @@ public final class SolvePlace implements AutoCloseable {
                 Files.deleteIfExists(folder.resolve(LOCK));
                 Files.deleteIfExists(folder);
             }
-            lock.close();
         } catch (IOException left) {
             // An empty folder and an unlocked file disturb no later solve.
             return;

@@ -106,7 +106,7 @@ public final class SmallShot {
     }
 
     /** Swaps a piece of a file's text for another; fails if the piece is not there. */
-    void swap(String file, String old, String now) {
+    public void swap(String file, String old, String now) {
         try {
             String text = Files.readString(folder.resolve(file));
             if (!text.contains(old)) {
@@ -143,7 +143,7 @@ public final class SmallShot {
     }
 
     /** Everything under a folder: relative path to SHA-256 of its bytes ("folder" for folders). */
-    static SortedMap<String, String> listing(Path root) {
+    public static SortedMap<String, String> listing(Path root) {
         SortedMap<String, String> all = new TreeMap<>();
         try (Stream<Path> paths = Files.walk(root)) {
             List<Path> list = paths.toList();
