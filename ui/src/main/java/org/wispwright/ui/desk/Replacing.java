@@ -4,6 +4,8 @@ import java.util.concurrent.ExecutorService;
 import java.util.function.Consumer;
 import java.util.function.Function;
 import org.wispwright.ui.job.Cancel;
+import org.wispwright.ui.shot.Finding;
+import org.wispwright.ui.shot.ShotException;
 
 /**
  * Work of which only the newest counts: asking again drops what was asked before, whether it waits, runs, or is on its way back. Called on
@@ -27,7 +29,7 @@ public final class Replacing {
      * @param show   told of what came out, unless something newer was asked
      * @param failed told of what was thrown, likewise; never of {@link Cancel.Cancelled}
      */
-    public <T> void replace(Function<Cancel, T> work, Consumer<T> show, Consumer<Throwable> failed) {
+    public <T> void replace(Function<Cancel, T> work, Consumer<T> show, Consumer<RuntimeException> failed) {
         running.wish();
         Cancel cancel = new Cancel();
         running = cancel;
@@ -44,10 +46,11 @@ public final class Replacing {
                 });
             } catch (Cancel.Cancelled dropped) {
                 return;
-            } catch (RuntimeException | Error thrown) {                        // out of memory is told like all else
+            } catch (RuntimeException | OutOfMemoryError thrown) {
                 workers.onDesk(() -> {
                     if (!cancel.wished()) {
-                        failed.accept(thrown);
+                        failed.accept(thrown instanceof RuntimeException ours ? ours
+                                : new ShotException(new Finding("desk", "", Desk.words(thrown)), thrown));
                     }
                 });
             }
