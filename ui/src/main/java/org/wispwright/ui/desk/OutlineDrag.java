@@ -78,6 +78,11 @@ public final class OutlineDrag extends Gesture {
         return at;
     }
 
+    /** The drag's number in the warp. */
+    public int drag() {
+        return drag;
+    }
+
     /** Ends the drag: the note has it. A point that was there and did not move changes nothing. */
     public void end() {
         if (over) {

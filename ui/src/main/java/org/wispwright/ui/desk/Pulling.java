@@ -108,7 +108,8 @@ public final class Pulling extends Gesture {
     }
 
     private void finish() {
-        if (!moved && fresh.isEmpty()) {
+        boolean isNew = fresh.isPresent() || at >= session.operations().size();
+        if (!moved && !isNew) {
             session.cancel();
             return;
         }

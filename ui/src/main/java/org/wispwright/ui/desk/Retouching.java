@@ -85,6 +85,8 @@ public final class Retouching {
     private Gesture gesture;
     private Picture live;
     private Optional<Outlines> outlines = Optional.empty();
+    private double traced;
+    private Optional<Operation> folded = Optional.empty();
     private Folds folds = Folds.NONE;
     private OptionalInt chosenHold = OptionalInt.empty();
 
@@ -142,7 +144,9 @@ public final class Retouching {
         asked = null;
         laid = null;
         outlines = Optional.empty();
+        folded = Optional.empty();
         folds = Folds.NONE;
+        traced = 0;
         chosenHold = OptionalInt.empty();
     }
 
@@ -215,7 +219,7 @@ public final class Retouching {
     }
 
     /**
-     * Begins to pull a handle of a mesh.
+     * Begins to pull a handle of a mesh. A warp that is new is added even if its handle is not moved.
      *
      * @param at     number of the operation that the warp is in the place of; as many as there are for a new one behind them
      * @param warp   as it is before
@@ -317,7 +321,8 @@ public final class Retouching {
 
     /** Has the original's outlines at a level traced; followers are told when they are there. */
     public void trace(double level) {
-        if (laid != null && outlines.filter(o -> o.level() == level).isEmpty()) {
+        if (laid != null && traced != level) {
+            traced = level;
             Picture of = laid.originals().full();
             tracing.ask(() -> Outlines.of(of, level), found -> {
                 outlines = Optional.of(found);
@@ -333,7 +338,11 @@ public final class Retouching {
 
     /** Has the folds of an operation found, on a small raster; followers are told when they are there. */
     public void fold(Optional<Operation> operation) {
-        if (operation.isEmpty() || laid == null) {
+        if (laid == null || operation.equals(folded)) {
+            return;
+        }
+        folded = operation;
+        if (operation.isEmpty()) {
             folding.drop();
             folds = Folds.NONE;
             return;

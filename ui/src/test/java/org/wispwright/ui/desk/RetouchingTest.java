@@ -17,9 +17,15 @@ import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.wispwright.render.picture.Picture;
+import org.wispwright.render.lanes.Lanes;
+import org.wispwright.ui.command.SmallShot;
 import org.wispwright.ui.desk.Pictures.Ask;
 import org.wispwright.ui.desk.Retouching.Edit;
 import org.wispwright.ui.job.Cancel;
+import org.wispwright.ui.job.Progress;
+import org.wispwright.ui.job.SimulateWork;
+import org.wispwright.ui.shot.ShotCheck;
+import org.wispwright.ui.shot.ShotFolder;
 import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.matte.Window;
 import org.wispwright.warp.outline.Loop;
@@ -40,7 +46,7 @@ import org.wispwright.warp.retouch.WarpKind;
 class RetouchingTest {
     @TempDir
     private static Path once;
-    private QueuedDesk queued;
+    private final DeskThread thread = new DeskThread();
     private Desk desk;
     private Retouching retouching;
     private final Followed followed = new Followed();
@@ -68,13 +74,17 @@ class RetouchingTest {
 
     @BeforeAll
     static void shot() {
-        QueuedDesk.smallShotIn(once);
+        ShotFolder shot = ShotFolder.open(SmallShot.in(once).folder());
+        try (Lanes lanes = new Lanes(1)) {
+            SimulateWork.run(shot, ShotCheck.requireForNotes(shot), lanes, Progress.SILENT, new Cancel());
+        }
     }
 
     @BeforeEach
     void opened() {
-        queued = new QueuedDesk().open(once);
-        desk = queued.desk();
+        desk = new Desk(thread.workers());
+        desk.open(once);
+        thread.until("the shot is open", () -> desk.state().shot().isPresent());
         retouching = new Retouching(desk, kind -> "name of " + kind);
         retouching.listen(followed);
     }
@@ -85,13 +95,13 @@ class RetouchingTest {
         while (!desk.state().history().made().isEmpty()) {
             desk.undo();
         }
-        queued.await("all is written", () -> desk.state().saving().isDone());
-        queued.close();
+        thread.until("all is written", () -> desk.state().saving().isDone());
+        desk.close();
     }
 
     private void takeUp(Hand hand) {
         desk.look(s -> s.withHand(hand));
-        queued.await("the live picture is there", retouching::isAtRest);
+        thread.until("the live picture is there", retouching::isAtRest);
     }
 
     private Picture wanted() {
@@ -100,7 +110,7 @@ class RetouchingTest {
     }
 
     private void assertWanted() {
-        queued.await("at rest", retouching::isAtRest);
+        thread.until("at rest", retouching::isAtRest);
         assertArrayEquals(wanted().rgba(), retouching.live().orElseThrow().rgba());
     }
 
@@ -142,10 +152,10 @@ class RetouchingTest {
         assertFalse(java.util.Arrays.equals(before, after));
         desk.undo();
         assertFalse(retouching.isAtRest());
-        queued.await("drawn anew", retouching::isAtRest);
+        thread.until("drawn anew", retouching::isAtRest);
         assertArrayEquals(before, retouching.live().orElseThrow().rgba());
         desk.redo();
-        queued.await("drawn anew", retouching::isAtRest);
+        thread.until("drawn anew", retouching::isAtRest);
         assertArrayEquals(after, retouching.live().orElseThrow().rgba());
     }
 
@@ -168,7 +178,7 @@ class RetouchingTest {
         desk.undo();
         Drawing waits = retouching.draw(dab(Brush.REMOVE, 0.3, 0.6)).orElseThrow();
         waits.extend(List.of(new Point(0.4, 0.6)), List.of(1.0));
-        queued.await("drawn anew", retouching::isLaid);
+        thread.until("drawn anew", retouching::isLaid);
         assertFalse(java.util.Arrays.equals(wanted().rgba(), retouching.live().orElseThrow().rgba()));
         waits.end();
         assertEquals(2, retouching.operations().size());
@@ -196,7 +206,7 @@ class RetouchingTest {
         retouching.draw(dab(Brush.PUSH, 0.35, 0.7)).orElseThrow().end();
         retouching.draw(dab(Brush.ADD, 3, 3)).orElseThrow().end();
         retouching.pull(0, warp(), 1).orElseThrow().end();
-        queued.await("at rest", retouching::isAtRest);
+        thread.until("at rest", retouching::isAtRest);
         assertTrue(desk.state().history().made().isEmpty());
     }
 
@@ -209,7 +219,7 @@ class RetouchingTest {
         takeUp(new Hand.Pulling(WarpKind.SPLINE));
         Picture rest = retouching.live().orElseThrow();
         Pulling pulling = retouching.pull(0, warp(), 0).orElseThrow();
-        queued.await("the warp is ready", () -> retouching.live().orElseThrow() != rest);
+        thread.until("the warp is ready", () -> retouching.live().orElseThrow() != rest);
         float[] before = retouching.live().orElseThrow().rgba().clone();
         pulling.to(new Point(0.45, 0.75));
         assertFalse(java.util.Arrays.equals(before, retouching.live().orElseThrow().rgba()));
@@ -230,7 +240,7 @@ class RetouchingTest {
         Pulling pulling = retouching.pull(0, warp(), 0).orElseThrow();
         pulling.to(new Point(0.42, 0.75));
         pulling.end();
-        queued.await("the note has it", () -> warp().handles().get(0).to().equals(new Point(0.42, 0.75)));
+        thread.until("the note has it", () -> warp().handles().get(0).to().equals(new Point(0.42, 0.75)));
         assertTrue(retouching.operations().get(1) instanceof Stroke);
         assertWanted();
     }
@@ -240,7 +250,7 @@ class RetouchingTest {
         takeUp(new Hand.Pulling(WarpKind.SPLINE));
         Picture before = wanted();
         retouching.pullNew(0, warp(), new Point(0.34, 0.84)).orElseThrow().end();
-        queued.await("the note has it", () -> warp().handles().size() == 4);
+        thread.until("the note has it", () -> warp().handles().size() == 4);
         assertEquals(Optional.of("name of SET_HANDLE"), desk.state().history().undoName());
         assertWanted();
         // The spline through three points is affine, and the fourth lies on it but for half a pixel's reading of the lattice.
@@ -255,7 +265,7 @@ class RetouchingTest {
         takeUp(new Hand.Pulling(WarpKind.SPLINE));
         Pulling pulling = retouching.pull(0, warp(), 0).orElseThrow();
         Picture rest = retouching.live().orElseThrow();
-        queued.await("the warp is ready", () -> retouching.live().orElseThrow() != rest);
+        thread.until("the warp is ready", () -> retouching.live().orElseThrow() != rest);
         pulling.to(new Point(0.45, 0.75));
         retouching.cancel();
         assertSame(rest, retouching.live().orElseThrow());
@@ -267,14 +277,14 @@ class RetouchingTest {
     void theOutlineIsTracedAndDragged() {
         takeUp(new Hand.Outlining(0.3, 0.2));
         retouching.trace(0.3);
-        queued.await("outlines are there", () -> retouching.outlines().isPresent());
+        thread.until("outlines are there", () -> retouching.outlines().isPresent());
         Loop loop = retouching.outlines().orElseThrow().loops().get(0);
         Point from = new Point(loop.x()[0], loop.y()[0]);
         Picture rest = retouching.live().orElseThrow();
         OutlineWarp start = new OutlineWarp(0.3, List.of(Handle.pin(from)), 0.2, WarpKind.SPLINE, Optional.empty());
         OutlineDrag drag = retouching.drag(1, start, 0).orElseThrow();
         drag.to(new Point(from.x(), from.y() - 0.05));
-        queued.await("it follows", () -> retouching.live().orElseThrow() != rest);
+        thread.until("it follows", () -> retouching.live().orElseThrow() != rest);
         drag.end();
         assertEquals(2, retouching.operations().size());
         assertEquals(Optional.of("name of DRAG_OUTLINE"), desk.state().history().undoName());
@@ -285,12 +295,12 @@ class RetouchingTest {
     void foldsOfAWarpThatTurnsThePictureOverAreFound() {
         takeUp(new Hand.Pulling(WarpKind.SPLINE));
         retouching.fold(Optional.of(warp()));
-        queued.await("asked", () -> followed.rests > 1);
+        thread.until("asked", () -> followed.rests > 1);
         assertEquals(0, retouching.folds().cells());
         Operation over = new MeshWarp(List.of(new Handle(new Point(0.3, 0.5), new Point(0.5, 0.5)), new Handle(new Point(0.4, 0.5),
                 new Point(0.2, 0.5)), Handle.pin(new Point(0.1, 0.1)), Handle.pin(new Point(0.6, 0.9))), Optional.empty());
         retouching.fold(Optional.of(over));
-        queued.await("folds are found", () -> retouching.folds().cells() > 0);
+        thread.until("folds are found", () -> retouching.folds().cells() > 0);
     }
 
     @Test
