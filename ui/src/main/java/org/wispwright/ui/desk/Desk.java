@@ -106,6 +106,7 @@ public final class Desk implements AutoCloseable {
         }
         state = next;
         List.copyOf(listeners).forEach(listener -> listener.accept(next));
+        solving.follow(next);                                                  // whoever listens; it changes nothing before it returns
     }
 
     /** Shows other things on the easel; nothing without a shot. */

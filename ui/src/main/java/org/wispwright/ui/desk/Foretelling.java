@@ -26,6 +26,7 @@ final class Foretelling {
     private final Replacing estimates;
     private List<Note> told;
     private OpenShot toldOf;
+    private boolean closed;
 
     Foretelling(Desk desk, Workers workers) {
         this.desk = desk;
@@ -55,6 +56,13 @@ final class Foretelling {
         workers.onDesk(() -> begin(shot, now));
     }
 
+    /** Drops all, for good. */
+    void close() {
+        closed = true;
+        asked.drop();
+        estimates.drop();
+    }
+
     /** Drops what is being found; it is begun anew when it is of use again. */
     void drop() {
         asked.drop();
@@ -66,7 +74,7 @@ final class Foretelling {
     }
 
     private void begin(OpenShot shot, Shot now) {
-        if (desk.state().work().running().isPresent()) {
+        if (closed || desk.state().work().running().isPresent()) {
             told = null;
             return;
         }

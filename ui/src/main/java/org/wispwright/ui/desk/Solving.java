@@ -33,6 +33,7 @@ public final class Solving {
     private Cancel running = new Cancel();
     private Optional<Runnable> onceSaved = Optional.empty();
     private OpenShot seen;
+    private boolean closed;
 
     Solving(Desk desk, Workers workers, ExecutorService files) {
         this.desk = desk;
@@ -41,7 +42,6 @@ public final class Solving {
         lane = workers.lane("solve");
         originals = new OriginalMaking(desk, workers);
         foretelling = new Foretelling(desk, workers);
-        desk.listen(this::follow);
     }
 
     /** Asks for the next solve in another way. */
@@ -150,9 +150,10 @@ public final class Solving {
     }
 
     void close() {
+        closed = true;
         running.wish();
         originals.drop();
-        foretelling.drop();
+        foretelling.close();
     }
 
     private void begin(SolveChoice choice, Beginning beginning) {
@@ -229,7 +230,10 @@ public final class Solving {
     }
 
     /** A listener may not look itself, or later listeners would hear of states in the wrong order. */
-    private void follow(DeskState s) {
+    void follow(DeskState s) {
+        if (closed) {
+            return;
+        }
         if (s.shot().isPresent() && (seen == null || seen.folder() != s.shot().get().folder())) {
             OpenShot shot = s.shot().get();
             workers.onDesk(() -> opened(shot));
@@ -248,6 +252,9 @@ public final class Solving {
     }
 
     private void opened(OpenShot shot) {
+        if (closed) {
+            return;
+        }
         files.execute(() -> {
             Optional<Unfinished> left = unfinished(shot.folder());
             workers.onDesk(() -> {

@@ -8,12 +8,14 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.SortedMap;
 import java.util.TreeMap;
 import java.util.stream.Stream;
+import org.junit.jupiter.api.AfterEach;
 import org.junit.jupiter.api.BeforeEach;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
@@ -32,6 +34,7 @@ class DeskTest {
     @TempDir
     private Path folder;
     private final DeskThread thread = new DeskThread();
+    private final List<Desk> all = new ArrayList<>();
     private Path shot;
     private Desk desk;
 
@@ -41,8 +44,15 @@ class DeskTest {
         desk = opened();
     }
 
+    /** What they do beside the work must not go on in a folder that is being removed. */
+    @AfterEach
+    void close() {
+        all.forEach(Desk::close);
+    }
+
     private Desk opened() {
         Desk made = new Desk(thread.workers());
+        all.add(made);
         made.open(shot);
         thread.until("the shot is open", () -> made.state().shot().isPresent());
         return made;
@@ -157,6 +167,7 @@ class DeskTest {
         desk.undo();
         assertEquals(1, desk.state().saving().waiting(), "what never got to the disk is not written to be taken back");
         desk.redo();
+        thread.until("it is refused again", () -> desk.state().saving().refused().isPresent());
         Files.delete(journal.resolve("in-the-way"));
         Files.delete(journal);
         desk.saveAgain();
