@@ -100,7 +100,7 @@ public final class Desk implements AutoCloseable {
 
     /** A look: changes what is shown and nothing of the shot. */
     public void look(UnaryOperator<DeskState> change) {
-        DeskState next = change.apply(state);
+        DeskState next = change.apply(state).settled(state);
         if (next.equals(state)) {
             return;
         }

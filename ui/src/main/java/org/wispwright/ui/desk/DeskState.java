@@ -40,6 +40,36 @@ public record DeskState(Optional<OpenShot> shot, Optional<Showing> showing, Opti
                 .map(n -> showing.map(s -> s.frame() == n.frame() && s.view().equals(n.view())).orElse(false)).orElse(false);
     }
 
+    /** What is seen of a source now: a note's wish away from its frame and view, or of a note that is gone, is the original. */
+    public Source seen(Source source) {
+        if (source instanceof Source.Wanted wanted) {
+            Showing at = showing.orElseThrow();
+            boolean here = shot.flatMap(s -> s.note(wanted.note())).map(Listed::note)
+                    .map(n -> n.frame() == at.frame() && n.view().equals(at.view())).orElse(false);
+            return here ? source : Source.ORIGINAL;
+        }
+        return source;
+    }
+
+    /**
+     * What follows of a look: a hand that changes pictures shows the open note's wish, for that is what it works on; and whoever chooses to
+     * see something else puts such a hand down.
+     *
+     * @param before the state before
+     */
+    DeskState settled(DeskState before) {
+        if (showing.isEmpty() || !isAtOpenNote() || !hand.retouches()) {
+            return this;
+        }
+        Source wanted = new Source.Wanted(note.orElseThrow());
+        if (showing.get().near().equals(wanted)) {
+            return this;
+        }
+        boolean chose = before.isAtOpenNote() && before.note().equals(note) && before.hand().equals(hand)
+                && before.showing().map(s -> s.near().equals(wanted)).orElse(false);
+        return chose ? withHand(Hand.LOOK) : withShowing(showing.get().withNear(wanted));
+    }
+
     /** Another shot. */
     public DeskState withShot(OpenShot other) {
         return new DeskState(Optional.of(other), showing, note, hand, takes, history, saving, message, work);

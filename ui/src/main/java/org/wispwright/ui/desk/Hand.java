@@ -12,6 +12,11 @@ public sealed interface Hand {
     /** Looks: pans and picks, changes nothing. */
     Hand LOOK = new Looking();
 
+    /** True if it changes the open note's wish. */
+    default boolean retouches() {
+        return !(this instanceof Looking || this instanceof Holding);
+    }
+
     /** Pans the picture and reads it. */
     record Looking() implements Hand {
     }

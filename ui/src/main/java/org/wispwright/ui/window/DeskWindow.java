@@ -54,7 +54,7 @@ public final class DeskWindow {
         this.memory = memory;
         actions = new ActionTable(desk, frame.getRootPane());
         NotesPanel notes = new NotesPanel(desk);
-        EaselPanel easel = new EaselPanel(desk);
+        EaselPanel easel = new EaselPanel(desk, EaselPanel.retouching(desk), () -> actions.get("note.new").actionPerformed(null));
         TakesPanel takes = new TakesPanel(desk);
         RibbonPanel ribbon = new RibbonPanel(desk);
         StartPanel start = new StartPanel(desk, memory, () -> begin(Optional.empty()));

@@ -46,7 +46,7 @@ final class TitleStrip extends JPanel {
 
     private static String inWords(DeskState state, Showing showing) {
         String shown = showing.other().map(far -> Words.of("title.against." + showing.against().name().toLowerCase(java.util.Locale.ROOT),
-                Sources.inWords(showing.near()), Sources.inWords(far))).orElse(Sources.inWords(showing.near()));
+                Sources.inWords(state.seen(showing.near())), Sources.inWords(state.seen(far)))).orElse(Sources.inWords(state.seen(showing.near())));
         return Words.of("title.where", state.shot().orElseThrow().setup().name(), showing.view(), showing.frame(), shown);
     }
 }

@@ -39,7 +39,8 @@ final class EaselCanvas extends JPanel implements Surface {
     private boolean fitted = true;
     private boolean turn;
     private Plate live;
-    private Tool tool = new Tool() { };
+    private Tool tool = new LookTool();
+    private KeyPointer keys;
     private double screenScale = 1;
     private Runnable placed = () -> { };
 
@@ -83,6 +84,11 @@ final class EaselCanvas extends JPanel implements Surface {
         tool = other;
         setCursor(other.cursor());
         repaint();
+    }
+
+    /** The keyboard's own pointer, drawn over the tool. */
+    void use(KeyPointer pointer) {
+        keys = pointer;
     }
 
     Tool tool() {
@@ -219,6 +225,9 @@ final class EaselCanvas extends JPanel implements Surface {
             g.setRenderingHint(RenderingHints.KEY_STROKE_CONTROL, RenderingHints.VALUE_STROKE_PURE);
             paintOutline(g);
             tool.paint(g, placement());
+            if (keys != null) {
+                keys.paint(g, placement());
+            }
             paintDivider(g);
             if (isFocusOwner()) {
                 g.setColor(Palette.ACCENT.colour());

@@ -7,12 +7,13 @@ import java.util.Locale;
 import javax.swing.BorderFactory;
 import javax.swing.JLabel;
 import javax.swing.JPanel;
-import javax.swing.JPopupMenu;
 import javax.swing.SwingConstants;
 import javax.swing.Timer;
 import org.wispwright.ui.desk.Against;
 import org.wispwright.ui.desk.Desk;
 import org.wispwright.ui.desk.DeskState;
+import org.wispwright.ui.desk.Hand;
+import org.wispwright.ui.desk.Retouching;
 import org.wispwright.ui.desk.Showing;
 import org.wispwright.ui.shot.ShotView;
 import org.wispwright.ui.window.DeskAction;
@@ -33,13 +34,22 @@ public final class EaselPanel extends JPanel {
     private final ReadOut readOut;
     private final JLabel missing = new JLabel("", SwingConstants.CENTER);
     private final Timer turning;
+    private final Retouching retouching;
+    private final HandStrip strip;
+    private Hand held;
     private double toneStops;
     private double toneGamma = 1;
 
-    /** Follows a desk. */
-    public EaselPanel(Desk desk) {
+    /**
+     * Follows a desk.
+     *
+     * @param retouching the open note's retouch
+     * @param newNote    makes a note on the frame and in the view that are shown
+     */
+    public EaselPanel(Desk desk, Retouching retouching, Runnable newNote) {
         super(new BorderLayout());
         this.desk = desk;
+        this.retouching = retouching;
         setName("easel");
         setBackground(Palette.PANEL.colour());
         getAccessibleContext().setAccessibleName(Words.of("easel.name"));
@@ -48,7 +58,9 @@ public final class EaselPanel extends JPanel {
         readOut = new ReadOut(desk, canvas, pictures);
         canvas.whenPlaced(readOut::placed);
         turning = new Timer(TURN_MILLIS, e -> canvas.turn());
-        new EaselPointing(desk, canvas, readOut::at, JPopupMenu::new);
+        strip = new HandStrip(desk, retouching, newNote);
+        new EaselPointing(desk, canvas, readOut::at, strip::menu);
+        canvas.use(new KeyPointer(canvas, canvas, canvas::tool, () -> !(desk.state().hand() instanceof Hand.Looking), strip::removeChosen));
         missing.setName("easel-missing");
         missing.setBorder(BorderFactory.createEmptyBorder(4, 8, 4, 8));
         missing.setForeground(Palette.FAULT.colour());
@@ -57,8 +69,16 @@ public final class EaselPanel extends JPanel {
         middle.add(canvas, BorderLayout.CENTER);
         add(new CompareBar(desk), BorderLayout.NORTH);
         add(middle, BorderLayout.CENTER);
-        add(readOut, BorderLayout.SOUTH);
+        JPanel below = new JPanel(new BorderLayout());
+        below.add(strip, BorderLayout.NORTH);
+        below.add(readOut, BorderLayout.SOUTH);
+        add(below, BorderLayout.SOUTH);
         desk.listen(this::follow);
+    }
+
+    /** The open note's retouch, with edits named in our words. */
+    public static Retouching retouching(Desk desk) {
+        return new Retouching(desk, Tools::inWords);
     }
 
     @Override
@@ -74,6 +94,10 @@ public final class EaselPanel extends JPanel {
 
     private void follow(DeskState state) {
         pictures.follow(state);
+        if (held == null || !Tools.areOne(held, state.hand())) {
+            held = state.hand();
+            canvas.use(Tools.of(held, desk, retouching, canvas));
+        }
         boolean turns = state.showing().map(s -> s.against() == Against.BLINK).orElse(false);
         if (turns != turning.isRunning()) {
             if (turns) {
@@ -110,6 +134,7 @@ public final class EaselPanel extends JPanel {
             actions.add(DeskAction.withShot("compare." + word, "shift " + (each.ordinal() + 1), () -> desk.show(s -> s.withAgainst(each))));
         }
         actions.add(DeskAction.withShot("compare.swap", "shift S", () -> desk.show(s -> s.withNear(s.far()).withFar(s.near()))));
+        actions.addAll(strip.actions());
         return actions;
     }
 

@@ -113,13 +113,13 @@ final class EaselPictures {
         }
         boolean moved = was.map(s -> s.frame() != showing.frame() || !s.view().equals(showing.view())).orElse(true);
         if (moved || otherTakes || !was.get().near().equals(showing.near()) || otherNotes && showing.near() instanceof Source.Wanted) {
-            ask("easel near", showing.near(), picture -> near = picture, true);
+            ask("easel near", state.seen(showing.near()), picture -> near = picture, true);
         }
         if (showing.other().isEmpty()) {
             far = null;
             farPlate = null;
         } else if (moved || otherTakes || !was.get().other().equals(showing.other()) || otherNotes && showing.far() instanceof Source.Wanted) {
-            ask("easel far", showing.far(), picture -> far = picture, false);
+            ask("easel far", state.seen(showing.far()), picture -> far = picture, false);
         }
         if (isMixed() && was.map(s -> s.fade() != showing.fade() || s.gain() != showing.gain() || s.against() != showing.against())
                 .orElse(true)) {
