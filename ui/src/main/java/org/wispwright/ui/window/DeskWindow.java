@@ -28,6 +28,7 @@ import org.wispwright.ui.window.easel.EaselPanel;
 import org.wispwright.ui.window.notes.NotesPanel;
 import org.wispwright.ui.window.ribbon.RibbonPanel;
 import org.wispwright.ui.window.start.BeginPanel;
+import org.wispwright.ui.window.start.GuideStrip;
 import org.wispwright.ui.window.start.StartPanel;
 import org.wispwright.ui.window.takes.TakesPanel;
 
@@ -62,9 +63,14 @@ public final class DeskWindow {
         for (List<DeskAction> some : List.of(start.actions(), notes.actions(), easel.actions(), takes.actions(), ribbon.actions())) {
             actions.add(some);
         }
-        actions.refresh(desk.state());
         JPanel work = new JPanel(new BorderLayout());
-        work.add(new TitleStrip(desk, actions), BorderLayout.NORTH);
+        JPanel above = new JPanel(new BorderLayout());
+        GuideStrip guide = new GuideStrip(desk, memory, actions::get);
+        actions.add(guide.actions());
+        actions.refresh(desk.state());
+        above.add(new TitleStrip(desk, actions), BorderLayout.NORTH);
+        above.add(guide, BorderLayout.SOUTH);
+        work.add(above, BorderLayout.NORTH);
         work.add(split(notes, split(easel, takes, 1), 0), BorderLayout.CENTER);
         work.add(ribbon, BorderLayout.SOUTH);
         notes.setPreferredSize(new Dimension(SIDE, 0));
