@@ -1,6 +1,7 @@
 package org.wispwright.ui.desk;
 
 import java.util.concurrent.ExecutorService;
+import java.util.concurrent.RejectedExecutionException;
 import java.util.function.Consumer;
 import java.util.function.Function;
 import org.wispwright.ui.job.Cancel;
@@ -33,7 +34,7 @@ public final class Replacing {
         running.wish();
         Cancel cancel = new Cancel();
         running = cancel;
-        lane.execute(() -> {
+        Runnable task = () -> {
             if (cancel.wished()) {
                 return;
             }
@@ -54,7 +55,12 @@ public final class Replacing {
                     }
                 });
             }
-        });
+        };
+        try {
+            lane.execute(task);
+        } catch (RejectedExecutionException closed) {
+            cancel.wish();                                                     // what came back late asks a desk that is put away
+        }
     }
 
     /** Drops what was asked. */

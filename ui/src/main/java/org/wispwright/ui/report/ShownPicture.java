@@ -7,12 +7,12 @@ import org.wispwright.render.picture.Rgb;
 import org.wispwright.render.picture.Srgb;
 
 /** A linear picture as a display image: over a background, through the sRGB curve, scaled. */
-final class ShownPicture {
+public final class ShownPicture {
     private ShownPicture() {
     }
 
     /** The picture over a background, at its own size. */
-    static BufferedImage over(Picture picture, Rgb background) {
+    public static BufferedImage over(Picture picture, Rgb background) {
         BufferedImage image = new BufferedImage(picture.width(), picture.height(), BufferedImage.TYPE_INT_RGB);
         float[] rgba = picture.rgba();
         int[] row = new int[picture.width()];

@@ -38,12 +38,15 @@ public final class DeskWindow {
     public static final Dimension SMALLEST = new Dimension(1024, 700);
     private static final Dimension USUAL = new Dimension(1440, 900);
     private static final int SIDE = 250;
+    /** Of the sides' and the easel's width, what stays however narrow the window and large the words. */
+    private static final int LEAST_SIDE = 200;
 
     private final Desk desk;
     private final Memory memory;
     private final JFrame frame = new JFrame(Words.of("window.title"));
     private final JPanel cards = new JPanel(new CardLayout());
     private final ActionTable actions;
+    private final TakesPanel takes;
     private final BeginPanel beginning;
     private boolean begins;
     private Optional<Path> opened = Optional.empty();
@@ -56,7 +59,7 @@ public final class DeskWindow {
         actions = new ActionTable(desk, frame.getRootPane());
         NotesPanel notes = new NotesPanel(desk);
         EaselPanel easel = new EaselPanel(desk, EaselPanel.retouching(desk), () -> actions.get("note.new").actionPerformed(null));
-        TakesPanel takes = new TakesPanel(desk);
+        takes = new TakesPanel(desk);
         RibbonPanel ribbon = new RibbonPanel(desk);
         StartPanel start = new StartPanel(desk, memory, () -> begin(Optional.empty()));
         actions.add(new DeskActions(desk, this, memory).all());
@@ -75,6 +78,9 @@ public final class DeskWindow {
         work.add(ribbon, BorderLayout.SOUTH);
         notes.setPreferredSize(new Dimension(SIDE, 0));
         takes.setPreferredSize(new Dimension(SIDE, 0));
+        for (JPanel part : List.of(notes, easel, takes)) {
+            part.setMinimumSize(new Dimension(LEAST_SIDE, 0));
+        }
         cards.add(start, "start");
         cards.add(work, "work");
         beginning = new BeginPanel(desk, () -> {
@@ -162,8 +168,15 @@ public final class DeskWindow {
         next.frame.setVisible(true);
     }
 
-    /** Closes the window and the session. */
+    /** Closes the window and the session; while a solve runs, once the person has said what becomes of it. */
     public void close() {
+        if (takes.mayClose(this::close)) {
+            end();
+        }
+    }
+
+    /** Closes the window and the session, whatever runs. */
+    void end() {
         Rectangle b = frame.getBounds();
         memory.change(m -> m.ended(List.of(b.x, b.y, b.width, b.height)));
         frame.dispose();

@@ -318,7 +318,7 @@ public final class DeskDriver implements AutoCloseable {
     /** Closes the window and everything that it opened. */
     @Override
     public void close() {
-        doOnSwing(window::close);
+        doOnSwing(window::end);
         doOnSwing(() -> {
             for (Window w : Window.getWindows()) {
                 w.dispose();

@@ -1,2 +1,2 @@
-/** Room: the takes, and the solve that runs. Door: {@link org.wispwright.ui.window.takes.TakesPanel}. */
+/** Room: the takes, the solve that runs or could, and what is written out. Door: {@link org.wispwright.ui.window.takes.TakesPanel}. */
 package org.wispwright.ui.window.takes;
