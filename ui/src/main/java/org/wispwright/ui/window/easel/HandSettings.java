@@ -94,7 +94,7 @@ final class HandSettings extends JPanel {
     private static JSpinner percent(String name, double least, double most, double step) {
         JSpinner spinner = new JSpinner(new SpinnerNumberModel(least, least, most, step));
         spinner.setEditor(new JSpinner.NumberEditor(spinner, "0.#"));
-        ((JSpinner.NumberEditor) spinner.getEditor()).getTextField().setColumns(4);
+        ((JSpinner.NumberEditor) spinner.getEditor()).getTextField().setColumns(3);
         spinner.setName("hand-" + name);
         return spinner;
     }

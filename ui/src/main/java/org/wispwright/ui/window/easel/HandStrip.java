@@ -1,7 +1,5 @@
 package org.wispwright.ui.window.easel;
 
-import java.awt.event.ComponentAdapter;
-import java.awt.event.ComponentEvent;
 import java.util.ArrayList;
 import java.util.EnumMap;
 import java.util.List;
@@ -43,18 +41,17 @@ public final class HandStrip extends JPanel implements Retouching.Follower {
     private final Map<Class<? extends Hand>, Hand> before = new java.util.HashMap<>();
     private final ButtonGroup group = new ButtonGroup();
     private final JPanel row = new JPanel(new MigLayout("insets 0, gapx 0"));
-    private final JPanel words = new JPanel(new MigLayout("insets 0, hidemode 3, gapx 8"));
+    private final JPanel words = new JPanel(new MigLayout("insets 0, hidemode 3, gapx 8, aligny center"));
     private final JLabel name = new JLabel();
     private final HandSettings settings;
     private final JLabel sentence = new JLabel();
     private final JButton help = new JButton();
     private final JButton steps = new JButton();
     private Runnable helping = () -> { };
-    private boolean wide = true;
 
     /** Follows a desk. @param newNote makes a note on the frame and in the view that are shown */
     public HandStrip(Desk desk, Retouching retouching, Runnable newNote) {
-        super(new MigLayout("insets 4 8 4 8, fillx, hidemode 3"));
+        super(new MigLayout("insets 4 8 4 8, fillx, gapy 4"));
         this.desk = desk;
         this.retouching = retouching;
         this.newNote = newNote;
@@ -88,34 +85,13 @@ public final class HandStrip extends JPanel implements Retouching.Follower {
         words.add(settings);
         words.add(sentence, "wmin 0");
         words.add(help);
-        place();
-        addComponentListener(new ComponentAdapter() {
-            @Override
-            public void componentResized(ComponentEvent e) {
-                place();
-            }
-        });
+        // As high as its highest setting whatever it shows: the picture above must not jump.
+        int high = Math.max(settings.getPreferredSize().height, help.getPreferredSize().height);
+        add(row, "split 2");
+        add(steps, "gapleft push, wrap");
+        add(words, "growx, pushx, wmin 0, height " + high + "px!");
         retouching.listen(this);
         desk.listen(this::follow);
-    }
-
-    /** One line where there is room for it, else two. */
-    private void place() {
-        boolean fits = getWidth() == 0 || row.getPreferredSize().width + words.getPreferredSize().width + steps.getPreferredSize().width
-                + 12 * Palette.STEP <= getWidth();
-        if (fits != wide || getComponentCount() == 0) {
-            wide = fits;
-            removeAll();
-            add(row, wide ? "" : "split 2");
-            if (!wide) {
-                add(steps, "gapleft push, wrap");
-            }
-            add(words, "growx, pushx, wmin 0");
-            if (wide) {
-                add(steps);
-            }
-            revalidate();
-        }
     }
 
     @Override
@@ -154,7 +130,6 @@ public final class HandStrip extends JPanel implements Retouching.Follower {
         } else {
             say(Words.of("hand.noNote"), Words.of("hand.newNote"), newNote);
         }
-        place();
     }
 
     private void say(String words, String button, Runnable run) {

@@ -21,7 +21,6 @@ import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
-import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalInt;
 import java.util.Set;
@@ -95,12 +94,12 @@ class HandStripTest {
             };
             canvas.setFocusable(true);
             canvas.setBackground(Palette.SURROUND.colour());
-            canvas.setPreferredSize(new Dimension(width, 520));
             keys = new KeyPointer(canvas, bench, () -> bench.tool, () -> !(bench.desk.state().hand() instanceof Hand.Looking),
                     strip::removeChosen);
             frame = new JFrame();
             frame.add(canvas, BorderLayout.CENTER);
             frame.add(strip, BorderLayout.SOUTH);
+            frame.getContentPane().setPreferredSize(new Dimension(width, 600));
             frame.pack();
             frame.setLocation(0, 0);
             frame.setVisible(true);
@@ -410,11 +409,17 @@ class HandStripTest {
         assertEquals(1, bench.retouching.note().orElseThrow().holds().size());
     }
 
+    /** Where a control ends, in the strip's pixels; 0 if it is not there. */
+    private int right(String name) {
+        return seek(name, JSpinner.class).map(c -> javax.swing.SwingUtilities.convertPoint(c, c.getWidth(), 0, strip).x).orElse(0);
+    }
+
     @Test
     void picturesOfTheStripForPeople() throws Exception {
         for (boolean dark : new boolean[] {true, false}) {
             for (int width : new int[] {1000, 530}) {
                 window(dark, width);
+                int height = strip.getHeight();
                 for (HandKind kind : List.of(HandKind.SOFTEN, HandKind.PULL, HandKind.OUTLINE, HandKind.HOLD)) {
                     bench.takeUp(kind.usual());
                     if (kind == HandKind.OUTLINE) {
@@ -422,12 +427,14 @@ class HandStripTest {
                     }
                     ToolBench.onSwing(() -> bench.tool.moved(ToolBench.at(0.31, 0.8)));
                     robot.waitForIdle();
+                    assertEquals(height, strip.getHeight(), "the picture must not jump");
+                    assertTrue(right("hand-soft-edge") <= width, "the settings have room");
                     keep(frame.getContentPane(), "hand-" + kind.word() + (dark ? "-dark-" : "-light-") + width);
                 }
                 ToolBench.onSwing(() -> bench.desk.show(s -> s.withFrame(1002)));
                 robot.waitForIdle();
-                keep(strip, "hand-elsewhere" + (dark ? "-dark-" : "-light-").toLowerCase(Locale.ROOT) + width);
-                assertTrue(strip.getWidth() <= width);
+                keep(strip, "hand-elsewhere" + (dark ? "-dark-" : "-light-") + width);
+                assertEquals(height, strip.getHeight());
                 ToolBench.onSwing(() -> bench.desk.show(s -> s.withFrame(1004)));
             }
         }
