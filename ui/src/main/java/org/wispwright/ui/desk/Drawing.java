@@ -75,17 +75,18 @@ public final class Drawing extends Gesture {
             return;
         }
         over = true;
-        if (live != null) {
+        boolean shown = live != null && session.isLaid();
+        if (shown) {
             live.end();
         }
-        session.ended(Retouching.Edit.ADD_STROKE, session.operations().size(), stroke, live != null);
+        session.ended(this, Retouching.Edit.ADD_STROKE, session.operations().size(), stroke, shown);
     }
 
     @Override
     void dropped() {
         if (!over) {
             over = true;
-            if (live != null) {
+            if (live != null && session.isLaid()) {
                 live.cancel().ifPresent(session::changed);
             }
         }

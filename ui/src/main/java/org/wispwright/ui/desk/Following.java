@@ -56,7 +56,7 @@ final class Following {
     }
 
     private void done() {
-        busy = next != null;
+        busy = next != null && !lane.isShutdown();                             // put away: nothing is left to follow
         if (busy) {
             Runnable run = next;
             next = null;

@@ -93,7 +93,7 @@ public final class OutlineDrag extends Gesture {
             return;
         }
         over = true;
-        session.ended(Retouching.Edit.DRAG_OUTLINE, at, warp, false);
+        session.ended(this, Retouching.Edit.DRAG_OUTLINE, at, warp, false);
     }
 
     @Override

@@ -16,6 +16,7 @@ public final class Pulling extends Gesture {
     private final Optional<Point> fresh;
     private MeshWarp warp;
     private int handle;
+    private boolean making;
     private LiveWarp live;
     private Point wanted;
     private boolean moved;
@@ -40,6 +41,10 @@ public final class Pulling extends Gesture {
 
     @Override
     void ready() {
+        if (making) {
+            return;
+        }
+        making = true;
         session.warps().take(session.originals().middle(), session.operations().subList(0, at), warp, fresh, this::prepared,
                 session::refused);
     }
@@ -50,7 +55,9 @@ public final class Pulling extends Gesture {
         }
         live = made;
         warp = made.warp();
-        session.show(made.shown());
+        if (!ended) {
+            session.show(made.shown());
+        }
         if (wanted != null) {
             drag();
         }
@@ -96,25 +103,41 @@ public final class Pulling extends Gesture {
         return handle;
     }
 
-    /** Ends the pull: the note has it, soon if the mesh is not set up yet. A handle that was there and did not move changes nothing. */
+    /**
+     * Ends the pull: the note has it, if the handle is new as soon as its mesh is set up. A handle that was there and did not move changes
+     * nothing.
+     */
     public void end() {
         if (over || ended) {
             return;
         }
         ended = true;
-        if (live != null) {
+        if (live == null && fresh.isEmpty() && wanted != null) {
+            try {
+                warp = warp.with(handle, wanted);
+                moved = true;
+            } catch (IllegalArgumentException cannotGoThere) {
+                moved = false;
+            }
+        }
+        if (live != null || fresh.isEmpty()) {
             finish();
         }
     }
 
+    /** True if it was ended and waits for its mesh. */
+    boolean isEnded() {
+        return ended && !over;
+    }
+
     private void finish() {
         boolean isNew = fresh.isPresent() || at >= session.operations().size();
+        over = true;
         if (!moved && !isNew) {
             session.cancel();
             return;
         }
-        over = true;
-        session.ended(moved ? Retouching.Edit.PULL_HANDLE : Retouching.Edit.SET_HANDLE, at, warp, false);
+        session.ended(this, moved ? Retouching.Edit.PULL_HANDLE : Retouching.Edit.SET_HANDLE, at, warp, false);
     }
 
     @Override

@@ -76,18 +76,15 @@ public final class Retouching {
     private final Replacing building;
     private final LiveWarps warps;
     private final Following outlining;
-    private final Following tracing;
-    private final Following folding;
+    private final Beside beside;
     private final List<Follower> followers = new ArrayList<>();
     private Optional<Subject> subject = Optional.empty();
     private List<Operation> asked;
     private Laid laid;
     private Gesture gesture;
+    private Pulling ending;
+    private boolean own;
     private Picture live;
-    private Optional<Outlines> outlines = Optional.empty();
-    private double traced;
-    private Optional<Operation> folded = Optional.empty();
-    private Folds folds = Folds.NONE;
     private OptionalInt chosenHold = OptionalInt.empty();
 
     /** Follows a desk for as long as that lives. @param names what each kind of edit is called in undo and redo */
@@ -96,11 +93,10 @@ public final class Retouching {
         this.names = names;
         ExecutorService lane = desk.workers().lane("retouch");
         building = new Replacing(desk.workers(), lane);
-        ExecutorService beside = desk.workers().lane("retouch-beside");
+        ExecutorService other = desk.workers().lane("retouch-beside");
         warps = new LiveWarps(desk.workers(), lane);
-        outlining = new Following(desk.workers(), beside);
-        tracing = new Following(desk.workers(), beside);
-        folding = new Following(desk.workers(), beside);
+        outlining = new Following(desk.workers(), other);
+        beside = new Beside(desk.workers(), other, this::tellRested);
         desk.listen(this::follow);
     }
 
@@ -135,23 +131,20 @@ public final class Retouching {
     }
 
     private void drop() {
-        cancel();
+        dropAll();
         building.drop();
         warps.drop();
-        folding.drop();
         outlining.drop();
-        tracing.drop();
+        beside.drop();
         asked = null;
         laid = null;
-        outlines = Optional.empty();
-        folded = Optional.empty();
-        folds = Folds.NONE;
-        traced = 0;
         chosenHold = OptionalInt.empty();
     }
 
     private void build(List<Operation> operations) {
-        cancel();
+        if (!own) {
+            dropAll();
+        }
         asked = operations;
         Subject of = subject.orElseThrow();
         OpenShot shot = desk.state().shot().orElseThrow();
@@ -180,7 +173,7 @@ public final class Retouching {
         if (gesture != null) {
             gesture.ready();
         }
-        followers().forEach(Follower::rested);
+        tellRested();
     }
 
     /** The live picture; empty until it is there. */
@@ -252,7 +245,7 @@ public final class Retouching {
     }
 
     private <G extends Gesture> Optional<G> begin(Supplier<G> making) {
-        cancel();
+        cancel();                                                              // of a mesh that is ended and waits, see there
         if (subject.isEmpty() || asked == null) {
             return Optional.empty();
         }
@@ -264,15 +257,31 @@ public final class Retouching {
         return Optional.of(made);
     }
 
-    /** Drops what a hand has begun and not ended. */
+    /** Drops what a hand has begun and not ended. A new handle that was set and waits for its mesh is ended, and comes. */
     public void cancel() {
-        if (gesture != null) {
+        if (gesture instanceof Pulling pulling && pulling.isEnded()) {
+            ending = pulling;
+            gesture = null;
+        } else if (gesture != null) {
             Gesture dropped = gesture;
             gesture = null;
             dropped.dropped();
             outlining.drop();
             rest();
         }
+    }
+
+    private void dropAll() {
+        cancel();
+        if (ending != null) {
+            ending.dropped();
+            ending = null;
+        }
+    }
+
+    /** True while a new handle that was set waits for its mesh; the next one would not know of it yet. */
+    public boolean isWaiting() {
+        return ending != null || gesture instanceof Pulling pulling && pulling.isEnded();
     }
 
     private void rest() {
@@ -321,42 +330,26 @@ public final class Retouching {
 
     /** Has the original's outlines at a level traced; followers are told when they are there. */
     public void trace(double level) {
-        if (laid != null && traced != level) {
-            traced = level;
-            Picture of = laid.originals().full();
-            tracing.ask(() -> Outlines.of(of, level), found -> {
-                outlines = Optional.of(found);
-                followers().forEach(Follower::rested);
-            });
+        if (laid != null) {
+            beside.trace(laid.originals().full(), level);
         }
     }
 
     /** The outlines traced last. */
     public Optional<Outlines> outlines() {
-        return outlines;
+        return beside.outlines();
     }
 
     /** Has the folds of an operation found, on a small raster; followers are told when they are there. */
     public void fold(Optional<Operation> operation) {
-        if (laid == null || operation.equals(folded)) {
-            return;
+        if (laid != null) {
+            beside.fold(laid.originals().small(), operation);
         }
-        folded = operation;
-        if (operation.isEmpty()) {
-            folding.drop();
-            folds = Folds.NONE;
-            return;
-        }
-        Picture of = laid.originals().small();
-        folding.ask(() -> Folds.of(operation.get(), of), found -> {
-            folds = found;
-            followers().forEach(Follower::rested);
-        });
     }
 
     /** The folds found last. */
     public Folds folds() {
-        return folds;
+        return beside.folds();
     }
 
     /** The hold that is chosen, as a number in the note's list. */
@@ -367,7 +360,7 @@ public final class Retouching {
     /** Chooses a hold of the open note, or none. */
     public void choose(OptionalInt hold) {
         chosenHold = hold;
-        followers().forEach(Follower::rested);
+        tellRested();
     }
 
     /** The original at a small raster, for outlines of mattes that depend on it; empty until it is there. */
@@ -404,26 +397,33 @@ public final class Retouching {
 
     /** What the hand began cannot be: it is dropped, and why is said. */
     void refused(RuntimeException thrown) {
-        cancel();
+        dropAll();
         desk.say(Message.Kind.FAULT, thrown instanceof IllegalArgumentException ? thrown.getMessage() : Desk.words(thrown));
     }
 
     /** A gesture is done; its edit is made. @param shown whether the canvas shows it already */
-    void ended(Edit kind, int at, Operation operation, boolean shown) {
-        gesture = null;
+    void ended(Gesture done, Edit kind, int at, Operation operation, boolean shown) {
+        gesture = gesture == done ? null : gesture;
+        ending = ending == done ? null : ending;
         List<Operation> before = asked;
         if (shown) {
             asked = List.copyOf(with(before, at, operation));
             laid = new Laid(laid.subject(), laid.originals(), asked, laid.canvas());
         }
+        own = true;
         boolean made = note().map(note -> attempt(NoteEdit.retouch(names.apply(kind), note.id(), ops -> with(ops, at, operation))))
                 .orElse(false);
+        own = false;
         if (!made) {
             build(before);
         }
-        if (!shown) {
+        if (!shown && gesture == null) {
             rest();
         }
+        tellRested();
+    }
+
+    private void tellRested() {
         followers().forEach(Follower::rested);
     }
 

@@ -1,7 +1,9 @@
 package org.wispwright.ui.window.easel;
 
 import java.awt.Graphics2D;
+import java.util.ArrayDeque;
 import java.util.ArrayList;
+import java.util.Deque;
 import java.util.List;
 import java.util.Optional;
 import org.wispwright.ui.desk.Desk;
@@ -37,6 +39,8 @@ final class PullTool extends RetouchTool {
     private Pointer start;
     private Pointer at;
     private Optional<Pulling> pulling = Optional.empty();
+    /** What the pointer did while a handle that was set waits for its mesh. */
+    private final Deque<Runnable> later = new ArrayDeque<>();
 
     PullTool(Desk desk, Retouching retouching, Surface surface) {
         super(desk, retouching, surface);
@@ -48,7 +52,19 @@ final class PullTool extends RetouchTool {
         if (pulling.isEmpty()) {
             rest();
         }
+        while (!later.isEmpty() && !retouching.isWaiting()) {
+            later.remove().run();
+        }
         super.rested();
+    }
+
+    /** True if that waits, with all that waits already. */
+    private boolean waits(Runnable event) {
+        boolean waits = !later.isEmpty() || retouching.isWaiting();
+        if (waits) {
+            later.add(event);
+        }
+        return waits;
     }
 
     private void rest() {
@@ -106,6 +122,12 @@ final class PullTool extends RetouchTool {
 
     @Override
     public void pressed(Pointer pointer) {
+        if (!waits(() -> press(pointer))) {
+            press(pointer);
+        }
+    }
+
+    private void press(Pointer pointer) {
         moved(pointer);
         start = pointer;
         at = pointer;
@@ -171,6 +193,12 @@ final class PullTool extends RetouchTool {
 
     @Override
     public void dragged(Pointer pointer) {
+        if (!waits(() -> drag(pointer))) {
+            drag(pointer);
+        }
+    }
+
+    private void drag(Pointer pointer) {
         if (start != null && Math.hypot(pointer.x() - start.x(), pointer.y() - start.y()) >= STILL || at != start) {
             at = pointer;
             soon();
@@ -185,6 +213,12 @@ final class PullTool extends RetouchTool {
 
     @Override
     public void released(Pointer pointer) {
+        if (!waits(() -> release(pointer))) {
+            release(pointer);
+        }
+    }
+
+    private void release(Pointer pointer) {
         now();
         Optional<Pulling> ended = pulling;
         pulling = Optional.empty();
@@ -209,6 +243,7 @@ final class PullTool extends RetouchTool {
         at = null;
         grip = Optional.empty();
         waiting.clear();
+        later.clear();
         super.cancel();
     }
 

@@ -188,6 +188,37 @@ class ToolsTest {
         assertEquals(List.of(new Handle(new Point(0.5, 0.6), new Point(0.45, 0.5))), warp(4).handles());
     }
 
+    /** A mesh takes a while to set up; a quick hand is not made to wait, and loses nothing. */
+    @Test
+    void handlesSetQuicklyAndAStrokeDrawnAtOnceAreAllThere() {
+        bench.takeUp(new Hand.Pulling(WarpKind.SPLINE));
+        ToolBench.onSwing(() -> {
+            for (double y = 0.2; y < 0.65; y += 0.1) {
+                bench.tool.pressed(ToolBench.at(0.2, y));
+                bench.tool.released(ToolBench.at(0.2, y));
+            }
+        });
+        bench.await("all are set", () -> warp(0).handles().size() == 8);
+        bench.rest();
+        ToolBench.onSwing(() -> {
+            bench.tool.pressed(ToolBench.at(0.45, 0.5));
+            bench.tool.released(ToolBench.at(0.45, 0.5));
+            bench.tool.leave();
+            bench.desk.look(s -> s.withHand(Hand.Brushing.usual(Brush.REMOVE)));
+            bench.tool = Tools.of(bench.desk.state().hand(), bench.desk, bench.retouching, bench);
+            bench.tool.pressed(ToolBench.at(0.3, 0.7));
+            bench.tool.dragged(ToolBench.at(0.35, 0.7));
+        });
+        bench.await("the handle is set", () -> warp(0).handles().size() == 9);
+        ToolBench.onSwing(() -> {
+            bench.tool.dragged(ToolBench.at(0.4, 0.7));
+            bench.tool.released(ToolBench.at(0.4, 0.7));
+        });
+        assertEquals(2, operations().size());
+        assertEquals(new Point(0.4, 0.7), ((Stroke) operations().get(1)).line().get(((Stroke) operations().get(1)).line().size() - 1));
+        bench.rest();
+    }
+
     @Test
     void handlesAreDrawnAndTheOneUnderThePointerHasARing() {
         bench.takeUp(new Hand.Pulling(WarpKind.SPLINE));
