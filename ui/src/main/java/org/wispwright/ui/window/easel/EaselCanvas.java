@@ -91,6 +91,11 @@ final class EaselCanvas extends JPanel implements Surface {
         keys = pointer;
     }
 
+    /** True if the picture, be it a draft, is of the frame that is wished for. */
+    boolean isOfFrameShown() {
+        return pictures.isOfFrameShown();
+    }
+
     Tool tool() {
         return tool;
     }

@@ -40,6 +40,9 @@ final class EaselPictures {
     private Plate farPlate;
     private Plate mixed;
     private Tone tone;
+    private Tone oldTone;
+    private int nearFrame;
+    private int plateFrame;
     private Path2D outline;
     private Picture outlined;
 
@@ -72,6 +75,11 @@ final class EaselPictures {
     /** True while the first picture is a draft. */
     boolean isDraft() {
         return draft;
+    }
+
+    /** True if what lies on the easel, be it a draft, is of the frame that is wished for. */
+    boolean isOfFrameShown() {
+        return nearPlate != null && now.showing().map(s -> s.frame() == plateFrame).orElse(false);
     }
 
     /** The tone of the moment; null before there is a shot. */
@@ -136,6 +144,7 @@ final class EaselPictures {
         desk.pictures().ask(name, now.shot().orElseThrow(), new Ask(source, showing.view(), showing.frame(), 0), drawn -> {
             put.accept(drawn.picture());
             if (first) {
+                nearFrame = showing.frame();
                 draft = drawn.draft();
                 missing.accept("");
             }
@@ -158,15 +167,15 @@ final class EaselPictures {
         Plate oldA = nearPlate;
         Plate oldB = farPlate;
         boolean sameTone = oldTone == how;
+        int frame = nearFrame;
         coding.replace(cancel -> new Plate[] {plate(a, how, sameTone ? oldA : null), plate(b, how, sameTone ? oldB : null)}, plates -> {
             nearPlate = plates[0];
+            plateFrame = frame;
             farPlate = plates[1];
             oldTone = how;
             changed.run();
         }, thrown -> missing.accept(Desk.words(thrown)));
     }
-
-    private Tone oldTone;
 
     private static Plate plate(Picture picture, Tone tone, Plate old) {
         return picture == null ? null : old != null && old.picture() == picture ? old : new Plate(picture, tone);
