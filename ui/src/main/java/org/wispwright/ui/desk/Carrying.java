@@ -106,9 +106,4 @@ public final class Carrying {
     private void say(RuntimeException thrown) {
         desk.say(Message.Kind.FAULT, Desk.words(thrown));
     }
-
-    /** Drops what is on its way. */
-    public void drop() {
-        following.drop();
-    }
 }

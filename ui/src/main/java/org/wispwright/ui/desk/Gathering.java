@@ -70,8 +70,8 @@ final class Gathering<K, V> {
 
         private void next() {
             running = keys.stream().filter(key -> !there.containsKey(key) && !tried.contains(key)).findFirst().orElse(null);
-            if (running == null) {
-                return;
+            if (running == null || lane.isShutdown()) {
+                return;                                                        // the desk is being put away
             }
             K key = running;
             BiFunction<K, Cancel, V> how = work;

@@ -76,9 +76,7 @@ public final class ActionTable {
             super(Words.of("action." + action.id()));
             this.action = action;
             putValue(ACCELERATOR_KEY, action.key());
-            String tip = Words.has("action." + action.id() + ".tip") ? Words.of("action." + action.id() + ".tip")
-                    : Words.of("action." + action.id());
-            putValue(SHORT_DESCRIPTION, action.key() == null ? tip : tip + "  (" + Keys.inWords(action.key()) + ")");
+            putValue(SHORT_DESCRIPTION, action.tip());
         }
 
         void follow(DeskState state) {

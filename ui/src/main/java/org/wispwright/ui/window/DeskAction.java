@@ -35,4 +35,10 @@ public record DeskAction(String id, KeyStroke key, Predicate<DeskState> enabled,
     public DeskAction saying(Function<DeskState, String> words) {
         return new DeskAction(id, key, enabled, run, words);
     }
+
+    /** What it does, with its shortcut. */
+    public String tip() {
+        String tip = Words.of(Words.has("action." + id + ".tip") ? "action." + id + ".tip" : "action." + id);
+        return key == null ? tip : tip + "  (" + Keys.inWords(key) + ")";
+    }
 }

@@ -36,7 +36,7 @@ import org.wispwright.ui.desk.Workers;
  * toolkit's screen, and waits for what comes of it. One at a time; close it.
  */
 public final class DeskDriver implements AutoCloseable {
-    private static final long MOST_SECONDS = 120;
+    private static final long MOST_SECONDS = 20;
 
     private final Robot robot;
     private final Desk desk;
