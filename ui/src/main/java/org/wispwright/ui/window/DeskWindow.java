@@ -18,6 +18,7 @@ import javax.swing.JFrame;
 import javax.swing.JPanel;
 import javax.swing.JSplitPane;
 import javax.swing.SwingUtilities;
+import javax.swing.UIManager;
 import javax.swing.WindowConstants;
 import org.wispwright.ui.desk.Desk;
 import org.wispwright.ui.desk.DeskState;
@@ -40,6 +41,8 @@ public final class DeskWindow {
     private static final int SIDE = 250;
     /** Of the sides' and the easel's width, what stays however narrow the window and large the words. */
     private static final int LEAST_SIDE = 200;
+    /** A side with large words has more width, but leaves a third of the smallest window to the easel. */
+    private static final int MOST_SIDE = 330;
 
     private final Desk desk;
     private final Memory memory;
@@ -76,8 +79,9 @@ public final class DeskWindow {
         work.add(above, BorderLayout.NORTH);
         work.add(split(notes, split(easel, takes, 1), 0), BorderLayout.CENTER);
         work.add(ribbon, BorderLayout.SOUTH);
-        notes.setPreferredSize(new Dimension(SIDE, 0));
-        takes.setPreferredSize(new Dimension(SIDE, 0));
+        int side = Math.min(MOST_SIDE, Math.round(SIDE * UIManager.getFont("defaultFont").getSize2D() / 13));
+        notes.setPreferredSize(new Dimension(side, 0));
+        takes.setPreferredSize(new Dimension(side, 0));
         for (JPanel part : List.of(notes, easel, takes)) {
             part.setMinimumSize(new Dimension(LEAST_SIDE, 0));
         }

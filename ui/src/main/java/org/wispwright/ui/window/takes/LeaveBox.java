@@ -1,7 +1,6 @@
 package org.wispwright.ui.window.takes;
 
 import javax.swing.BorderFactory;
-import javax.swing.JButton;
 import javax.swing.JPanel;
 import net.miginfocom.swing.MigLayout;
 import org.wispwright.ui.desk.Desk;
@@ -14,9 +13,9 @@ import org.wispwright.ui.window.Words;
 /** The one question that the desk asks: it is to be closed, and a solve runs. */
 final class LeaveBox extends JPanel {
     private final Sentence words = new Sentence("leave-words");
-    private final JButton keep = button("leave-keep");
-    private final JButton stop = button("leave-stop");
-    private final JButton stay = button("leave-stay");
+    private final Wordy.Push keep = button("leave-keep");
+    private final Wordy.Push stop = button("leave-stop");
+    private final Wordy.Push stay = button("leave-stay");
     private Leaving told = Leaving.NO;
 
     LeaveBox(Desk desk) {
@@ -40,12 +39,11 @@ final class LeaveBox extends JPanel {
         add(box, "wmin 0");
     }
 
-    private static JButton button(String name) {
+    private static Wordy.Push button(String name) {
         String key = "takes." + name.replace('-', '.');
-        JButton button = new JButton(Words.of(key));
+        Wordy.Push button = new Wordy.Push(Words.of(key));
         button.setName(name);
         button.setToolTipText(Words.of(key + ".tip"));
-        button.getAccessibleContext().setAccessibleName(button.getText());
         return button;
     }
 

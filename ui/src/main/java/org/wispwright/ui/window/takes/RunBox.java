@@ -3,7 +3,6 @@ package org.wispwright.ui.window.takes;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
-import javax.swing.JButton;
 import javax.swing.JPanel;
 import net.miginfocom.swing.MigLayout;
 import org.wispwright.optimize.solve.Progress;
@@ -25,9 +24,9 @@ final class RunBox extends JPanel {
     private final List<MetBar> bars = new ArrayList<>();
     private final GotPicture got = new GotPicture();
     private final Sentence gotWords = new Sentence("solve-got-words").in(Palette.QUIET.colour());
-    private final JButton pause = SolveBox.button("take.pause");
-    private final JButton keep = SolveBox.button("take.keep");
-    private final JButton stop = SolveBox.button("take.stop");
+    private final Wordy.Push pause = SolveBox.button("take.pause");
+    private final Wordy.Push keep = SolveBox.button("take.keep");
+    private final Wordy.Push stop = SolveBox.button("take.stop");
 
     RunBox(Desk desk) {
         super(new MigLayout("insets 0, fillx, wrap 1, hidemode 3", "[grow,fill]"));
@@ -59,8 +58,7 @@ final class RunBox extends JPanel {
         where.say(where(now, state));
         left.say(now.at().filter(at -> now.phase() == Phase.SEARCHING).map(at -> Words.of("takes.left", Amounts.duration(at.seconds()),
                 Amounts.duration(at.secondsLeft()))).orElse(""));
-        pause.setText(Words.of(now.canGoOn() ? "takes.go-on" : "action.take.pause"));
-        pause.getAccessibleContext().setAccessibleName(pause.getText());
+        pause.say(Words.of(now.canGoOn() ? "takes.go-on" : "action.take.pause"));
         pause.setEnabled(now.canBePaused() || now.canGoOn());
         keep.setEnabled(now.canBeKept());
         stop.setEnabled(now.wish() != SolveNow.Wish.STOP);

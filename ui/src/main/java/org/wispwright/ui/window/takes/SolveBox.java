@@ -5,8 +5,6 @@ import java.util.Locale;
 import java.util.Map;
 import java.util.stream.Collectors;
 import javax.swing.ButtonGroup;
-import javax.swing.JButton;
-import javax.swing.JCheckBox;
 import javax.swing.JComponent;
 import javax.swing.JPanel;
 import javax.swing.JRadioButton;
@@ -27,15 +25,15 @@ import org.wispwright.ui.window.Words;
 final class SolveBox extends JPanel {
     private final Map<Quality, JRadioButton> qualities = new EnumMap<>(Quality.class);
     private final Map<Quality, Sentence> costs = new EnumMap<>(Quality.class);
-    private final JCheckBox sources = new JCheckBox(Words.of("takes.sources"));
-    private final JCheckBox onwards = new JCheckBox();
+    private final Wordy.Check sources = new Wordy.Check(Words.of("takes.sources"));
+    private final Wordy.Check onwards = new Wordy.Check("");
     private final Sentence asked = new Sentence("smoke-asked").in(Palette.WANTED.colour());
     private final Sentence why = new Sentence("estimate-why").in(Palette.FAULT.colour());
     private final Sentence cut = new Sentence("unfinished-words");
     private final Sentence idle = new Sentence("solve-why").in(Palette.QUIET.colour());
-    private final JButton solve = button("take.solve");
-    private final JButton resume = button("take.resume");
-    private final JButton drop = button("take.drop");
+    private final Wordy.Push solve = button("take.solve");
+    private final Wordy.Push resume = button("take.resume");
+    private final Wordy.Push drop = button("take.drop");
 
     SolveBox(Desk desk) {
         super(new MigLayout("insets 0, fillx, wrap 1, hidemode 3", "[grow,fill]"));
@@ -72,10 +70,9 @@ final class SolveBox extends JPanel {
         add(box, "wmin 0");
     }
 
-    static JButton button(String action) {
-        JButton button = new JButton(Words.of("action." + action));
+    static Wordy.Push button(String action) {
+        Wordy.Push button = new Wordy.Push(Words.of("action." + action));
         named(button, action.replace('.', '-'), Words.of("action." + action + ".tip"));
-        button.getAccessibleContext().setAccessibleName(button.getText());
         return button;
     }
 
@@ -99,7 +96,7 @@ final class SolveBox extends JPanel {
         cut.say(work.unfinished().map(SolveBox::words).orElse(""));
         resume.setVisible(!free);
         resume.setEnabled(Solving.canResume(state));
-        resume.setText(work.unfinished().filter(u -> u.iterations() > 0).map(u -> Words.of("takes.resume", u.iterations()))
+        resume.say(work.unfinished().filter(u -> u.iterations() > 0).map(u -> Words.of("takes.resume", u.iterations()))
                 .orElse(Words.of("action.take.resume")));
         drop.setVisible(!free);
         qualities.get(work.choice().quality()).setSelected(true);
@@ -112,7 +109,7 @@ final class SolveBox extends JPanel {
         int shown = state.takeShown().map(take -> take.number()).orElse(0);
         onwards.setVisible(shown > 0);
         onwards.setEnabled(free);
-        onwards.setText(Words.of("takes.onwards", shown));
+        onwards.say(Words.of("takes.onwards", shown));
         onwards.setSelected(work.choice().onwards());
         solve.setEnabled(Solving.canStart(state));
         idle.say(!state.hasOriginal() ? Words.of("takes.idle.original")

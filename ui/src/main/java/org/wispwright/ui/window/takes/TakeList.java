@@ -4,7 +4,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import javax.swing.JButton;
 import javax.swing.JPanel;
 import javax.swing.JProgressBar;
 import net.miginfocom.swing.MigLayout;
@@ -21,7 +20,7 @@ final class TakeList extends JPanel {
     private final Map<Integer, TakeRow> rows = new LinkedHashMap<>();
     private final Sentence making = new Sentence("original-words");
     private final JProgressBar bar = new JProgressBar();
-    private final JButton again = new JButton(Words.of("action.take.simulate"));
+    private final Wordy.Push again = new Wordy.Push(Words.of("action.take.simulate"));
     private List<TakeEntry> told = List.of();
     private Showing shown;
 

@@ -88,8 +88,8 @@ public final class TakesPanel extends JPanel {
                 DeskAction.of("take.stop", null, s -> running(s).map(n -> n.wish() != SolveNow.Wish.STOP).orElse(false), solving::stop),
                 DeskAction.of("take.resume", null, Solving::canResume, solving::resume),
                 DeskAction.of("take.drop", null, s -> s.work().unfinished().isPresent() && running(s).isEmpty(), solving::dropUnfinished),
-                DeskAction.of("take.next", "alt PAGE_DOWN", s -> next(s, 1).isPresent(), () -> show(1)),
-                DeskAction.of("take.previous", "alt PAGE_UP", s -> next(s, -1).isPresent(), () -> show(-1)),
+                DeskAction.of("take.next", "ctrl shift RIGHT", s -> next(s, 1).isPresent(), () -> show(1)),
+                DeskAction.of("take.previous", "ctrl shift LEFT", s -> next(s, -1).isPresent(), () -> show(-1)),
                 DeskAction.of("take.against", "ctrl shift A", s -> s.takeShown().isPresent(),
                         () -> desk.show(s -> s.withFar(s.near())))));
         for (Quality quality : Quality.values()) {

@@ -66,7 +66,7 @@ class TakesPanelTest {
             assertEquals(Source.ORIGINAL, driver.state().showing().orElseThrow().near());
             click(driver, "take-1-against");
             assertEquals(new Source.Take(1), driver.state().showing().orElseThrow().far());
-            driver.key("alt PAGE_DOWN");
+            driver.key("ctrl shift RIGHT");
             assertEquals(new Source.Take(1), driver.state().showing().orElseThrow().near());
             assertThrows(AssertionError.class, () -> driver.act("take.next"));
             TakesPanel panel = driver.find("takes", TakesPanel.class);
