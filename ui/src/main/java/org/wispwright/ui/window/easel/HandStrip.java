@@ -80,6 +80,7 @@ public final class HandStrip extends JPanel implements Retouching.Follower {
         sentence.setName("hand-sentence");
         sentence.setForeground(Palette.QUIET.colour());
         help.setName("hand-help");
+        help.getAccessibleContext().setAccessibleName(Words.of("hand.go"));
         help.addActionListener(e -> helping.run());
         words.add(name);
         words.add(settings);
