@@ -28,8 +28,8 @@ import org.wispwright.warp.retouch.Retoucher;
 public final class Pictures {
     /** Pixels of a draft: so many are drawn within a few frames of the screen. */
     private static final int DRAFT_PIXELS = 50_000;
-    /** Samples of small pictures and drafts lie at most this share of a cell apart. */
-    private static final double SMALL_STEP_CELLS = 1;
+    /** Samples of drafts lie at most this share of a cell apart. */
+    private static final double DRAFT_STEP_CELLS = 1;
     /** Pictures of at most so many rows are drawn apart from the large ones, so that neither waits for the other. */
     private static final int SMALL_ROWS = 200;
     private static final int FEW_PIXELS = 200_000;
@@ -50,9 +50,10 @@ public final class Pictures {
      * @param view    the view's name
      * @param frame   the frame
      * @param rows    the picture's height
+     * @param step    share of a cell that samples lie apart at most
      * @param retouch of a wish; null for other sources
      */
-    private record Key(Source source, String view, int frame, int rows, Retouch retouch) {
+    private record Key(Source source, String view, int frame, int rows, double step, Retouch retouch) {
     }
 
     Pictures(Workers workers) {
@@ -86,7 +87,7 @@ public final class Pictures {
      */
     public Optional<Picture> ready(OpenShot now, Ask ask) {
         synchronized (kept) {
-            return Optional.ofNullable(kept.get(key(now, ask)));
+            return Optional.ofNullable(kept.get(key(now, ask, PictureWork.STEP_CELLS)));
         }
     }
 
@@ -109,7 +110,7 @@ public final class Pictures {
         }
         Ask draft = new Ask(ask.source(), ask.view(), ask.frame(), draftRows(now, ask));
         if (!(ask.source() instanceof Source.Rendered) && pixels(now, ask) > FEW_PIXELS) {
-            mine.replace(cancel -> draw(now, draft, cancel), picture -> {
+            mine.replace(cancel -> draw(now, draft, DRAFT_STEP_CELLS, cancel), picture -> {
                 show.accept(new Drawn(picture, true));
                 whole(mine, now, ask, show, failed);
             }, thrown -> failed.accept(Desk.words(thrown)));
@@ -130,17 +131,22 @@ public final class Pictures {
      * @throws Cancel.Cancelled if cancelled
      */
     public Picture draw(OpenShot now, Ask ask, Cancel cancel) {
-        Optional<Picture> there = ready(now, ask);
-        if (there.isPresent()) {
-            return there.get();
+        return draw(now, ask, PictureWork.STEP_CELLS, cancel);
+    }
+
+    private Picture draw(OpenShot now, Ask ask, double step, Cancel cancel) {
+        Key key = key(now, ask, step);
+        synchronized (kept) {
+            if (kept.containsKey(key)) {
+                return kept.get(key);
+            }
         }
         cancel.stopIfWished();
-        Key key = key(now, ask);
         Picture picture;
         if (ask.source() instanceof Source.Take take) {
-            picture = take(now.setup(), Takes.of(now.folder()), take.number(), view(now, ask), ask.frame(), cancel);
+            picture = take(now.setup(), Takes.of(now.folder()), take.number(), view(now, ask), ask.frame(), step, cancel);
         } else if (ask.source() instanceof Source.Wanted) {
-            Picture original = draw(now, new Ask(Source.ORIGINAL, ask.view(), ask.frame(), ask.rows()), cancel);
+            Picture original = draw(now, new Ask(Source.ORIGINAL, ask.view(), ask.frame(), ask.rows()), step, cancel);
             cancel.stopIfWished();
             picture = Retoucher.wanted(key.retouch(), original);
         } else {
@@ -150,12 +156,12 @@ public final class Pictures {
         return picture;
     }
 
-    private static Picture take(Shot setup, Takes takes, int number, View view, int frame, Cancel cancel) {
+    private static Picture take(Shot setup, Takes takes, int number, View view, int frame, double step,
+                                Cancel cancel) {
         takes.requireOf(number, setup.flow());
         ScalarGrid density = takes.density(number, frame, setup.flow());
         try (Lanes lanes = new Lanes(Math.max(1, Runtime.getRuntime().availableProcessors() - 1))) {
-            return PictureWork.picture(setup, density, view, view.raster().height() <= SMALL_ROWS ? SMALL_STEP_CELLS : PictureWork.STEP_CELLS,
-                    lanes, cancel);
+            return PictureWork.picture(setup, density, view, step, lanes, cancel);
         }
     }
 
@@ -185,10 +191,10 @@ public final class Pictures {
         return Math.max(1, Math.min(SMALL_ROWS, (int) Math.sqrt(DRAFT_PIXELS / aspect)));
     }
 
-    private static Key key(OpenShot now, Ask ask) {
+    private static Key key(OpenShot now, Ask ask, double step) {
         int rows = ask.rows() == 0 ? view(now, ask).raster().height() : ask.rows();
         Retouch retouch = ask.source() instanceof Source.Wanted wanted ? now.note(wanted.note()).orElseThrow().note().retouch() : null;
-        return new Key(ask.source(), ask.view(), ask.frame(), rows, retouch);
+        return new Key(ask.source(), ask.view(), ask.frame(), rows, step, retouch);
     }
 
     private void keep(OpenShot now, Key key, Picture picture) {

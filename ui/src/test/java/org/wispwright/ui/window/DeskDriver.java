@@ -30,6 +30,7 @@ import org.wispwright.ui.desk.Desk;
 import org.wispwright.ui.desk.DeskState;
 import org.wispwright.ui.desk.Memory;
 import org.wispwright.ui.desk.Workers;
+import org.wispwright.ui.window.easel.EaselProbe;
 
 /**
  * Works the desk as a person does: finds components by their names, moves the pointer, clicks, drags and types with real events on the
@@ -199,6 +200,22 @@ public final class DeskDriver implements AutoCloseable {
         }
         robot.mouseRelease(InputEvent.BUTTON1_DOWN_MASK);
         robot.waitForIdle();
+    }
+
+    /** Lets the person look for a while. */
+    public void pause(int millis) {
+        robot.delay(millis);
+        robot.waitForIdle();
+    }
+
+    /** Where a place of the picture lies on the screen. */
+    public Point placeOnEasel(org.wispwright.warp.matte.Point place) {
+        return EaselProbe.onScreen(find("easel-picture", Component.class), place);
+    }
+
+    /** True if the hand's own picture is on the easel. Swing's thread. */
+    public boolean hasLivePicture() {
+        return EaselProbe.hasLive(find("easel-picture", Component.class));
     }
 
     /** A place in a component on the screen. @param x share of its width @param y share of its height */
