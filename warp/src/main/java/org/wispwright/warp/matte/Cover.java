@@ -5,14 +5,11 @@ package org.wispwright.warp.matte;
  * line that crosses itself or dwells acts once, and how finely it is sampled makes no difference.
  * <p>Where the pressure is the same, the maximum lies at the nearest point, so a piece is looked at only beside itself, and a joint only
  * on the outer side of its bend; the far side of the last point is added when coverage is read. Where pressure changes along a piece, the
- * coverage along it has one peak, found by golden section to within {@value #SEARCH_SHARE} of the edge's width (coverage then falls short
- * by at most 0.002). With a spacing there is one touch at every spacing of arc length and nothing between.
+ * coverage along it has one peak ({@link PressedPiece}), found to within 0.002. With a spacing there is one touch at every spacing of arc
+ * length and nothing between.
  * <p>The bits of a pixel depend on the line alone, neither on the window nor on how the line was handed over.
  */
 public final class Cover {
-    private static final double GOLDEN = (Math.sqrt(5) - 1) / 2;
-    private static final double SEARCH_SHARE = 0.02;
-
     private final Tip tip;
     private final double spacing;
     private final int height;
@@ -24,6 +21,8 @@ public final class Cover {
     private boolean level;
     /** Whether what a touch at the last point gives is still to be taken in. */
     private boolean open;
+    /** Whether all that a touch at the last point gives is taken in. */
+    private boolean whole;
     private double x;
     private double y;
     private double pressure;
@@ -63,6 +62,7 @@ public final class Cover {
         } else {
             piece(bx, by, p);
         }
+        whole = !begun || whole && bx == x && by == y;
         begun = true;
         x = bx;
         y = by;
@@ -80,7 +80,7 @@ public final class Cover {
             System.arraycopy(values, part.left() - window.left() + window.width() * (part.top() - window.top() + j), out,
                     part.width() * j, part.width());
         }
-        if (begun && spacing == 0) {
+        if (begun && spacing == 0 && !whole) {
             new Cover(tip, 0, height, part, out).touch(x, y, pressure);
         }
     }
@@ -125,53 +125,65 @@ public final class Cover {
     }
 
     private void touch(double cx, double cy, double p) {
-        double end = tip.end(p);
-        rows.between(cy - end, cy + end);
+        Tip.Touch touch = tip.touch(p);
+        rows.between(cy - touch.end(), cy + touch.end());
         for (int j = rows.from; j <= rows.to; j++) {
-            double dy = j - cy;
-            double half = Math.sqrt(Math.max(0, end * end - dy * dy));
             rows.all();
-            rows.keep(1, cx - half, cx + half);
-            spread(j, cx, cy, p);
+            spread(j, cx, cy, touch);
         }
     }
 
     /** The outer side of the bend at the last point: neither beside the piece before nor beside the next. */
     private void joint(double nextX, double nextY) {
-        double end = tip.end(pressure);
         if (ux * nextX + uy * nextY > 1 - 1e-12) {
             return;
         }
-        rows.between(y - end, y + end);
+        Tip.Touch touch = tip.touch(pressure);
+        rows.between(y - touch.end(), y + touch.end());
         for (int j = rows.from; j <= rows.to; j++) {
             rows.all();
-            rows.keep(1, x - end, x + end);
             rows.keep(ux, ux * x - uy * (j - y), Double.POSITIVE_INFINITY);
             rows.keep(nextX, Double.NEGATIVE_INFINITY, nextX * x - nextY * (j - y));
-            spread(j, x, y, pressure);
+            spread(j, x, y, touch);
         }
     }
 
-    /** A row's columns take what a touch gives. */
-    private void spread(int j, double cx, double cy, double p) {
-        double end = tip.end(p);
-        double core = Math.max(0, tip.core(p));
-        float most = (float) tip.most(p);
+    /** A row's columns take what a touch gives: all in the core, a share in the edge left and right of it. */
+    private void spread(int j, double cx, double cy, Tip.Touch touch) {
+        double dy2 = (j - cy) * (j - cy);
+        double half2 = touch.end() * touch.end() - dy2;
+        if (half2 <= 0) {
+            return;
+        }
+        double half = Math.sqrt(half2);
+        int left = (int) Math.max(rows.left, Math.ceil(cx - half));
+        int right = (int) Math.min(rows.right, Math.floor(cx + half));
+        double inner2 = touch.core() * touch.core() - dy2;
+        double inner = inner2 > 0 ? Math.sqrt(inner2) : 0;
+        int coreLeft = Math.max(left, inner2 > 0 ? (int) Math.ceil(cx - inner) : right + 1);
+        int coreRight = Math.min(right, inner2 > 0 ? (int) Math.floor(cx + inner) : right);
         int at = window.width() * (j - window.top()) - window.left();
-        double dy = (j - cy) * (j - cy);
-        for (int i = rows.left; i <= rows.right; i++) {
-            double squared = (i - cx) * (i - cx) + dy;
-            if (squared < end * end) {
-                values[at + i] = Math.max(values[at + i], squared <= core * core ? most : (float) tip.value(squared, p));
-            }
+        edge(touch, cx, dy2, left, Math.min(right, coreLeft - 1), at);
+        core((float) touch.most(), at + coreLeft, at + coreRight);
+        edge(touch, cx, dy2, Math.max(left, coreRight + 1), right, at);
+    }
+
+    private void edge(Tip.Touch touch, double cx, double dy2, int left, int right, int at) {
+        for (int i = left; i <= right; i++) {
+            values[at + i] = Math.max(values[at + i], touch.at(Math.sqrt((i - cx) * (i - cx) + dy2)));
+        }
+    }
+
+    private void core(float most, int from, int to) {
+        for (int n = from; n <= to; n++) {
+            values[n] = Math.max(values[n], most);
         }
     }
 
     /** What lies beside a piece of even pressure. */
     private void strip(double vx, double vy, double length) {
-        double end = tip.end(pressure);
-        double core = Math.max(0, tip.core(pressure));
-        float most = (float) tip.most(pressure);
+        Tip.Touch touch = tip.touch(pressure);
+        double end = touch.end();
         double farY = y + length * vy;
         double farX = x + length * vx;
         rows.between(Math.min(y, farY) - end, Math.max(y, farY) + end);
@@ -186,10 +198,7 @@ public final class Cover {
                 double along = (i - x) * vx + dy * vy;
                 double beside = (i - x) * vy - dy * vx;
                 double past = Math.max(0, Math.max(-along, along - length));
-                double squared = beside * beside + past * past;
-                if (squared < end * end) {
-                    values[at + i] = Math.max(values[at + i], squared <= core * core ? most : (float) tip.value(squared, pressure));
-                }
+                values[at + i] = Math.max(values[at + i], touch.at(Math.sqrt(beside * beside + past * past)));
             }
         }
     }
@@ -199,9 +208,10 @@ public final class Cover {
      * to what follows: the next piece, or the touch that ends the line.
      */
     private void cone(double vx, double vy, double length, double p) {
-        double end = tip.end(Math.max(p, pressure));
-        double slope = (p - pressure) / length;
+        PressedPiece pressed = new PressedPiece(tip, pressure, p, length);
+        boolean rises = p > pressure;
         double harder = Math.max(p, pressure);
+        double end = tip.end(harder);
         double core = Math.max(0, tip.core(harder));
         float most = (float) tip.most(harder);
         double farY = y + length * vy;
@@ -212,7 +222,7 @@ public final class Cover {
             rows.all();
             rows.keep(1, Math.min(x, farX) - end, Math.max(x, farX) + end);
             rows.keep(vy, vy * x + vx * dy - end, vy * x + vx * dy + end);
-            if (slope > 0) {
+            if (rises) {
                 // Ahead of the end coverage rises all along the piece.
                 rows.keep(vx, Double.NEGATIVE_INFINITY, vx * x - vy * dy + length);
             }
@@ -225,62 +235,13 @@ public final class Cover {
                 if (squared >= end * end || values[at + i] >= most) {
                     continue;
                 }
-                double fromHarder = slope > 0 ? along - length : along;
+                double fromHarder = rises ? along - length : along;
                 if (beside * beside + fromHarder * fromHarder <= core * core) {
                     values[at + i] = most;
                     continue;
                 }
-                // No point of the piece gives more than the nearest would, pressed as hard as the harder end.
-                double distance = Math.sqrt(squared);
-                if (tip.at(distance, harder) > values[at + i]) {
-                    values[at + i] = Math.max(values[at + i], (float) peak(along, beside * beside, distance, length, slope));
-                }
+                values[at + i] = Math.max(values[at + i], (float) pressed.peak(along, beside * beside, values[at + i]));
             }
         }
-    }
-
-    /** The most along a piece, between the nearest point, which is at {@code distance}, and the end that was pressed harder. */
-    private double peak(double along, double beside2, double distance, double length, double slope) {
-        double near = Math.min(length, Math.max(0, along));
-        double far = slope > 0 ? length : 0;
-        double atNear = tip.at(distance, pressure + slope * near);
-        if (near == far) {
-            return atNear;
-        }
-        double narrow = SEARCH_SHARE * Math.max(tip.fade(), tip.finest());
-        // One peak: if coverage falls away from an end there, that end has it.
-        double step = Math.min(narrow, Math.abs(far - near)) / 8 * Math.signum(far - near);
-        double within = near + step;
-        if (tip.value(beside2 + (along - within) * (along - within), pressure + slope * within) < atNear) {
-            return atNear;
-        }
-        double atFar = tip.value(beside2 + (along - far) * (along - far), pressure + slope * far);
-        within = far - step;
-        if (tip.value(beside2 + (along - within) * (along - within), pressure + slope * within) < atFar) {
-            return atFar;
-        }
-        double best = Math.max(atNear, atFar);
-        double a = near;
-        double b = far;
-        double c = b - GOLDEN * (b - a);
-        double d = a + GOLDEN * (b - a);
-        double atC = tip.value(beside2 + (along - c) * (along - c), pressure + slope * c);
-        double atD = tip.value(beside2 + (along - d) * (along - d), pressure + slope * d);
-        while (Math.abs(b - a) > narrow) {
-            if (atC >= atD) {
-                b = d;
-                d = c;
-                atD = atC;
-                c = b - GOLDEN * (b - a);
-                atC = tip.value(beside2 + (along - c) * (along - c), pressure + slope * c);
-            } else {
-                a = c;
-                c = d;
-                atC = atD;
-                d = a + GOLDEN * (b - a);
-                atD = tip.value(beside2 + (along - d) * (along - d), pressure + slope * d);
-            }
-        }
-        return Math.max(best, Math.max(atC, atD));
     }
 }

@@ -42,8 +42,28 @@ record Tip(double radius, double centre, double middle, double fade, double fine
 
     /** The most that a touch with pressure p gives. */
     double most(double p) {
-        double v = on == Pressure.On.STRENGTH || on == Pressure.On.BOTH ? p : 1;
+        double v = onStrength() ? p : 1;
         return strength * v * (onRadius() ? Math.min(1, 2 * radius * p) : 1);
+    }
+
+    /** A touch with pressure p. */
+    Touch touch(double p) {
+        double q = onRadius() ? p : 1;
+        double perWide = 1 / Math.max(fade * q, finest);
+        return new Touch(end(p), Math.max(0, core(p)), centre + middle * q * perWide, perWide, most(p));
+    }
+
+    /**
+     * A touch whose pressure is known: {@code s = edge - d perWide}, {@code coverage = most s^2 (3 - 2 s)}, s clamped to 0..1.
+     *
+     * @param end  distance from which on it gives nothing
+     * @param core distance up to which it gives all
+     */
+    record Touch(double end, double core, double edge, double perWide, double most) {
+        float at(double distance) {
+            double s = Math.min(1, Math.max(0, edge - distance * perWide));
+            return (float) (most * s * s * (3 - 2 * s));
+        }
     }
 
     /** Coverage at the squared distance for pressure p; where there is none, a number of 0 or less that falls with the distance. */
@@ -58,7 +78,13 @@ record Tip(double radius, double centre, double middle, double fade, double fine
         return s <= 0 ? s : s >= 1 ? most(p) : most(p) * s * s * (3 - 2 * s);
     }
 
-    private boolean onRadius() {
+    /** Whether pressure scales the radius. */
+    boolean onRadius() {
         return on == Pressure.On.RADIUS || on == Pressure.On.BOTH;
+    }
+
+    /** Whether pressure scales the strength. */
+    boolean onStrength() {
+        return on == Pressure.On.STRENGTH || on == Pressure.On.BOTH;
     }
 }

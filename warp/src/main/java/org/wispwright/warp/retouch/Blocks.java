@@ -6,8 +6,8 @@ import org.wispwright.warp.matte.Window;
 
 /**
  * A picture at one half, one quarter, ... 1/{@value #WIDEST} of its raster: blocks of 2, 4, ... pixels a side, aligned to its top left
- * corner, made where they are asked for and made anew where the picture changed. Beyond the border stands the border pixel: every level has
- * two rings of blocks around it, and those beyond the second are like it.
+ * corner, made where they are asked for and made anew where the picture changed since. Beyond the border stands the border pixel: every
+ * level has two rings of blocks around it, and those beyond the second are like it.
  * <p>Level l has blocks of k = 2^l pixels, {@code columns(l) x rows(l)} of them and the rings. From level to level along both axes
  * {@code out[i] = (in[2i-1] + 3 in[2i] + 3 in[2i+1] + in[2i+2]) / 8}, the refinement of the quadratic B-spline, so a block is the picture
  * weighed with about that spline, of variance {@code (k^2 - 1) / 4} pixels. A plain mean over the block would be cheaper, but lets a
@@ -25,7 +25,8 @@ final class Blocks {
     private final int tilesAcross;
     private final int tilesDown;
     private final float[][] levels = new float[TOP + 1][];
-    private final boolean[][] made = new boolean[TOP + 1][];
+    /** By level, four numbers a tile: the first and last column and row of its blocks that are yet to be made; none if 0 comes before. */
+    private final int[][] stale = new int[TOP + 1][];
     private float[] rgba;
 
     Blocks(Picture picture) {
@@ -46,20 +47,18 @@ final class Blocks {
 
     /** Nothing made so far holds. */
     void forget() {
-        for (boolean[] tiles : made) {
-            if (tiles != null) {
-                Arrays.fill(tiles, false);
-            }
+        for (int level = 1; level <= TOP && stale[level] != null; level++) {
+            everything(level);
         }
     }
 
-    /** The picture changed in a window: what was made there, and nothing else, is made anew. */
+    /** The picture changed in a window: what was made there, and nothing else, is made anew when it is asked for. */
     void changed(Window window) {
         int left = window.left();
         int right = window.left() + window.width() - 1;
         int top = window.top();
         int bottom = window.top() + window.height() - 1;
-        for (int level = 1; level <= TOP && made[level] != null; level++) {
+        for (int level = 1; level <= TOP && stale[level] != null; level++) {
             // Near a border the rings beyond it change too.
             left = left <= 1 ? -2 : left - 2 >> 1;
             top = top <= 1 ? -2 : top - 2 >> 1;
@@ -70,14 +69,34 @@ final class Blocks {
             int inTile = TOP - level;
             for (int ty = tile(top, inTile, tilesDown); ty <= tile(bottom, inTile, tilesDown); ty++) {
                 for (int tx = tile(left, inTile, tilesAcross); tx <= tile(right, inTile, tilesAcross); tx++) {
-                    if (made[level][tx + tilesAcross * ty]) {
-                        fill(level, Math.max(left, first(level, tx)), Math.max(top, first(level, ty)),
-                                Math.min(right, last(level, tx, tilesAcross, columns(level))),
-                                Math.min(bottom, last(level, ty, tilesDown, rows(level))));
-                    }
+                    stale(level, tx, ty, left, top, right, bottom);
                 }
             }
         }
+    }
+
+    private void everything(int level) {
+        for (int ty = 0; ty < tilesDown; ty++) {
+            for (int tx = 0; tx < tilesAcross; tx++) {
+                none(level, 4 * (tx + tilesAcross * ty));
+                stale(level, tx, ty, -2, -2, columns(level) + 1, rows(level) + 1);
+            }
+        }
+    }
+
+    /** The blocks of a tile within left..right, top..bottom are to be made anew. */
+    private void stale(int level, int tx, int ty, int left, int top, int right, int bottom) {
+        int[] box = stale[level];
+        int at = 4 * (tx + tilesAcross * ty);
+        boolean none = box[at] > box[at + 1];
+        int l = Math.max(left, first(level, tx));
+        int r = Math.min(right, last(level, tx, tilesAcross, columns(level)));
+        int t = Math.max(top, first(level, ty));
+        int b = Math.min(bottom, last(level, ty, tilesDown, rows(level)));
+        box[at] = none ? l : Math.min(l, box[at]);
+        box[at + 1] = none ? r : Math.max(r, box[at + 1]);
+        box[at + 2] = none ? t : Math.min(t, box[at + 2]);
+        box[at + 3] = none ? b : Math.max(b, box[at + 3]);
     }
 
     /** Blocks across the picture at a level, those outside not counted. */
@@ -105,17 +124,15 @@ final class Blocks {
         if (level == 0) {
             return;
         }
-        if (made[level] == null) {
-            made[level] = new boolean[tilesAcross * tilesDown];
+        if (stale[level] == null) {
+            stale[level] = new int[4 * tilesAcross * tilesDown];
             levels[level] = new float[4 * (columns(level) + 4) * (rows(level) + 4)];
+            everything(level);
         }
         int inTile = TOP - level;
         for (int ty = tile(j0, inTile, tilesDown); ty <= tile(j1, inTile, tilesDown); ty++) {
             for (int tx = tile(i0, inTile, tilesAcross); tx <= tile(i1, inTile, tilesAcross); tx++) {
-                if (!made[level][tx + tilesAcross * ty]) {
-                    makeTile(level, tx, ty);
-                    made[level][tx + tilesAcross * ty] = true;
-                }
+                makeTile(level, 4 * (tx + tilesAcross * ty));
             }
         }
     }
@@ -133,13 +150,22 @@ final class Blocks {
         return tile == tiles - 1 ? blocks + 1 : (tile + 1) * (WIDEST >> level) - 1;
     }
 
-    private void makeTile(int level, int tx, int ty) {
-        int left = first(level, tx);
-        int top = first(level, ty);
-        int right = last(level, tx, tilesAcross, columns(level));
-        int bottom = last(level, ty, tilesDown, rows(level));
-        make(level - 1, 2 * left - 1, 2 * top - 1, 2 * right + 2, 2 * bottom + 2);
-        fill(level, left, top, right, bottom);
+    private void makeTile(int level, int at) {
+        int[] box = stale[level];
+        int left = box[at];
+        int right = box[at + 1];
+        int top = box[at + 2];
+        int bottom = box[at + 3];
+        if (left <= right) {
+            make(level - 1, 2 * left - 1, 2 * top - 1, 2 * right + 2, 2 * bottom + 2);
+            fill(level, left, top, right, bottom);
+            none(level, at);
+        }
+    }
+
+    private void none(int level, int at) {
+        stale[level][at] = 0;
+        stale[level][at + 1] = -1;
     }
 
     /** Blocks left..right, top..bottom of a level from the one before. */

@@ -1,7 +1,9 @@
 package org.wispwright.warp.retouch;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
+import java.util.Objects;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.matte.Cover;
 import org.wispwright.warp.matte.Matte;
@@ -30,6 +32,8 @@ final class Brushwork {
     private final Surroundings surroundings;
     private final Push push;
     private final float[][] mattes;
+    /** By tile, the window of it that was worked on so far; null for none. */
+    private final Window[] worked;
     private Point last;
     private double lastPressure;
 
@@ -55,6 +59,7 @@ final class Brushwork {
         surroundings = new Surroundings(stroke, before, blocks, tiles, spare);
         push = stroke.brush() == Brush.PUSH ? new Push(stroke.sweep(), before, spare) : null;
         mattes = stroke.within().isPresent() ? new float[tiles][] : null;
+        worked = new Window[tiles];
     }
 
     /** The window of a raster that a line's points may reach with a radius in heights; null if it lies beyond the raster. */
@@ -95,6 +100,11 @@ final class Brushwork {
         }
     }
 
+    /** Windows that hold all pixels with coverage in what was refreshed so far; no two share a pixel. */
+    List<Window> worked() {
+        return Arrays.stream(worked).filter(Objects::nonNull).toList();
+    }
+
     /** Writes the pixels of a window as the line so far leaves them; {@code picture} may be the picture before the stroke itself. */
     void refresh(Window window, Picture picture) {
         boolean once = picture == before;
@@ -112,12 +122,14 @@ final class Brushwork {
                     }
                     continue;
                 }
+                int tile = tx + tilesAcross * ty;
+                worked[tile] = worked[tile] == null ? part : worked[tile].around(part);
                 float[] out = spare.floats(4);
                 read(before, part, out);
                 within(coverage, part, tx, ty);
                 work(tx, ty, part, coverage, out);
                 if (once) {
-                    surroundings.done(tx + tilesAcross * ty);
+                    surroundings.done(tile);
                 }
                 if (once && looksAround()) {
                     // Later tiles still look at what was here.

@@ -6,8 +6,8 @@ import org.wispwright.warp.matte.Window;
 
 /**
  * A picture being retouched: operations change it one after the other, and a stroke may be drawn on it point by point
- * ({@link LiveStroke}). What brushes must know of the picture's wide surroundings is kept beside it and made anew only where it changed, so
- * that the next stroke starts quickly. Not for several threads at once.
+ * ({@link LiveStroke}). What brushes must know of the picture's wide surroundings is kept beside it and made anew only where it changed, and
+ * only when a brush asks for it. Not for several threads at once.
  * <p>Holds two copies of the picture once a stroke was begun, one before: 16 bytes a pixel each, 5 more for the surroundings, 4 for
  * coverage; and up to 16 MB of arrays that strokes have done with.
  */
@@ -72,9 +72,11 @@ public final class Canvas {
         }
         laid.refresh(window, picture);
         laid.over();
-        blocks.changed(window);
-        if (before != null) {
-            copy(picture, before, window);
+        for (Window part : laid.worked()) {
+            blocks.changed(part);
+            if (before != null) {
+                copy(picture, before, part);
+            }
         }
     }
 
@@ -103,21 +105,21 @@ public final class Canvas {
         }
     }
 
-    /** The stroke being drawn is over; all it changed lies in {@code window}, null for nothing. */
-    void over(Window window, boolean kept) {
+    /** The stroke being drawn is over. */
+    void over(boolean kept) {
         live = null;
         work.over();
-        work = null;
-        if (window != null) {
-            copy(kept ? picture : before, kept ? before : picture, window);
-            for (int y = window.top(); y < window.top() + window.height(); y++) {
-                int at = window.left() + picture.width() * y;
-                Arrays.fill(coverage, at, at + window.width(), 0f);
+        for (Window part : work.worked()) {
+            copy(kept ? picture : before, kept ? before : picture, part);
+            for (int y = part.top(); y < part.top() + part.height(); y++) {
+                int at = part.left() + picture.width() * y;
+                Arrays.fill(coverage, at, at + part.width(), 0f);
             }
             if (kept) {
-                blocks.changed(window);
+                blocks.changed(part);
             }
         }
+        work = null;
         blocks.from(picture);
     }
 

@@ -79,7 +79,7 @@ public final class LiveStroke {
     public Stroke end() {
         requireNotOver();
         over = true;
-        canvas.over(reached, true);
+        canvas.over(true);
         return stroke();
     }
 
@@ -92,7 +92,7 @@ public final class LiveStroke {
     public Optional<Window> cancel() {
         requireNotOver();
         over = true;
-        canvas.over(reached, false);
+        canvas.over(false);
         return Optional.ofNullable(reached);
     }
 
