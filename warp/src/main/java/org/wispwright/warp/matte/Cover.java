@@ -16,6 +16,10 @@ public final class Cover {
     private final Window window;
     private final float[] values;
     private final Rows rows;
+    private final EvenRow even;
+    private PressedRow pixels;
+    private PressedRow searched;
+    private int[] columns;
     private boolean begun;
     /** Whether the last piece had even pressure. */
     private boolean level;
@@ -49,6 +53,7 @@ public final class Cover {
         this.window = window;
         this.values = values;
         rows = new Rows(window);
+        even = new EvenRow(window.width());
     }
 
     /** The line goes on to a point; the first begins it. Writes what is sure by now; {@link #read} adds the end. */
@@ -163,14 +168,14 @@ public final class Cover {
         int coreLeft = Math.max(left, inner2 > 0 ? (int) Math.ceil(cx - inner) : right + 1);
         int coreRight = Math.min(right, inner2 > 0 ? (int) Math.floor(cx + inner) : right);
         int at = window.width() * (j - window.top()) - window.left();
-        edge(touch, cx, dy2, left, Math.min(right, coreLeft - 1), at);
+        edge(touch, cx, j - cy, left, Math.min(right, coreLeft - 1), at);
         core((float) touch.most(), at + coreLeft, at + coreRight);
-        edge(touch, cx, dy2, Math.max(left, coreRight + 1), right, at);
+        edge(touch, cx, j - cy, Math.max(left, coreRight + 1), right, at);
     }
 
-    private void edge(Tip.Touch touch, double cx, double dy2, int left, int right, int at) {
-        for (int i = left; i <= right; i++) {
-            values[at + i] = Math.max(values[at + i], touch.at(Math.sqrt((i - cx) * (i - cx) + dy2)));
+    private void edge(Tip.Touch touch, double cx, double dy, int left, int right, int at) {
+        if (left <= right) {
+            even.take(touch, left, right - left + 1, cx, dy, 1, 0, 0, values, at + left);
         }
     }
 
@@ -194,11 +199,8 @@ public final class Cover {
             rows.keep(vx, vx * x - vy * dy, vx * x - vy * dy + length);
             rows.keep(vy, vy * x + vx * dy - end, vy * x + vx * dy + end);
             int at = window.width() * (j - window.top()) - window.left();
-            for (int i = rows.left; i <= rows.right; i++) {
-                double along = (i - x) * vx + dy * vy;
-                double beside = (i - x) * vy - dy * vx;
-                double past = Math.max(0, Math.max(-along, along - length));
-                values[at + i] = Math.max(values[at + i], touch.at(Math.sqrt(beside * beside + past * past)));
+            if (rows.left <= rows.right) {
+                even.take(touch, rows.left, rows.right - rows.left + 1, x, dy, vx, vy, length, values, at + rows.left);
             }
         }
     }
@@ -208,39 +210,31 @@ public final class Cover {
      * to what follows: the next piece, or the touch that ends the line.
      */
     private void cone(double vx, double vy, double length, double p) {
-        PressedPiece pressed = new PressedPiece(tip, pressure, p, length);
+        if (pixels == null) {
+            pixels = new PressedRow(window.width());
+            searched = new PressedRow(window.width());
+            columns = new int[window.width()];
+        }
+        PressedPiece pressed = new PressedPiece(tip, x, y, vx, vy, length, pressure, p, pixels, searched,
+                columns);
         boolean rises = p > pressure;
-        double harder = Math.max(p, pressure);
-        double end = tip.end(harder);
-        double core = Math.max(0, tip.core(harder));
-        float most = (float) tip.most(harder);
+        double end = pressed.hardest().end();
         double farY = y + length * vy;
         double farX = x + length * vx;
         rows.between(Math.min(y, farY) - end, Math.max(y, farY) + end);
         for (int j = rows.from; j <= rows.to; j++) {
             double dy = j - y;
+            double off = Math.max(0, Math.max(Math.min(y, farY) - j, j - Math.max(y, farY)));
+            double half = Math.sqrt(Math.max(0, end * end - off * off));
             rows.all();
-            rows.keep(1, Math.min(x, farX) - end, Math.max(x, farX) + end);
+            rows.keep(1, Math.min(x, farX) - half, Math.max(x, farX) + half);
             rows.keep(vy, vy * x + vx * dy - end, vy * x + vx * dy + end);
             if (rises) {
                 // Ahead of the end coverage rises all along the piece.
                 rows.keep(vx, Double.NEGATIVE_INFINITY, vx * x - vy * dy + length);
             }
-            int at = window.width() * (j - window.top()) - window.left();
-            for (int i = rows.left; i <= rows.right; i++) {
-                double along = (i - x) * vx + dy * vy;
-                double beside = (i - x) * vy - dy * vx;
-                double past = Math.max(0, Math.max(-along, along - length));
-                double squared = beside * beside + past * past;
-                if (squared >= end * end || values[at + i] >= most) {
-                    continue;
-                }
-                double fromHarder = rises ? along - length : along;
-                if (beside * beside + fromHarder * fromHarder <= core * core) {
-                    values[at + i] = most;
-                    continue;
-                }
-                values[at + i] = Math.max(values[at + i], (float) pressed.peak(along, beside * beside, values[at + i]));
+            if (rows.left <= rows.right) {
+                pressed.row(j, rows.left, rows.right, values, window.width() * (j - window.top()) - window.left());
             }
         }
     }

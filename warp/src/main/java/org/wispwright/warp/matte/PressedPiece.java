@@ -6,109 +6,183 @@ package org.wispwright.warp.matte;
  * <pre>
  * c' = 6 most s (1 - s) s' + most' s^2 (3 - 2 s),   s' = (middle q' - d') / wide - (middle q - d) wide' / wide^2,   wide = max(fade q, finest).
  * </pre>
- * Coverage has one peak, which lies between the nearest place and the end that was pressed harder: at an end if c' says so there, else
- * where c' changes its sign, found by halving to within {@value #SEARCH_SHARE} of the edge's width.
+ * Coverage has one peak, between the nearest place and the end that was pressed harder: at the nearest place if c' falls there, which is
+ * asked of a whole row; at the harder end if c' still rises there; else where c' changes its sign: Newton's steps for many pixels at once
+ * ({@link PressedRow}), and where these do not find coverage to within {@value #ENOUGH}, halving until the place is known to within
+ * {@value #SEARCH_SHARE} of the edge's width.
  */
 final class PressedPiece {
     private static final double SEARCH_SHARE = 0.02;
+    /** Coverage that is not searched for further. */
+    private static final double ENOUGH = 0.0005;
+    private static final int STEPS = 3;
 
     private final Tip tip;
+    private final double startX;
+    private final double startY;
+    private final double vx;
+    private final double vy;
     private final double pressure;
     private final double length;
     private final double slope;
-    private final double harder;
+    private final boolean rising;
+    private final Tip.Touch hardest;
     private final boolean onRadius;
     private final boolean onStrength;
     private final double narrow;
-    private final double perWide;
+    /** A row's pixels, and those of them whose peak is not at the nearest place. */
+    private final PressedRow pixels;
+    private final PressedRow searched;
+    private final int[] columns;
+    private final PressedRow.Shape shape;
+    /** Whether what the shape has is even along the piece, so that many pixels can be looked at in one go. */
+    private final boolean even;
     /** Coverage at the place last looked at; where there is none, a number of 0 or less that falls with the distance. */
     private double here;
-    /** A number of the sign of c' there. */
+    /** A number of the sign of its slope there. */
     private double rises;
 
-    /** A piece from {@code pressure} to {@code pressureEnd}, which differ; length in pixels, above 0. */
-    PressedPiece(Tip tip, double pressure, double pressureEnd, double length) {
+    /**
+     * A piece from a place in pixels along a direction of length 1; its pressures differ, its length is above 0.
+     *
+     * @param pixels   room for a row: overwritten
+     * @param searched as much
+     */
+    PressedPiece(Tip tip, double startX, double startY, double vx, double vy, double length, double pressure, double pressureEnd,
+            PressedRow pixels, PressedRow searched, int[] columns) {
         this.tip = tip;
+        this.startX = startX;
+        this.startY = startY;
+        this.vx = vx;
+        this.vy = vy;
         this.pressure = pressure;
         this.length = length;
         slope = (pressureEnd - pressure) / length;
-        harder = Math.max(pressure, pressureEnd);
+        rising = slope > 0;
+        hardest = tip.touch(Math.max(pressure, pressureEnd));
         onRadius = tip.onRadius();
         onStrength = tip.onStrength();
         narrow = SEARCH_SHARE * Math.max(tip.fade(), tip.finest());
-        perWide = 1 / Math.max(tip.fade(), tip.finest());
+        double qStart = onRadius ? pressure : 1;
+        double qEnd = onRadius ? pressureEnd : 1;
+        shape = new PressedRow.Shape((float) length, PressedRow.Even.between(tip.middle() * qStart, tip.middle() * qEnd, length),
+                PressedRow.Even.between(Math.max(tip.fade() * qStart, tip.finest()), Math.max(tip.fade() * qEnd, tip.finest()), length),
+                PressedRow.Even.between(tip.most(pressure), tip.most(pressureEnd), length), (float) tip.centre(), rising ? 1 : -1);
+        double softer = onRadius ? Math.min(pressure, pressureEnd) : 1;
+        even = !onRadius || 2 * tip.radius() * softer >= 1
+                && (tip.fade() * softer >= tip.finest() || tip.fade() * Math.max(qStart, qEnd) <= tip.finest());
+        this.pixels = pixels;
+        this.searched = searched;
+        this.columns = columns;
     }
 
-    /**
-     * The most along the piece.
-     *
-     * @param along   where the pixel is along it, from its start; may be off its ends
-     * @param beside2 square of how far the pixel is beside it
-     * @param enough  the search may end where the peak is found to be no more than this
-     */
-    double peak(double along, double beside2, double enough) {
-        double near = Math.min(length, Math.max(0, along));
-        double far = slope > 0 ? length : 0;
-        look(along, beside2, near);
-        double best = here;
-        double sign = Math.signum(far - near);
-        // No place gives more than the nearest would, pressed as hard as the harder end.
-        if (near == far || sign * rises < 0 || tip.value(beside2 + (along - near) * (along - near), harder) <= enough) {
-            return best;
+    /** What a touch at the harder end gives; no place gives more. */
+    Tip.Touch hardest() {
+        return hardest;
+    }
+
+    /** Columns left to right of row j take the most along the piece; {@code at} is the index of the row's column 0. */
+    void row(int j, int left, int right, float[] values, int at) {
+        double dy = j - startY;
+        if (!even) {
+            for (int i = left; i <= right; i++) {
+                values[at + i] = peak((i - startX) * vx + dy * vy, (i - startX) * vy - dy * vx, values[at + i]);
+            }
+            return;
         }
-        look(along, beside2, far);
-        best = Math.max(best, here);
-        if (sign * rises > 0) {
-            return best;
-        }
-        double a = near;
-        double b = far;
-        while (Math.abs(b - a) > narrow) {
-            double middle = (a + b) / 2;
-            look(along, beside2, middle);
-            best = Math.max(best, here);
-            if (sign * rises > 0) {
-                a = middle;
-            } else {
-                b = middle;
+        int column = (int) Math.floor(startX);
+        int count = right - left + 1;
+        pixels.row(count, left - column, (float) (startX - column), (float) dy, (float) vx, (float) vy);
+        pixels.nearest(count, shape);
+        pixels.bound(count, hardest);
+        int open = 0;
+        for (int n = 0; n < count; n++) {
+            float was = values[at + left + n];
+            if (pixels.value[n] > was) {
+                values[at + left + n] = pixels.value[n];
+            }
+            if (pixels.rises[n] >= 0 && pixels.bound[n] > was) {
+                columns[open] = left + n;
+                searched.along[open] = pixels.along[n];
+                searched.beside2[open++] = pixels.beside2[n];
             }
         }
-        look(along, beside2, (a + b) / 2);
-        return Math.max(best, here);
+        if (open > 0) {
+            search(dy, open, values, at);
+        }
+    }
+
+    /** The same for those columns whose peak is not at the nearest place. */
+    private void search(double dy, int open, float[] values, int at) {
+        searched.begin(open, shape, (float) hardest.core());
+        for (int step = 0; step <= STEPS; step++) {
+            for (int n = 0; n < open; n++) {
+                int pixel = at + columns[n];
+                values[pixel] = Math.max(values[pixel], searched.value[n]);
+            }
+            searched.newton(open, shape);
+            if (step < STEPS) {
+                searched.step(open, shape);
+            }
+        }
+        float far = rising ? (float) length : 0;
+        for (int n = 0; n < open; n++) {
+            boolean atEnd = searched.place[n] == far && searched.rises[n] >= 0;
+            if (!atEnd && !searched.found(n, (float) narrow, (float) ENOUGH)) {
+                int i = columns[n];
+                values[at + i] = peak((i - startX) * vx + dy * vy, (i - startX) * vy - dy * vx, values[at + i]);
+            }
+        }
+    }
+
+    /** The most along the piece for a pixel at a place beside it, searched by halves; {@code was} if that is more. */
+    private float peak(double along, double beside, float was) {
+        double near = Math.min(length, Math.max(0, along));
+        double far = rising ? length : 0;
+        double beside2 = beside * beside;
+        // No place gives more than the nearest would, pressed as hard as the harder end.
+        if (!(hardest.at(Math.sqrt(beside2 + (along - near) * (along - near))) > was)) {
+            return was;
+        }
+        look(along, beside2, far);
+        double best = Math.max(was, here);
+        near = rises >= 0 ? far : near;
+        look(along, beside2, near);
+        best = Math.max(best, here);
+        far = rises < 0 ? near : far;
+        while (Math.abs(far - near) > narrow) {
+            double middle = (near + far) / 2;
+            look(along, beside2, middle);
+            best = Math.max(best, here);
+            near = rises >= 0 ? middle : near;
+            far = rises < 0 ? middle : far;
+        }
+        return (float) best;
     }
 
     private void look(double along, double beside2, double t) {
         double away = t - along;
-        double d = Math.sqrt(beside2 + away * away);
+        double distance = Math.sqrt(beside2 + away * away);
         double p = pressure + slope * t;
-        double s;
-        double rise;
-        // Both times d, so that nothing is divided by it.
-        if (onRadius) {
-            double wide = tip.fade() * p;
-            double per = 1 / Math.max(wide, tip.finest());
-            double inside = (tip.middle() * p - d) * per;
-            s = tip.centre() + inside;
-            rise = (tip.middle() * slope * d - away - (wide > tip.finest() ? inside * tip.fade() * slope * d : 0)) * per;
-        } else {
-            s = tip.centre() + (tip.middle() - d) * perWide;
-            rise = -away * perWide;
-        }
-        if (s <= 0) {
-            here = s;
-            rises = rise;
-            return;
-        }
+        double q = onRadius ? p : 1;
+        double qSlope = onRadius ? slope : 0;
+        double wide = tip.fade() * q;
+        double per = 1 / Math.max(wide, tip.finest());
+        double inside = (tip.middle() * q - distance) * per;
+        double s = Math.min(1, tip.centre() + inside);
+        double ahead = rising ? 1 : -1;
+        // Slopes times the distance, so that nothing is divided by it.
+        double side = tip.middle() - (wide > tip.finest() ? inside * tip.fade() : 0);
+        double sRises = ahead * (side * qSlope * distance - away) * per;
         double most = tip.most(p);
-        double grows = grows(p);
-        here = s >= 1 ? most : most * s * s * (3 - 2 * s);
-        rises = s >= 1 ? grows : 6 * most * (1 - s) * rise + grows * s * (3 - 2 * s) * d;
+        here = s <= 0 ? s : most * s * s * (3 - 2 * s);
+        rises = s <= 0 ? sRises : 6 * most * (1 - s) * sRises + ahead * mostSlope(p) * s * (3 - 2 * s) * distance;
     }
 
-    /** The slope of {@link Tip#most} along the piece. */
-    private double grows(double p) {
+    /** The slope of what a touch gives at the most. */
+    private double mostSlope(double p) {
         double share = onRadius ? Math.min(1, 2 * tip.radius() * p) : 1;
-        double shareGrows = onRadius && share < 1 ? 2 * tip.radius() * slope : 0;
-        return tip.strength() * (onStrength ? slope * share + p * shareGrows : shareGrows);
+        double shareSlope = onRadius && share < 1 ? 2 * tip.radius() * slope : 0;
+        return tip.strength() * (onStrength ? slope * share + p * shareSlope : shareSlope);
     }
 }

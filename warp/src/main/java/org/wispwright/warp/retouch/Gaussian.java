@@ -160,23 +160,25 @@ final class Gaussian {
             int high, float[] out, int stride) {
         int mask = (1 << level) - 1;
         int row = channels * wide;
-        float[] lines = new float[row * down];
+        float[][] lines = new float[down][row];
         for (int j = 0; j < down; j++) {
             for (int i = 0; i < wide; i++) {
                 int w = 4 * (x + i & mask);
                 mixOne(coarse, channels * (first(x + i, level) - i0 + across * j), channels, splines[w], splines[w + 1], splines[w + 2],
-                        splines[w + 3], lines, row * j + channels * i);
+                        splines[w + 3], lines[j], channels * i);
             }
         }
+        float[] mixed = new float[row];
         for (int j = 0; j < high; j++) {
             int w = 4 * (y + j & mask);
-            mixRows(lines, row * (first(y + j, level) - j0), row, splines[w], splines[w + 1], splines[w + 2], splines[w + 3], out,
-                    stride * j);
+            int n = first(y + j, level) - j0;
+            mixRows(lines[n], lines[n + 1], lines[n + 2], lines[n + 3], splines[w], splines[w + 1], splines[w + 2], splines[w + 3], mixed);
+            System.arraycopy(mixed, 0, out, stride * j, row);
         }
     }
 
     // The loops stand in methods of their own, however few their lines: the compiler then makes each of them quick on its own, whichever
-    // brush came first.
+    // brush came first. Where all arrays have one index it does several numbers at a time, so rows are copied to where that is so.
     private static void mixOne(float[] in, int from, int channels, float a, float b, float c, float d, float[] out, int at) {
         for (int n = 0; n < channels; n++) {
             int i = from + n;
@@ -184,12 +186,10 @@ final class Gaussian {
         }
     }
 
-    private static void mixRows(float[] in, int from, int row, float a, float b, float c, float d, float[] out, int at) {
-        int second = from + row;
-        int third = second + row;
-        int fourth = third + row;
-        for (int n = 0; n < row; n++) {
-            out[at + n] = a * in[from + n] + b * in[second + n] + c * in[third + n] + d * in[fourth + n];
+    private static void mixRows(float[] first, float[] second, float[] third, float[] fourth, float a, float b, float c, float d,
+            float[] out) {
+        for (int n = 0; n < out.length; n++) {
+            out[n] = a * first[n] + b * second[n] + c * third[n] + d * fourth[n];
         }
     }
 
@@ -228,9 +228,9 @@ final class Gaussian {
         int row = channels * wide;
         int top = Math.max(0, Math.min(in.rows() - 1, j0 - reach));
         int bottom = Math.max(0, Math.min(in.rows() - 1, j0 + high - 1 + reach));
-        float[] lines = new float[row * (bottom - top + 1)];
+        float[][] lines = new float[bottom - top + 1][row];
         float[] line = new float[row + 2 * channels * reach];
-        float[] sums = new float[row];
+        float[] shifted = new float[row];
         for (int j = top; j <= bottom; j++) {
             for (int i = i0 - reach, n = 0; n < line.length; i++) {
                 int from = in.start() + 4 * (Math.min(in.columns() - 1, Math.max(0, i)) + in.columns() * j) + 4 - channels;
@@ -238,30 +238,24 @@ final class Gaussian {
                     line[n++] = in.rgba()[from + c];
                 }
             }
-            alongRow(line, channels, weights, sums);
-            System.arraycopy(sums, 0, lines, row * (j - top), row);
+            for (int n = -reach; n <= reach; n++) {
+                System.arraycopy(line, channels * (reach + n), shifted, 0, row);
+                add(lines[j - top], weights[Math.abs(n)], shifted);
+            }
         }
+        float[] sums = new float[row];
         for (int j = 0; j < high; j++) {
             Arrays.fill(sums, 0f);
             for (int n = -reach; n <= reach; n++) {
-                int from = row * (Math.min(bottom, Math.max(top, j0 + j + n)) - top);
-                add(sums, weights[Math.abs(n)], lines, from);
+                add(sums, weights[Math.abs(n)], lines[Math.min(bottom, Math.max(top, j0 + j + n)) - top]);
             }
             System.arraycopy(sums, 0, out, stride * j, row);
         }
     }
 
-    private static void alongRow(float[] line, int channels, float[] weights, float[] sums) {
-        Arrays.fill(sums, 0f);
-        int reach = weights.length - 1;
-        for (int n = -reach; n <= reach; n++) {
-            add(sums, weights[Math.abs(n)], line, channels * (reach + n));
-        }
-    }
-
-    private static void add(float[] sums, float weight, float[] in, int from) {
+    private static void add(float[] sums, float weight, float[] in) {
         for (int n = 0; n < sums.length; n++) {
-            sums[n] += weight * in[from + n];
+            sums[n] += weight * in[n];
         }
     }
 }
