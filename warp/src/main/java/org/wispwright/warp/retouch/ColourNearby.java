@@ -9,7 +9,8 @@ import org.wispwright.render.picture.Picture;
  * picture has no smoke.
  * <p>Works on the picture's {@link Blocks}: of at most {@value #ROWS} rows, and coarser yet for a wide brush, whose colour is as smooth;
  * each wider Gaussian on blocks as wide as it allows. That is enough for a colour and independent of the raster. Between blocks, cubic
- * B-splines.
+ * B-splines. Gaussians on wider blocks are made for the whole picture, the others, and the colours, {@value #CHUNK} x {@value #CHUNK}
+ * blocks at a time, where they are asked for.
  * <p>Source: Knutsson and Westin (1993), CVPR 93, 515-523.
  */
 final class ColourNearby {
@@ -18,6 +19,7 @@ final class ColourNearby {
     /** Narrowest Gaussian on blocks, in blocks. */
     private static final double LEAST = 1.5;
     private static final double NARROWEST = 0.75;
+    private static final int CHUNK = 8;
 
     private final Blocks blocks;
     private final int width;
@@ -26,8 +28,14 @@ final class ColourNearby {
     private final int across;
     private final int down;
     private final float[] splines;
-    /** Colours of blocks -2..columns+1, -2..rows+1. */
-    private final float[] colour;
+    private final double narrowest;
+    /** By level: the sum of the kernel's Gaussians on its blocks, -3..columns+2, -3..rows+2; null for none. */
+    private final float[][] wide = new float[Blocks.TOP + 1][];
+    /** The mean's part of the kernel. */
+    private final double[] mean;
+    /** Colours of blocks -2..columns+1, -2..rows+1, in chunks. */
+    private final float[][] chunks;
+    private final int chunksAcross;
 
     /** Prepares the colours of a picture, whose blocks these are, for new smoke whose size is about {@code sigma}, in pixels. */
     ColourNearby(Blocks blocks, Picture picture, double sigma) {
@@ -43,7 +51,26 @@ final class ColourNearby {
         down = blocks.rows(level) + 4;
         splines = Gaussian.splines(level);
         blocks.make(Blocks.TOP, -1, -1, blocks.columns(Blocks.TOP), blocks.rows(Blocks.TOP));
-        colour = colours(Math.max(sigma, NARROWEST * (1 << level)));
+        narrowest = Math.max(sigma, NARROWEST * (1 << level));
+        double factor = 1;
+        for (double s = narrowest; s < widest(); s *= 2) {
+            if (levelOf(s) > level) {
+                addWide(levelOf(s), s, (float) factor);
+            }
+            factor *= WIDER;
+        }
+        mean = mean(factor);
+        chunksAcross = (across + CHUNK - 1) / CHUNK;
+        chunks = new float[chunksAcross * ((down + CHUNK - 1) / CHUNK)][];
+    }
+
+    private double widest() {
+        return Math.max(width, height) / 2.0;
+    }
+
+    /** The level whose blocks a Gaussian of sigma pixels is made on. */
+    private int levelOf(double sigma) {
+        return Math.max(level, Gaussian.level(sigma, LEAST));
     }
 
     /** Colours of a tile: out is overwritten, 3 x {@link Gaussian#TILE} x {@link Gaussian#TILE}. */
@@ -57,7 +84,9 @@ final class ColourNearby {
         int rows = Gaussian.first(ty * tile + high - 1, level) + 4 - j0;
         float[] part = new float[3 * columns * rows];
         for (int j = 0; j < rows; j++) {
-            System.arraycopy(colour, 3 * (i0 + 2 + across * (j0 + 2 + j)), part, 3 * columns * j, 3 * columns);
+            for (int i = 0; i < columns; i++) {
+                block(i0 + 2 + i, j0 + 2 + j, part, 3 * (i + columns * j));
+            }
         }
         Gaussian.spread(part, columns, rows, 3, level, splines, i0, j0, tx * tile, ty * tile, wide, high, out, 3 * tile);
     }
@@ -78,58 +107,82 @@ final class ColourNearby {
         return out;
     }
 
-    private float[] colours(double narrowest) {
-        float[] sums = new float[4 * across * down];
+    /** The colour of a block, counted from the outermost ring. */
+    private void block(int i, int j, float[] out, int at) {
+        int n = i / CHUNK + chunksAcross * (j / CHUNK);
+        if (chunks[n] == null) {
+            chunks[n] = chunk(i / CHUNK * CHUNK, j / CHUNK * CHUNK);
+        }
+        System.arraycopy(chunks[n], 3 * (i % CHUNK + CHUNK * (j % CHUNK)), out, at, 3);
+    }
+
+    /** Colours of the blocks from (i0,j0) on, counted from the outermost ring. */
+    private float[] chunk(int i0, int j0) {
+        int columns = Math.min(CHUNK, across - i0);
+        int rows = Math.min(CHUNK, down - j0);
+        float[] sums = new float[4 * columns * rows];
+        float[] one = new float[4 * columns * rows];
         double factor = 1;
-        double widest = Math.max(width, height) / 2.0;
-        for (double s = narrowest; s < widest; s *= 2) {
-            float[] blurred = blurred(s);
-            for (int n = 0; n < sums.length; n++) {
-                sums[n] += (float) (factor * blurred[n]);
-            }
+        for (double s = narrowest; s < widest() && levelOf(s) == level; s *= 2) {
+            Gaussian.convolve(lines(level), i0, j0, columns, rows, 4, weights(s, level), one, 4 * columns);
+            add(sums, (float) factor, one);
             factor *= WIDER;
         }
-        double[] mean = mean();
-        float[] out = new float[3 * across * down];
-        for (int p = 0; p < across * down; p++) {
-            double alpha = sums[4 * p + 3] + factor * mean[3];
+        for (int wider = level + 1; wider <= Blocks.TOP; wider++) {
+            if (wide[wider] != null) {
+                Gaussian.spread(wide[wider], blocks.columns(wider) + 6, blocks.rows(wider) + 6, 4, wider - level,
+                        Gaussian.splines(wider - level), -3, -3, i0 - 2, j0 - 2, columns, rows, one, 4 * columns);
+                add(sums, 1, one);
+            }
+        }
+        float[] out = new float[3 * CHUNK * CHUNK];
+        for (int p = 0; p < columns * rows; p++) {
+            double alpha = sums[4 * p + 3] + mean[3];
             for (int c = 0; c < 3; c++) {
-                out[3 * p + c] = alpha > 0 ? (float) Math.max(0, (sums[4 * p + c] + factor * mean[c]) / alpha) : 1f;
+                out[3 * (p % columns + CHUNK * (p / columns)) + c] = alpha > 0 ? (float) Math.max(0, (sums[4 * p + c] + mean[c]) / alpha)
+                        : 1f;
             }
         }
         return out;
     }
 
-    /** The picture blurred with sigma pixels, at all blocks of the level and two more on each side. */
-    private float[] blurred(double sigma) {
-        int wider = Math.max(level, Gaussian.level(sigma, LEAST));
-        double k = 1 << wider;
-        float[] weights = Gaussian.weights(Math.sqrt(Math.max(NARROWEST * NARROWEST, sigma * sigma / (k * k) - (wider > level ? 1 / 3.0 : 0)
-                - 1 / 4.0)));
-        Gaussian.Lines lines = new Gaussian.Lines(blocks.level(wider), 0, blocks.columns(wider) + 4, blocks.rows(wider) + 4);
-        if (wider == level) {
-            float[] out = new float[4 * across * down];
-            Gaussian.convolve(lines, 0, 0, across, down, 4, weights, out, 4 * across);
-            return out;
+    private static void add(float[] sums, float factor, float[] one) {
+        for (int n = 0; n < sums.length; n++) {
+            sums[n] += factor * one[n];
         }
-        int columns = blocks.columns(wider) + 6;
-        int rows = blocks.rows(wider) + 6;
-        float[] coarse = new float[4 * columns * rows];
-        Gaussian.convolve(lines, -1, -1, columns, rows, 4, weights, coarse, 4 * columns);
-        float[] out = new float[4 * across * down];
-        Gaussian.spread(coarse, columns, rows, 4, wider - level, Gaussian.splines(wider - level), -3, -3, -2, -2, across, down, out,
-                4 * across);
-        return out;
     }
 
-    private double[] mean() {
+    private void addWide(int wider, double sigma, float factor) {
+        int columns = blocks.columns(wider) + 6;
+        int rows = blocks.rows(wider) + 6;
+        float[] one = new float[4 * columns * rows];
+        Gaussian.convolve(lines(wider), -1, -1, columns, rows, 4, weights(sigma, wider), one, 4 * columns);
+        if (wide[wider] == null) {
+            wide[wider] = new float[4 * columns * rows];
+        }
+        add(wide[wider], factor, one);
+    }
+
+    private Gaussian.Lines lines(int level) {
+        return new Gaussian.Lines(blocks.level(level), 0, blocks.columns(level) + 4, blocks.rows(level) + 4);
+    }
+
+    /** What a Gaussian of sigma pixels leaves to do on blocks of a level. */
+    private float[] weights(double sigma, int wider) {
+        double k = 1 << wider;
+        return Gaussian.weights(Math.sqrt(Math.max(NARROWEST * NARROWEST, sigma * sigma / (k * k) - (wider > level ? 1 / 3.0 : 0)
+                - 1 / 4.0)));
+    }
+
+    /** The picture's mean RGBA times a factor. */
+    private double[] mean(double factor) {
         double[] mean = new double[4];
         float[] widest = blocks.level(Blocks.TOP);
         int count = blocks.columns(Blocks.TOP) * blocks.rows(Blocks.TOP);
         for (int j = 0; j < blocks.rows(Blocks.TOP); j++) {
             for (int i = 0; i < blocks.columns(Blocks.TOP); i++) {
                 for (int c = 0; c < 4; c++) {
-                    mean[c] += widest[blocks.at(Blocks.TOP, i, j) + c] / (double) count;
+                    mean[c] += factor * widest[blocks.at(Blocks.TOP, i, j) + c] / count;
                 }
             }
         }

@@ -156,12 +156,12 @@ final class Gaussian {
 
     /** Reads wide x high pixels from (x,y) on between blocks i0.., j0.. (across x down of them) into rows of {@code stride} floats. */
     static void spread(float[] coarse, int across, int down, int channels, int level, float[] splines, int i0, int j0, int x, int y,
-            int wide,
-            int high, float[] out, int stride) {
+            int wide, int high, float[] out, int stride) {
         int mask = (1 << level) - 1;
         int row = channels * wide;
-        float[][] lines = new float[down][row];
-        for (int j = 0; j < down; j++) {
+        float[][] lines = new float[down][];
+        for (int j = first(y, level) - j0; j < first(y + high - 1, level) - j0 + 4; j++) {
+            lines[j] = new float[row];
             for (int i = 0; i < wide; i++) {
                 int w = 4 * (x + i & mask);
                 mixOne(coarse, channels * (first(x + i, level) - i0 + across * j), channels, splines[w], splines[w + 1], splines[w + 2],
