@@ -15,7 +15,7 @@ final class PressedPiece {
     private static final double SEARCH_SHARE = 0.02;
     /** Coverage that is not searched for further. */
     private static final double ENOUGH = 0.0005;
-    private static final int STEPS = 3;
+    private static final int STEPS = 2;
 
     private final Tip tip;
     private final double startX;
@@ -97,11 +97,9 @@ final class PressedPiece {
         pixels.bound(count, hardest);
         int open = 0;
         for (int n = 0; n < count; n++) {
-            float was = values[at + left + n];
-            if (pixels.value[n] > was) {
-                values[at + left + n] = pixels.value[n];
-            }
-            if (pixels.rises[n] >= 0 && pixels.bound[n] > was) {
+            float most = Math.max(values[at + left + n], pixels.value[n]);
+            values[at + left + n] = most;
+            if (pixels.rises[n] >= 0 && pixels.bound[n] > most) {
                 columns[open] = left + n;
                 searched.along[open] = pixels.along[n];
                 searched.beside2[open++] = pixels.beside2[n];

@@ -27,7 +27,7 @@ final class PressedRow {
     final float[] value;
     /** Slope of coverage there towards the harder end, times distance by share: its sign counts. */
     final float[] rises;
-    /** Newton's step to where coverage rises no more, s taken to fall as steeply as here. */
+    /** Newton's step to where coverage rises no more: the slope by how it falls, {@code 6 most ((1 - s) / wide + s'^2)} and no more. */
     final float[] step;
     /** Coverage of a touch as hard as the hardest at the nearest place, which no place passes. */
     final float[] bound;
@@ -147,12 +147,15 @@ final class PressedRow {
         return off <= within || off <= 5 * within && 0.5f * off * Math.abs(rises[n]) * share[n] <= below * distance[n];
     }
 
-    /** Sets {@link #step} for where was looked. */
+    /** Sets {@link #step} for where was looked; the slope of s, times d, falls by 1 / wide a pixel. */
     void newton(int pixels, Shape shape) {
         float mostStart = shape.most.start;
         float mostSlope = shape.most.slope;
         for (int n = 0; n < pixels; n++) {
-            step[n] = (mostStart + mostSlope * place[n]) * (1 - share[n]) * perWide[n] + TINY;
+            step[n] = (1 - share[n]) * perWide[n] + shareRises[n] * shareRises[n] / (distance[n] + TINY);
+        }
+        for (int n = 0; n < pixels; n++) {
+            step[n] = step[n] * (mostStart + mostSlope * place[n]) + TINY;
         }
         float sixth = shape.ahead / 6;
         for (int n = 0; n < pixels; n++) {
