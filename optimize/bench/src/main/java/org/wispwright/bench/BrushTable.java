@@ -14,7 +14,7 @@ public final class BrushTable {
     private BrushTable() {
     }
 
-    /** Prints the table. @param arguments how many samples to take after as many to warm up; 200 if there is none */
+    /** Prints the table. @param arguments how many samples to take after as many, and two seconds, to warm up; 200 if there is none */
     public static void main(String[] arguments) {
         int samples = arguments.length > 0 ? Integer.parseInt(arguments[0]) : 200;
         System.out.println("| brush | dab | piece | first dab |\n|---|---|---|---|");
@@ -31,6 +31,10 @@ public final class BrushTable {
     private static String row(Runnable what, int samples) {
         ThreadMXBean threads = ManagementFactory.getThreadMXBean();
         double[] took = new double[samples];
+        long warm = threads.getCurrentThreadCpuTime() + 2_000_000_000L;
+        while (threads.getCurrentThreadCpuTime() < warm) {
+            what.run();
+        }
         for (int n = -samples; n < samples; n++) {
             long before = threads.getCurrentThreadCpuTime();
             what.run();

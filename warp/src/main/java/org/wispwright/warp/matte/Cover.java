@@ -85,7 +85,9 @@ public final class Cover {
             System.arraycopy(values, part.left() - window.left() + window.width() * (part.top() - window.top() + j), out,
                     part.width() * j, part.width());
         }
-        if (begun && spacing == 0 && !whole) {
+        double toPartX = Math.max(part.left() - x, x - (part.left() + part.width() - 1));
+        double toPartY = Math.max(part.top() - y, y - (part.top() + part.height() - 1));
+        if (begun && spacing == 0 && !whole && Math.max(toPartX, toPartY) < tip.end(pressure)) {
             new Cover(tip, 0, height, part, out).touch(x, y, pressure);
         }
     }

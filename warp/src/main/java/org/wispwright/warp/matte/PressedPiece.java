@@ -4,7 +4,8 @@ package org.wispwright.warp.matte;
  * Coverage along a straight piece of a line whose pressure changes, as one pixel sees it. With t the way along the piece, d(t) the pixel's
  * distance to that place, p(t) the pressure there and c = most(p) s^2 (3 - 2 s) ({@link Tip}),
  * <pre>
- * c' = 6 most s (1 - s) s' + most' s^2 (3 - 2 s),   s' = (middle q' - d') / wide - (middle q - d) wide' / wide^2,   wide = max(fade q, finest).
+ * c' = 6 most s (1 - s) s' + most' s^2 (3 - 2 s),
+ * s' = (middle q' - d') / wide - (middle q - d) wide' / wide^2,   wide = max(fade q, finest).
  * </pre>
  * Coverage has one peak, between the nearest place and the end that was pressed harder: at the nearest place if c' falls there, which is
  * asked of a whole row; at the harder end if c' still rises there; else where c' changes its sign: Newton's steps for many pixels at once
@@ -47,6 +48,7 @@ final class PressedPiece {
      *
      * @param pixels   room for a row: overwritten
      * @param searched as much
+     * @param columns  as much
      */
     PressedPiece(Tip tip, double startX, double startY, double vx, double vy, double length, double pressure, double pressureEnd,
             PressedRow pixels, PressedRow searched, int[] columns) {

@@ -118,7 +118,9 @@ final class PressedRow {
         look(pixels, shape);
     }
 
-    /** Looks at where Newton's step leads, but no farther than half the edge's width, not off the piece nor back behind the nearest place. */
+    /**
+     * Looks at where Newton's step leads, but no farther than half the edge's width, not off the piece nor back behind the nearest place.
+     */
     void step(int pixels, Shape shape) {
         float most = (shape.wide.start + shape.wide.slope * shape.length / 2) / 2;
         for (int n = 0; n < pixels; n++) {

@@ -66,18 +66,6 @@ record Tip(double radius, double centre, double middle, double fade, double fine
         }
     }
 
-    /** Coverage at the squared distance for pressure p; where there is none, a number of 0 or less that falls with the distance. */
-    double value(double squared, double p) {
-        return at(Math.sqrt(squared), p);
-    }
-
-    /** The same at the distance itself. */
-    double at(double distance, double p) {
-        double q = onRadius() ? p : 1;
-        double s = centre + (middle * q - distance) / Math.max(fade * q, finest);
-        return s <= 0 ? s : s >= 1 ? most(p) : most(p) * s * s * (3 - 2 * s);
-    }
-
     /** Whether pressure scales the radius. */
     boolean onRadius() {
         return on == Pressure.On.RADIUS || on == Pressure.On.BOTH;

@@ -19,6 +19,8 @@ public final class MeshPainting {
     private final double[] x;
     private final double[] y;
     private final int[] order;
+    /** By triangle: left, right, top and bottom of its corners now. */
+    private final double[] bounds;
     private double leftDx;
     private double leftDy;
     private double rightDx;
@@ -52,6 +54,7 @@ public final class MeshPainting {
             handle[h] = true;
         }
         double[] far = new double[count];
+        bounds = new double[4 * count];
         Integer[] sorted = new Integer[count];
         for (int t = 0; t < count; t++) {
             double mx = 0;
@@ -62,12 +65,23 @@ public final class MeshPainting {
                 my += y[corners[k]] - rest.y()[corners[k]];
             }
             far[t] = mx * mx + my * my;
+            bound(t);
             turned[t] = !(relativeArea(t) > 0);
             sorted[t] = t;
         }
         Arrays.sort(sorted, Comparator.comparing((Integer t) -> !turned[t]).thenComparing(t -> handled[t]).thenComparingDouble(t -> far[t])
                 .thenComparingInt(t -> t));
         order = Arrays.stream(sorted).mapToInt(Integer::intValue).toArray();
+    }
+
+    private void bound(int t) {
+        int a = rest.triangles()[3 * t];
+        int b = rest.triangles()[3 * t + 1];
+        int c = rest.triangles()[3 * t + 2];
+        bounds[4 * t] = Math.min(x[a], Math.min(x[b], x[c]));
+        bounds[4 * t + 1] = Math.max(x[a], Math.max(x[b], x[c]));
+        bounds[4 * t + 2] = Math.min(y[a], Math.min(y[b], y[c]));
+        bounds[4 * t + 3] = Math.max(y[a], Math.max(y[b], y[c]));
     }
 
     /** Area of a triangle now as a share of its area at rest; 0 or less where it is turned over. */
@@ -91,20 +105,11 @@ public final class MeshPainting {
     public void displacements(int left, int top, int width, int rows, int height, double[] dx, double[] dy) {
         Arrays.fill(dx, 0, width * rows, Double.NaN);
         Arrays.fill(dy, 0, width * rows, Double.NaN);
-        int[] corners = rest.triangles();
         for (int t : order) {
-            double minY = Double.POSITIVE_INFINITY;
-            double maxY = Double.NEGATIVE_INFINITY;
-            double minX = Double.POSITIVE_INFINITY;
-            double maxX = Double.NEGATIVE_INFINITY;
-            for (int k = 3 * t; k < 3 * t + 3; k++) {
-                double py = y[corners[k]] * height - 0.5;
-                double px = x[corners[k]] * height - 0.5;
-                minY = Math.min(minY, py);
-                maxY = Math.max(maxY, py);
-                minX = Math.min(minX, px);
-                maxX = Math.max(maxX, px);
-            }
+            double minX = bounds[4 * t] * height - 0.5;
+            double maxX = bounds[4 * t + 1] * height - 0.5;
+            double minY = bounds[4 * t + 2] * height - 0.5;
+            double maxY = bounds[4 * t + 3] * height - 0.5;
             if (maxY < top - 1 || minY > top + rows || maxX < left - 1 || minX > left + width) {
                 continue;
             }

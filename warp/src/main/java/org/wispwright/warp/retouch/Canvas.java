@@ -6,8 +6,8 @@ import org.wispwright.warp.matte.Window;
 
 /**
  * A picture being retouched: operations change it one after the other, and a stroke may be drawn on it point by point
- * ({@link LiveStroke}). What brushes must know of the picture's wide surroundings is kept beside it and made anew only where it changed, and
- * only when a brush asks for it. Not for several threads at once.
+ * ({@link LiveStroke}). What brushes must know of the picture's wide surroundings is kept beside it; it is made anew only where the picture
+ * changed, and only when a brush asks for it. Not for several threads at once.
  * <p>Holds two copies of the picture once a stroke was begun, one before: 16 bytes a pixel each, 5 more for the surroundings, 4 for
  * coverage; and up to 16 MB of arrays that strokes have done with.
  */
