@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.awt.AWTEvent;
 import java.awt.BorderLayout;
 import java.awt.Component;
 import java.awt.Container;
@@ -12,9 +13,12 @@ import java.awt.Graphics;
 import java.awt.Graphics2D;
 import java.awt.Point;
 import java.awt.Robot;
+import java.awt.Toolkit;
 import java.awt.Window;
+import java.awt.event.AWTEventListener;
 import java.awt.event.InputEvent;
 import java.awt.event.KeyEvent;
+import java.awt.event.MouseEvent;
 import java.awt.image.BufferedImage;
 import java.nio.file.Files;
 import java.nio.file.Path;
@@ -24,12 +28,14 @@ import java.util.List;
 import java.util.Optional;
 import java.util.OptionalInt;
 import java.util.Set;
+import java.util.function.Function;
 import javax.accessibility.Accessible;
 import javax.imageio.ImageIO;
 import javax.swing.AbstractButton;
 import javax.swing.JButton;
 import javax.swing.JComboBox;
 import javax.swing.JComponent;
+import javax.swing.JDialog;
 import javax.swing.JFrame;
 import javax.swing.JLabel;
 import javax.swing.JList;
@@ -62,6 +68,10 @@ class HandStripTest {
     private JPanel canvas;
     private KeyPointer keys;
     private int newNotes;
+    private int releases;
+    /** Counts what really came: under load the robot may be idle before its events have reached Swing. */
+    private final AWTEventListener counter = e -> releases += e.getID() == MouseEvent.MOUSE_RELEASED || e.getID() == KeyEvent.KEY_RELEASED
+            ? 1 : 0;
 
     @BeforeAll
     static void shot() {
@@ -72,6 +82,7 @@ class HandStripTest {
     void open() throws Exception {
         bench = new ToolBench(folder);
         robot = new Robot();
+        Toolkit.getDefaultToolkit().addAWTEventListener(counter, AWTEvent.MOUSE_EVENT_MASK | AWTEvent.KEY_EVENT_MASK);
         window(true, 1000);
     }
 
@@ -105,10 +116,12 @@ class HandStripTest {
             frame.setVisible(true);
         });
         robot.waitForIdle();
+        bench.await("the window is laid out", () -> frame.isShowing() && strip.getHeight() > 0 && frame.isFocused());
     }
 
     @AfterEach
     void close() {
+        Toolkit.getDefaultToolkit().removeAWTEventListener(counter);
         bench.close();
         ToolBench.onSwing(() -> {
             for (Window w : Window.getWindows()) {
@@ -137,7 +150,8 @@ class HandStripTest {
     }
 
     private <T extends Component> T find(String name, Class<T> kind) {
-        return seek(name, kind).orElseThrow(() -> new AssertionError("no showing '" + name + "'"));
+        bench.await("'" + name + "' is showing", () -> seek(name, kind).isPresent());
+        return seek(name, kind).orElseThrow();
     }
 
     private void click(String name) {
@@ -146,13 +160,16 @@ class HandStripTest {
             Point corner = c.getLocationOnScreen();
             return new Point(corner.x + c.getWidth() / 2, corner.y + c.getHeight() / 2);
         });
+        int before = DeskDriver.onSwing(() -> releases);
         robot.mouseMove(at.x, at.y);
         robot.mousePress(InputEvent.BUTTON1_DOWN_MASK);
         robot.mouseRelease(InputEvent.BUTTON1_DOWN_MASK);
         robot.waitForIdle();
+        bench.await("the click came", () -> releases > before);
     }
 
     private void key(int... codes) {
+        int before = DeskDriver.onSwing(() -> releases);
         for (int code : codes) {
             robot.keyPress(code);
         }
@@ -160,10 +177,26 @@ class HandStripTest {
             robot.keyRelease(codes[n]);
         }
         robot.waitForIdle();
+        bench.await("the key came", () -> releases >= before + codes.length);
+    }
+
+    private void focusCanvas() {
+        ToolBench.onSwing(canvas::requestFocusInWindow);
+        bench.await("the picture has the focus", canvas::isFocusOwner);
     }
 
     private String text(String name) {
-        return DeskDriver.onSwing(() -> find(name, JLabel.class).getText());
+        return ask(name, JLabel.class, JLabel::getText);
+    }
+
+    private <T extends Component, R> R ask(String name, Class<T> kind, Function<T, R> question) {
+        T found = find(name, kind);
+        return DeskDriver.onSwing(() -> question.apply(found));
+    }
+
+    private void choose(String name, int index) {
+        JComboBox<?> box = find(name, JComboBox.class);
+        ToolBench.onSwing(() -> box.setSelectedIndex(index));
     }
 
     private Hand hand() {
@@ -171,7 +204,8 @@ class HandStripTest {
     }
 
     private void set(String name, Object value) {
-        ToolBench.onSwing(() -> find(name, JSpinner.class).setValue(value));
+        JSpinner spinner = find(name, JSpinner.class);
+        ToolBench.onSwing(() -> spinner.setValue(value));
     }
 
     /** Writes what a component paints into {@code target/screens}, for people. */
@@ -190,7 +224,7 @@ class HandStripTest {
             click("hand-" + kind.word());
             assertEquals(kind, HandKind.of(hand()));
             assertEquals(kind.inWords(), text("hand-now"));
-            assertTrue(DeskDriver.onSwing(() -> find("hand-" + kind.word(), AbstractButton.class).isSelected()));
+            assertTrue(ask("hand-" + kind.word(), AbstractButton.class, AbstractButton::isSelected));
         }
     }
 
@@ -208,7 +242,7 @@ class HandStripTest {
         set("hand-reach", 10.0);
         assertEquals(new Hand.Outlining(0.45, 0.1), hand());
         click("hand-hold");
-        ToolBench.onSwing(() -> find("hand-form", JComboBox.class).setSelectedIndex(2));
+        choose("hand-form", 2);
         set("hand-feather", 7.0);
         assertEquals(new Hand.Holding(Hand.Form.FREEHAND, 0.07), hand());
         click("hand-restore");
@@ -233,12 +267,12 @@ class HandStripTest {
     void theKindOfTheMeshAtHandIsShownAndChanged() {
         click("hand-pull");
         bench.rest();
-        assertEquals(WarpKind.SPLINE.ordinal(), DeskDriver.onSwing(() -> find("hand-mesh", JComboBox.class).getSelectedIndex()));
-        ToolBench.onSwing(() -> find("hand-mesh", JComboBox.class).setSelectedIndex(WarpKind.RIGID.ordinal()));
+        assertEquals(WarpKind.SPLINE.ordinal(), ask("hand-mesh", JComboBox.class, JComboBox::getSelectedIndex));
+        choose("hand-mesh", WarpKind.RIGID.ordinal());
         assertEquals(WarpKind.RIGID, ((MeshWarp) bench.retouching.operations().get(0)).kind());
         assertEquals(Optional.of("Change mesh"), bench.desk.state().history().undoName());
         ToolBench.onSwing(bench.desk::undo);
-        assertEquals(WarpKind.SPLINE.ordinal(), DeskDriver.onSwing(() -> find("hand-mesh", JComboBox.class).getSelectedIndex()));
+        assertEquals(WarpKind.SPLINE.ordinal(), ask("hand-mesh", JComboBox.class, JComboBox::getSelectedIndex));
     }
 
     @Test
@@ -283,7 +317,7 @@ class HandStripTest {
         bench.drag("", 0.3, 0.7, 0.35, 0.72);
         bench.drag("", 0.3, 0.6, 0.35, 0.6);
         robot.waitForIdle();
-        assertEquals("Steps: 3", DeskDriver.onSwing(() -> find("hand-steps", JButton.class).getText()));
+        assertEquals("Steps: 3", ask("hand-steps", JButton.class, JButton::getText));
         click("hand-steps");
         JList<?> list = find("steps-list", JList.class);
         assertEquals("1   Mesh, 3 handles, spline", DeskDriver.onSwing(() -> list.getModel().getElementAt(0)));
@@ -298,8 +332,10 @@ class HandStripTest {
         assertEquals(2, bench.retouching.operations().size());
         assertTrue(bench.retouching.operations().get(0) instanceof MeshWarp);
         bench.rest();
+        JDialog dialog = find("steps", JDialog.class);
+        bench.await("the list has the focus", dialog::isFocused);
         key(KeyEvent.VK_ESCAPE);
-        assertTrue(seek("steps", Component.class).isEmpty());
+        bench.await("the list is closed", () -> seek("steps", Component.class).isEmpty());
         action("hand.remove-last").run().run();
         assertEquals(1, bench.retouching.operations().size());
     }
@@ -362,8 +398,7 @@ class HandStripTest {
     @Test
     void aStrokeIsDrawnByKeysAlone() {
         bench.takeUp(new Hand.Brushing(Brush.REMOVE, 0.1, 0.7, 0.5, true));
-        ToolBench.onSwing(canvas::requestFocusInWindow);
-        robot.waitForIdle();
+        focusCanvas();
         key(KeyEvent.VK_LEFT);
         key(KeyEvent.VK_SHIFT, KeyEvent.VK_DOWN);
         assertEquals(1, bench.retouching.operations().size());
@@ -398,8 +433,7 @@ class HandStripTest {
     @Test
     void aHoldIsDrawnAndRemovedByKeysAlone() {
         bench.takeUp(new Hand.Holding(Hand.Form.RECTANGLE, 0));
-        ToolBench.onSwing(canvas::requestFocusInWindow);
-        robot.waitForIdle();
+        focusCanvas();
         key(KeyEvent.VK_SPACE);
         key(KeyEvent.VK_SHIFT, KeyEvent.VK_LEFT);
         key(KeyEvent.VK_SHIFT, KeyEvent.VK_UP);
