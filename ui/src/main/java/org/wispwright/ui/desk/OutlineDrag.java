@@ -2,6 +2,7 @@ package org.wispwright.ui.desk;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import org.wispwright.render.picture.Picture;
 import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.retouch.Handle;
@@ -11,9 +12,9 @@ import org.wispwright.warp.retouch.Retouch;
 import org.wispwright.warp.retouch.Retoucher;
 
 /**
- * A point of the smoke's outline under the hand. A worker draws the live picture after it, on a small raster and without the operations that
- * come after; at rest all is drawn as the note's wish is. When it ends, the open note has the warp. A place where the point cannot go (upon
- * another) is passed over.
+ * A point of the smoke's outline under the hand. A worker draws the live picture after it, on a small raster and without the operations
+ * that come after; at rest all is drawn as the note's wish is. When it ends, the open note has the warp. A place where the point cannot go
+ * (upon another) is passed over.
  */
 public final class OutlineDrag extends Gesture {
     private final Retouching session;
@@ -65,7 +66,7 @@ public final class OutlineDrag extends Gesture {
                 session.show(picture);
             }
         });
-        session.fold(java.util.Optional.of(warp));
+        session.fold(Optional.of(warp));
     }
 
     /** The warp as it is now. */
