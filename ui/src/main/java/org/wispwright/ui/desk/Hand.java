@@ -1,6 +1,5 @@
 package org.wispwright.ui.desk;
 
-import java.util.List;
 import org.wispwright.warp.retouch.Brush;
 import org.wispwright.warp.retouch.WarpKind;
 
@@ -96,12 +95,5 @@ public sealed interface Hand {
         /** Corner to corner. */ RECTANGLE,
         /** Corner to corner of its box. */ ELLIPSE,
         /** By hand. */ FREEHAND
-    }
-
-    /** One of each, in the order of the number keys. */
-    static List<Hand> all() {
-        return List.of(LOOK, Brushing.usual(Brush.ADD), Brushing.usual(Brush.REMOVE), Brushing.usual(Brush.SOFTEN),
-                Brushing.usual(Brush.PUSH), new Pulling(WarpKind.AS_RIGID_AS_POSSIBLE), new Outlining(0.3, 0.2),
-                new Holding(Form.RECTANGLE, 0.04));
     }
 }

@@ -6,9 +6,9 @@ import org.wispwright.warp.retouch.LiveWarp;
 import org.wispwright.warp.retouch.MeshWarp;
 
 /**
- * A handle of a mesh under the hand. The live picture follows it as a draft, on a raster small enough to keep up, without the operations that
- * come after the warp; at rest all is drawn as the note's wish is. When it ends, the open note has the warp. A place where the handle cannot
- * go (upon another, or with all on one line) is passed over.
+ * * A handle of a mesh under the hand. The live picture follows it as a draft, on a raster small enough to keep up, without the operations
+ * that come after the warp; at rest all is drawn as the note's wish is. When it ends, the open note has the warp. A place where the handle
+ * cannot go (upon another, or with all on one line) is passed over.
  */
 public final class Pulling extends Gesture {
     private final Retouching session;

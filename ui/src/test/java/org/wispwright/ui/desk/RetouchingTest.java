@@ -105,7 +105,8 @@ class RetouchingTest {
     }
 
     private Picture wanted() {
-        Picture original = desk.pictures().draw(desk.state().shot().orElseThrow(), new Ask(Source.ORIGINAL, "front", 1004, 0), new Cancel());
+        Picture original = desk.pictures().draw(desk.state().shot().orElseThrow(), new Ask(Source.ORIGINAL, "front", 1004, 0),
+                new Cancel());
         return Retoucher.wanted(new Retouch(retouching.operations()), original);
     }
 

@@ -27,8 +27,8 @@ import org.wispwright.ui.window.Words;
 import org.wispwright.warp.matte.Window;
 
 /**
- * The strip under the picture: what the pointer does now, with the two or three settings that this has. Where the hand has nothing to work on
- * it says so in a sentence, with the one button that helps.
+ * * The strip under the picture: what the pointer does now, with the two or three settings that this has. Where the hand has nothing to
+ * work on it says so in a sentence, with the one button that helps.
  */
 public final class HandStrip extends JPanel implements Retouching.Follower {
     private static final double WIDER = 1.15;
@@ -199,7 +199,8 @@ public final class HandStrip extends JPanel implements Retouching.Follower {
         JPopupMenu menu = new JPopupMenu(Words.of("hand.name"));
         menu.setName("hand-menu");
         for (HandKind kind : HandKind.values()) {
-            JRadioButtonMenuItem item = new JRadioButtonMenuItem(kind.inWords(), new HandIcon(kind), kind == HandKind.of(desk.state().hand()));
+            JRadioButtonMenuItem item = new JRadioButtonMenuItem(kind.inWords(), new HandIcon(kind),
+                    kind == HandKind.of(desk.state().hand()));
             item.setName("menu-" + kind.id().replace('.', '-'));
             item.setToolTipText(kind.tip());
             item.addActionListener(e -> take(kind));

@@ -28,8 +28,8 @@ import org.wispwright.warp.matte.Region;
 import org.wispwright.warp.matte.Window;
 
 /**
- * Draws regions that must stay, for the open note, at first on its own frame alone. A drag draws one in the hand's form; a click chooses the
- * smallest under the pointer, whose frames the strip then asks about. Held regions are dashed and tagged.
+ * * Draws regions that must stay, for the open note, at first on its own frame alone. A drag draws one in the hand's form; a click chooses
+ * the smallest under the pointer, whose frames the strip then asks about. Held regions are dashed and tagged.
  */
 final class HoldTool implements Tool, Retouching.Follower {
     private static final double SMALLEST = 4;
@@ -96,7 +96,8 @@ final class HoldTool implements Tool, Retouching.Follower {
 
     @Override
     public void dragged(Pointer pointer) {
-        if (start != null && pointer.place().distanceTo(drawn.get(drawn.size() - 1)) >= APART && drawn.size() < Region.Polygon.MOST_POINTS) {
+        if (start != null && pointer.place().distanceTo(drawn.get(drawn.size() - 1)) >= APART
+                && drawn.size() < Region.Polygon.MOST_POINTS) {
             drawn.add(pointer.place());
             surface.overlayChanged();
         }

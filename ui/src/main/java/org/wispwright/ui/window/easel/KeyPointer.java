@@ -15,9 +15,9 @@ import javax.swing.KeyStroke;
 import org.wispwright.warp.matte.Point;
 
 /**
- * A pointer for the keyboard, so that every hand can be used without a mouse. While the picture has the focus and a hand is taken up, arrow
- * keys move a cross by a hundredth of the picture's height, with Shift by a tenth; Space presses the button and lets it go, with Ctrl it clicks
- * with Ctrl; Enter lets go; Escape drops what was begun; Delete removes what is chosen. The mouse takes over when it moves.
+ * * A pointer for the keyboard, so that every hand can be used without a mouse. While the picture has the focus and a hand is taken up,
+ * arrow keys move a cross by a hundredth of the picture's height, with Shift by a tenth; Space presses the button and lets it go, with
+ * Ctrl it clicks with Ctrl; Enter lets go; Escape drops what was begun; Delete removes what is chosen. The mouse takes over when it moves.
  */
 final class KeyPointer {
     private static final double STEP = 0.01;

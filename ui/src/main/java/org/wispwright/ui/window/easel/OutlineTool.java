@@ -22,9 +22,9 @@ import org.wispwright.warp.retouch.OutlineWarp;
 import org.wispwright.warp.retouch.WarpKind;
 
 /**
- * Drags the outline of the original's smoke at an opacity; the inside follows. A drag begins at any place of the line, or at the end of an
- * arrow set before; a click with Ctrl or Alt takes an arrow off. New drags go to the note's last operation, if that is of the same level and
- * reach, else a new one begins. A dashed circle shows how far a drag bends the line.
+ * * Drags the outline of the original's smoke at an opacity; the inside follows. A drag begins at any place of the line, or at the end of
+ * an arrow set before; a click with Ctrl or Alt takes an arrow off. New drags go to the note's last operation, if that is of the same
+ * level and reach, else a new one begins. A dashed circle shows how far a drag bends the line.
  */
 final class OutlineTool extends RetouchTool {
     /** A drag set before. */
@@ -86,7 +86,8 @@ final class OutlineTool extends RetouchTool {
             return dragging.map(OutlineDrag::warp);
         }
         List<Operation> operations = retouching.operations();
-        return operation < operations.size() && operations.get(operation) instanceof OutlineWarp warp ? Optional.of(warp) : Optional.empty();
+        return operation < operations.size() && operations.get(operation) instanceof OutlineWarp warp ? Optional.of(warp)
+                : Optional.empty();
     }
 
     private Optional<Grip> near(Pointer pointer) {

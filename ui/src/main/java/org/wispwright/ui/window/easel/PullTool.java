@@ -22,9 +22,9 @@ import org.wispwright.warp.retouch.Operation;
 import org.wispwright.warp.retouch.WarpKind;
 
 /**
- * Pulls a mesh. A click sets a handle, a drag pulls the one it begins at, or a new one; a click with Ctrl or Alt takes one off. New handles go
- * to the note's last operation, if that is a mesh warp, else a new one begins; a kind that needs three handles waits for them. Dots are what
- * stays, arrows what is pulled, crossed squares where the picture is turned over.
+ * * Pulls a mesh. A click sets a handle, a drag pulls the one it begins at, or a new one; a click with Ctrl or Alt takes one off. New
+ * handles go to the note's last operation, if that is a mesh warp, else a new one begins; a kind that needs three handles waits for them.
+ * Dots are what stays, arrows what is pulled, crossed squares where the picture is turned over.
  */
 final class PullTool extends RetouchTool {
     private static final double STILL = 3;

@@ -23,7 +23,9 @@ import org.wispwright.ui.window.Palette;
 import org.wispwright.warp.matte.Point;
 import org.wispwright.warp.matte.Window;
 
-/** A desk with the small shot, a surface that only remembers, and a pointer made of numbers. The picture lies at (20, 10), 500 pixels high. */
+/**
+ * A desk with the small shot, a surface that only remembers, and a pointer made of numbers. The picture lies at (20, 10), 500 pixels high.
+ */
 final class ToolBench implements Surface, AutoCloseable {
     static final Placement PLACE = new Placement(20, 10, 500);
     private static final long MOST_SECONDS = 60;
