@@ -83,7 +83,7 @@ public final class DeskWindow {
         notes.setPreferredSize(new Dimension(side, 0));
         takes.setPreferredSize(new Dimension(side, 0));
         for (JPanel part : List.of(notes, easel, takes)) {
-            part.setMinimumSize(new Dimension(LEAST_SIDE, 0));
+            part.setMinimumSize(new Dimension(part == easel ? LEAST_SIDE : Math.min(side, LEAST_SIDE * side / SIDE), 0));
         }
         cards.add(start, "start");
         cards.add(work, "work");

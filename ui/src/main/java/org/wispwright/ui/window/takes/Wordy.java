@@ -10,6 +10,7 @@ import javax.swing.JCheckBox;
 import javax.swing.JComponent;
 import javax.swing.plaf.basic.BasicHTML;
 import javax.swing.text.View;
+import org.wispwright.ui.window.Palette;
 
 /** Buttons whose words go on in the next line where they do not fit into one: large words in a narrow panel. */
 final class Wordy {
@@ -21,6 +22,7 @@ final class Wordy {
         private String words = "";
 
         Push(String words) {
+            setMargin(new Insets(2, Palette.STEP, 2, Palette.STEP));
             follow(this, () -> fit(this, this.words));
             say(words);
         }

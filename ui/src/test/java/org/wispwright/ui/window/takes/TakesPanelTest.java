@@ -22,6 +22,7 @@ import org.wispwright.ui.desk.DeskState;
 import org.wispwright.ui.desk.NoteEdit;
 import org.wispwright.ui.desk.SolveNow;
 import org.wispwright.ui.desk.Source;
+import org.wispwright.ui.desk.TakeWork;
 import org.wispwright.ui.job.Quality;
 import org.wispwright.ui.window.DeskDriver;
 import org.wispwright.ui.window.DeskWindow;
@@ -47,13 +48,13 @@ class TakesPanelTest {
                     && !s.work().asked().isEmpty());
             driver.keepScreenshot("takes-before-dark");
             click(driver, "quality-final");
-            assertEquals(Quality.FINAL, driver.state().work().choice().quality());
+            driver.await("the quality is chosen", s -> s.work().choice().quality() == Quality.FINAL);
             click(driver, "take-solve");
             driver.await("some iterations are done", s -> iterations(s) > 5);
             click(driver, "take-pause");
             driver.await("it waits", s -> phase(s) == SolveNow.Phase.PAUSED);
             driver.doOnSwing(() -> driver.desk().edit(NoteEdit.on("Switch off", "open", false)));
-            assertTrue(driver.find("solve-differs", JComponent.class).isShowing());
+            driver.awaitTrue("it says that it works on other notes", () -> driver.find("solve-differs", JComponent.class).isShowing());
             driver.keepScreenshot("takes-running-dark");
             driver.doOnSwing(driver.desk()::undo);
             int before = iterations(driver.state());
@@ -63,16 +64,16 @@ class TakesPanelTest {
             driver.await("the take is there", s -> s.takes().size() == 2 && s.work().running().isEmpty());
             assertEquals(new Source.Take(1), driver.state().showing().orElseThrow().near());
             click(driver, "take-0");
-            assertEquals(Source.ORIGINAL, driver.state().showing().orElseThrow().near());
+            driver.await("the original is shown", s -> s.showing().orElseThrow().near().equals(Source.ORIGINAL));
             click(driver, "take-1-against");
-            assertEquals(new Source.Take(1), driver.state().showing().orElseThrow().far());
+            driver.await("take 1 is what it is set against", s -> s.showing().orElseThrow().far().equals(new Source.Take(1)));
             driver.key("ctrl shift RIGHT");
-            assertEquals(new Source.Take(1), driver.state().showing().orElseThrow().near());
+            driver.await("the next take is shown", s -> s.showing().orElseThrow().near().equals(new Source.Take(1)));
             assertThrows(AssertionError.class, () -> driver.act("take.next"));
             TakesPanel panel = driver.find("takes", TakesPanel.class);
             driver.doOnSwing(() -> panel.chooseFoldersBy(() -> Optional.of(out)));
             click(driver, "take-write-frame");
-            driver.await("it is written", s -> s.work().writing().isEmpty());
+            driver.await("it is written", s -> s.message().filter(m -> m.words().contains("yard-take-001-front")).isPresent());
             driver.keepScreenshot("takes-after-dark");
             try (var files = Files.list(out.resolve("yard-take-001-front"))) {
                 assertEquals(1, files.count());
@@ -86,14 +87,16 @@ class TakesPanelTest {
         try (DeskDriver driver = new DeskDriver(DeskWindow.SMALLEST, false, 1).open(shot)) {
             driver.await("the original is there", DeskState::hasOriginal);
             driver.key("ctrl ENTER");
+            driver.await("it runs", s -> s.work().running().isPresent());
             driver.doOnSwing(() -> driver.desk().solving().pause(true));
             driver.await("it waits", s -> phase(s) == SolveNow.Phase.PAUSED);
-            driver.key("ctrl Q");
+            asked(driver);
             driver.keepScreenshot("takes-leaving-light");
             click(driver, "leave-stay");
             assertTrue(driver.window().frame().isDisplayable());
             assertEquals(SolveNow.Phase.PAUSED, phase(driver.state()));
-            driver.key("ctrl Q");
+            driver.await("nobody is asked any more", s -> s.work().leaving() == TakeWork.Leaving.NO);
+            asked(driver);
             click(driver, "leave-stop");
             driver.awaitTrue("the window is closed", () -> !driver.window().frame().isDisplayable());
         }
@@ -104,7 +107,9 @@ class TakesPanelTest {
             driver.keepScreenshot("takes-cut-off-light");
             click(driver, "take-resume");
             driver.await("it goes on", s -> iterations(s) > 1);
-            driver.doOnSwing(driver.window()::close);
+            click(driver, "take-pause");
+            driver.await("it waits", s -> phase(s) == SolveNow.Phase.PAUSED);
+            asked(driver);
             click(driver, "leave-keep");
             driver.awaitTrue("the window is closed", () -> !driver.window().frame().isDisplayable());
         }
@@ -147,6 +152,11 @@ class TakesPanelTest {
                 }
             }
         }
+    }
+
+    private static void asked(DeskDriver driver) {
+        driver.key("ctrl Q");
+        driver.await("the person is asked", s -> s.work().leaving() == TakeWork.Leaving.ASKED);
     }
 
     private static void click(DeskDriver driver, String name) {
