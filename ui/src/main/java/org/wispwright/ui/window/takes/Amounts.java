@@ -22,7 +22,16 @@ final class Amounts {
         if (whole < MINUTE) {
             return Words.of("takes.seconds", whole);
         }
-        return whole < HOUR ? Words.of("takes.minutes", whole / MINUTE, whole % MINUTE)
-                : Words.of("takes.hours", whole / HOUR, whole % HOUR / MINUTE);
+        if (whole < HOUR) {
+            return whole % MINUTE == 0 ? Words.of("takes.minutes.whole", whole / MINUTE)
+                    : Words.of("takes.minutes", whole / MINUTE, whole % MINUTE);
+        }
+        return Words.of("takes.hours", whole / HOUR, whole % HOUR / MINUTE);
+    }
+
+    /** The same for what is only guessed: no finer than a tenth of it or so. */
+    static String about(double seconds) {
+        int step = seconds < MINUTE ? 1 : seconds < 10 * MINUTE ? 10 : MINUTE;
+        return duration(step * Math.round(seconds / step));
     }
 }

@@ -57,7 +57,7 @@ final class RunBox extends JPanel {
         SolveNow now = running.get();
         where.say(where(now, state));
         left.say(now.at().filter(at -> now.phase() == Phase.SEARCHING).map(at -> Words.of("takes.left", Amounts.duration(at.seconds()),
-                Amounts.duration(at.secondsLeft()))).orElse(""));
+                Amounts.about(at.secondsLeft()))).orElse(""));
         pause.say(Words.of(now.canGoOn() ? "takes.go-on" : "action.take.pause"));
         pause.setEnabled(now.canBePaused() || now.canGoOn());
         keep.setEnabled(now.canBeKept());

@@ -137,6 +137,6 @@ final class SolveBox extends JPanel {
     }
 
     private static String words(Estimate e) {
-        return Words.of("takes.cost", Amounts.duration(e.seconds()), MemoryNeed.inWords(e.memoryBytes()), MemoryNeed.inWords(e.takeBytes()));
+        return Words.of("takes.cost", Amounts.about(e.seconds()), MemoryNeed.inWords(e.memoryBytes()), MemoryNeed.inWords(e.takeBytes()));
     }
 }
