@@ -18,6 +18,7 @@ final class MetBar extends DrawnPart {
     private static final int BAR = 4;
 
     private String words = "";
+    private String brief = "";
     private double share;
 
     /**
@@ -27,6 +28,7 @@ final class MetBar extends DrawnPart {
      * @param found what came out; empty if it is still being worked out
      */
     void show(OptionalInt take, Optional<MetWatch.Met> found) {
+        brief = "";
         if (take.isEmpty()) {
             setToolTipText(Words.of("notes.met.none.tip"));
             show(Words.of("notes.met.none"), 0);
@@ -40,7 +42,9 @@ final class MetBar extends DrawnPart {
             show(Words.of("notes.met.nothing"), 0);
         } else {
             double part = found.get().share().getAsDouble();
-            show(Words.of("notes.met", String.format(Locale.ROOT, "%.0f", 100 * part), by), part);
+            String percent = String.format(Locale.ROOT, "%.0f", 100 * part);
+            brief = Words.of("notes.met.short", percent);
+            show(Words.of("notes.met", percent, by), part);
         }
     }
 
@@ -75,7 +79,7 @@ final class MetBar extends DrawnPart {
         g2.setFont(Palette.small());
         FontMetrics metrics = g2.getFontMetrics();
         g2.setColor(Palette.TEXT.colour());
-        g2.drawString(words, 0, metrics.getAscent());
+        g2.drawString(metrics.stringWidth(words) <= getWidth() || brief.isEmpty() ? words : brief, 0, metrics.getAscent());
         int top = getHeight() - BAR;
         g2.setColor(Palette.LINE.colour());
         g2.fillRect(0, top, getWidth(), BAR);

@@ -80,6 +80,7 @@ final class NoteCard extends JPanel {
         holds.setFont(Palette.small());
         name(holds, "holds");
         name(thumbnails, "pictures");
+        thumbnails.setToolTipText(Words.of("notes.pictures.tip"));
         name(met, "met");
         name(on, "on");
         on.setOpaque(false);
@@ -110,18 +111,18 @@ final class NoteCard extends JPanel {
 
     private void lay() {
         JPanel top = clear(new JPanel(new MigLayout("insets 0, fillx, hidemode 3", "[grow, 0:pref:]4[]4[]4[]")));
-        top.add(where, "wmin 0");
+        boolean large = where.getFont().getSize2D() > LARGE_TYPE;
+        top.add(where, large ? "span, wmin 0, wrap" : "wmin 0");
         top.add(open);
         top.add(holds);
         top.add(more);
-        boolean large = where.getFont().getSize2D() > LARGE_TYPE;
         JPanel foot = clear(new JPanel(new MigLayout("insets 0, fillx, gapy 4", "[]push[]4[]")));
         JLabel weighs = new JLabel(Words.of("notes.weight"));
         weighs.setLabelFor(weight);
         weighs.setFont(Palette.small());
         foot.add(on, large ? "span, wrap" : "");
-        foot.add(weighs, large ? "skip" : "");
-        foot.add(weight);
+        foot.add(weighs, large ? "split 2, span, wmin 0" : "");
+        foot.add(weight, "wmin 40, growx");
         add(top);
         add(words, "wmin 0");
         add(thumbnails, "wmin 0");

@@ -31,7 +31,6 @@ import org.wispwright.ui.window.Words;
 /** The notes as cards, by frame; below them the way to a new one, or the questions of an action. */
 public final class NotesPanel extends JPanel {
     private static final String ASKS = "notes";
-    private static final int LEAST_WIDTH = 230;
 
     private final Desk desk;
     private final NoteActions actions;
@@ -74,11 +73,6 @@ public final class NotesPanel extends JPanel {
         add(scroll, BorderLayout.CENTER);
         add(foot, BorderLayout.SOUTH);
         desk.listen(this::follow);
-    }
-
-    @Override
-    public Dimension getMinimumSize() {
-        return new Dimension(LEAST_WIDTH, super.getMinimumSize().height);
     }
 
     /** What can be done here. */

@@ -19,6 +19,7 @@ final class ThumbnailRow extends DrawnPart {
     private static final int CELL = 68;
     private static final int TALLEST = 92;
     private static final int GAP = 4;
+    private static final String ELLIPSIS = "\u2026";
 
     private final List<String> words;
     private final Thumbnail[] shown;
@@ -116,10 +117,13 @@ final class ThumbnailRow extends DrawnPart {
     }
 
     private static String fitting(String word, FontMetrics metrics, int width) {
+        if (metrics.stringWidth(word) <= width) {
+            return word;
+        }
         String fits = word;
-        while (fits.length() > 1 && metrics.stringWidth(fits) > width) {
+        while (fits.length() > 1 && metrics.stringWidth(fits + ELLIPSIS) > width) {
             fits = fits.substring(0, fits.length() - 1);
         }
-        return fits;
+        return fits + ELLIPSIS;
     }
 }

@@ -141,6 +141,9 @@ final class RibbonPainter {
                 int wide = metrics.stringWidth(words);
                 int left = (int) (x + 6 + wide > scale.width() ? x - 6 - wide : x + 6);
                 int base = (int) Math.max(rows.plot() + metrics.getAscent() - 2, Math.min(rows.end() - 3, y + metrics.getAscent() / 2.0));
+                g.setColor(Palette.PANEL.colour());                            // the plot's line would cross the words
+                g.fillRect(left - 1, base - metrics.getAscent() + 2, wide + 2, metrics.getAscent() - 1);
+                g.setColor(Palette.MET.colour());
                 g.drawString(words, left, base);
             }
         }

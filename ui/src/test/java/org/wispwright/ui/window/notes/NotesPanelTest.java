@@ -75,7 +75,11 @@ class NotesPanelTest {
 
     private static void awaitTyped(DeskDriver d, String text) {
         NoteWords words = d.find("words-lean", NoteWords.class);
-        d.awaitTrue("it is typed: " + text, () -> words.getText().equals(text));
+        try {
+            d.awaitTrue("it is typed: " + text, () -> words.getText().equals(text));
+        } catch (AssertionError not) {
+            throw new AssertionError("typed is '" + words.getText() + "'", not);
+        }
     }
 
     private static void awaitMessage(DeskDriver d, String part) {
@@ -140,6 +144,8 @@ class NotesPanelTest {
             awaitTyped(d, "dropped");
             d.key("ESCAPE");
             awaitWords(d, "lean", "N o w");
+            JComponent card = d.find("note-lean", JComponent.class);
+            d.awaitTrue("the card has the focus again", card::isFocusOwner);
             d.key("W");
             d.type("kept by leaving");
             awaitTyped(d, "kept by leaving");
@@ -165,6 +171,7 @@ class NotesPanelTest {
             d.awaitTrue("it wants nothing yet", () -> met(d, "note-1").equals("changes nothing yet"));
             d.key("ctrl D");
             awaitOpen(d, "note-1-1");
+            d.doOnSwing(() -> d.desk().look(st -> st.withNote(Optional.of("lean"))));
             d.click("on-lean");
             d.await("lean is off", st -> !st.shot().orElseThrow().note("lean").orElseThrow().on());
             JSpinner weight = d.find("weight-lean", JSpinner.class);
