@@ -4,6 +4,8 @@ import java.awt.BorderLayout;
 import java.awt.Component;
 import java.awt.event.ActionEvent;
 import java.awt.event.KeyEvent;
+import java.awt.event.WindowAdapter;
+import java.awt.event.WindowEvent;
 import java.util.Locale;
 import javax.swing.AbstractAction;
 import javax.swing.Action;
@@ -65,6 +67,12 @@ final class ActionFinder extends JDialog {
         });
         add(typed, BorderLayout.NORTH);
         add(new JScrollPane(list), BorderLayout.CENTER);
+        addWindowListener(new WindowAdapter() {
+            @Override
+            public void windowOpened(WindowEvent e) {
+                typed.requestFocusInWindow();
+            }
+        });
         narrow();
         pack();
         setLocationRelativeTo(window.frame());

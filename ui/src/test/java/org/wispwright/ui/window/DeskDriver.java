@@ -1,5 +1,6 @@
 package org.wispwright.ui.window;
 
+import java.awt.AWTEvent;
 import java.awt.AWTException;
 import java.awt.Component;
 import java.awt.Container;
@@ -7,7 +8,9 @@ import java.awt.Dimension;
 import java.awt.Point;
 import java.awt.Rectangle;
 import java.awt.Robot;
+import java.awt.Toolkit;
 import java.awt.Window;
+import java.awt.event.AWTEventListener;
 import java.awt.event.InputEvent;
 import java.awt.event.KeyEvent;
 import java.awt.event.MouseEvent;
@@ -18,7 +21,9 @@ import java.io.UncheckedIOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
 import java.util.concurrent.Callable;
 import java.util.concurrent.FutureTask;
 import java.util.function.Predicate;
@@ -39,7 +44,11 @@ import org.wispwright.ui.window.easel.EaselProbe;
 public final class DeskDriver implements AutoCloseable {
     private static final long MOST_SECONDS = 20;
 
+    private static final long MOST_SECONDS_TO_ARRIVE = 5;
+
     private final Robot robot;
+    private final Map<Integer, Integer> seen = new HashMap<>();
+    private final AWTEventListener counting = this::see;
     private final Desk desk;
     private final DeskWindow window;
 
@@ -61,6 +70,7 @@ public final class DeskDriver implements AutoCloseable {
             throw new IllegalStateException(none);
         }
         robot.setAutoDelay(2);
+        Toolkit.getDefaultToolkit().addAWTEventListener(counting, AWTEvent.KEY_EVENT_MASK | AWTEvent.MOUSE_EVENT_MASK);
         Object[] made = onSwing(() -> {
             Palette.use(dark, textScale);
             Desk d = new Desk(new Workers(SwingUtilities::invokeLater));
@@ -85,6 +95,30 @@ public final class DeskDriver implements AutoCloseable {
             return file;
         } catch (IOException refused) {
             throw new UncheckedIOException(refused);
+        }
+    }
+
+    /** Counts the robot's events as they are seen to: the toolkit's robot returns before they are. */
+    private void arrive(int event, Runnable act) {
+        int before = seen(event);
+        act.run();
+        long end = System.nanoTime() + MOST_SECONDS_TO_ARRIVE * 1_000_000_000L;
+        while (seen(event) == before && System.nanoTime() < end) {
+            robot.delay(2);
+        }
+        onSwing(() -> null);
+        robot.waitForIdle();
+    }
+
+    private int seen(int event) {
+        synchronized (seen) {
+            return seen.getOrDefault(event, 0);
+        }
+    }
+
+    private void see(AWTEvent event) {
+        synchronized (seen) {
+            seen.merge(event.getID(), 1, Integer::sum);
         }
     }
 
@@ -169,9 +203,8 @@ public final class DeskDriver implements AutoCloseable {
     /** Clicks at a place on the screen. */
     public void clickAt(Point p) {
         robot.mouseMove(p.x, p.y);
-        robot.mousePress(InputEvent.BUTTON1_DOWN_MASK);
-        robot.mouseRelease(InputEvent.BUTTON1_DOWN_MASK);
-        robot.waitForIdle();
+        arrive(MouseEvent.MOUSE_PRESSED, () -> robot.mousePress(InputEvent.BUTTON1_DOWN_MASK));
+        arrive(MouseEvent.MOUSE_RELEASED, () -> robot.mouseRelease(InputEvent.BUTTON1_DOWN_MASK));
     }
 
     /** Moves the pointer there. */
@@ -185,7 +218,7 @@ public final class DeskDriver implements AutoCloseable {
         Point corner = onScreen(c, 0, 0);
         Point p = onScreen(c, x, y);
         moveTo(p);
-        java.awt.Toolkit.getDefaultToolkit().getSystemEventQueue().postEvent(new MouseWheelEvent(c, MouseEvent.MOUSE_WHEEL,
+        Toolkit.getDefaultToolkit().getSystemEventQueue().postEvent(new MouseWheelEvent(c, MouseEvent.MOUSE_WHEEL,
                 System.currentTimeMillis(), 0, p.x - corner.x, p.y - corner.y, 0, false, MouseWheelEvent.WHEEL_UNIT_SCROLL, 1, notches));
         robot.waitForIdle();
     }
@@ -193,13 +226,12 @@ public final class DeskDriver implements AutoCloseable {
     /** Drags over places on the screen with the left button. */
     public void drag(List<Point> places) {
         robot.mouseMove(places.get(0).x, places.get(0).y);
-        robot.mousePress(InputEvent.BUTTON1_DOWN_MASK);
+        arrive(MouseEvent.MOUSE_PRESSED, () -> robot.mousePress(InputEvent.BUTTON1_DOWN_MASK));
         for (Point p : places.subList(1, places.size())) {
             robot.mouseMove(p.x, p.y);
             robot.waitForIdle();
         }
-        robot.mouseRelease(InputEvent.BUTTON1_DOWN_MASK);
-        robot.waitForIdle();
+        arrive(MouseEvent.MOUSE_RELEASED, () -> robot.mouseRelease(InputEvent.BUTTON1_DOWN_MASK));
     }
 
     /** Lets the person look for a while. */
@@ -236,8 +268,8 @@ public final class DeskDriver implements AutoCloseable {
                 robot.keyPress(codes[n]);
             }
         }
-        robot.keyPress(key.getKeyCode());
-        robot.keyRelease(key.getKeyCode());
+        arrive(KeyEvent.KEY_PRESSED, () -> robot.keyPress(key.getKeyCode()));
+        arrive(KeyEvent.KEY_RELEASED, () -> robot.keyRelease(key.getKeyCode()));
         for (int n = codes.length - 1; n >= 0; n--) {
             if ((key.getModifiers() & modifiers[n]) != 0) {
                 robot.keyRelease(codes[n]);
@@ -254,8 +286,8 @@ public final class DeskDriver implements AutoCloseable {
                 robot.keyPress(KeyEvent.VK_SHIFT);
             }
             int code = KeyEvent.getExtendedKeyCodeForChar(c);
-            robot.keyPress(code);
-            robot.keyRelease(code);
+            arrive(KeyEvent.KEY_PRESSED, () -> robot.keyPress(code));
+            arrive(KeyEvent.KEY_RELEASED, () -> robot.keyRelease(code));
             if (upper) {
                 robot.keyRelease(KeyEvent.VK_SHIFT);
             }
@@ -335,6 +367,7 @@ public final class DeskDriver implements AutoCloseable {
     /** Closes the window and everything that it opened. */
     @Override
     public void close() {
+        Toolkit.getDefaultToolkit().removeAWTEventListener(counting);
         doOnSwing(window::end);
         doOnSwing(() -> {
             for (Window w : Window.getWindows()) {

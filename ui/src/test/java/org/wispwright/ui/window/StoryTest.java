@@ -9,6 +9,7 @@ import java.awt.Point;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
+import javax.swing.JTextField;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.wispwright.ui.desk.Against;
@@ -146,7 +147,9 @@ class StoryTest {
             driver.key("ctrl shift Z");
             driver.await("all is on disk", s -> s.saving().isDone());
             driver.key("ctrl F");
+            driver.awaitTrue("the list of actions has the focus", () -> driver.find("finder-text", JTextField.class).isFocusOwner());
             driver.type("side by side");
+            assertEquals("side by side", driver.find("finder-text", JTextField.class).getText());
             driver.key("ENTER");
             assertEquals(Against.BESIDE, driver.state().showing().orElseThrow().against());
         }

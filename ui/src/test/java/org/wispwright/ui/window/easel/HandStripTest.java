@@ -267,12 +267,12 @@ class HandStripTest {
     void theKindOfTheMeshAtHandIsShownAndChanged() {
         click("hand-pull");
         bench.rest();
-        assertEquals(WarpKind.SPLINE.ordinal(), ask("hand-mesh", JComboBox.class, JComboBox::getSelectedIndex));
+        assertEquals("" + WarpKind.SPLINE.ordinal(), ask("hand-mesh", JComboBox.class, box -> "" + box.getSelectedIndex()));
         choose("hand-mesh", WarpKind.RIGID.ordinal());
         assertEquals(WarpKind.RIGID, ((MeshWarp) bench.retouching.operations().get(0)).kind());
         assertEquals(Optional.of("Change mesh"), bench.desk.state().history().undoName());
         ToolBench.onSwing(bench.desk::undo);
-        assertEquals(WarpKind.SPLINE.ordinal(), ask("hand-mesh", JComboBox.class, JComboBox::getSelectedIndex));
+        assertEquals("" + WarpKind.SPLINE.ordinal(), ask("hand-mesh", JComboBox.class, box -> "" + box.getSelectedIndex()));
     }
 
     @Test
