@@ -94,7 +94,11 @@ final class FrameTerms {
         return out;
     }
 
-    /** A copy of the picture of a frame in a view as the last {@link #forward} drew it. @throws IllegalArgumentException if no term has it */
+    /**
+     * A copy of the picture of a frame in a view as the last {@link #forward} drew it.
+     *
+     * @throws IllegalArgumentException if no term looks at it
+     */
     Picture last(int frame, int view) {
         return byFrame.getOrDefault(frame, List.of()).stream().filter(shown -> shown.view == view).findFirst()
                 .orElseThrow(() -> new IllegalArgumentException("terms: there is none on frame " + frame + " in view " + view)).got.copy();

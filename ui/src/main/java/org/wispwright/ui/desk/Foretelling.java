@@ -13,8 +13,8 @@ import org.wispwright.ui.shot.Note;
 import org.wispwright.ui.shot.Shot;
 
 /**
- * Says what a solve of the notes would take, and which of them ask for smoke that is not there: anew whenever they change, once the hand has
- * rested, and not while something else computes. Desk's thread.
+ * Says what a solve of the notes would take, and which of them ask for smoke that is not there: anew whenever they change, once the hand
+ * has rested, and not while something else computes. Desk's thread.
  */
 final class Foretelling {
     private static final long REST_NANOS = 700_000_000L;

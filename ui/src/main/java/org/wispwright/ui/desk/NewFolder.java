@@ -80,7 +80,8 @@ final class NewFolder implements AutoCloseable {
 
     private static ShotException cannotWrite(Path where, IOException refused) {
         return new ShotException(new Finding(where.toString(), "", "it cannot be written to (" + refused.getClass().getSimpleName()
-                .replace("Exception", "") + ": " + refused.getMessage() + "); choose a folder that exists, is writable and has room."), refused);
+                .replace("Exception", "") + ": " + refused.getMessage() + "); choose a folder that exists, is writable and has room."),
+                refused);
     }
 
     @Override

@@ -103,7 +103,7 @@ public record SolveNow(OpenShot shot, SolveChoice choice, Phase phase, Wish wish
 
     /** An iteration further, and so at work on the search unless it waits. */
     SolveNow with(Progress now, List<Point> points, Map<String, Picture> pictures) {
-        return new SolveNow(shot, choice, phase == Phase.STARTING ? Phase.SEARCHING : phase, wish, Optional.empty(), Optional.of(now), points,
-                pictures);
+        return new SolveNow(shot, choice, phase == Phase.STARTING ? Phase.SEARCHING : phase, wish, Optional.empty(), Optional.of(now),
+                points, pictures);
     }
 }

@@ -71,7 +71,7 @@ public final class Solving {
         }
     }
 
-    /** Goes on with the solve that was cut off, to the quality asked for, or the lowest that has reached so far. Nothing if it cannot be. */
+    /** Goes on with the solve that was cut off, to the quality asked for or the lowest that reaches so far. Nothing if it cannot be. */
     public void resume() {
         DeskState s = desk.state();
         if (canResume(s)) {
@@ -105,7 +105,8 @@ public final class Solving {
             Optional<Unfinished> left = unfinished(shot.folder());
             workers.onDesk(() -> {
                 ifOnDesk(shot, w -> w.withUnfinished(left));
-                desk.say(why.isPresent() ? Message.Kind.FAULT : Message.Kind.DONE, why.orElse("What the unfinished solve had left is dropped."));
+                desk.say(why.isPresent() ? Message.Kind.FAULT : Message.Kind.DONE,
+                        why.orElse("What the unfinished solve had left is dropped."));
             });
         });
     }
@@ -113,8 +114,8 @@ public final class Solving {
     /** Has the search wait after this iteration, or go on. */
     public void pause(boolean wait) {
         running.hold(wait);
-        work(w -> w.running(now -> wait ? now.with(Wish.PAUSE)
-                : now.wish() != Wish.PAUSE ? now : now.phase() == Phase.PAUSED ? now.in(Phase.SEARCHING).with(Wish.GO_ON) : now.with(Wish.GO_ON)));
+        work(w -> w.running(now -> wait ? now.with(Wish.PAUSE) : now.wish() != Wish.PAUSE ? now
+                : (now.phase() == Phase.PAUSED ? now.in(Phase.SEARCHING) : now).with(Wish.GO_ON)));
     }
 
     /** Ends the search after this iteration and makes a take of what it has. */
@@ -178,7 +179,8 @@ public final class Solving {
     private void run(OpenShot shot, SolveStart start, Cancel cancel) {
         try {
             cancel.stopIfWished();
-            SolveWork.Result result = new SolveRun(shot.folder(), start, cancel, change -> workers.onDesk(() -> work(w -> w.running(change))),
+            SolveWork.Result result = new SolveRun(shot.folder(), start, cancel,
+                    change -> workers.onDesk(() -> work(w -> w.running(change))),
                     line -> workers.onDesk(() -> desk.say(Message.Kind.NOTICE, line))).solve();
             List<TakeEntry> takes = Opening.takes(shot);
             workers.onDesk(() -> ended(shot, result, takes));

@@ -43,7 +43,8 @@ public record Unfinished(int iterations, int rung, boolean sources, State state,
             return found.damaged().isEmpty() ? Optional.empty() : Optional.of(new Unfinished(0, 1, false, State.DAMAGED, ""));
         }
         SolveState at = found.state().get();
-        return Optional.of(new Unfinished(at.search().iterations(), at.rung(), false, State.OTHER_SHOT, at.problem()).lookedAtAgain(folder));
+        Unfinished cut = new Unfinished(at.search().iterations(), at.rung(), false, State.OTHER_SHOT, at.problem());
+        return Optional.of(cut.lookedAtAgain(folder));
     }
 
     /** The same beside the shot as it is on disk now. */

@@ -22,8 +22,8 @@ import org.wispwright.ui.shot.Shot;
 import org.wispwright.ui.shot.Takes;
 
 /**
- * Writes the take that is shown out for others: its pictures, a contact sheet, its files. Each goes into a new folder below the one that the
- * person chose; it is there whole or not at all, and nothing that was there is written over. One at a time. Desk's thread.
+ * Writes the take that is shown out for others: its pictures, a contact sheet, its files. Each goes into a new folder below the one that
+ * the person chose; it is there whole or not at all, and nothing that was there is written over. One at a time. Desk's thread.
  */
 public final class WritingOut {
     private final Desk desk;

@@ -29,7 +29,8 @@ import org.wispwright.ui.window.Words;
 
 /** A take in the list: which it is, where it comes from, how far it meets the notes it was solved for; it can be shown, or set against. */
 final class TakeRow extends JPanel {
-    private static final DateTimeFormatter WHEN = DateTimeFormatter.ofPattern("d MMM, HH:mm", Locale.ENGLISH).withZone(ZoneId.systemDefault());
+    private static final DateTimeFormatter WHEN = DateTimeFormatter.ofPattern("d MMM, HH:mm", Locale.ENGLISH)
+            .withZone(ZoneId.systemDefault());
 
     private final JToggleButton show = new JToggleButton();
     private final JToggleButton against = new JToggleButton();
