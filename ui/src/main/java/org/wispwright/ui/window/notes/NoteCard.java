@@ -114,13 +114,18 @@ final class NoteCard extends JPanel {
         boolean large = where.getFont().getSize2D() > LARGE_TYPE;
         top.add(where, large ? "span, wmin 0, wrap" : "wmin 0");
         top.add(open);
-        top.add(holds);
-        top.add(more);
+        if (!large) {
+            top.add(holds);
+        }
+        top.add(more, large ? "pushx, alignx right" : "");
         JPanel foot = clear(new JPanel(new MigLayout("insets 0, fillx, gapy 4", "[]push[]4[]")));
         JLabel weighs = new JLabel(Words.of("notes.weight"));
         weighs.setLabelFor(weight);
         weighs.setFont(Palette.small());
-        foot.add(on, large ? "span, wrap" : "");
+        foot.add(on, large ? "span, split 2" : "");
+        if (large) {
+            foot.add(holds, "wrap");
+        }
         foot.add(weighs, large ? "split 2, span, wmin 0" : "");
         foot.add(weight, "wmin 40, growx");
         add(top);

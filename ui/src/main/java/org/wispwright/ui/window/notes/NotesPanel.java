@@ -51,7 +51,8 @@ public final class NotesPanel extends JPanel {
         setName("notes");
         setBackground(Palette.PANEL.colour());
         getAccessibleContext().setAccessibleName(Words.of("notes.name"));
-        JScrollPane scroll = new JScrollPane(cards, JScrollPane.VERTICAL_SCROLLBAR_AS_NEEDED, JScrollPane.HORIZONTAL_SCROLLBAR_NEVER);
+        // Always there: a card's height goes with its width, so a bar that comes and goes would come and go for ever.
+        JScrollPane scroll = new JScrollPane(cards, JScrollPane.VERTICAL_SCROLLBAR_ALWAYS, JScrollPane.HORIZONTAL_SCROLLBAR_NEVER);
         scroll.setBorder(BorderFactory.createEmptyBorder());
         scroll.setName("notes-scroll");
         scroll.getVerticalScrollBar().setUnitIncrement(16);
