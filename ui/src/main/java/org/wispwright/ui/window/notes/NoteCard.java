@@ -111,23 +111,27 @@ final class NoteCard extends JPanel {
 
     private void lay() {
         JPanel top = clear(new JPanel(new MigLayout("insets 0, fillx, hidemode 3", "[grow, 0:pref:]4[]4[]4[]")));
-        boolean large = where.getFont().getSize2D() > LARGE_TYPE;
-        top.add(where, large ? "span, wmin 0, wrap" : "wmin 0");
-        top.add(open);
-        if (!large) {
-            top.add(holds);
-        }
-        top.add(more, large ? "pushx, alignx right" : "");
         JPanel foot = clear(new JPanel(new MigLayout("insets 0, fillx, gapy 4", "[]push[]4[]")));
         JLabel weighs = new JLabel(Words.of("notes.weight"));
         weighs.setLabelFor(weight);
         weighs.setFont(Palette.small());
-        foot.add(on, large ? "span, split 2" : "");
-        if (large) {
+        if (where.getFont().getSize2D() > LARGE_TYPE) {
+            top.add(where, "wmin 0, span, split 2, pushx, growx");
+            top.add(more, "wrap");
+            top.add(open);
+            foot.add(on, "span, split 2, gapright 0");
             foot.add(holds, "wrap");
+            foot.add(weighs, "span, wrap");
+            foot.add(weight, "span, growx, wmin 0");
+        } else {
+            top.add(where, "wmin 0");
+            top.add(open);
+            top.add(holds);
+            top.add(more);
+            foot.add(on);
+            foot.add(weighs);
+            foot.add(weight);
         }
-        foot.add(weighs, large ? "split 2, span, wmin 0" : "");
-        foot.add(weight, "wmin 40, growx");
         add(top);
         add(words, "wmin 0");
         add(thumbnails, "wmin 0");
