@@ -11,7 +11,8 @@ import java.util.function.BiFunction;
 import org.wispwright.ui.job.Cancel;
 
 /**
- * Values of many keys, worked out one after the other beside the desk, and kept. Who asks anew drops what was asked before and has not come.
+ * Values of many keys, worked out one after the other beside the desk, and kept. Who asks anew drops what was asked before and has not
+ * come.
  * A key that cannot be worked out has no value until it is asked with other keys. Desk's thread.
  */
 final class Gathering<K, V> {

@@ -13,8 +13,8 @@ import org.wispwright.ui.shot.NoteEdits.Listed;
 import org.wispwright.ui.shot.ShotFolder;
 
 /**
- * How far a take meets each note as the note is now; its retouch may have changed since the take was solved. Worked out beside the desk from
- * pictures of at most {@link #MOST_ROWS} rows, and kept for a note and a take.
+ * How far a take meets each note as the note is now; its retouch may have changed since the take was solved. Worked out beside the desk
+ * from pictures of at most {@link #MOST_ROWS} rows, and kept for a note and a take.
  */
 public final class MetWatch {
     /** Rows of the pictures, at most. */

@@ -50,7 +50,8 @@ public final class NewNotes {
     public static Made duplicate(String name, OpenShot shot, String id) {
         Listed listed = shot.note(id).orElseThrow();
         Note n = listed.note();
-        Note copy = new Note(freeId(shot, n.id()), n.words(), n.frame(), n.view(), n.weight(), n.weighBy(), n.retouch(), n.holds(), n.loss());
+        Note copy = new Note(freeId(shot, n.id()), n.words(), n.frame(), n.view(), n.weight(), n.weighBy(), n.retouch(), n.holds(),
+                n.loss());
         return all(name, shot, List.of(new Listed(copy, listed.on())), Map.of(copy.id(), id));
     }
 

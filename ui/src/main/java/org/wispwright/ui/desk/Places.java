@@ -16,7 +16,8 @@ public final class Places {
 
     /** All notes by frame; those of one frame by id. */
     public static List<Listed> inOrder(OpenShot shot) {
-        return shot.notes().stream().sorted(Comparator.comparingInt((Listed l) -> l.note().frame()).thenComparing(l -> l.note().id())).toList();
+        return shot.notes().stream().sorted(Comparator.comparingInt((Listed l) -> l.note().frame()).thenComparing(l -> l.note().id()))
+                .toList();
     }
 
     /** Opens a note and shows its frame and view. Nothing if there is no such note. */

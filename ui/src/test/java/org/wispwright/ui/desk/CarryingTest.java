@@ -52,7 +52,8 @@ class CarryingTest {
             new Carrying(d.desk).carry("Carry note", "lean", List.of(1006), true, () -> { });
             assertEquals(List.of("lean", "open"), ids(d));
             d.until("carried", () -> ids(d).contains("lean-1006"));
-            assertNotEquals(d.shot().note("lean").orElseThrow().note().retouch(), d.shot().note("lean-1006").orElseThrow().note().retouch());
+            assertNotEquals(d.shot().note("lean").orElseThrow().note().retouch(),
+                    d.shot().note("lean-1006").orElseThrow().note().retouch());
         }
         try (WindowlessDesk d = WindowlessDesk.with(SmallShot.in(folder.resolve("bare")).folder())) {
             new Carrying(d.desk).carry("Carry note", "lean", List.of(1006), true, () -> { });

@@ -34,7 +34,8 @@ final class NoteActions {
                 DeskAction.of("note.toggle", "O", open, this::toggle),
                 DeskAction.of("note.duplicate", "ctrl D", open, this::duplicate),
                 DeskAction.of("note.carry", null, open, () -> panel.box(boxes -> boxes.carry(openId()))),
-                DeskAction.of("note.between", null, s -> open.test(s) && several.test(s), () -> panel.box(boxes -> boxes.between(openId()))),
+                DeskAction.of("note.between", null, s -> open.test(s) && several.test(s),
+                        () -> panel.box(boxes -> boxes.between(openId()))),
                 DeskAction.of("note.delete", "shift DELETE", open, this::delete));
         others = List.of(
                 DeskAction.of("note.next", "shift DOWN", s -> Places.beside(s, 1).isPresent(), () -> go(1)),

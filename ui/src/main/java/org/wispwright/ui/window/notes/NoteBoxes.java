@@ -135,7 +135,8 @@ final class NoteBoxes {
     private static JTextField file(NoteBox box, String part) {
         JTextField field = box.row(part, Words.of("notes.paint." + part), new JTextField());
         field.setToolTipText(Words.of("notes.paint." + part + ".tip"));
-        JButton choose = box.bare(part + "-choose", Words.of("notes.paint." + part + ".choose"), new JButton(Words.of("notes.paint.choose")));
+        JButton choose = box.bare(part + "-choose", Words.of("notes.paint." + part + ".choose"),
+                new JButton(Words.of("notes.paint.choose")));
         choose.addActionListener(e -> chosen(box, field).ifPresent(file -> field.setText(file.getPath())));
         return field;
     }

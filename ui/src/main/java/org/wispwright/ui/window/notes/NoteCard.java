@@ -85,7 +85,8 @@ final class NoteCard extends JPanel {
         name(on, "on");
         on.setOpaque(false);
         on.setToolTipText(Words.of("notes.on.tip"));
-        on.addActionListener(e -> desk.edit(NoteEdit.on(Words.of(on.isSelected() ? "notes.edit.on" : "notes.edit.off"), id, on.isSelected())));
+        on.addActionListener(e -> desk.edit(NoteEdit.on(Words.of(on.isSelected() ? "notes.edit.on" : "notes.edit.off"), id,
+                on.isSelected())));
         name(weight, "weight");
         ((JSpinner.NumberEditor) weight.getEditor()).getFormat().applyPattern("0.##");
         ((JSpinner.NumberEditor) weight.getEditor()).getTextField().setColumns(3);

@@ -198,7 +198,8 @@ final class RibbonStrip extends DrawnPart {
         Optional<Double> change = take.isEmpty() ? Optional.empty()
                 : desk.change().of(shot, take.getAsInt(), state.showing().orElseThrow().view(), frame);
         return e.getY() >= rows.plot() && change.isPresent()
-                ? Words.of("ribbon.change.tip", frame, String.format(Locale.ROOT, "%.1f", 100 * change.get())) : Words.of("ribbon.frame", frame);
+                ? Words.of("ribbon.change.tip", frame, String.format(Locale.ROOT, "%.1f", 100 * change.get()))
+                : Words.of("ribbon.frame", frame);
     }
 
     @Override
