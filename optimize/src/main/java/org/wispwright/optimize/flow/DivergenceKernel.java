@@ -44,19 +44,11 @@ final class DivergenceKernel {
             slab(shape, u.x(), u.y(), u.z(), scratch, k);
             clearSlab.accept(k);
         });
-        float most = largest(scratch);
-        float fastest = Math.max(largest(u.x()), Math.max(largest(u.y()), largest(u.z())));
-        return fastest == 0 ? 0 : most / (double) fastest;
-    }
-
-    private static float largest(float[] values) {
         float most = 0;
-        for (float v : values) {
-            float size = v < 0 ? -v : v;
-            if (size > most) {
-                most = size;
-            }
+        for (float v : scratch) {
+            most = Math.max(most, Math.abs(v));
         }
-        return most;
+        float fastest = u.largest();
+        return fastest == 0 ? 0 : most / (double) fastest;
     }
 }

@@ -11,7 +11,7 @@ import org.wispwright.render.volume.GridShape;
  *
  * @param grid        the box
  * @param frames      the frame range
- * @param substeps    solver steps from one frame to the next, 1 to 64
+ * @param pace        how a frame is cut into substeps
  * @param velocity    interpolation of the velocity that carries itself
  * @param density     interpolation of the density
  * @param sides       walls and open sides
@@ -23,15 +23,12 @@ import org.wispwright.render.volume.GridShape;
  * @param wind        what pushes all air alike
  * @param start       what is in the box on the first frame
  */
-public record FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpolation velocity, Interpolation density, Sides sides,
+public record FlowSetup(GridShape grid, FrameRange frames, Pace pace, Interpolation velocity, Interpolation density, Sides sides,
                         double buoyancy, double dissipation, List<Source> sources, List<Obstacle> obstacles, Heat heat,
                         Wind wind, Start start) {
 
     /** Checks the numbers. @throws IllegalArgumentException saying what is off */
     public FlowSetup {
-        if (substeps < 1 || substeps > 64) {
-            throw new IllegalArgumentException("flow: got " + substeps + " substeps a frame, needs 1 to 64");
-        }
         if (!Double.isFinite(buoyancy)) {
             throw new IllegalArgumentException("flow: got a buoyancy of " + buoyancy + " m/s2, needs a finite number");
         }
@@ -51,41 +48,51 @@ public record FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpo
     /** Plain smoke: sources and buoyancy alone. */
     public FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpolation velocity, Interpolation density, Sides sides,
                      double buoyancy, double dissipation, List<Source> sources) {
-        this(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, List.of(), Heat.NONE, Wind.NONE,
+        this(grid, frames, Pace.of(substeps), velocity, density, sides, buoyancy, dissipation, sources, List.of(), Heat.NONE, Wind.NONE,
                 Start.EMPTY);
+    }
+
+    /** Solver steps from one frame to the next; 1 while they are still to be found. */
+    public int substeps() {
+        return Math.max(1, pace.substeps());
+    }
+
+    /** The same shot with its frames cut otherwise. */
+    public FlowSetup withPace(Pace other) {
+        return new FlowSetup(grid, frames, other, velocity, density, sides, buoyancy, dissipation, sources, obstacles, heat, wind, start);
     }
 
     /** The same shot on another grid of its box. */
     public FlowSetup on(GridShape other) {
-        return new FlowSetup(other, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, heat,
+        return new FlowSetup(other, frames, pace, velocity, density, sides, buoyancy, dissipation, sources, obstacles, heat,
                 wind, start);
     }
 
     /** The same shot with these things in its box. */
     public FlowSetup withObstacles(List<Obstacle> things) {
-        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, things, heat, wind, start);
+        return new FlowSetup(grid, frames, pace, velocity, density, sides, buoyancy, dissipation, sources, things, heat, wind, start);
     }
 
     /** The same shot with other sources. */
     public FlowSetup withSources(List<Source> other) {
-        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, other, obstacles, heat, wind, start);
+        return new FlowSetup(grid, frames, pace, velocity, density, sides, buoyancy, dissipation, other, obstacles, heat, wind, start);
     }
 
     /** The same shot with a temperature. */
     public FlowSetup withHeat(Heat other) {
-        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, other, wind,
+        return new FlowSetup(grid, frames, pace, velocity, density, sides, buoyancy, dissipation, sources, obstacles, other, wind,
                 start);
     }
 
     /** The same shot in another wind. */
     public FlowSetup withWind(Wind other) {
-        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, heat, other,
+        return new FlowSetup(grid, frames, pace, velocity, density, sides, buoyancy, dissipation, sources, obstacles, heat, other,
                 start);
     }
 
     /** The same shot with something in its box on the first frame. */
     public FlowSetup withStart(Start other) {
-        return new FlowSetup(grid, frames, substeps, velocity, density, sides, buoyancy, dissipation, sources, obstacles, heat, wind,
+        return new FlowSetup(grid, frames, pace, velocity, density, sides, buoyancy, dissipation, sources, obstacles, heat, wind,
                 other);
     }
 
@@ -106,12 +113,12 @@ public record FlowSetup(GridShape grid, FrameRange frames, int substeps, Interpo
 
     /** Step n of a run, from 0. */
     public Substep step(int n) {
-        return new Substep(frames.first() + 1 + n / substeps, n % substeps, substeps);
+        return new Substep(frames.first() + 1 + n / substeps(), n % substeps(), substeps());
     }
 
     /** Steps of a run from the first frame to this one. */
     public int stepsTo(int frame) {
-        return substeps * (frame - frames.first());
+        return substeps() * (frame - frames.first());
     }
 
     /** Seconds of a substep. */

@@ -22,6 +22,9 @@ public final class Simulation {
          * @param force the force of the step that led here, m/s2; null for the first frame and without a force
          */
         void frame(int frame, SmokeState state, MacVelocity force);
+
+        /** The start, and each substep's end before its frame is told of: the state is to read, and changes when this returns. */
+        default void substep(SmokeState state) { }
     }
 
     /** Runs all frames with the sources as they were set up: see the other. */
@@ -50,6 +53,7 @@ public final class Simulation {
         SmokeState next = SmokeState.of(solver.setup());
         MacVelocity force = x == null ? null : new MacVelocity(solver.setup().grid());
         boolean follows = false;
+        each.substep(now);
         each.frame(first, now, null);
         for (int frame = first + 1; frame <= lastFrame; frame++) {
             if (force != null) {
@@ -65,6 +69,7 @@ public final class Simulation {
                 SmokeState swap = now;
                 now = next;
                 next = swap;
+                each.substep(now);
             }
             each.frame(frame, now, force);
         }

@@ -54,6 +54,17 @@ public final class MacVelocity {
         return z;
     }
 
+    /** The largest absolute value of any component on any face; NaN if one is NaN. */
+    public float largest() {
+        float most = 0;
+        for (float[] component : new float[][] {x, y, z}) {
+            for (float v : component) {
+                most = Math.max(most, Math.abs(v));
+            }
+        }
+        return most;
+    }
+
     /** Overwrites this velocity with another of the same shape. */
     public void set(MacVelocity other) {
         System.arraycopy(other.x, 0, x, 0, x.length);

@@ -6,8 +6,10 @@ import java.util.List;
 import java.util.Locale;
 import org.wispwright.optimize.checkpoint.Budget;
 import org.wispwright.optimize.flow.FlowSetup;
+import org.wispwright.optimize.flow.Pace;
 import org.wispwright.optimize.flow.SmokeState;
 import org.wispwright.optimize.solve.Calibration;
+import org.wispwright.optimize.solve.Pacing;
 import org.wispwright.optimize.solve.SolveCancelled;
 import org.wispwright.optimize.solve.SolveProblem;
 import org.wispwright.render.lanes.Lanes;
@@ -43,10 +45,11 @@ public record Estimate(Quality quality, GridShape top, long memoryBytes, int sta
      * @throws Cancel.Cancelled if cancelled
      */
     public static List<Estimate> all(Shot shot, long memoryBytes, long diskBytes, Lanes lanes, Cancel cancel) {
-        Calibration measured = measured(shot, lanes, cancel);
+        Shot paced = shot.withFlow(paced(shot.flow(), lanes, cancel));
+        Calibration measured = measured(paced, lanes, cancel);
         List<Estimate> all = new ArrayList<>();
         for (Quality quality : Quality.values()) {
-            all.add(of(quality, shot.flow(), memoryBytes, diskBytes, measured));
+            all.add(of(quality, paced.flow(), memoryBytes, diskBytes, measured));
         }
         return all;
     }
@@ -54,6 +57,22 @@ public record Estimate(Quality quality, GridShape top, long memoryBytes, int sta
     /** The same for one quality. */
     static Estimate of(Quality quality, Shot shot, long memoryBytes, long diskBytes, Lanes lanes, Cancel cancel) {
         return of(quality, shot.flow(), memoryBytes, diskBytes, measured(shot, lanes, cancel));
+    }
+
+    /** Before there is an original: with as many substeps as its run on the lowest rung needs. */
+    private static FlowSetup paced(FlowSetup flow, Lanes lanes, Cancel cancel) {
+        if (!flow.pace().isOpen()) {
+            return flow;
+        }
+        GridShape low = Quality.PREVIEW.rungs(flow.grid()).get(0);
+        double cells = flow.pace().mostCells() * flow.grid().cellMetres() / low.cellMetres();
+        try {
+            return flow.withPace(flow.pace().found(Pacing.run(flow.on(low).withPace(Pace.within(cells)), lanes, cancel::wished).substeps()));
+        } catch (SolveCancelled asked) {
+            throw new Cancel.Cancelled();
+        } catch (IllegalArgumentException tooFast) {
+            throw new ShotException(new Finding("shot.json", "/flow/largestDisplacementCells", tooFast.getMessage() + "."), tooFast);
+        }
     }
 
     private static Calibration measured(Shot shot, Lanes lanes, Cancel cancel) {

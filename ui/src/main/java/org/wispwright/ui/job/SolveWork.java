@@ -85,15 +85,16 @@ public final class SolveWork {
      *     set-up is there, or the disk refuses
      * @throws Cancel.Cancelled if cancelled; no half take is left, and what the search had found can be gone on with
      */
-    public static Result run(ShotFolder folder, Shot shot, String digest, Manner manner, Lanes lanes, Progress progress, Cancel cancel) {
+    public static Result run(ShotFolder folder, Shot asRead, String digest, Manner manner, Lanes lanes, Progress progress, Cancel cancel) {
         long start = System.nanoTime();
-        FlowSetup flow = shot.flow();
-        SolveProblem problem = ShotProblem.of(shot).withSources(manner.sources());
-        if (manner.sources() && flow.sources().isEmpty()) {
+        ShotProblem.of(asRead);
+        if (manner.sources() && asRead.flow().sources().isEmpty()) {
             throw new ShotException(new Finding("shot.json", "/sources",
                     "the shot has no source whose strength could change; solve without --sources, or add one."));
         }
-        SimulateWork.Result original = SimulateWork.run(folder, shot, lanes, progress, cancel);
+        SimulateWork.Result original = SimulateWork.run(folder, asRead, lanes, progress, cancel);
+        Shot shot = asRead.withFlow(original.flow());
+        SolveProblem problem = ShotProblem.of(shot).withSources(manner.sources());
         List<SmokeAsked> asked = SmokeAsked.ofAll(Takes.of(folder), shot, lanes);
         asked.stream().filter(SmokeAsked::isWorthTelling).forEach(smoke -> progress.milestone(smoke.inWords(manner.sources())));
         try (SolveSearch search = SolveSearch.begin(folder, digest, problem, manner, progress)) {
@@ -117,12 +118,11 @@ public final class SolveWork {
         }
         double forceRms = norm(solve.unknowns());
         try (TakeDraft draft = takes.draft()) {
-            FrameWriting writing = new FrameWriting(flow, draft, "take", progress);
             SmokeSolver solver = new SmokeSolver(flow, lanes);
+            FrameWriting writing = new FrameWriting(flow, solver, draft, "take", progress);
             ForceBasis basis = Solve.basis(flow, lanes);
             Simulation.run(solver, flow.startState(), basis, solve.unknowns(), solve.strengths().orElse(null), flow.frames().last(),
-                    cancel::wished,
-                    (frame, state, force) -> writing.frame(frame, state, solver));
+                    cancel::wished, writing);
             draft.writeForce(solve.unknowns());
             if (solve.strengths().isPresent()) {
                 draft.writeSources(SourceStrengths.json(flow, solve.strengths().get()));
@@ -130,7 +130,7 @@ public final class SolveWork {
             draft.writeSearch(search.end());
             double massRatio = original.lastMass() > 0 ? writing.lastMass() / original.lastMass() : 1;
             cancel.stopIfWished();
-            int take = draft.finish(record(shot, manner, asked, solve, writing.divergenceMax(), massRatio, forceRms));
+            int take = draft.finish(record(shot, manner, asked, solve, writing, massRatio, forceRms));
             Comparison comparison = CompareWork.compare(folder, shot, 0, take, lanes, progress, new Cancel());
             Departure departure = Departure.of(shot, frame -> takes.density(0, frame, flow), frame -> takes.density(take, frame, flow),
                     lanes, new Cancel());
@@ -142,7 +142,7 @@ public final class SolveWork {
     }
 
     /** Nothing in it depends on threads, memory or the clock: the same shot gives the same bytes. */
-    private static TakeRecord record(Shot shot, Manner manner, List<SmokeAsked> asked, SolveResult solve, double divergenceMax, double massRatio,
+    private static TakeRecord record(Shot shot, Manner manner, List<SmokeAsked> asked, SolveResult solve, FrameWriting writing, double massRatio,
                                      double forceRms) {
         ObjectNode settings = TakeRecord.object().put("stay", manner.stay()).put("sources", manner.sources())
                 .put("quality", manner.quality().name().toLowerCase(Locale.ROOT));
@@ -153,7 +153,7 @@ public final class SolveWork {
         ObjectNode losses = settings.putObject("noteLosses");
         settings.put("untilLoss", manner.until().loss());
         ObjectNode figures = TakeRecord.object().put("gradients", solve.gradients()).put("forceRms", forceRms).put("massRatio", massRatio)
-                .put("divergenceMax", divergenceMax).put("energyWeight", solve.energyWeight()).put("energyShare", solve.energyShare())
+                .put("divergenceMax", writing.divergenceMax()).put("largestDisplacementCells", writing.pacing().cells()).put("energyWeight", solve.energyWeight()).put("energyShare", solve.energyShare())
                         .put("ended", solve.ended());
         ObjectNode smoke = figures.putObject("smokeAsked");
         asked.forEach(a -> smoke.put(a.note().id(), a.depth()));

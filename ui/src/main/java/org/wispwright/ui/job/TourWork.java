@@ -50,7 +50,7 @@ public final class TourWork {
         Review review = ReviewWork.of(shotFolder, shot, solve.comparison(), lanes, progress, cancel);
         CompareWork.write(shotFolder, shot, solve.comparison(), review, out, progress);
         progress.milestone("tour: two short solves, to tell what the stay term does");
-        StayTrade trade = StayTrade.of(shot, lanes, cancel);
+        StayTrade trade = StayTrade.of(shot.withFlow(solve.flow()), lanes, cancel);
         ObjectNode report = SolveReport.of(solve);
         report.set("stayTrade", SolveReport.of(trade, shot.notes()));
         report.put("seconds", (System.nanoTime() - start) / 1e9);

@@ -46,7 +46,7 @@ final class SetupDigest {
         Sides s = flow.sides();
         line("grid", g.nx(), g.ny(), g.nz(), g.cellMetres(), g.originX(), g.originY(), g.originZ());
         line("frames", f.first(), f.last(), f.perSecond());
-        line("flow", flow.substeps(), flow.velocity(), flow.density(), flow.buoyancy(), flow.dissipation());
+        line("flow", flow.pace().mostCells() > 0 ? "within " + flow.pace().mostCells() : flow.substeps(), flow.velocity(), flow.density(), flow.buoyancy(), flow.dissipation());
         line("sides", s.left(), s.right(), s.floor(), s.top(), s.back(), s.front());
         flow.sources().forEach(this::source);
     }

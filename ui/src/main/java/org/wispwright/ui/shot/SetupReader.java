@@ -11,6 +11,7 @@ import org.wispwright.optimize.flow.FlowSetup;
 import org.wispwright.optimize.flow.FrameRange;
 import org.wispwright.optimize.flow.Heat;
 import org.wispwright.optimize.flow.Interpolation;
+import org.wispwright.optimize.flow.Pace;
 import org.wispwright.optimize.flow.Side;
 import org.wispwright.optimize.flow.Sides;
 import org.wispwright.optimize.flow.Source;
@@ -38,7 +39,7 @@ final class SetupReader {
     static final int FORMAT = 1;
     static final double FAR = 1e6;
     private static final int MOST_CELLS_A_SIDE = 8192;
-    private static final int MOST_SUBSTEPS = 64;
+    private static final double MOST_DISPLACEMENT = 1000;
     private static final int MOST_VIEWS = 64;
 
     private final ShotFolder folder;
@@ -83,7 +84,7 @@ final class SetupReader {
 
     /** Solver steps of the shot as far as they can be read; the flow section complains about substeps itself. */
     private static long steps(JsonPlace top, Optional<FrameRange> frames) {
-        int substeps = new Findings().attempt(() -> top.need("flow").need("substeps").whole(1, MOST_SUBSTEPS)).orElse(1);
+        int substeps = new Findings().attempt(() -> top.need("flow").need("substeps").whole(1, Pace.MOST_SUBSTEPS)).orElse(1);
         return frames.map(f -> (long) f.count() * substeps).orElse(1L);
     }
 
@@ -110,9 +111,9 @@ final class SetupReader {
 
     private Optional<FlowSetup> flow(Optional<JsonPlace> given, JsonPlace top, Optional<GridShape> grid, Optional<FrameRange> frames,
             List<Source> sources) {
-        given.ifPresent(p -> p.only("substeps", "velocityInterpolation", "densityInterpolation", "sides", "buoyancy", "dissipation",
+        given.ifPresent(p -> p.only("substeps", "largestDisplacementCells", "velocityInterpolation", "densityInterpolation", "sides", "buoyancy", "dissipation",
                 "lift", "cooling", "wind"));
-        int substeps = given.flatMap(p -> p.ask("substeps")).map(p -> p.whole(1, MOST_SUBSTEPS)).orElse(1);
+        Pace pace = given.map(SetupReader::pace).orElse(Pace.of(1));
         Interpolation velocity = given.flatMap(p -> p.ask("velocityInterpolation")).map(p -> p.choice(Interpolation.class))
                 .orElse(Interpolation.LINEAR);
         Interpolation density = given.flatMap(p -> p.ask("densityInterpolation")).map(p -> p.choice(Interpolation.class))
@@ -128,10 +129,18 @@ final class SetupReader {
         }
         JsonPlace place = given.orElse(top);
         // The sources come last: whether they may give warmth is for the whole to say.
-        FlowSetup plain = place.make(() -> new FlowSetup(grid.get(), frames.get(), substeps, velocity, density, sides, buoyancy,
+        FlowSetup plain = place.make(() -> new FlowSetup(grid.get(), frames.get(), 1, velocity, density, sides, buoyancy,
                 dissipation,
                 List.of()));
-        return Optional.of(place.make(() -> plain.withHeat(new Heat(lift, cooling)).withWind(wind).withSources(sources)));
+        return Optional.of(place.make(() -> plain.withPace(pace).withHeat(new Heat(lift, cooling)).withWind(wind).withSources(sources)));
+    }
+
+    private static Pace pace(JsonPlace flow) {
+        if (flow.has("substeps") && flow.has("largestDisplacementCells")) {
+            throw flow.fault("both 'substeps' and 'largestDisplacementCells'", "one of them", "remove the other");
+        }
+        return flow.ask("largestDisplacementCells").map(p -> Pace.within(p.positive(MOST_DISPLACEMENT)))
+                .orElseGet(() -> Pace.of(flow.ask("substeps").map(p -> p.whole(1, Pace.MOST_SUBSTEPS)).orElse(1)));
     }
 
     private static Sides sides(JsonPlace place) {

@@ -28,6 +28,11 @@ public record Shot(String name, FlowSetup flow, Look look, Rgb background, List<
         holds = List.copyOf(holds);
     }
 
+    /** The same shot with another flow: its substeps found. */
+    public Shot withFlow(FlowSetup other) {
+        return new Shot(name, other, look, background, views, notes, off, holds);
+    }
+
     /** The view of that name. */
     public Optional<ShotView> view(String wanted) {
         return views.stream().filter(v -> v.view().name().equals(wanted)).findFirst();

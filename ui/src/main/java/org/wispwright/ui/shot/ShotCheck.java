@@ -109,6 +109,7 @@ public final class ShotCheck {
             HoldCheck.ofShot(holds, notes.on(), mattes, shot, findings);
         });
         Optional<Shot> whole = setup.filter(s -> findings.none())
+                .flatMap(s -> findings.attempt(() -> Takes.of(folder).paced(s.flow())).map(s::withFlow))
                 .map(s -> new Shot(s.name(), s.flow(), s.look(), s.background(), s.views(), notes.on(), notes.off(), holds));
         return new Result(whole, findings.all());
     }

@@ -8,7 +8,9 @@ import com.fasterxml.jackson.core.JsonProcessingException;
 import com.fasterxml.jackson.databind.SerializationFeature;
 import java.nio.charset.StandardCharsets;
 import java.util.List;
+import java.util.Optional;
 import org.wispwright.optimize.flow.FlowSetup;
+import org.wispwright.optimize.flow.Pace;
 
 /**
  * Where a take comes from, as {@code take.json} says it.
@@ -21,6 +23,7 @@ import org.wispwright.optimize.flow.FlowSetup;
  * @param losses the loss after every iteration, the start first; empty for the original
  */
 public record TakeRecord(Kind kind, String tool, String setupSha256, ObjectNode settings, ObjectNode figures, List<Double> losses) {
+    static final String SUBSTEPS = "substeps";
     private static final JsonMapper MAPPER = JsonMapper.builder().enable(SerializationFeature.INDENT_OUTPUT).build();
 
     /** What made a take. */
@@ -41,9 +44,16 @@ public record TakeRecord(Kind kind, String tool, String setupSha256, ObjectNode 
         }
     }
 
-    /** The record of an original. */
-    public static TakeRecord original(String tool, FlowSetup flow) {
-        return new TakeRecord(Kind.ORIGINAL, tool, digest(flow), object(), object(), List.of());
+    /** The record of an original. @param cells how far air moved in a substep */
+    public static TakeRecord original(String tool, FlowSetup flow, double cells) {
+        ObjectNode figures = object().put(SUBSTEPS, flow.substeps()).put("largestDisplacementCells", cells);
+        return new TakeRecord(Kind.ORIGINAL, tool, digest(flow), object(), figures, List.of());
+    }
+
+    /** The number of substeps that an original was made with; empty if its figures have none that can be. */
+    Optional<Integer> substeps() {
+        int number = figures.path(SUBSTEPS).isInt() ? figures.path(SUBSTEPS).intValue() : 0;
+        return number >= 1 && number <= Pace.MOST_SUBSTEPS ? Optional.of(number) : Optional.empty();
     }
 
     /** An empty JSON object for settings or figures. */

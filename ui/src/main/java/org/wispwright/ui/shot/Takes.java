@@ -83,6 +83,25 @@ public final class Takes {
     }
 
     /**
+     * The flow with the number of substeps that its original was found to need, if it states a largest displacement and that original is
+     * there; otherwise as it is.
+     *
+     * @throws ShotException if the original does not say
+     */
+    public FlowSetup paced(FlowSetup flow) {
+        if (!flow.pace().isOpen() || !has(0)) {
+            return flow;
+        }
+        TakeRecord original = record(0);
+        if (!original.belongsTo(flow)) {
+            return flow;
+        }
+        return flow.withPace(flow.pace().found(original.substeps().orElseThrow(() -> new ShotException(Finding.of(file(0, "take.json"),
+                "/figures/" + TakeRecord.SUBSTEPS, "no number of substeps", "the number that was found from flow.largestDisplacementCells",
+                "move the folder takes away and simulate again")))));
+    }
+
+    /**
      * The density of a frame.
      *
      * @throws ShotException if the take or the file is missing, damaged, or of another grid than the shot

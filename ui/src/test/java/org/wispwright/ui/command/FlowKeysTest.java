@@ -2,6 +2,7 @@ package org.wispwright.ui.command;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertNotEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
 import java.nio.file.Path;
@@ -225,6 +226,51 @@ class FlowKeysTest {
         Run run = Run.of("simulate", shot.folder().toString());
         assertEquals(0, run.code(), run.err());
         assertEquals(3, NpyFile.read(shot.folder().resolve("takes/000/temperature.1006.npy")).shape().length);
+    }
+
+    /** By hand: a push of 60 m/s2 over 5 frames of 1/24 s gives 12.5 m/s, 2.08 cells of 0.25 m a frame: three substeps of at most a cell. */
+    @Test void aLargestDisplacementFindsItsSubsteps() throws IOException {
+        String stated = digest();
+        shot.swap("shot.json", "\"substeps\": 1,", "\"largestDisplacementCells\": 1, \"wind\": {\"metresPerSecond2\": [60, 0, 0]},");
+        shot.swap("shot.json", "\"buoyancy\": 3.0", "\"buoyancy\": 0");
+        assertTrue(flow().pace().isOpen());
+        String first = digest();
+        assertNotEquals(stated, first);
+        Run estimate = Run.of("estimate", shot.folder().toString(), "--quality", "preview");
+        assertEquals(0, estimate.code(), estimate.err());
+        Run run = Run.of("simulate", shot.folder().toString());
+        assertEquals(0, run.code(), run.err());
+        assertTrue(run.out().contains("6 frames of 3 substeps"), run.out());
+        assertEquals(3, flow().substeps());
+        assertEquals(first, digest(), "what was found is no part of what was asked");
+        assertEquals(0, Run.of("simulate", shot.folder().toString()).code());
+        String record = java.nio.file.Files.readString(shot.folder().resolve("takes/000/take.json"));
+        assertTrue(record.contains("\"substeps\" : 3"), record);
+        Run solve = Run.of("solve", shot.folder().toString(), "--until", "iterations=1");
+        assertEquals(0, solve.code(), solve.err());
+        shot.swap("takes/000/take.json", "\"substeps\" : 3", "\"substeps\" : 0");
+        refused("takes/000/take.json at /figures/substeps", "simulate again");
+        shot.swap("shot.json", "\"largestDisplacementCells\": 1", "\"largestDisplacementCells\": 0.5");
+        assertNotEquals(first, digest());
+        Refused.by(place, List.of("simulate", shot.folder().toString()), "another set-up");
+    }
+
+    @ParameterizedTest
+    @CsvSource(delimiter = '|', quoteCharacter = '~', value = {
+        "'substeps': 2, 'largestDisplacementCells': 1 | /flow | both 'substeps' and 'largestDisplacementCells'",
+        "'largestDisplacementCells': 0                | /flow/largestDisplacementCells | above 0",
+        "'largestDisplacementCells': 1e9              | /flow/largestDisplacementCells | at most 1000",
+        "'largestDisplacementCells': '2'              | /flow/largestDisplacementCells | number"})
+    void pacesThatAreRefused(String keys, String pointer, String phrase) {
+        shot.swap("shot.json", "\"substeps\": 1", keys.replace('\'', '"'));
+        refused("shot.json at " + pointer, phrase);
+    }
+
+    @Test void airTooFastForAnyNumberOfSubsteps() {
+        shot.swap("shot.json", "\"substeps\": 1", "\"largestDisplacementCells\": 0.0001");
+        for (String command : List.of("simulate", "solve", "estimate")) {
+            Refused.by(place, List.of(command, shot.folder().toString()), "shot.json at /flow/largestDisplacementCells", "at most 64 substeps");
+        }
     }
 
     @Test void warmthWithoutALift() {

@@ -76,7 +76,7 @@ class TakesTest {
         assertEquals(2, solve());
         assertEquals(List.of(0, 1, 2), takes.numbers());
         try (TakeDraft draft = takes.draft()) {
-            assertThrows(ShotException.class, () -> draft.finishAsOriginal(TakeRecord.original("0.1.0", FLOW)));
+            assertThrows(ShotException.class, () -> draft.finishAsOriginal(TakeRecord.original("0.1.0", FLOW, 0.5)));
         }
         assertEquals(List.of(0, 1, 2), takes.numbers());
     }
@@ -84,8 +84,8 @@ class TakesTest {
     @Test
     void twoDraftsAtOnceBothArrive() {
         try (TakeDraft first = takes.draft(); TakeDraft second = takes.draft()) {
-            assertEquals(1, second.finish(TakeRecord.original("0.1.0", FLOW)));
-            assertEquals(2, first.finish(TakeRecord.original("0.1.0", FLOW)));
+            assertEquals(1, second.finish(TakeRecord.original("0.1.0", FLOW, 0.5)));
+            assertEquals(2, first.finish(TakeRecord.original("0.1.0", FLOW, 0.5)));
         }
     }
 
@@ -102,7 +102,7 @@ class TakesTest {
             assertFalse(Files.exists(bare));
             atWork.write(1001, state());
             other.write(1001, state());
-            assertEquals(1, atWork.finish(TakeRecord.original("0.1.0", FLOW)));
+            assertEquals(1, atWork.finish(TakeRecord.original("0.1.0", FLOW, 0.5)));
         }
         assertEquals(List.of(1), takes.numbers());
     }
@@ -119,8 +119,8 @@ class TakesTest {
     void theSetUpsDigestChangesWithAnyValue() {
         FlowSetup other = new FlowSetup(BOX, new FrameRange(1001, 1002, 24), 1, Interpolation.CUBIC, Interpolation.CUBIC, Sides.CLOSED,
                 1.0000001, 0, List.of());
-        assertFalse(TakeRecord.original("0.1.0", FLOW).belongsTo(other));
-        assertTrue(TakeRecord.original("0.1.0", FLOW).belongsTo(FLOW));
+        assertFalse(TakeRecord.original("0.1.0", FLOW, 0.5).belongsTo(other));
+        assertTrue(TakeRecord.original("0.1.0", FLOW, 0.5).belongsTo(FLOW));
     }
 
     @Test
@@ -135,7 +135,7 @@ class TakesTest {
         state.density().values()[7] = Float.NaN;
         try (TakeDraft draft = takes.draft()) {
             draft.write(1001, state);
-            draft.finish(TakeRecord.original("0.1.0", FLOW));
+            draft.finish(TakeRecord.original("0.1.0", FLOW, 0.5));
         }
         ShotException refused = assertThrows(ShotException.class, () -> takes.density(1, 1001, FLOW));
         assertTrue(refused.getMessage().contains("density.1001.npy") && refused.getMessage().contains("NaN"), refused.getMessage());
@@ -143,13 +143,13 @@ class TakesTest {
 
     private void original() {
         try (TakeDraft draft = takes.draft()) {
-            draft.finishAsOriginal(TakeRecord.original("0.1.0", FLOW));
+            draft.finishAsOriginal(TakeRecord.original("0.1.0", FLOW, 0.5));
         }
     }
 
     private int solve() {
         try (TakeDraft draft = takes.draft()) {
-            return draft.finish(TakeRecord.original("0.1.0", FLOW));
+            return draft.finish(TakeRecord.original("0.1.0", FLOW, 0.5));
         }
     }
 
