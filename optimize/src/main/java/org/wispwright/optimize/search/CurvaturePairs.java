@@ -13,7 +13,7 @@ import java.util.Arrays;
  * A pair is kept only if s.y is above rounding ({@code 2^-52 |s| |y|}): then H is positive definite and the direction goes
  * downhill. All sums in float64, first number to last.
  * <p>Sources: Nocedal (1980), Mathematics of Computation 35, 773-782; Liu and Nocedal (1989), Mathematical Programming 45,
- * 503-528. Differences from them: none. Checked by {@code CurvaturePairsTest} (outside checks O64 to O68).
+ * 503-528. Differences from them: the first scale of new unknowns, see {@link #extend}. Checked by {@code CurvaturePairsTest} (outside checks O64 to O68).
  */
 final class CurvaturePairs {
     private static final double ROUNDING = 0x1p-52;
@@ -80,9 +80,17 @@ final class CurvaturePairs {
             addScaled(out, -alpha[n], y[n]);
         }
         if (count > 0) {
-            double gamma = 1 / (rho[count - 1] * dot(y[count - 1], y[count - 1]));
-            for (int i = 0; i < size; i++) {
+            double gamma = scale(count - 1);
+            int known = known();
+            for (int i = 0; i < known; i++) {
                 out[i] *= gamma;
+            }
+            double least = gamma;
+            for (int n = 0; n < count && known < size; n++) {
+                least = Math.min(least, scale(n));
+            }
+            for (int i = known; i < size; i++) {
+                out[i] *= least;
             }
         }
         for (int n = 0; n < count; n++) {
@@ -92,6 +100,20 @@ final class CurvaturePairs {
         for (int i = 0; i < size; i++) {
             out[i] = -out[i];
         }
+    }
+
+    /** Of the inverse Hessian, as the pair has it. */
+    private double scale(int n) {
+        return 1 / (rho[n] * dot(y[n], y[n]));
+    }
+
+    /** Unknowns that the newest pair knows of: those after them were added since, and have zeros in it. */
+    private int known() {
+        int known = s[count - 1].length;
+        while (known > 0 && s[count - 1][known - 1] == 0 && y[count - 1][known - 1] == 0) {
+            known--;
+        }
+        return known;
     }
 
     /**
@@ -120,8 +142,10 @@ final class CurvaturePairs {
 
     /**
      * Pads every pair with zeros. The s are then exact: the new unknowns were 0 all along. The y lack the change of the new
-     * unknowns' gradient, which nobody measured; with zeros there, H is the old H for the old unknowns and gamma I for the new:
-     * positive definite, keeps all that was learnt and claims nothing about the new ones but a first scale.
+     * unknowns' gradient, which nobody measured; with zeros there, H is the old H for the old unknowns and a multiple of I for the new:
+     * positive definite, keeps all that was learnt and claims nothing about the new ones but a first scale. Until a pair knows of
+     * them that is the least scale of all pairs: the newest one's is that of a search which had all but ended, and the new unknowns then
+     * overshoot and cut the whole first step short (ours).
      */
     void extend(int newLength) {
         for (int n = 0; n < count; n++) {

@@ -93,7 +93,10 @@ class CurvaturePairsTest {
         assertEquals(8, many.count());
     }
 
-    /** Padding by zeros: the old unknowns' direction does not change, the new ones get gamma times their gradient. By hand from O64. */
+    /**
+     * Padding by zeros: the old unknowns' direction does not change, the new ones get the least scale s.y / y.y of the pairs, here 10/82 of
+     * 10/82 and 13/97, times their gradient; once a pair knows of them, its own: 1/2. By hand from O64.
+     */
     @Test
     void paddedPairsSayNothingOfNewUnknownsButTheirScale() {
         CurvaturePairs pairs = new CurvaturePairs(8);
@@ -102,7 +105,10 @@ class CurvaturePairsTest {
         pairs.extend(5);
         double[] d = new double[5];
         pairs.direction(new double[] {1, 2, 3, 97, -194}, d);
-        assertArrayEquals(new double[] {-0.492212529738303, -0.353768071737937, -0.268341365216861, -13, 26}, d, 1e-12);
+        assertArrayEquals(new double[] {-0.492212529738303, -0.353768071737937, -0.268341365216861, -97 * 10 / 82.0, 194 * 10 / 82.0}, d, 1e-12);
+        pairs.add(new double[] {0, 0, 0, 0, 1}, new double[] {0, 0, 0, 0, 2});
+        pairs.direction(new double[] {0, 0, 0, 4, 4}, d);
+        assertArrayEquals(new double[] {0, 0, 0, -2, -2}, d, 1e-12);
     }
 
     private static double bowl(double[] x) {
