@@ -15,7 +15,8 @@ public record Pace(int substeps, double mostCells) {
     /** Checks the numbers. @throws IllegalArgumentException saying what is off */
     public Pace {
         if (!(mostCells >= 0) || Double.isInfinite(mostCells)) {
-            throw new IllegalArgumentException("flow: got a largest displacement of " + mostCells + " cells, needs a finite number above 0");
+            throw new IllegalArgumentException("flow: got a largest displacement of " + mostCells
+                    + " cells, needs a finite number above 0");
         }
         if (substeps < (mostCells > 0 ? 0 : 1) || substeps > MOST_SUBSTEPS) {
             throw new IllegalArgumentException("flow: got " + substeps + " substeps a frame, needs 1 to " + MOST_SUBSTEPS);

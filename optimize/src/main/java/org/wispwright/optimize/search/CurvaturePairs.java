@@ -13,7 +13,8 @@ import java.util.Arrays;
  * A pair is kept only if s.y is above rounding ({@code 2^-52 |s| |y|}): then H is positive definite and the direction goes
  * downhill. All sums in float64, first number to last.
  * <p>Sources: Nocedal (1980), Mathematics of Computation 35, 773-782; Liu and Nocedal (1989), Mathematical Programming 45,
- * 503-528. Differences from them: the first scale of new unknowns, see {@link #extend}. Checked by {@code CurvaturePairsTest} (outside checks O64 to O68).
+ * 503-528. Differences from them: the first scale of new unknowns, see {@link #extend}. Checked by {@code CurvaturePairsTest} (outside
+ * checks O64 to O68).
  */
 final class CurvaturePairs {
     private static final double ROUNDING = 0x1p-52;

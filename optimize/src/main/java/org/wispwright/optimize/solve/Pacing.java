@@ -45,7 +45,11 @@ public final class Pacing {
         return flow.withPace(flow.pace().found(flow.substeps()));
     }
 
-    /** What to run next. @throws IllegalArgumentException if that takes more than {@link Pace#MOST_SUBSTEPS} substeps, or cells is not finite */
+    /**
+     * What to run next.
+     *
+     * @throws IllegalArgumentException if that takes more than {@link Pace#MOST_SUBSTEPS} substeps, or a speed is not finite
+     */
     public FlowSetup next() {
         double most = flow.pace().mostCells();
         double needed = Math.ceil(flow.substeps() * cells / most);

@@ -105,7 +105,8 @@ class CurvaturePairsTest {
         pairs.extend(5);
         double[] d = new double[5];
         pairs.direction(new double[] {1, 2, 3, 97, -194}, d);
-        assertArrayEquals(new double[] {-0.492212529738303, -0.353768071737937, -0.268341365216861, -97 * 10 / 82.0, 194 * 10 / 82.0}, d, 1e-12);
+        assertArrayEquals(new double[] {-0.492212529738303, -0.353768071737937, -0.268341365216861, -97 * 10 / 82.0, 194 * 10 / 82.0}, d,
+                1e-12);
         pairs.add(new double[] {0, 0, 0, 0, 1}, new double[] {0, 0, 0, 0, 2});
         pairs.direction(new double[] {0, 0, 0, 4, 4}, d);
         assertArrayEquals(new double[] {0, 0, 0, -2, -2}, d, 1e-12);

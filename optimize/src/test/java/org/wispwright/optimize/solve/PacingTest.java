@@ -57,8 +57,8 @@ class PacingTest {
     }
 
     /**
-     * By hand: an even push a from rest gives v = a t however it is cut into substeps, fastest at the end, t = 0.4 s: 20 m/s2 x 0.4 s x 0.1 s /
-     * 0.25 m = 3.2 cells a frame.
+     * By hand: an even push a from rest gives v = a t however it is cut into substeps, fastest at the end, t = 0.4 s: 20 m/s2 x 0.4 s x
+     * 0.1 s / 0.25 m = 3.2 cells a frame.
      */
     @ParameterizedTest
     @CsvSource({"3.25, 1", "3.15, 2", "1.65, 2", "1.55, 3", "0.5, 7"})

@@ -29,7 +29,8 @@ final class SimulateCommand implements Callable<Integer> {
             result = SimulateWork.run(choice.folder(), shot, lanes, progress, manner.cancel());
         }
         ObjectNode object = Manner.object().put("ok", true).put("take", 0).put("made", result.made()).put("frames", result.frames())
-                .put("seconds", result.seconds()).put("lastMass", result.lastMass()).put("divergenceMax", result.divergenceMax()).put("substeps", result.flow().substeps());
+                .put("seconds", result.seconds()).put("lastMass", result.lastMass()).put("divergenceMax", result.divergenceMax())
+                .put("substeps", result.flow().substeps());
         manner.say(result.made()
                 ? String.format(Locale.ROOT, "Take 0 made: %d frames%s in %.1f s.", result.frames(),
                         result.flow().substeps() > 1 ? " of " + result.flow().substeps() + " substeps" : "", result.seconds())
