@@ -4,7 +4,6 @@ import com.fasterxml.jackson.databind.node.ObjectNode;
 import java.awt.GraphicsEnvironment;
 import java.io.PrintWriter;
 import java.nio.charset.StandardCharsets;
-import java.util.Optional;
 import java.util.concurrent.CountDownLatch;
 import java.util.concurrent.TimeUnit;
 import org.wispwright.ui.shot.Finding;
@@ -53,8 +52,9 @@ public final class Main implements Runnable {
         this.cancel = cancel;
     }
 
-    /** Runs the program and ends the process with its exit code. */
+    /** Runs the program and ends the process with its exit code. Without a command it opens the desk, where there is a display. */
     public static void main(String[] args) {
+        String[] asked = args.length == 0 && !GraphicsEnvironment.isHeadless() ? new String[] {"desk"} : args;
         Cancel cancel = new Cancel();
         CountDownLatch ended = new CountDownLatch(1);
         // Ctrl-C starts the hooks; the process then ends with 130 by itself, once the work has put itself away.
@@ -68,7 +68,7 @@ public final class Main implements Runnable {
         }, "stop-on-signal"));
         int code = ExitCodes.OURS;
         try {
-            code = run(args, new PrintWriter(System.out, true, StandardCharsets.UTF_8),
+            code = run(asked, new PrintWriter(System.out, true, StandardCharsets.UTF_8),
                     new PrintWriter(System.err, true, StandardCharsets.UTF_8), cancel);
         } finally {
             ended.countDown();
@@ -103,13 +103,10 @@ public final class Main implements Runnable {
         }
     }
 
-    /** Without a command: the desk, where there is a display. */
+    /** Without a command: says what there is. */
     @Override
     public void run() {
-        if (GraphicsEnvironment.isHeadless()) {
-            throw new ParameterException(spec.commandLine(), "no command given, and no display to open the desk on");
-        }
-        DeskCommand.open(Optional.empty());
+        throw new ParameterException(spec.commandLine(), "no command given");
     }
 
     Cancel cancel() {

@@ -42,7 +42,7 @@ import org.wispwright.ui.window.easel.EaselProbe;
  * toolkit's screen, and waits for what comes of it. One at a time; close it.
  */
 public final class DeskDriver implements AutoCloseable {
-    private static final long MOST_SECONDS = 20;
+    private static final long MOST_SECONDS = 120;
 
     private static final long MOST_SECONDS_TO_ARRIVE = 5;
 

@@ -58,6 +58,7 @@ class MonkeyTest {
                     });
                 }
             }
+            driver.pause(1000);                                                // some deeds come to their end beside Swing's thread
             driver.await("all is on disk", s -> s.saving().isDone() || s.saving().refused().isPresent());
             assertEquals(List.of(), watch.thrown(), "seed " + seed);
             DeskState end = driver.state();

@@ -80,7 +80,7 @@ class StoryTest {
         driver.click("hand-pull");
         MeshWarp mesh = (MeshWarp) open(driver.state()).retouch().operations().get(0);
         Point handle = driver.placeOnEasel(mesh.handles().get(0).to());
-        driver.pause(1500);
+        driver.awaitTrue("the mesh can be pulled", driver::hasLivePicture);
         driver.drag(List.of(handle, new Point(handle.x - 4, handle.y + 3), new Point(handle.x - 9, handle.y + 6)));
         driver.await("the handle was pulled", s -> !open(s).retouch().operations().get(0).equals(mesh));
 

@@ -334,7 +334,8 @@ class HandStripTest {
         bench.rest();
         JDialog dialog = find("steps", JDialog.class);
         bench.await("the list has the focus", dialog::isFocused);
-        key(KeyEvent.VK_ESCAPE);
+        robot.keyPress(KeyEvent.VK_ESCAPE);                                    // it closes before the key comes up
+        robot.keyRelease(KeyEvent.VK_ESCAPE);
         bench.await("the list is closed", () -> seek("steps", Component.class).isEmpty());
         action("hand.remove-last").run().run();
         assertEquals(1, bench.retouching.operations().size());
