@@ -14,6 +14,7 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.wispwright.ui.desk.Against;
 import org.wispwright.ui.desk.DeskState;
+import org.wispwright.ui.desk.Hand;
 import org.wispwright.ui.desk.Source;
 import org.wispwright.ui.shot.Note;
 import org.wispwright.ui.shot.NoteEdits.Listed;
@@ -78,6 +79,7 @@ class StoryTest {
         assertTrue(open(driver.state()).retouch().operations().get(operations) instanceof Stroke);
 
         driver.click("hand-pull");
+        driver.await("the hand pulls", s -> s.hand() instanceof Hand.Pulling);
         MeshWarp mesh = (MeshWarp) open(driver.state()).retouch().operations().get(0);
         Point handle = driver.placeOnEasel(mesh.handles().get(0).to());
         driver.awaitTrue("the mesh can be pulled", driver::hasLivePicture);
@@ -85,6 +87,7 @@ class StoryTest {
         driver.await("the handle was pulled", s -> !open(s).retouch().operations().get(0).equals(mesh));
 
         driver.click("hand-hold");
+        driver.await("the hand holds", s -> s.hand() instanceof Hand.Holding);
         int holds = open(driver.state()).holds().size();
         driver.drag(List.of(driver.onScreen(picture, 0.4, 0.7), driver.onScreen(picture, 0.5, 0.8), driver.onScreen(picture, 0.55, 0.85)));
         driver.await("a hold was added", s -> open(s).holds().size() == holds + 1);
