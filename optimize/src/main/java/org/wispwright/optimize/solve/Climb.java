@@ -195,7 +195,7 @@ final class Climb {
             losses.add(share());
             met = plan.met(loss.losses());
             noteLosses = plan.noteLosses(loss.losses());
-            if ((open > 1 || rung > 1 || done >= Solve.ENERGY_FROM) && done % Solve.ENERGY_EVERY == 0) {
+            if ((open > 1 || rung > 1) && done % Solve.ENERGY_EVERY == 0) {
                 weighEnergy();
             }
             tell(lastBand);

@@ -20,7 +20,7 @@ import org.wispwright.render.volume.GridShape;
  *
  * <p>L-BFGS on notes + holds + stay term + {@code energyWeight |x|^2 / 2}. Bands open from low to high; one ends when the loss fell
  * by less than 5 % over 5 iterations (the very last: over 8), the next starts from the same force. The energy weight is the program's: it
- * is 0 for the first {@value #ENERGY_FROM} iterations of the first band and then set every few iterations so that the energy is 2 % of the starting loss, with the stored pairs and the
+ * is 0 in the first band and then set every few iterations so that the energy is 2 % of the starting loss, with the stored pairs and the
  * gradient moved along exactly; a force that moves still smoke by less than a cell counts as one that moves it by a cell. At the
  * solution that is a stationary point of {@code loss + 0.02 start ln |x|^2}: doubling the force has one price, whatever its size.
  *
@@ -38,11 +38,6 @@ public final class Solve {
     static final double ENERGY_SHARE = 0.02;
     /** Iterations between two settings of the energy weight. */
     static final int ENERGY_EVERY = 5;
-    /**
-     * Iterations of the first band before it has a weight: a force that is not there yet would be held down. Not later: what a lower rung
-     * finds without it, the next one has to take back.
-     */
-    static final int ENERGY_FROM = 15;
     /** Pairs that L-BFGS keeps. They cost nothing beside a gradient; 20 save a tenth of the iterations against 8. */
     static final int PAIRS = 20;
     /** A line search that needs more gradients than this is lost in rounding. */
