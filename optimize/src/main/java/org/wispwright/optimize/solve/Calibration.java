@@ -20,9 +20,9 @@ import org.wispwright.render.volume.GridShape;
  * @param stepSeconds     of one plain step there: a forward sweep's share
  */
 public record Calibration(long cells, int steps, double gradientSeconds, double stepSeconds) {
-    /** Gradients that a solve usually takes on its lowest rung: 19 to 36 were counted. See docs/benchmarks.md. */
+    /** Gradients that a solve usually takes on its lowest rung: 19 to 66 were counted. See docs/benchmarks.md. */
     public static final int GRADIENTS_LOWEST = 28;
-    /** The same on each rung above: 34 to 77. */
+    /** The same on each rung above: 38 to 77. */
     public static final int GRADIENTS_ABOVE = 60;
     private static final int TRIES = 2;
 
