@@ -11,7 +11,7 @@ import org.wispwright.warp.resample.Resized;
  * @param small  at most {@value #SMALL_PIXELS} pixels, for what a worker draws while the hand moves
  */
 record Originals(Picture full, Picture middle, Picture small) {
-    static final int MIDDLE_PIXELS = 700_000;
+    static final int MIDDLE_PIXELS = 200_000;
     static final int SMALL_PIXELS = 150_000;
 
     /** Shrinks a picture by whole factors; one that is small enough stays the same object. */

@@ -32,6 +32,8 @@ public final class Pictures {
     private static final double DRAFT_STEP_CELLS = 1;
     /** Pictures of at most so many rows are drawn apart from the large ones, so that neither waits for the other. */
     private static final int SMALL_ROWS = 200;
+    /** How long the hand must rest on a frame before its whole picture is begun. */
+    private static final int REST_MILLIS = 120;
     private static final int FEW_PIXELS = 200_000;
 
     private final Workers workers;
@@ -112,16 +114,31 @@ public final class Pictures {
         if (!(ask.source() instanceof Source.Rendered) && pixels(now, ask) > FEW_PIXELS) {
             mine.replace(cancel -> draw(now, draft, DRAFT_STEP_CELLS, cancel), picture -> {
                 show.accept(new Drawn(picture, true));
-                whole(mine, now, ask, show, failed);
+                whole(mine, now, ask, REST_MILLIS, show, failed);
             }, thrown -> failed.accept(Desk.words(thrown)));
         } else {
-            whole(mine, now, ask, show, failed);
+            whole(mine, now, ask, 0, show, failed);
         }
     }
 
-    private void whole(Replacing mine, OpenShot now, Ask ask, Consumer<Drawn> show, Consumer<String> failed) {
-        mine.replace(cancel -> draw(now, ask, cancel), picture -> show.accept(new Drawn(picture, false)),
-                thrown -> failed.accept(Desk.words(thrown)));
+    private void whole(Replacing mine, OpenShot now, Ask ask, int restMillis, Consumer<Drawn> show, Consumer<String> failed) {
+        mine.replace(cancel -> {
+            rest(restMillis, cancel);
+            return draw(now, ask, cancel);
+        }, picture -> show.accept(new Drawn(picture, false)), thrown -> failed.accept(Desk.words(thrown)));
+    }
+
+    /** Waits a little, unless something newer is asked: while the hand runs over the frames only drafts are drawn. */
+    private static void rest(int millis, Cancel cancel) {
+        try {
+            for (int n = 0; n < millis; n += 5) {
+                cancel.stopIfWished();
+                Thread.sleep(5);
+            }
+        } catch (InterruptedException stop) {
+            Thread.currentThread().interrupt();
+            throw new Cancel.Cancelled();
+        }
     }
 
     /**
@@ -160,7 +177,8 @@ public final class Pictures {
                                 Cancel cancel) {
         takes.requireOf(number, setup.flow());
         ScalarGrid density = takes.density(number, frame, setup.flow());
-        try (Lanes lanes = new Lanes(Math.max(1, Runtime.getRuntime().availableProcessors() - 1))) {
+        int processors = Runtime.getRuntime().availableProcessors();
+        try (Lanes lanes = new Lanes(step == DRAFT_STEP_CELLS ? processors : Math.max(1, processors - 1))) {
             return PictureWork.picture(setup, density, view, step, lanes, cancel);
         }
     }

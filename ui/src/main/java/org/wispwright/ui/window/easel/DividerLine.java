@@ -1,5 +1,6 @@
 package org.wispwright.ui.window.easel;
 
+import java.awt.Rectangle;
 import java.awt.Shape;
 import java.awt.geom.Path2D;
 import java.awt.geom.Point2D;
@@ -38,6 +39,27 @@ final class DividerLine {
     double[] ends() {
         double far = 20_000;
         return new double[] {x + far * ny, y - far * nx, x - far * ny, y + far * nx};
+    }
+
+    /** The box of all that it draws in an easel of that size. */
+    Rectangle reach(int width, int height) {
+        Rectangle box = new Rectangle((int) (x - KNOB), (int) (y - KNOB), (int) (2 * KNOB), (int) (2 * KNOB));
+        double atTop = Math.abs(nx) > 1e-9 ? x + y * ny / nx : Double.NaN;
+        double atBottom = Math.abs(nx) > 1e-9 ? x + (y - height) * ny / nx : Double.NaN;
+        double atLeft = Math.abs(ny) > 1e-9 ? y + x * nx / ny : Double.NaN;
+        double atRight = Math.abs(ny) > 1e-9 ? y + (x - width) * nx / ny : Double.NaN;
+        add(box, atTop, 0, width, height);
+        add(box, atBottom, height, width, height);
+        add(box, 0, atLeft, width, height);
+        add(box, width, atRight, width, height);
+        box.grow((int) KNOB, (int) KNOB);
+        return box;
+    }
+
+    private static void add(Rectangle box, double px, double py, int width, int height) {
+        if (px >= 0 && px <= width && py >= 0 && py <= height) {               // false for NaN: it does not cross there
+            box.add((int) px, (int) py);
+        }
     }
 
     /** All that lies on the far side. */

@@ -215,6 +215,16 @@ final class EaselCanvas extends JPanel implements Surface {
         return showing == null || showing.against() != Against.DIVIDER ? null : new DividerLine(showing.divider(), placement(), aspect());
     }
 
+    /** The line was somewhere else: draws what lies between, and no more. */
+    void dividerMoved(Showing.Divider from) {
+        Rectangle band = new DividerLine(from, placement(), aspect()).reach(getWidth(), getHeight());
+        DividerLine now = divider();
+        if (now != null) {
+            band = band.union(now.reach(getWidth(), getHeight()));
+        }
+        repaint(band);
+    }
+
     private boolean isBeside() {
         return desk.state().showing().map(s -> s.against() == Against.BESIDE).orElse(false);
     }

@@ -37,6 +37,7 @@ public final class EaselPanel extends JPanel {
     private final Retouching retouching;
     private final HandStrip strip;
     private Hand held;
+    private DeskState seen;
     private double toneStops;
     private double toneGamma = 1;
 
@@ -93,6 +94,12 @@ public final class EaselPanel extends JPanel {
     }
 
     private void follow(DeskState state) {
+        DeskState before = seen;
+        seen = state;
+        if (before != null && onlyTheDivider(before, state)) {
+            canvas.dividerMoved(before.showing().orElseThrow().divider());
+            return;
+        }
         pictures.follow(state);
         if (held == null || !Tools.areOne(held, state.hand())) {
             held = state.hand();
@@ -114,6 +121,14 @@ public final class EaselPanel extends JPanel {
             }
         });
         readOut.placed();
+    }
+
+    /** True if two states differ in nothing but the place of the line. */
+    private static boolean onlyTheDivider(DeskState before, DeskState now) {
+        if (before.showing().isEmpty() || now.showing().isEmpty() || before.showing().equals(now.showing())) {
+            return false;
+        }
+        return now.withShowing(now.showing().get().withDivider(before.showing().get().divider())).equals(before);
     }
 
     /** What can be done here. */
