@@ -266,6 +266,9 @@ public final class Desk implements AutoCloseable {
     @Override
     public void close() {
         listeners.clear();
+        if (keeper != null) {
+            keeper.last();
+        }
         solving.close();
         writingOut.stop();
         workers.close();

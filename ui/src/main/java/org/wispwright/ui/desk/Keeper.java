@@ -36,6 +36,8 @@ final class Keeper {
     private final Deque<Writing> waiting = new ArrayDeque<>();
     private final Set<Step> neverWritten = Collections.newSetFromMap(new IdentityHashMap<>());
     private boolean busy;
+    /** Whether what was tried last got to the disk; the lane's own. */
+    private boolean written;
     private Optional<Finding> refused = Optional.empty();
 
     /** @param told on the desk's thread of every change of how far it is */
@@ -97,6 +99,18 @@ final class Keeper {
         tell();
     }
 
+    /** Writes all that waits, on the lane and without the desk's thread: the desk ends. What is refused, and what comes after it, is not. */
+    void last() {
+        boolean behind = busy;
+        List<Writing> rest = List.copyOf(waiting).subList(behind ? 1 : 0, waiting.size());
+        lane.execute(() -> {
+            boolean goesOn = !behind || written;
+            for (int n = 0; n < rest.size() && goesOn; n++) {
+                goesOn = attempt(rest.get(n)).isEmpty();
+            }
+        });
+    }
+
     /** Names of the journal's next undo and redo, asked behind everything that waits. */
     void names(Consumer<List<Optional<String>>> then) {
         lane.execute(() -> {
@@ -119,6 +133,7 @@ final class Keeper {
         Writing first = waiting.peek();
         lane.execute(() -> {
             Optional<Finding> fault = attempt(first);
+            written = fault.isEmpty();
             workers.onDesk(() -> {
                 busy = false;
                 refused = first.way() == Way.OUTSIDE ? Optional.empty() : fault;

@@ -180,6 +180,17 @@ class DeskTest {
     }
 
     @Test
+    void aDeskThatIsClosedWritesAllThatWaits() {
+        String id = desk.state().note().orElseThrow();
+        for (int n = 0; n < 4; n++) {
+            desk.edit(NoteEdit.append("Add stroke", id, stroke(0.1 * n)));
+        }
+        List<Listed> notes = desk.state().shot().orElseThrow().notes();
+        desk.close();                                                          // nothing has come back to this thread yet
+        assertEquals(notes, onDisk());
+    }
+
+    @Test
     void aShotThatCannotBeOpenedIsSaidAndTheOneOnTheDeskStays() throws IOException {
         Path other = Files.createDirectories(folder.resolve("other"));
         Files.writeString(other.resolve("shot.json"), "{");

@@ -14,6 +14,7 @@ import org.wispwright.ui.desk.Pictures.Ask;
 import org.wispwright.ui.desk.Replacing;
 import org.wispwright.ui.desk.Showing;
 import org.wispwright.ui.desk.Source;
+import org.wispwright.ui.window.Words;
 import org.wispwright.warp.measure.Plane;
 import org.wispwright.warp.outline.Loop;
 import org.wispwright.warp.outline.OutlineTracer;
@@ -153,7 +154,7 @@ final class EaselPictures {
         }, why -> {
             put.accept(null);
             if (first) {
-                missing.accept(why);
+                missing.accept(now.takes().isEmpty() && source.equals(Source.ORIGINAL) ? Words.of("easel.making") : why);
             }
             code();
         });

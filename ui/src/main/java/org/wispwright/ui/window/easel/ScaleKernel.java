@@ -38,6 +38,9 @@ final class ScaleKernel {
                 share[n] = (int) (256 * (c - from[n]));
             }
         }
+        int[] above = new int[columns];
+        int[] below = new int[columns];
+        int drawn = -2;                                                        // the plate's row that lies, stretched, in above
         for (int y = y0; y < y1; y++) {
             int at = outWidth * y + x0;
             double v = (y + 0.5 - top) / zoom;
@@ -51,23 +54,35 @@ final class ScaleKernel {
             } else {
                 double c = Math.max(0, Math.min(height - 1.0, v - 0.5));
                 int row = Math.min(height - 2, (int) c);
-                row(codes, width * row, width, (int) (256 * (c - row)), from, share, out, at, around);
+                if (row == drawn + 1) {
+                    int[] spare = above;
+                    above = below;
+                    below = spare;
+                    stretch(codes, width * (row + 1), from, share, below);
+                } else if (row != drawn) {
+                    stretch(codes, width * row, from, share, above);
+                    stretch(codes, width * (row + 1), from, share, below);
+                }
+                drawn = row;
+                int down = (int) (256 * (c - row));
+                for (int n = 0; n < columns; n++) {
+                    out[at + n] = mix(above[n], below[n], down);
+                }
+                for (int n = 0; n < columns && from[n] < 0; n++) {
+                    out[at + n] = around;
+                }
+                for (int n = columns - 1; n >= 0 && from[n] < 0; n--) {
+                    out[at + n] = around;
+                }
             }
         }
     }
 
-    private static void row(int[] codes, int row, int width, int down, int[] from, int[] share, int[] out, int at, int around) {
+    /** One row of the plate, mixed across; rows of the screen that lie between the same two share it. */
+    private static void stretch(int[] codes, int row, int[] from, int[] share, int[] out) {
         for (int n = 0; n < from.length; n++) {
-            int x = from[n];
-            if (x < 0) {
-                out[at + n] = around;
-                continue;
-            }
-            int i = row + x;
-            int right = share[n];
-            int above = mix(codes[i], codes[i + 1], right);
-            int below = mix(codes[i + width], codes[i + width + 1], right);
-            out[at + n] = mix(above, below, down);
+            int i = row + Math.max(0, from[n]);
+            out[n] = mix(codes[i], codes[i + 1], share[n]);
         }
     }
 
