@@ -268,6 +268,7 @@ public final class Desk implements AutoCloseable {
         listeners.clear();
         if (keeper != null) {
             keeper.last();
+            keeper = null;
         }
         solving.close();
         writingOut.stop();
