@@ -35,9 +35,10 @@ import org.wispwright.ui.shot.TakeRecord;
  */
 public record Estimate(Quality quality, GridShape top, long memoryBytes, int states, int onDisk, long diskBytes, long takeBytes,
                        double seconds, int gradients) {
+    private static final int CALIBRATED_CELLS = 40_000;
 
     /**
-     * Measures the lowest rung for some seconds and says it for each quality.
+     * Measures a low rung for some seconds and says it for each quality.
      *
      * @param memoryBytes that a solve may take
      * @param diskBytes   likewise, of disk for states
@@ -75,10 +76,20 @@ public record Estimate(Quality quality, GridShape top, long memoryBytes, int sta
         }
     }
 
+    /** The finest rung that still takes a second or two: on one of a few thousand cells the program is not warm when it is over. */
+    private static GridShape calibrated(GridShape grid) {
+        List<GridShape> rungs = Quality.FINAL.rungs(grid);
+        GridShape chosen = rungs.get(0);
+        for (GridShape rung : rungs) {
+            chosen = rung.cells() <= CALIBRATED_CELLS ? rung : chosen;
+        }
+        return chosen;
+    }
+
     private static Calibration measured(Shot shot, Lanes lanes, Cancel cancel) {
         SolveProblem problem = ShotProblem.of(shot);
         try {
-            return Calibration.of(problem, Quality.PREVIEW.rungs(shot.flow().grid()).get(0), lanes, cancel::wished);
+            return Calibration.of(problem, calibrated(shot.flow().grid()), lanes, cancel::wished);
         } catch (SolveCancelled asked) {
             throw new Cancel.Cancelled();
         } catch (IllegalArgumentException refused) {
