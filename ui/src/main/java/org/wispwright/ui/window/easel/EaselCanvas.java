@@ -1,6 +1,5 @@
 package org.wispwright.ui.window.easel;
 
-import java.awt.Color;
 import java.awt.Graphics;
 import java.awt.Graphics2D;
 import java.awt.Rectangle;
@@ -8,10 +7,6 @@ import java.awt.RenderingHints;
 import java.awt.Shape;
 import java.awt.BasicStroke;
 import java.awt.geom.AffineTransform;
-import java.awt.geom.Ellipse2D;
-import java.awt.geom.Line2D;
-import java.awt.geom.Path2D;
-import java.awt.geom.Point2D;
 import java.awt.event.ComponentAdapter;
 import java.awt.event.ComponentEvent;
 import javax.swing.JPanel;
@@ -28,8 +23,6 @@ import org.wispwright.warp.matte.Window;
  * few pixels it touches: pictures are kept in the screen's own pixels ({@link Pane}).
  */
 final class EaselCanvas extends JPanel implements Surface {
-    private static final Color RIM = new Color(0, 0, 0, 150);
-
     private final Desk desk;
     private final EaselPictures pictures;
     private final Pane nearPane = new Pane();
@@ -238,12 +231,19 @@ final class EaselCanvas extends JPanel implements Surface {
             paintPictures(g, toScreen);
             g.setRenderingHint(RenderingHints.KEY_ANTIALIASING, RenderingHints.VALUE_ANTIALIAS_ON);
             g.setRenderingHint(RenderingHints.KEY_STROKE_CONTROL, RenderingHints.VALUE_STROKE_PURE);
-            paintOutline(g);
+            if (live == null) {
+                Overlays.outline(g, pictures.outline(), placement());
+            }
             tool.paint(g, placement());
             if (keys != null) {
                 keys.paint(g, placement());
             }
-            paintDivider(g);
+            DividerLine line = divider();
+            if (line != null) {
+                Overlays.divider(g, line);
+            } else if (isBeside()) {
+                Overlays.halves(g, getWidth(), getHeight());
+            }
             if (isFocusOwner()) {
                 g.setColor(Palette.ACCENT.colour());
                 g.setStroke(new BasicStroke(2));
@@ -286,45 +286,5 @@ final class EaselCanvas extends JPanel implements Surface {
 
     private Placement scaled(Placement p) {
         return new Placement(p.left() * screenScale, p.top() * screenScale, p.scale() * screenScale);
-    }
-
-    private void paintOutline(Graphics2D g) {
-        Path2D outline = pictures.outline();
-        if (outline == null || live != null) {
-            return;
-        }
-        AffineTransform place = new AffineTransform(placement().scale(), 0, 0, placement().scale(), placement().left(), placement().top());
-        Shape line = place.createTransformedShape(outline);
-        g.setColor(RIM);
-        g.setStroke(new BasicStroke(3));
-        g.draw(line);
-        g.setColor(Palette.WANTED.colour());
-        g.setStroke(new BasicStroke(1.4f, BasicStroke.CAP_ROUND, BasicStroke.JOIN_ROUND, 1, new float[] {6, 3}, 0));
-        g.draw(line);
-    }
-
-    private void paintDivider(Graphics2D g) {
-        DividerLine line = divider();
-        if (line == null) {
-            if (isBeside()) {
-                g.setColor(Palette.LINE.colour());
-                g.fillRect(getWidth() / 2 - 1, 0, 2, getHeight());
-            }
-            return;
-        }
-        double[] ends = line.ends();
-        Line2D through = new Line2D.Double(ends[0], ends[1], ends[2], ends[3]);
-        g.setColor(RIM);
-        g.setStroke(new BasicStroke(4));
-        g.draw(through);
-        g.setColor(Color.WHITE);
-        g.setStroke(new BasicStroke(1.5f));
-        g.draw(through);
-        Point2D knob = line.knob();
-        Ellipse2D disc = new Ellipse2D.Double(knob.getX() - 8, knob.getY() - 8, 16, 16);
-        g.setColor(RIM);
-        g.fill(disc);
-        g.setColor(Color.WHITE);
-        g.draw(disc);
     }
 }
