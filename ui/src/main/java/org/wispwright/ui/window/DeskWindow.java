@@ -194,6 +194,7 @@ public final class DeskWindow {
      * @param folder a shot to open; empty for none
      */
     public static void runUntilClosed(Optional<Path> folder) {
+        System.setProperty("apple.laf.useScreenMenuBar", "true");             // menus where the platform has them; read before Swing starts
         CountDownLatch ended = new CountDownLatch(1);
         SwingUtilities.invokeLater(() -> {
             Memory memory = new Memory(Memory.usual());

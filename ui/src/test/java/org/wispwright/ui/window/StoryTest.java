@@ -81,8 +81,10 @@ class StoryTest {
         driver.click("hand-pull");
         driver.await("the hand pulls", s -> s.hand() instanceof Hand.Pulling);
         MeshWarp mesh = (MeshWarp) open(driver.state()).retouch().operations().get(0);
-        Point handle = driver.placeOnEasel(mesh.handles().get(0).to());
         driver.awaitTrue("the mesh can be pulled", driver::hasLivePicture);
+        driver.pause(300);
+        Point handle = driver.placeOnEasel(mesh.handles().get(0).to());
+        driver.moveTo(handle);
         driver.drag(List.of(handle, new Point(handle.x - 4, handle.y + 3), new Point(handle.x - 9, handle.y + 6)));
         driver.await("the handle was pulled", s -> !open(s).retouch().operations().get(0).equals(mesh));
 
@@ -133,17 +135,25 @@ class StoryTest {
             }
             driver.await("a stroke was added", s -> s.history().made().size() == 1);
             driver.key("6");
+            driver.awaitTrue("the mesh can be pulled", driver::hasLivePicture);
+            for (String key : List.of("SPACE", "LEFT", "LEFT", "SPACE")) {
+                driver.key(key);
+            }
+            driver.await("a handle was set and pulled", s -> s.history().made().size() == 2);
             driver.key("8");
             driver.key("shift DOWN");
             driver.key("SPACE");
             driver.key("shift DOWN");
             driver.key("shift RIGHT");
             driver.key("SPACE");
-            driver.await("a hold was added", s -> s.history().made().size() == 2);
+            driver.await("a hold was added", s -> s.history().made().size() == 3);
             driver.key("ctrl ENTER");
             driver.await("the take is there", s -> s.takes().size() == 2 && s.work().running().isEmpty());
             driver.key("shift 2");
             assertEquals(Against.DIVIDER, driver.state().showing().orElseThrow().against());
+            driver.act("compare.divider-right");
+            assertEquals(0.55, driver.state().showing().orElseThrow().divider().x(), 1e-9);
+            driver.key("ctrl Z");
             driver.key("ctrl Z");
             driver.key("ctrl Z");
             assertTrue(driver.state().history().made().isEmpty());

@@ -4,6 +4,7 @@ import java.awt.BorderLayout;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
+import java.util.function.UnaryOperator;
 import javax.swing.BorderFactory;
 import javax.swing.JLabel;
 import javax.swing.JPanel;
@@ -15,6 +16,7 @@ import org.wispwright.ui.desk.DeskState;
 import org.wispwright.ui.desk.Hand;
 import org.wispwright.ui.desk.Retouching;
 import org.wispwright.ui.desk.Showing;
+import org.wispwright.ui.desk.Showing.Divider;
 import org.wispwright.ui.shot.ShotView;
 import org.wispwright.ui.window.DeskAction;
 import org.wispwright.ui.window.Palette;
@@ -27,6 +29,7 @@ public final class EaselPanel extends JPanel {
      */
     static final int TURN_MILLIS = 700;
     private static final double STEP = 1.25;
+    private static final double DIVIDER_STEP = 0.05;
 
     private final Desk desk;
     private final EaselPictures pictures;
@@ -149,8 +152,16 @@ public final class EaselPanel extends JPanel {
             actions.add(DeskAction.withShot("compare." + word, "shift " + (each.ordinal() + 1), () -> desk.show(s -> s.withAgainst(each))));
         }
         actions.add(DeskAction.withShot("compare.swap", "shift S", () -> desk.show(s -> s.withNear(s.far()).withFar(s.near()))));
+        actions.add(divides("compare.divider-left", "ctrl alt LEFT", d -> new Divider(d.x() - DIVIDER_STEP, d.y(), d.radians())));
+        actions.add(divides("compare.divider-right", "ctrl alt RIGHT", d -> new Divider(d.x() + DIVIDER_STEP, d.y(), d.radians())));
+        actions.add(divides("compare.divider-turn", "ctrl alt UP", d -> new Divider(d.x(), d.y(), d.radians() + Math.PI / 12)));
         actions.addAll(strip.actions());
         return actions;
+    }
+
+    private DeskAction divides(String id, String key, UnaryOperator<Divider> change) {
+        return DeskAction.of(id, key, s -> s.showing().map(w -> w.against() == Against.DIVIDER).orElse(false),
+                () -> desk.show(s -> s.withDivider(change.apply(s.divider()))));
     }
 
     private void zoom(double factor) {
