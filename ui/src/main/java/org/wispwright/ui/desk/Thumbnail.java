@@ -2,7 +2,7 @@ package org.wispwright.ui.desk;
 
 import org.wispwright.render.picture.Picture;
 import org.wispwright.render.picture.Rgb;
-import org.wispwright.render.picture.Srgb;
+import org.wispwright.ui.report.ShownPicture;
 
 /**
  * A small picture as a display shows it: over the shot's background, coded by sRGB. Nobody changes the array.
@@ -21,14 +21,6 @@ public record Thumbnail(int width, int height, int[] rgb) {
 
     /** A linear premultiplied picture over a background. */
     static Thumbnail of(Picture picture, Rgb background) {
-        float[] rgba = picture.rgba();
-        int[] rgb = new int[picture.width() * picture.height()];
-        for (int n = 0; n < rgb.length; n++) {
-            double through = 1 - rgba[4 * n + 3];
-            rgb[n] = Srgb.encodeTo(255, rgba[4 * n] + through * background.r()) << 16
-                    | Srgb.encodeTo(255, rgba[4 * n + 1] + through * background.g()) << 8
-                    | Srgb.encodeTo(255, rgba[4 * n + 2] + through * background.b());
-        }
-        return new Thumbnail(picture.width(), picture.height(), rgb);
+        return new Thumbnail(picture.width(), picture.height(), ShownPicture.codes(picture, background));
     }
 }

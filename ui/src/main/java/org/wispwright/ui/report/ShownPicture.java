@@ -14,18 +14,20 @@ public final class ShownPicture {
     /** The picture over a background, at its own size. */
     public static BufferedImage over(Picture picture, Rgb background) {
         BufferedImage image = new BufferedImage(picture.width(), picture.height(), BufferedImage.TYPE_INT_RGB);
-        float[] rgba = picture.rgba();
-        int[] row = new int[picture.width()];
-        for (int y = 0; y < picture.height(); y++) {
-            for (int x = 0; x < picture.width(); x++) {
-                int at = 4 * (x + picture.width() * y);
-                double through = 1 - rgba[at + 3];
-                row[x] = coded(rgba[at] + through * background.r()) << 16 | coded(rgba[at + 1] + through * background.g()) << 8
-                        | coded(rgba[at + 2] + through * background.b());
-            }
-            image.setRGB(0, y, picture.width(), 1, row, 0, picture.width());
-        }
+        image.setRGB(0, 0, picture.width(), picture.height(), codes(picture, background), 0, picture.width());
         return image;
+    }
+
+    /** The same as 0xRRGGBB, index {@code x + width * y}. */
+    public static int[] codes(Picture picture, Rgb background) {
+        float[] rgba = picture.rgba();
+        int[] rgb = new int[picture.width() * picture.height()];
+        for (int n = 0; n < rgb.length; n++) {
+            double through = 1 - rgba[4 * n + 3];
+            rgb[n] = coded(rgba[4 * n] + through * background.r()) << 16 | coded(rgba[4 * n + 1] + through * background.g()) << 8
+                    | coded(rgba[4 * n + 2] + through * background.b());
+        }
+        return rgb;
     }
 
     /** {@code gain * |a - b|} over the background, channel by channel in linear light: black where the two agree. */

@@ -52,11 +52,6 @@ public enum Palette {
         UIManager.put("defaultFont", font.deriveFont((float) (13 * textScale)));
     }
 
-    /** True if the theme of the moment is dark. */
-    public static boolean isDark() {
-        return FlatLaf.isLafDark();
-    }
-
     /** The smaller of the two sizes of type. */
     public static Font small() {
         Font font = UIManager.getFont("defaultFont");

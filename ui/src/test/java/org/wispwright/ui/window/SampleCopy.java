@@ -3,7 +3,7 @@ package org.wispwright.ui.window;
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.stream.Stream;
+import org.wispwright.ui.job.SampleWork;
 
 /** Copies of the samples, for tests that change them. */
 public final class SampleCopy {
@@ -11,23 +11,8 @@ public final class SampleCopy {
     }
 
     /** The kiln yard without takes, in a new folder below another. */
-    public static Path kilnYard(Path below) throws IOException {
-        Path sample = Path.of("..", "samples", "kiln-yard");
-        Path copy = below.resolve("kiln-yard");
-        try (Stream<Path> all = Files.walk(sample)) {
-            for (Path from : (Iterable<Path>) all::iterator) {
-                Path to = copy.resolve(sample.relativize(from).toString());
-                if (from.startsWith(sample.resolve("takes"))) {
-                    continue;
-                }
-                if (Files.isDirectory(from)) {
-                    Files.createDirectories(to);
-                } else {
-                    Files.copy(from, to);
-                }
-            }
-        }
-        return copy;
+    public static Path kilnYard(Path below) {
+        return SampleWork.copyBelow(below);
     }
 
     /** The same on half as many cells each way, which is simulated and solved in a few seconds. */

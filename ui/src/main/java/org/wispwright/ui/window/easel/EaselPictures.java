@@ -36,7 +36,6 @@ final class EaselPictures {
     private DeskState now;
     private Picture near;
     private Picture far;
-    private boolean draft;
     private Plate nearPlate;
     private Plate farPlate;
     private Plate mixed;
@@ -71,11 +70,6 @@ final class EaselPictures {
     /** The first picture itself; null before there is one. */
     Picture nearPicture() {
         return near;
-    }
-
-    /** True while the first picture is a draft. */
-    boolean isDraft() {
-        return draft;
     }
 
     /** True if what lies on the easel, be it a draft, is of the frame that is wished for. */
@@ -146,7 +140,6 @@ final class EaselPictures {
             put.accept(drawn.picture());
             if (first) {
                 nearFrame = showing.frame();
-                draft = drawn.draft();
                 missing.accept("");
             }
             code();

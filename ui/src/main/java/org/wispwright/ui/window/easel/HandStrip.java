@@ -17,6 +17,7 @@ import org.wispwright.render.picture.Picture;
 import org.wispwright.ui.desk.Desk;
 import org.wispwright.ui.desk.DeskState;
 import org.wispwright.ui.desk.Hand;
+import org.wispwright.ui.desk.Places;
 import org.wispwright.ui.desk.Retouching;
 import org.wispwright.ui.desk.Retouching.Edit;
 import org.wispwright.ui.shot.Note;
@@ -145,7 +146,7 @@ public final class HandStrip extends JPanel implements Retouching.Follower {
     }
 
     private void goToNote() {
-        desk.state().openNote().map(Listed::note).ifPresent(note -> desk.show(s -> s.withFrame(note.frame()).withView(note.view())));
+        desk.state().note().ifPresent(id -> desk.look(s -> Places.at(s, id)));
     }
 
     /** Takes up a hand, its settings as they were when it was put down; all brushes share theirs. */

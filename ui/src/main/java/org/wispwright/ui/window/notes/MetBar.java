@@ -9,8 +9,10 @@ import java.util.Locale;
 import java.util.Optional;
 import java.util.OptionalInt;
 import org.wispwright.ui.desk.MetWatch;
+import org.wispwright.ui.desk.Source;
 import org.wispwright.ui.window.DrawnPart;
 import org.wispwright.ui.window.Palette;
+import org.wispwright.ui.window.Sources;
 import org.wispwright.ui.window.Words;
 
 /** How far something is met: in words, and as a bar below them. */
@@ -34,7 +36,7 @@ final class MetBar extends DrawnPart {
             show(Words.of("notes.met.none"), 0);
             return;
         }
-        String by = take.getAsInt() == 0 ? Words.of("source.original") : Words.of("source.take", take.getAsInt());
+        String by = Sources.inWords(new Source.Take(take.getAsInt()));
         setToolTipText(Words.of("notes.met.tip", by));
         if (found.isEmpty()) {
             show(Words.of("notes.met.coming"), 0);

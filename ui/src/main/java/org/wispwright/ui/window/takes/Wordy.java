@@ -7,7 +7,6 @@ import java.awt.event.ComponentEvent;
 import javax.swing.AbstractButton;
 import javax.swing.JButton;
 import javax.swing.JCheckBox;
-import javax.swing.JComponent;
 import javax.swing.plaf.basic.BasicHTML;
 import javax.swing.text.View;
 import org.wispwright.ui.window.Palette;
@@ -19,21 +18,16 @@ final class Wordy {
 
     /** A push button. */
     static final class Push extends JButton {
-        private String words = "";
+        private final Fitted fitted = new Fitted(this);
 
         Push(String words) {
             setMargin(new Insets(2, Palette.STEP, 2, Palette.STEP));
-            follow(this, () -> fit(this, this.words));
             say(words);
         }
 
         /** Other words. */
         void say(String others) {
-            if (!others.equals(words)) {
-                words = others;
-                getAccessibleContext().setAccessibleName(others);
-                fit(this, others);
-            }
+            fitted.say(others);
         }
 
         @Override
@@ -49,20 +43,15 @@ final class Wordy {
 
     /** A check box. */
     static final class Check extends JCheckBox {
-        private String words = "";
+        private final Fitted fitted = new Fitted(this);
 
         Check(String words) {
-            follow(this, () -> fit(this, this.words));
             say(words);
         }
 
         /** Other words. */
         void say(String others) {
-            if (!others.equals(words)) {
-                words = others;
-                getAccessibleContext().setAccessibleName(others);
-                fit(this, others);
-            }
+            fitted.say(others);
         }
 
         @Override
@@ -76,26 +65,40 @@ final class Wordy {
         }
     }
 
-    private static void follow(JComponent button, Runnable fit) {
-        button.addComponentListener(new ComponentAdapter() {
-            private int width;
+    /** A button's words, fitted anew to every width that it gets. */
+    private static final class Fitted extends ComponentAdapter {
+        private final AbstractButton button;
+        private String words = "";
+        private int width;
 
-            @Override
-            public void componentResized(ComponentEvent e) {
-                if (button.getWidth() != width) {
-                    width = button.getWidth();
-                    fit.run();
-                    button.revalidate();
-                }
+        Fitted(AbstractButton button) {
+            this.button = button;
+            button.addComponentListener(this);
+        }
+
+        void say(String others) {
+            if (!others.equals(words)) {
+                words = others;
+                button.getAccessibleContext().setAccessibleName(others);
+                fit();
             }
-        });
-    }
+        }
 
-    private static void fit(AbstractButton button, String words) {
-        boolean fits = button.getWidth() == 0 || button.getFontMetrics(button.getFont()).stringWidth(words) <= room(button);
-        String text = fits ? words : "<html>" + words.replace("&", "&amp;").replace("<", "&lt;") + "</html>";
-        if (!text.equals(button.getText())) {
-            button.setText(text);
+        @Override
+        public void componentResized(ComponentEvent e) {
+            if (button.getWidth() != width) {
+                width = button.getWidth();
+                fit();
+                button.revalidate();
+            }
+        }
+
+        private void fit() {
+            boolean fits = button.getWidth() == 0 || button.getFontMetrics(button.getFont()).stringWidth(words) <= room(button);
+            String text = fits ? words : "<html>" + words.replace("&", "&amp;").replace("<", "&lt;") + "</html>";
+            if (!text.equals(button.getText())) {
+                button.setText(text);
+            }
         }
     }
 
